@@ -1,0 +1,94 @@
+import { type Column, ColumnPackError, type NumberColumn, type PackedColumns, type TextColumn } from './column-pack.ts';
+
+const isText = (column: Column): column is TextColumn => 'kind' in column;
+const emptyLike = <T extends NumberColumn>(column: T, length: number): T =>
+  new (column.constructor as new (length: number) => T)(length);
+
+function concatText(parts: TextColumn[], rows: number): TextColumn {
+  const total = parts.reduce((sum, part) => sum + part.bytes.length, 0);
+  if (total > 0xffffffff) throw new ColumnPackError(`a text column of ${total} bytes is over the limit of 4 GiB`);
+  const offsets = new Uint32Array(rows + 1);
+  const bytes = new Uint8Array(total);
+  let row = 0;
+  let end = 0;
+  for (const part of parts) {
+    bytes.set(part.bytes, end);
+    for (let i = 1; i < part.offsets.length; i++) offsets[++row] = end + part.offsets[i]!;
+    end += part.bytes.length;
+  }
+  return { kind: 'text', offsets, bytes };
+}
+
+function concatNumbers(parts: NumberColumn[], rows: number): NumberColumn {
+  const joined = emptyLike(parts[0]!, rows);
+  let at = 0;
+  for (const part of parts) {
+    joined.set(part, at);
+    at += part.length;
+  }
+  return joined;
+}
+
+/**
+ * Joins tables end to end, rows in the order given; the column order is that of the first.
+ *
+ * @throws {ColumnPackError} if the tables do not all have the same columns of the same types
+ */
+export function concatColumns(list: readonly PackedColumns[]): PackedColumns {
+  const first = list[0];
+  if (!first) return { rows: 0, columns: {} };
+  if (list.length === 1) return first;
+  const rows = list.reduce((sum, table) => sum + table.rows, 0);
+  const names = Object.keys(first.columns);
+  const join = (name: string): [string, Column] => {
+    const parts = list.map((table) => {
+      const part = table.columns[name];
+      if (part?.constructor !== first.columns[name]!.constructor) {
+        throw new ColumnPackError(`cannot join tables: column "${name}" is missing from one or of another type there`);
+      }
+      return part;
+    });
+    return [name, parts.every(isText) ? concatText(parts, rows) : concatNumbers(parts as NumberColumn[], rows)];
+  };
+  for (const { columns } of list) {
+    const extra = Object.keys(columns).find((name) => !Object.hasOwn(first.columns, name));
+    if (extra !== undefined) throw new ColumnPackError(`cannot join tables: only one has a column "${extra}"`);
+  }
+  return { rows, columns: Object.fromEntries(names.map(join)) };
+}
+
+function selectText({ offsets, bytes }: TextColumn, indices: Uint32Array): TextColumn {
+  const picked = new Uint32Array(indices.length + 1);
+  for (let i = 0; i < indices.length; i++) {
+    const from = indices[i]!;
+    picked[i + 1] = picked[i]! + offsets[from + 1]! - offsets[from]!;
+  }
+  const text = new Uint8Array(picked[indices.length]!);
+  for (let i = 0; i < indices.length; i++) {
+    const from = indices[i]!;
+    text.set(bytes.subarray(offsets[from]!, offsets[from + 1]!), picked[i]!);
+  }
+  return { kind: 'text', offsets: picked, bytes: text };
+}
+
+function selectNumbers<T extends NumberColumn>(column: T, indices: Uint32Array): T {
+  const picked = emptyLike(column, indices.length);
+  for (let i = 0; i < indices.length; i++) picked[i] = column[indices[i]!]!;
+  return picked;
+}
+
+/**
+ * Copies chosen rows, in the order given; a row may be chosen more than once.
+ *
+ * @param indices 0-based positions in the table (not data row numbers of its file)
+ * @throws {ColumnPackError} if an index is outside the table
+ */
+export function selectRows({ rows, columns }: PackedColumns, indices: Uint32Array): PackedColumns {
+  const astray = indices.find((index) => index >= rows);
+  if (astray !== undefined) throw new ColumnPackError(`no row at index ${astray} in a table of ${rows} rows`);
+  const pick = ([name, column]: [string, Column]): [string, Column] => [
+    name,
+    isText(column) ? selectText(column, indices) : selectNumbers(column, indices),
+  ];
+  return { rows: indices.length, columns: Object.fromEntries(Object.entries(columns).map(pick)) };
+}
