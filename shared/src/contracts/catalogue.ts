@@ -1,0 +1,51 @@
+import { z } from 'zod';
+import { bandFacts, intakeSettings } from './intake-settings.ts';
+import { intakeColumn } from './intake.ts';
+import { listQuery } from './list.ts';
+import { CATALOGUE_KINDS } from './words.ts';
+
+/** A published table and what is known of it. */
+export const catalogue = z.object({
+  id: z.uuid(),
+  surveyId: z.uuid(),
+  name: z.string(),
+  kind: z.enum(CATALOGUE_KINDS),
+  state: z.enum(['publishing', 'published', 'removed']),
+  fileName: z.string(),
+  sha256: z.string(),
+  rows: z.int(),
+  sidelined: z.int(),
+  withVelocity: z.int(),
+  bands: z.array(bandFacts),
+  columns: z.array(intakeColumn),
+  settings: intakeSettings,
+  assumed: z.array(z.string()),
+  coverage: z.object({
+    type: z.string(),
+    /** Square degrees; null when unknown. */
+    areaSqDeg: z.number().nullable(),
+    /** MOC in ASCII, or null. */
+    moc: z.string().nullable(),
+    note: z.string(),
+  }),
+  reference: z.string(),
+  publishedAt: z.iso.datetime().nullable(),
+  usedByRuns: z.int(),
+});
+export type Catalogue = z.output<typeof catalogue>;
+
+/** Rows near a place, or in file order where no place is given. */
+export const catalogueRowsQuery = listQuery.extend({
+  raDeg: z.coerce.number().optional(),
+  decDeg: z.coerce.number().min(-90).max(90).optional(),
+  radiusArcsec: z.coerce.number().positive().max(36_000).optional(),
+  row: z.coerce.number().int().positive().optional(),
+});
+export const catalogueRow = z.object({
+  row: z.int(),
+  raDeg: z.number(),
+  decDeg: z.number(),
+  separationArcsec: z.number().nullable(),
+  /** Every original cell as text, in the catalogue's column order. */
+  cells: z.array(z.string()),
+});
