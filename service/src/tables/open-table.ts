@@ -1,4 +1,8 @@
-import { type ByteSource, type OpenTable, type ReaderLimits, TableError } from './table.ts';
+import { openContent } from './bytes/content.ts';
+import { asUtf8 } from './bytes/encoding.ts';
+import { openDelimited } from './readers/delimited.ts';
+import { refuseOtherFormats } from './readers/other-formats.ts';
+import { type ByteSource, DEFAULT_LIMITS, type OpenTable, type ReaderLimits } from './table.ts';
 
 export interface OpenOptions {
   /** The ReadMe that describes a journal's data file, when it comes apart from it. */
@@ -11,9 +15,12 @@ export interface OpenOptions {
  */
 export async function openTable(
   source: ByteSource,
-  _limits: Partial<ReaderLimits> = {},
+  limits: Partial<ReaderLimits> = {},
   _options: OpenOptions = {},
 ): Promise<OpenTable> {
-  if (source.size === 0) throw new TableError('empty', 'The file is empty.', 'Upload the file again.', { byte: 0 });
-  throw new TableError('not-a-table', 'The file is not a table in a known format.', 'Save it as CSV.', { byte: 0 });
+  const bounds = { ...DEFAULT_LIMITS, ...limits };
+  const content = await openContent(source, bounds);
+  refuseOtherFormats(content.head);
+  const text = asUtf8(content);
+  return openDelimited(text, bounds);
 }
