@@ -1,0 +1,48 @@
+import { DomainError } from '../domain-error.ts';
+
+/** A ratio together with what it is: where the light is only an upper limit the ratio is a lower one, printed with ">". */
+export interface GasToLight {
+  ratio: number;
+  bound: 'value' | 'lower limit';
+}
+
+/** Ratios over this are called almost dark; 20 is the usual line, ordinary spirals have 0.1-1, gas-rich dwarfs up to 10. */
+export const NEARLY_DARK_RATIO = 20;
+
+/**
+ * HI mass per unit of light or of stellar mass.
+ *
+ * @param hiMassSolar HI mass, solar masses, positive
+ * @param lightSolar luminosity (or stellar mass) in solar units, positive, at the same distance as the mass
+ * @param isLimit true where the light is an upper limit
+ * @returns ratio in solar units, free of distance, with its kind
+ * @throws {DomainError} if an input is not positive
+ */
+export function gasToLight(hiMassSolar: number, lightSolar: number, isLimit: boolean): GasToLight {
+  if (!(hiMassSolar > 0 && lightSolar > 0)) {
+    throw new DomainError(`gasToLight: mass and light must be positive, got ${hiMassSolar}, ${lightSolar}`);
+  }
+  return { ratio: hiMassSolar / lightSolar, bound: isLimit ? 'lower limit' : 'value' };
+}
+
+/**
+ * The same ratio straight from flux and magnitude: it needs no distance.
+ *
+ * @param fluxJyKms HI flux, Jy km/s, positive
+ * @param magnitude apparent magnitude corrected for extinction
+ * @param solarMagnitude absolute magnitude of the Sun in the same band and system
+ * @param isLimit true where the magnitude is a limit
+ * @returns ratio in solar units, with its kind
+ * @throws {DomainError} if an input is out of range
+ *
+ * Source: 2.356e5 D^2 S over 10^{-0.4 (m - 5 log D - 25 - M_sun)}, in which D cancels.
+ */
+export function gasToLightFromFlux(
+  fluxJyKms: number,
+  magnitude: number,
+  solarMagnitude: number,
+  isLimit: boolean,
+): GasToLight {
+  const lightAtOneMpc = 10 ** (-0.4 * (magnitude - 25 - solarMagnitude));
+  return gasToLight(2.356e5 * fluxJyKms, lightAtOneMpc, isLimit);
+}
