@@ -11,7 +11,7 @@ export const FIELD = {
   ultravioletRaMin: 46.9,
   beamArcsec: 45,
   /** Noise of one 10 km/s channel, mJy. */
-  channelNoiseMjy: 0.27,
+  channelNoiseMjy: 0.23,
   optical: { depthR: 24.4, depthG: 24.9, cutR: 23, seeing: 1.2 },
   ultraviolet: { depth: 22.7, seeing: 5.3 },
   infrared: { depth: 16.9, cut: 16.6, seeing: 6.1 },

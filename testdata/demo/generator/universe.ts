@@ -21,7 +21,7 @@ function massFunction(): { values: number[]; cumulative: number[]; density: numb
 
 /** Nearest and farthest distance of the volume, Mpc. */
 const NEAR = 8;
-const FAR = 250;
+const FAR = 290;
 
 function placeIn(random: Random): Place {
   const sinDec = random.uniform(Math.sin(wide.decMin * DEG), Math.sin(wide.decMax * DEG));
