@@ -134,6 +134,8 @@ export const jobs = pgTable(
     error: jsonb('error'),
     cancelRequestedAt: at('cancel_requested_at'),
     heartbeatAt: at('heartbeat_at'),
+    /** How often it was begun: work that kills its process must not do so for ever. */
+    attempts: integer('attempts').notNull().default(0),
     startedAt: at('started_at'),
     finishedAt: at('finished_at'),
     createdAt: createdAt(),

@@ -9,6 +9,8 @@ export const problem = z.object({
   instance: z.string().optional(),
   /** Correlation id, to quote to the administrator. */
   requestId: z.string().optional(),
+  /** The present state of what could not be changed, in answers 412 and 409. */
+  current: z.unknown().optional(),
   errors: z.array(z.object({ pointer: z.string(), detail: z.string() })).optional(),
 });
 export type Problem = z.output<typeof problem>;

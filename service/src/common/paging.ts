@@ -1,0 +1,60 @@
+import type { List } from '@eremite/shared/contracts/list';
+import { AppError } from './app-error.ts';
+
+/** A place in a list as an opaque text: the sort values of the last item handed out. */
+export function encodeCursor(place: readonly (string | number | null)[]): string {
+  return Buffer.from(JSON.stringify(place)).toString('base64url');
+}
+
+/** The place a cursor stands for; undefined without one. */
+export function decodeCursor(cursor: string | undefined): (string | number | null)[] | undefined {
+  if (cursor === undefined) return undefined;
+  try {
+    const place: unknown = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'));
+    const plain = (v: unknown) => v === null || typeof v === 'string' || typeof v === 'number';
+    if (Array.isArray(place) && place.every(plain)) return place;
+  } catch {
+    // Falls through to the one message.
+  }
+  throw new AppError('VALIDATION_FAILED', 'The cursor is not one of this list; start again without it.', [
+    { pointer: '/cursor', detail: 'not a cursor of this list' },
+  ]);
+}
+
+/** Offset of a cursor made by {@link pageByOffset}; 0 without one. */
+export function offsetOf(cursor: string | undefined): number {
+  const place = decodeCursor(cursor);
+  if (!place) return 0;
+  const offset = place[0];
+  if (typeof offset === 'number' && Number.isInteger(offset) && offset >= 0) return offset;
+  throw new AppError('VALIDATION_FAILED', 'The cursor is not one of this list; start again without it.');
+}
+
+/** A page of a list whose order cannot change between calls, or changes harmlessly. */
+export function pageByOffset<T>(items: T[], total: number, offset: number): List<T> {
+  const next = offset + items.length;
+  return { items, total, nextCursor: items.length > 0 && next < total ? encodeCursor([next]) : null };
+}
+
+/** A page of a whole list held in memory. */
+export function pageOf<T>(all: readonly T[], query: { limit: number; cursor?: string | undefined }): List<T> {
+  const offset = offsetOf(query.cursor);
+  return pageByOffset(all.slice(offset, offset + query.limit), all.length, offset);
+}
+
+/**
+ * A page cut by its last item's place.
+ *
+ * @param rows one more than `limit` where there is more
+ * @param placeOf sort values of an item, as the next query compares them
+ */
+export function pageByPlace<T>(
+  rows: T[],
+  limit: number,
+  total: number,
+  placeOf: (row: T) => readonly (string | number | null)[],
+): List<T> {
+  const items = rows.slice(0, limit);
+  const last = items.at(-1);
+  return { items, total, nextCursor: rows.length > limit && last !== undefined ? encodeCursor(placeOf(last)) : null };
+}
