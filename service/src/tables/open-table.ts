@@ -1,6 +1,7 @@
 import { openContent } from './bytes/content.ts';
 import { asUtf8 } from './bytes/encoding.ts';
 import { openDelimited } from './readers/delimited.ts';
+import { isVotable, openVotable } from './readers/votable.ts';
 import { refuseOtherFormats } from './readers/other-formats.ts';
 import { type ByteSource, DEFAULT_LIMITS, type OpenTable, type ReaderLimits } from './table.ts';
 
@@ -22,5 +23,6 @@ export async function openTable(
   const content = await openContent(source, bounds);
   refuseOtherFormats(content.head);
   const text = asUtf8(content);
+  if (isVotable(text.head)) return openVotable(text, bounds);
   return openDelimited(text, bounds);
 }
