@@ -1,10 +1,10 @@
 import { ARCSECOND, DEGREE } from '@eremite/shared/science/constants';
 import { DomainError } from '@eremite/shared/science/domain-error';
 import { cellOf } from '@eremite/shared/science/sky/healpix';
-import { conesCells } from '@eremite/shared/science/sky/healpix-cone';
 import type { SearchPositions } from './pair-search.ts';
 import { checkSameLength } from './same-length.ts';
 import { checkPosition, checkRadius } from './sky-position.ts';
+import { tileCover } from './tile-cover.ts';
 
 /**
  * A unit of a run: detections close together on the sky and every tile that can hold a row within their radii. One unit
@@ -69,11 +69,12 @@ export function planPartitions(detections: SearchPositions, options: PartitionOp
   if (!(maxRows > 0) || !(maxDetections >= 1)) {
     throw new DomainError(`partitions of at most ${maxRows} rows and ${maxDetections} detections cannot be made`);
   }
+  const cover = tileCover(order);
   const partitions: SkyPartition[] = [];
   let growing = new Growing();
   for (const d of byCell(raDeg, decDeg, order)) {
     checkRadius('detection', d, radiusArcsec[d]! / 3600);
-    const needed = conesCells(order, raDeg[d]! * DEGREE, decDeg[d]! * DEGREE, radiusArcsec[d]! * ARCSECOND);
+    const needed = cover(raDeg[d]! * DEGREE, decDeg[d]! * DEGREE, radiusArcsec[d]! * ARCSECOND);
     const cells = needed.filter((cell) => rowsInCell(cell) > 0);
     const full = growing.rowsWith(cells, rowsInCell) > maxRows || growing.detections.length >= maxDetections;
     if (full && growing.detections.length > 0) {
