@@ -1,0 +1,34 @@
+/** Every address of the application, in one place, so that links cannot drift from the routes. */
+const survey = (id: string) => `/surveys/${id}`;
+
+export const paths = {
+  signIn: (from?: string) => (from && from !== '/' ? `/sign-in?from=${encodeURIComponent(from)}` : '/sign-in'),
+  surveys: () => '/surveys',
+  survey,
+  detections: (surveyId: string, search = '') => `${survey(surveyId)}/detections${search}`,
+  detection: (surveyId: string, detectionId: string, search = '') =>
+    `${survey(surveyId)}/detections/${detectionId}${search}`,
+  docket: (surveyId: string) => `${survey(surveyId)}/docket`,
+  docketDetection: (surveyId: string, detectionId: string, search = '') =>
+    `${survey(surveyId)}/docket/${detectionId}${search}`,
+  shortlist: (surveyId: string) => `${survey(surveyId)}/shortlist`,
+  catalogues: (surveyId: string) => `${survey(surveyId)}/catalogues`,
+  catalogue: (surveyId: string, catalogueId: string) => `${survey(surveyId)}/catalogues/${catalogueId}`,
+  intakes: (surveyId: string) => `${survey(surveyId)}/intake`,
+  intake: (surveyId: string, intakeId: string) => `${survey(surveyId)}/intake/${intakeId}`,
+  criteria: (surveyId: string) => `${survey(surveyId)}/criteria`,
+  criteriaNumber: (surveyId: string, criteriaId: string) => `${survey(surveyId)}/criteria/${criteriaId}`,
+  newCriteria: (surveyId: string, from?: string) =>
+    `${survey(surveyId)}/criteria/new${from ? `?from=${from}` : ''}`,
+  runs: (surveyId: string) => `${survey(surveyId)}/runs`,
+  run: (surveyId: string, runId: string) => `${survey(surveyId)}/runs/${runId}`,
+  runDifference: (surveyId: string, runId: string, from: string) =>
+    `${survey(surveyId)}/runs/${runId}/difference?from=${from}`,
+  ledger: (surveyId: string) => `${survey(surveyId)}/ledger`,
+  people: (surveyId: string) => `${survey(surveyId)}/people`,
+  account: () => '/account',
+  administration: () => '/administration',
+} as const;
+
+/** Where the service answers. */
+export const API_BASE = '/api/v1';
