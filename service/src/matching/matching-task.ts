@@ -1,0 +1,47 @@
+import { sortHeavyCells } from './heavy-cells.ts';
+import { type NeighbourQueries, type Neighbours, neighbourSearch } from './neighbour-search.ts';
+import { type Pairs, pairSearch, type SearchPositions } from './pair-search.ts';
+import type { SearchRange } from './search-range.ts';
+import type { Numbers } from './sky-position.ts';
+import type { VelocityGrid } from './velocity-grid.ts';
+import type { ZoneGrid } from './zone-grid.ts';
+import { countRows, declinationRange, placeRows } from './zone-grid-steps.ts';
+import type { ZoneLayout } from './zone-layout.ts';
+
+interface RowRange {
+  raDeg: Numbers;
+  decDeg: Numbers;
+  from: number;
+  to: number;
+}
+
+/** What a thread can be asked, and what it answers. Grids and scratch arrays lie in shared memory and are written there. */
+export interface MatchingTasks {
+  declinationRange: { task: RowRange; result: [low: number, high: number] };
+  countRows: { task: RowRange & { layout: ZoneLayout; cells: Uint32Array; counts: Uint32Array }; result: void };
+  placeRows: { task: RowRange & { grid: ZoneGrid; cells: Uint32Array; next: Uint32Array }; result: void };
+  sortHeavyCells: { task: { grid: ZoneGrid; fromCell: number; toCell: number }; result: void };
+  pairSearch: { task: { grid: ZoneGrid; positions: SearchPositions; range: SearchRange }; result: Pairs };
+  neighbourSearch: { task: { grid: VelocityGrid; queries: NeighbourQueries; range: SearchRange }; result: Neighbours };
+}
+export type TaskName = keyof MatchingTasks;
+
+/** Runs a task somewhere: in a pool of threads, or in this thread. */
+export type TaskRunner = <N extends TaskName>(
+  name: N,
+  task: MatchingTasks[N]['task'],
+) => Promise<MatchingTasks[N]['result']>;
+
+const kernels: { [N in TaskName]: (task: MatchingTasks[N]['task']) => MatchingTasks[N]['result'] } = {
+  declinationRange: (t) => declinationRange(t.raDeg, t.decDeg, t.from, t.to),
+  countRows: (t) => countRows(t.layout, t.raDeg, t.decDeg, t.from, t.to, t.cells, t.counts),
+  placeRows: (t) => placeRows(t.grid, t.raDeg, t.decDeg, t.from, t.to, t.cells, t.next),
+  sortHeavyCells: (t) => sortHeavyCells(t.grid, t.fromCell, t.toCell),
+  pairSearch: (t) => pairSearch(t.grid, t.positions, t.range),
+  neighbourSearch: (t) => neighbourSearch(t.grid, t.queries, t.range),
+};
+
+/** Runs a task in this thread, at once. */
+export function runTask<N extends TaskName>(name: N, task: MatchingTasks[N]['task']): MatchingTasks[N]['result'] {
+  return kernels[name](task);
+}

@@ -1,0 +1,104 @@
+import { DEFAULT_HIT_LIMIT, HitLimitError } from './hit-limit.ts';
+import type { TaskRunner } from './matching-task.ts';
+import type { NeighbourQueries, Neighbours } from './neighbour-search.ts';
+import type { Pairs, SearchPositions } from './pair-search.ts';
+import type { Numbers } from './sky-position.ts';
+import { emptyGrid, sharedMemory, type ZoneGrid } from './zone-grid.ts';
+import { startsOf } from './zone-grid-steps.ts';
+import type { VelocityGrid } from './velocity-grid.ts';
+import { layoutZones } from './zone-layout.ts';
+
+/** [0, count) in so many nearly equal ranges; the empty ones are left out. */
+function split(count: number, parts: number): { from: number; to: number }[] {
+  const edge = (part: number) => Math.floor((count * part) / parts);
+  return Array.from({ length: parts }, (_, part) => ({ from: edge(part), to: edge(part + 1) })).filter(
+    ({ from, to }) => from < to,
+  );
+}
+
+/**
+ * Builds a grid with several threads, to the same bytes as `buildZoneGrid`. The input must lie in SharedArrayBuffers,
+ * or it is copied to every thread.
+ *
+ * @param run where the steps are run
+ * @param threads ranges worked on side by side; each needs 4 bytes a cell (about 1 byte a row) while it works
+ */
+export async function buildSharedGrid(
+  run: TaskRunner,
+  threads: number,
+  raDeg: Numbers,
+  decDeg: Numbers,
+): Promise<ZoneGrid> {
+  const rows = raDeg.length;
+  const ranges = split(rows, threads);
+  const bounds = await Promise.all(ranges.map((range) => run('declinationRange', { raDeg, decDeg, ...range })));
+  const low = bounds.reduce((least, [lowest]) => Math.min(least, lowest), rows > 0 ? 90 : 0);
+  const high = bounds.reduce((most, [, highest]) => Math.max(most, highest), rows > 0 ? -90 : 0);
+  const grid = emptyGrid(layoutZones(rows, low, high), rows, sharedMemory);
+  const cellCount = grid.starts.length - 1;
+  const cells = new Uint32Array(sharedMemory(4 * rows));
+  const counts = ranges.map(() => new Uint32Array(sharedMemory(4 * cellCount)));
+  await Promise.all(
+    ranges.map((range, i) =>
+      run('countRows', { layout: grid.layout, raDeg, decDeg, ...range, cells, counts: counts[i]! }),
+    ),
+  );
+  const next = startsOf(grid.starts, counts);
+  await Promise.all(
+    ranges.map((range, i) => run('placeRows', { grid, raDeg, decDeg, ...range, cells, next: next[i]! })),
+  );
+  await Promise.all(
+    split(cellCount, threads).map(({ from, to }) => run('sortHeavyCells', { grid, fromCell: from, toCell: to })),
+  );
+  return grid;
+}
+
+const joinNumbers = <T extends Uint32Array | Float64Array>(parts: T[]): T => {
+  const first = parts[0]!;
+  if (parts.length === 1) return first;
+  const total = parts.reduce((sum, part) => sum + part.length, 0);
+  const joined = new (first.constructor as new (length: number) => T)(total);
+  let at = 0;
+  for (const part of parts) {
+    joined.set(part, at);
+    at += part.length;
+  }
+  return joined;
+};
+
+/** Joins the answers of ranges in their order; refuses if together they are over the limit. */
+function joinParts<T extends object>(parts: T[], limit: number): T {
+  const names = Object.keys(parts[0]!) as (keyof T)[];
+  const entries = names.map((name) => [name, joinNumbers(parts.map((part) => part[name] as Float64Array))] as const);
+  const count = entries[0]![1].length;
+  if (count > limit) throw new HitLimitError(limit, count);
+  return Object.fromEntries(entries) as T;
+}
+
+/** `pairSearch` with several threads: the same pairs in the same order. The grid must lie in shared memory. */
+export async function sharedPairSearch(
+  run: TaskRunner,
+  threads: number,
+  grid: ZoneGrid,
+  positions: SearchPositions,
+  limit = DEFAULT_HIT_LIMIT,
+): Promise<Pairs> {
+  const ranges = split(positions.raDeg.length, threads);
+  if (ranges.length === 0) ranges.push({ from: 0, to: 0 });
+  const parts = ranges.map((range) => run('pairSearch', { grid, positions, range: { ...range, limit } }));
+  return joinParts(await Promise.all(parts), limit);
+}
+
+/** `neighbourSearch` with several threads: the same neighbours in the same order. */
+export async function sharedNeighbourSearch(
+  run: TaskRunner,
+  threads: number,
+  grid: VelocityGrid,
+  queries: NeighbourQueries,
+  limit = DEFAULT_HIT_LIMIT,
+): Promise<Neighbours> {
+  const ranges = split(queries.raDeg.length, threads);
+  if (ranges.length === 0) ranges.push({ from: 0, to: 0 });
+  const parts = ranges.map((range) => run('neighbourSearch', { grid, queries, range: { ...range, limit } }));
+  return joinParts(await Promise.all(parts), limit);
+}
