@@ -1,0 +1,85 @@
+import { COLUMN_ROLES, type ColumnRole, type IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { ColumnFacts } from '../tables/table.ts';
+import { nameParts } from './name-parts.ts';
+import type { Remarks } from './resolve-columns.ts';
+import type { ResolvedSettings } from './resolved.ts';
+import { ROLE_FACTS } from './role-facts.ts';
+import type { ColumnSample } from './sample.ts';
+import { CANONICAL_UNIT, conversionOf, type Quantity } from './units.ts';
+
+const UNITLESS: readonly Quantity[] = ['number'];
+
+/**
+ * Settles the unit of every column with a role: the settings', else the file's, else the one in the column's name, else
+ * the canonical unit, which is then said to be assumed. A unit that cannot be one of the role is a fault where a
+ * person gave it and a question where the file did.
+ *
+ * @returns unit by role, and by `magnitude:<band>`
+ */
+export function resolveUnits(
+  settings: IntakeSettings,
+  columns: ResolvedSettings['columns'],
+  table: ReadonlyMap<string, { facts: ColumnFacts; sample: ColumnSample }>,
+  remarks: Remarks,
+): Record<string, string> {
+  const units: Record<string, string> = {};
+  const given = settings.units ?? {};
+  const settle = (key: string, column: string, quantity: Quantity, says: string) => {
+    const { facts, sample } = table.get(column)!;
+    const pointer = `/units/${key.replaceAll('~', '~0').replaceAll('/', '~1')}`;
+    const wanted = given[key];
+    if (wanted !== undefined && wanted.trim() !== '') {
+      units[key] = wanted;
+      if (!conversionOf(quantity, wanted)) {
+        const example = CANONICAL_UNIT[quantity];
+        remarks.faults.push({
+          pointer,
+          detail: `"${wanted}" is not a unit of ${says}; write for example "${example}".`,
+        });
+      }
+      return;
+    }
+    const stated = facts.unit?.trim() || nameParts(column).unit;
+    if (stated) {
+      units[key] = stated;
+      if (conversionOf(quantity, stated)) return;
+      units[key] = CANONICAL_UNIT[quantity];
+      remarks.questions.push({
+        level: 'assumed',
+        pointer,
+        text: `The unit "${stated}" of "${column}" is not one of ${says}: ${CANONICAL_UNIT[quantity]} is assumed.`,
+      });
+      return;
+    }
+    units[key] = CANONICAL_UNIT[quantity];
+    if (UNITLESS.includes(quantity) || quantity === 'magnitude') return;
+    // Sexagesimal text and plain degrees need no unit; whether decimals may be hours is asked when all are seen.
+    if (quantity === 'angle') return;
+    const odd = sample.numbers > 0 && Math.abs(sample.median) > ROLE_FACTS.velocity.range[1] && quantity === 'velocity';
+    remarks.questions.push({
+      level: odd ? 'ask' : 'assumed',
+      pointer,
+      text: `The unit of "${column}" (${says}) is not stated: ${CANONICAL_UNIT[quantity]} is assumed.`,
+    });
+  };
+  for (const role of COLUMN_ROLES) {
+    const column = columns[role];
+    if (column === null || !table.has(column)) continue;
+    settle(role, column, quantityOf(role), ROLE_FACTS[role].says);
+  }
+  for (const { column, band } of columns.magnitudes)
+    settle(`magnitude:${band}`, column, 'magnitude', `magnitude ${band}`);
+  for (const key of Object.keys(given)) {
+    if (key in units || (COLUMN_ROLES as readonly string[]).includes(key) || key.startsWith('magnitude:')) continue;
+    remarks.faults.push({
+      pointer: `/units/${key}`,
+      detail: `There is no role "${key}"; units are given by role, as in {"velocity": "km/s"}.`,
+    });
+  }
+  return units;
+}
+
+/** Quantity of a role's column. */
+export function quantityOf(role: ColumnRole): Quantity {
+  return ROLE_FACTS[role].quantity;
+}
