@@ -1,6 +1,7 @@
 import { openContent } from './bytes/content.ts';
 import { asUtf8 } from './bytes/encoding.ts';
 import { openDelimited } from './readers/delimited.ts';
+import { isFits, openFits } from './readers/fits.ts';
 import { isVotable, openVotable } from './readers/votable.ts';
 import { refuseOtherFormats } from './readers/other-formats.ts';
 import { type ByteSource, DEFAULT_LIMITS, type OpenTable, type ReaderLimits } from './table.ts';
@@ -22,6 +23,7 @@ export async function openTable(
   const bounds = { ...DEFAULT_LIMITS, ...limits };
   const content = await openContent(source, bounds);
   refuseOtherFormats(content.head);
+  if (isFits(content.head)) return openFits(content, bounds);
   const text = asUtf8(content);
   if (isVotable(text.head)) return openVotable(text, bounds);
   return openDelimited(text, bounds);

@@ -40,6 +40,11 @@ export class ChunkBuilder {
     return this.rows === 0 && this.broken.length === 0;
   }
 
+  /** Rows that still fit. */
+  get room(): number {
+    return this.capacity - this.rows;
+  }
+
   get isFull(): boolean {
     if (this.rows >= this.capacity || this.broken.length >= MAX_BROKEN) return true;
     if ((this.rows & 255) !== 0) return false;

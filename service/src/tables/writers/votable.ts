@@ -43,17 +43,14 @@ function fieldTag(column: OutputColumn, hasFrame: boolean): string {
 
 /** Escapes what XML reserves; characters that XML 1.0 cannot hold become U+FFFD. */
 export function escapeXml(text: string): string {
-  return (
-    text
-      // eslint-disable-next-line no-control-regex
-      .replace(
-        /[\0-\x08\x0b\x0c\x0e-\x1f\ufffe\uffff]|[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/g,
-        '\ufffd',
-      )
-      .replaceAll('&', '&amp;')
-      .replaceAll('<', '&lt;')
-      .replaceAll('>', '&gt;')
-      .replaceAll('"', '&quot;')
-      .replaceAll('\r', '&#13;')
-  );
+  return text
+    .replace(
+      /[\0-\x08\x0b\x0c\x0e-\x1f\ufffe\uffff]|[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/g,
+      '\ufffd',
+    )
+    .replaceAll('&', '&amp;')
+    .replaceAll('<', '&lt;')
+    .replaceAll('>', '&gt;')
+    .replaceAll('"', '&quot;')
+    .replaceAll('\r', '&#13;');
 }
