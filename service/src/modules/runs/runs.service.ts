@@ -1,0 +1,164 @@
+import { createHash } from 'node:crypto';
+import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
+import type { List, ListQuery } from '@eremite/shared/contracts/list';
+import type { CreateRunRequest, Run, runDifference } from '@eremite/shared/contracts/run';
+import { Injectable, type OnModuleInit } from '@nestjs/common';
+import type { z } from 'zod';
+import { AccessService } from '../../common/access.ts';
+import { AppError } from '../../common/app-error.ts';
+import { pageOf } from '../../common/paging.ts';
+import type { SignedInUser } from '../../common/signed-in-user.ts';
+import { JobsService } from '../../jobs/jobs.service.ts';
+import { SCORING_VERSION } from '../../scoring/version.ts';
+import { CriteriaService } from '../criteria/criteria.service.ts';
+import { LedgerService } from '../ledger/ledger.service.ts';
+import { changedKeys, compareVerdicts, type VerdictSummary } from './difference.ts';
+import { RunJob } from './run.job.ts';
+import { type RunRow, RunsRepository } from './runs.repository.ts';
+import { VerdictsRepository } from './verdicts.repository.ts';
+
+/** Criteria applied to a stated set of tables: started here, done by {@link RunJob}. */
+@Injectable()
+export class RunsService implements OnModuleInit {
+  constructor(
+    private readonly runs: RunsRepository,
+    private readonly verdicts: VerdictsRepository,
+    private readonly criteria: CriteriaService,
+    private readonly jobs: JobsService,
+    private readonly work: RunJob,
+    private readonly access: AccessService,
+    private readonly ledger: LedgerService,
+  ) {}
+
+  onModuleInit(): void {
+    this.jobs.register(this.work);
+  }
+
+  async list(user: SignedInUser, surveyId: string, query: ListQuery): Promise<List<Run>> {
+    await this.access.survey(user, surveyId, 'read');
+    return pageOf((await this.runs.list(surveyId)).map(toRun), query);
+  }
+
+  async get(user: SignedInUser, id: string): Promise<Run> {
+    const row = await this.runs.find(id);
+    if (!row) throw new AppError('NOT_FOUND', 'There is no such run.');
+    await this.access.survey(user, row.surveyId, 'read');
+    return toRun(row);
+  }
+
+  async surveyOf(id: string): Promise<string | undefined> {
+    return (await this.runs.find(id))?.surveyId;
+  }
+
+  async latestDone(surveyId: string): Promise<Run | undefined> {
+    const row = await this.runs.latestDone(surveyId);
+    return row && toRun(row);
+  }
+
+  /** Fixes the inputs of a run as they stand and puts it on the queue. */
+  async start(
+    user: SignedInUser,
+    surveyId: string,
+    request: CreateRunRequest,
+  ): Promise<{ runId: string; jobId: string }> {
+    const { survey } = await this.access.survey(user, surveyId, 'lead');
+    const criteria = await this.criteria.get(user, request.criteriaId);
+    if (criteria.surveyId !== surveyId) throw new AppError('NOT_FOUND', 'There are no such criteria in this survey.');
+    const tables = await this.runs.publishedCatalogues(surveyId, request.catalogueIds);
+    if (request.catalogueIds && tables.length !== new Set(request.catalogueIds).size) {
+      throw new AppError('NOT_FOUND', 'Some of these catalogues are not published in this survey.', [
+        { pointer: '/catalogueIds', detail: 'unknown catalogue' },
+      ]);
+    }
+    if (!tables.some((table) => table.kind === 'hi')) {
+      throw new AppError(
+        'NO_DETECTIONS',
+        'Publish a table of HI detections first; a run has nothing to judge without one.',
+      );
+    }
+    const inputs = tables.map(({ id, name, kind, rows, contentHash }) => ({
+      catalogueId: id,
+      name,
+      kind,
+      rows,
+      sha256: contentHash,
+    }));
+    const ids = new Set(inputs.map((input) => input.catalogueId));
+    const decisions = {
+      cosmology: { h0: survey.h0, omegaM: survey.omegaM },
+      overrides: (await this.runs.overridesInForce(surveyId)).filter(
+        (entry) => ids.has(entry.detectionCatalogueId) && ids.has(entry.catalogueId),
+      ),
+      distances: (await this.runs.distancesInForce(surveyId)).filter((entry) => ids.has(entry.detectionCatalogueId)),
+    };
+    const inputHash = hashOf({
+      criteria: criteria.settings,
+      inputs: inputs.map((input) => input.sha256),
+      decisions,
+      version: SCORING_VERSION,
+    });
+    const { runId, jobId } = await this.runs.transaction(async (tx) => {
+      const row = {
+        surveyId,
+        criteriaId: criteria.id,
+        inputs,
+        inputHash,
+        decisions,
+        codeVersion: SCORING_VERSION,
+        createdBy: user.id,
+      };
+      const { id: runId, number } = await this.runs.insert(row, tx);
+      const jobId = await this.jobs.add('run', { runId }, { surveyId, userId: user.id }, tx);
+      await this.runs.update(runId, { jobId }, tx);
+      const detail = { runId, criteriaId: criteria.id, inputs, inputHash };
+      await this.ledger.append(
+        {
+          surveyId,
+          actor: user,
+          action: 'started a run',
+          subject: `run ${number}, criteria ${criteria.number}`,
+          detail,
+        },
+        tx,
+      );
+      return { runId, jobId };
+    });
+    await this.jobs.release(jobId);
+    return { runId, jobId };
+  }
+
+  async difference(user: SignedInUser, id: string, fromId: string): Promise<z.output<typeof runDifference>> {
+    const [to, from] = [await this.get(user, id), await this.get(user, fromId)];
+    if (to.surveyId !== from.surveyId) throw new AppError('NOT_FOUND', 'The two runs are of different surveys.');
+    for (const run of [from, to])
+      if (run.state !== 'done') throw new AppError('NOT_READY', `Run ${run.number} is ${run.state}.`);
+    const settings = async (run: Run) => (await this.criteria.get(user, run.criteriaId)).settings as CriteriaSettings;
+    const summaries = async (run: Run) => (await this.verdicts.summary(run.id)) as VerdictSummary[];
+    const before = new Map(from.inputs.map((input) => [input.sha256, input.name]));
+    const after = new Map(to.inputs.map((input) => [input.sha256, input.name]));
+    return {
+      from: { id: from.id, number: from.number },
+      to: { id: to.id, number: to.number },
+      criteriaChanged: changedKeys(await settings(from), await settings(to)),
+      inputsChanged: [
+        ...[...after].filter(([hash]) => !before.has(hash)).map(([, name]) => `new: ${name}`),
+        ...[...before].filter(([hash]) => !after.has(hash)).map(([, name]) => `gone: ${name}`),
+      ],
+      ...compareVerdicts(await summaries(from), await summaries(to)),
+    };
+  }
+}
+
+function hashOf(value: unknown): string {
+  return createHash('sha256').update(JSON.stringify(value)).digest('hex');
+}
+
+function toRun(row: RunRow): Run {
+  const { criteriaSettings: _, decisions: __, createdById: ___, startedAt, finishedAt, createdAt, ...rest } = row;
+  return {
+    ...rest,
+    createdAt: createdAt.toISOString(),
+    finishedAt: finishedAt?.toISOString() ?? null,
+    seconds: startedAt && finishedAt ? (finishedAt.getTime() - startedAt.getTime()) / 1000 : null,
+  } as Run;
+}

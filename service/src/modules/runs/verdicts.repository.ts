@@ -1,0 +1,201 @@
+import { assignments, detections, evidence, overrides, reviews, settlements, users, verdicts } from '@eremite/schema';
+import type { VerdictsQuery } from '@eremite/shared/contracts/run';
+import { Inject, Injectable } from '@nestjs/common';
+import { and, asc, desc, eq, gte, ilike, inArray, isNull, type SQL, sql } from 'drizzle-orm';
+import { DATABASE, type Database } from '../../database/database.ts';
+
+const likelyDark = sql`(${verdicts.pNone} + ${verdicts.pMissed})`;
+const SORTS: Record<string, SQL> = {
+  position: sql`${verdicts.position}`,
+  name: sql`${verdicts.name}`,
+  raDeg: sql`${verdicts.raDeg}`,
+  decDeg: sql`${verdicts.decDeg}`,
+  velocityKms: sql`${verdicts.velocityKms}`,
+  distanceMpc: sql`${verdicts.distanceMpc}`,
+  logHiMass: sql`${verdicts.logHiMass}`,
+  pNone: sql`${verdicts.pNone}`,
+  pNoneOrMissed: likelyDark,
+  power: sql`${verdicts.power}`,
+  pAlone: sql`${verdicts.pAlone}`,
+  starlight: sql`${verdicts.starlight}`,
+  surroundings: sql`${verdicts.surroundings}`,
+};
+/** Verdicts that need eyes come first, and of these the likeliest dark. */
+const DOCKET = sql`array_position(array['dark','nearly dark','contested','confused','cannot tell','starlit'], ${verdicts.starlight})`;
+
+/** What a page of verdicts may be narrowed by, beyond the query of the contract. */
+export interface VerdictFilter extends Partial<VerdictsQuery> {
+  detectionIds?: readonly string[];
+  assignedTo?: string;
+  notReviewedBy?: string;
+  reviewedBy?: string;
+}
+
+@Injectable()
+export class VerdictsRepository {
+  constructor(@Inject(DATABASE) private readonly db: Database) {}
+
+  #where(runId: string, filter: VerdictFilter): SQL {
+    const reviewed = sql`exists (select 1 from ${reviews} r where r.detection_id = ${verdicts.detectionId} and r.superseded_at is null)`;
+    const by = (userId: string) =>
+      sql`exists (select 1 from ${reviews} r where r.detection_id = ${verdicts.detectionId} and r.run_id = ${verdicts.runId} and r.reviewer_id = ${userId} and r.superseded_at is null)`;
+    const doubt = filter.doubt ?? filter.doubtGrade;
+    return and(
+      eq(verdicts.runId, runId),
+      filter.starlight && inArray(verdicts.starlight, filter.starlight),
+      filter.surroundings && inArray(verdicts.surroundings, filter.surroundings),
+      filter.search ? ilike(verdicts.name, `%${filter.search.replace(/[\\%_]/g, '\\$&')}%`) : undefined,
+      filter.minPNone === undefined ? undefined : gte(verdicts.pNone, filter.minPNone),
+      doubt
+        ? sql`${verdicts.item}->'doubts' @> ${JSON.stringify([
+            { ...(filter.doubt && { name: filter.doubt }), ...(filter.doubtGrade && { grade: filter.doubtGrade }) },
+          ])}::jsonb`
+        : undefined,
+      filter.reviewed === 'yes' ? reviewed : undefined,
+      filter.reviewed === 'no' ? sql`not ${reviewed}` : undefined,
+      filter.detectionIds && inArray(verdicts.detectionId, [...filter.detectionIds]),
+      filter.assignedTo
+        ? sql`exists (select 1 from ${assignments} a where a.detection_id = ${verdicts.detectionId} and a.user_id = ${filter.assignedTo})`
+        : undefined,
+      filter.reviewedBy ? by(filter.reviewedBy) : undefined,
+      filter.notReviewedBy ? sql`not ${by(filter.notReviewedBy)}` : undefined,
+    )!;
+  }
+
+  #order(sort: string | undefined): SQL[] {
+    if (sort === 'docket') return [DOCKET, sql`${likelyDark} desc`, sql`${verdicts.position}`];
+    const down = sort?.startsWith('-') ?? false;
+    const key = SORTS[sort?.replace(/^-/, '') ?? 'position'] ?? SORTS['position']!;
+    return [down ? sql`${key} desc nulls last` : sql`${key} asc nulls last`, sql`${verdicts.position}`];
+  }
+
+  page(
+    runId: string,
+    filter: VerdictFilter,
+    page: { sort?: string | undefined; limit: number; offset: number },
+    db = this.db,
+  ) {
+    return db
+      .select({ detectionId: verdicts.detectionId, item: verdicts.item })
+      .from(verdicts)
+      .where(this.#where(runId, filter))
+      .orderBy(...this.#order(page.sort))
+      .limit(page.limit)
+      .offset(page.offset);
+  }
+
+  async count(runId: string, filter: VerdictFilter = {}, db = this.db): Promise<number> {
+    const [row] = await db
+      .select({ count: sql<number>`count(*)::int` })
+      .from(verdicts)
+      .where(this.#where(runId, filter));
+    return row!.count;
+  }
+
+  async find(runId: string, detectionId: string, db = this.db) {
+    const [row] = await db
+      .select({
+        item: verdicts.item,
+        detail: verdicts.detail,
+        candidates: evidence.candidates,
+        neighbours: evidence.neighbours,
+      })
+      .from(verdicts)
+      .innerJoin(evidence, and(eq(evidence.runId, verdicts.runId), eq(evidence.detectionId, verdicts.detectionId)))
+      .where(and(eq(verdicts.runId, runId), eq(verdicts.detectionId, detectionId)));
+    return row;
+  }
+
+  /** Packed evidence in input order, for the flat lists. */
+  evidence(
+    runId: string,
+    which: 'candidates' | 'neighbours',
+    page: { limit: number; offset: number },
+    detectionId?: string,
+    db = this.db,
+  ) {
+    return db
+      .select({ detectionId: verdicts.detectionId, name: verdicts.name, packed: evidence[which] })
+      .from(evidence)
+      .innerJoin(verdicts, and(eq(evidence.runId, verdicts.runId), eq(evidence.detectionId, verdicts.detectionId)))
+      .where(and(eq(evidence.runId, runId), detectionId ? eq(evidence.detectionId, detectionId) : undefined))
+      .orderBy(asc(verdicts.position))
+      .limit(page.limit)
+      .offset(page.offset);
+  }
+
+  /** What people said since: settlements, reviews and overrides of some detections. */
+  async said(detectionIds: readonly string[], db = this.db) {
+    if (detectionIds.length === 0) return { settled: [], reviews: [], overrides: [], assigned: [] };
+    const ids = [...detectionIds];
+    const settled = await db
+      .select({
+        detectionId: settlements.detectionId,
+        starlight: settlements.starlight,
+        surroundings: settlements.surroundings,
+        note: settlements.note,
+        by: users.name,
+      })
+      .from(settlements)
+      .innerJoin(users, eq(users.id, settlements.settledBy))
+      .where(and(inArray(settlements.detectionId, ids), isNull(settlements.supersededAt)));
+    const reviewed = await db
+      .select({ detectionId: reviews.detectionId, runId: reviews.runId, reviewerId: reviews.reviewerId })
+      .from(reviews)
+      .where(and(inArray(reviews.detectionId, ids), isNull(reviews.supersededAt)));
+    const overridden = await db
+      .select({
+        detectionId: overrides.detectionId,
+        catalogueId: overrides.catalogueId,
+        row: overrides.row,
+        action: overrides.action,
+      })
+      .from(overrides)
+      .where(and(inArray(overrides.detectionId, ids), isNull(overrides.withdrawnAt)));
+    const assigned = await db
+      .select({ detectionId: assignments.detectionId, name: users.name })
+      .from(assignments)
+      .innerJoin(users, eq(users.id, assignments.userId))
+      .where(inArray(assignments.detectionId, ids));
+    return { settled, reviews: reviewed, overrides: overridden, assigned };
+  }
+
+  /** One mark a detection of the survey, with its verdict in a run where there is one. */
+  marks(surveyId: string, runId: string | null, db = this.db) {
+    const join = runId ? and(eq(verdicts.detectionId, detections.id), eq(verdicts.runId, runId)) : sql`false`;
+    return db
+      .select({
+        detectionId: detections.id,
+        name: detections.name,
+        raDeg: detections.raDeg,
+        decDeg: detections.decDeg,
+        starlight: verdicts.starlight,
+        surroundings: verdicts.surroundings,
+      })
+      .from(detections)
+      .leftJoin(verdicts, join!)
+      .where(eq(detections.surveyId, surveyId))
+      .orderBy(asc(detections.catalogueId), asc(detections.row));
+  }
+
+  /** Verdict columns of a whole run, for comparing two. */
+  summary(runId: string, db = this.db) {
+    return db
+      .select({
+        detectionId: verdicts.detectionId,
+        name: verdicts.name,
+        starlight: verdicts.starlight,
+        surroundings: verdicts.surroundings,
+        pNone: verdicts.pNone,
+        pMissed: verdicts.pMissed,
+        power: verdicts.power,
+        pAlone: verdicts.pAlone,
+        distanceMpc: verdicts.distanceMpc,
+        counterpart: sql<string | null>`${verdicts.item}->'counterpart'->>'name'`,
+        nearest: sql<string | null>`${verdicts.item}->'nearest'->>'name'`,
+      })
+      .from(verdicts)
+      .where(eq(verdicts.runId, runId))
+      .orderBy(desc(likelyDark));
+  }
+}

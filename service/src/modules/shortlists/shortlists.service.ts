@@ -1,0 +1,89 @@
+import type { PutShortlistRequest, Shortlist } from '@eremite/shared/contracts/shortlist';
+import { Injectable } from '@nestjs/common';
+import { AccessService } from '../../common/access.ts';
+import { AppError } from '../../common/app-error.ts';
+import type { SignedInUser } from '../../common/signed-in-user.ts';
+import { LedgerService } from '../ledger/ledger.service.ts';
+import { RunsService } from '../runs/runs.service.ts';
+import { VerdictsService } from '../runs/verdicts.service.ts';
+import { ShortlistsRepository } from './shortlists.repository.ts';
+
+/** The lead's ordered pick of one run's detections. */
+@Injectable()
+export class ShortlistsService {
+  constructor(
+    private readonly shortlists: ShortlistsRepository,
+    private readonly runs: RunsService,
+    private readonly verdicts: VerdictsService,
+    private readonly access: AccessService,
+    private readonly ledger: LedgerService,
+  ) {}
+
+  async get(user: SignedInUser, surveyId: string): Promise<Shortlist> {
+    await this.access.survey(user, surveyId, 'read');
+    const head = await this.shortlists.find(surveyId);
+    if (!head?.runId) return { runId: null, runNumber: null, version: head?.version ?? 0, entries: [] };
+    const run = await this.runs.get(user, head.runId);
+    const entries = await this.shortlists.entries(surveyId);
+    const items = await this.verdicts.items(
+      head.runId,
+      entries.map((entry) => entry.detectionId),
+    );
+    return {
+      runId: head.runId,
+      runNumber: run.number,
+      version: head.version,
+      entries: entries.map(({ detectionId, rank, reason, nullResult }) => ({
+        detectionId,
+        rank,
+        reason,
+        nullResult,
+        verdict: items.get(detectionId) ?? null,
+      })),
+    };
+  }
+
+  /** @param version the version last seen; undefined overwrites whatever stands */
+  async put(
+    user: SignedInUser,
+    surveyId: string,
+    request: PutShortlistRequest,
+    version: number | undefined,
+  ): Promise<Shortlist> {
+    await this.access.survey(user, surveyId, 'lead');
+    const run = await this.runs.get(user, request.runId);
+    if (run.surveyId !== surveyId) throw new AppError('NOT_FOUND', 'There is no such run in this survey.');
+    if (run.state !== 'done')
+      throw new AppError('NOT_READY', `Run ${run.number} is ${run.state}; a shortlist needs a finished run.`);
+    const ids = request.entries.map((entry) => entry.detectionId);
+    if (new Set(ids).size !== ids.length)
+      throw new AppError('VALIDATION_FAILED', 'A detection is on the list twice.', [
+        { pointer: '/entries', detail: 'each detection once' },
+      ]);
+    const items = await this.verdicts.items(request.runId, ids);
+    const missing = ids.findIndex((id) => !items.has(id));
+    if (missing >= 0) {
+      throw new AppError('VALIDATION_FAILED', `Entry ${missing + 1} has no verdict in run ${run.number}.`, [
+        { pointer: `/entries/${missing}/detectionId`, detail: 'not in this run' },
+      ]);
+    }
+    await this.shortlists.transaction(async (tx) => {
+      const seen = version ?? (await this.shortlists.find(surveyId, tx))?.version ?? 0;
+      if (!(await this.shortlists.advance(surveyId, request.runId, seen, tx))) {
+        throw new AppError('CHANGED_MEANWHILE', 'Someone else changed the shortlist; look at it again.', undefined, {
+          version: (await this.shortlists.find(surveyId, tx))?.version,
+        });
+      }
+      await this.shortlists.replaceEntries(surveyId, request.entries, tx);
+      const names = ids.map((id) => items.get(id)!.name);
+      const entry = {
+        surveyId,
+        actor: user,
+        action: 'changed the shortlist',
+        subject: `${ids.length} detections of run ${run.number}`,
+      };
+      await this.ledger.append({ ...entry, detail: { runId: request.runId, names } }, tx);
+    });
+    return this.get(user, surveyId);
+  }
+}
