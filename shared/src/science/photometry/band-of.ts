@@ -13,7 +13,7 @@ const SURVEY_WORDS: readonly [string, string][] = [
 ];
 const WHOLE_PLAIN = new RegExp(`^(${PLAIN_WORDS})$`, 'i');
 /** Joined to the band without a separator, as in "gmag" or "W1mpro"; only words that cannot be part of a band. */
-const JOINED = /^(mag|petro|cmodel|model|psf|kron)|(magnitude|mag|mpro|petro|cmodel|model|psf|kron|band)$/i;
+const JOINED = /^(magnitude|mag|petro|cmodel|model|psf|kron)|(magnitude|mag|mpro|petro|cmodel|model|psf|kron|band)$/i;
 const JOINED_SURVEY = /^(ps1|decam|lsst)|(ps1|decam|lsst)$/i;
 
 /**
@@ -34,6 +34,7 @@ export function bandOf(name: string): BandId | undefined {
   let survey = '';
   const rest: string[] = [];
   for (const token of text.split(/[^A-Za-z0-9]+/)) {
+    if (!token || WHOLE_PLAIN.test(token)) continue;
     let word = token;
     const joined = JOINED_SURVEY.exec(word)?.[0];
     if (joined) word = word.replace(JOINED_SURVEY, '');
