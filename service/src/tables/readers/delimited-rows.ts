@@ -4,10 +4,10 @@ import { cellText } from '../columns/cell-text.ts';
 import { ChunkBuilder } from '../columns/chunk-builder.ts';
 import { type RowFiller, streamChunks } from '../columns/stream-chunks.ts';
 import { type ReaderLimits, type RowChunk, TableError } from '../table.ts';
+import { isComment } from './comment-line.ts';
 import { RecordScanner } from './record-scanner.ts';
 import type { TextLayout } from './text-layout.ts';
 
-const HASH = 35;
 const QUOTE = 34;
 
 type RowsLayout = Pick<TextLayout, 'delimiter' | 'columns' | 'decimalComma' | 'dataStart' | 'dataLine'>;
@@ -38,7 +38,7 @@ class DelimitedFiller implements RowFiller {
     while (!builder.isFull) {
       const { buffer, start, end } = window;
       if (start < end) {
-        const comment = buffer[start] === HASH;
+        const comment = isComment(buffer, start, end);
         const next = comment ? this.skipComment() : scanner.scan(buffer, start, end, window.ended);
         if (next >= 0) {
           if (!comment) this.takeRecord(builder, buffer, start, next);

@@ -1,5 +1,4 @@
 import type { Content } from '../bytes/content.ts';
-import { asUtf8 } from '../bytes/encoding.ts';
 import type { OpenTable, ReaderLimits, TableFormat } from '../table.ts';
 import { delimitedRows } from './delimited-rows.ts';
 import type { Delimiter } from './record-scanner.ts';
@@ -13,9 +12,8 @@ const FORMATS: Record<Delimiter, TableFormat> = {
   blank: 'whitespace',
 };
 
-/** Opens CSV, TSV, semicolon-, bar- or blank-separated text. */
-export async function openDelimited(raw: Content, limits: ReaderLimits): Promise<OpenTable> {
-  const content = asUtf8(raw);
+/** Opens CSV, TSV, semicolon-, bar- or blank-separated text (UTF-8). */
+export async function openDelimited(content: Content, limits: ReaderLimits): Promise<OpenTable> {
   const layout = await sniffLayout(content, limits);
   const description = layout.comments.join('\n').slice(0, 4000).trim();
   return {

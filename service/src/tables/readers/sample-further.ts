@@ -2,6 +2,7 @@ import type { Content } from '../bytes/content.ts';
 import { readHead } from '../bytes/content.ts';
 import { cellText } from '../columns/cell-text.ts';
 import type { ReaderLimits } from '../table.ts';
+import { isComment } from './comment-line.ts';
 import { type Delimiter, RecordScanner } from './record-scanner.ts';
 
 const PLACES = [0.2, 0.4, 0.6, 0.8, 0.97];
@@ -28,7 +29,7 @@ export async function sampleFurther(
     let start = head.indexOf(10) + 1;
     for (let rows = 0; start > 0 && start < last && rows < MAX_ROWS; rows++) {
       const next = scanner.scan(head, start, last + 1, true);
-      if (scanner.count === width && head[start] !== 35) {
+      if (scanner.count === width && !isComment(head, start, last)) {
         samples.push(Array.from({ length: width }, (_, i) => cellText(head, scanner.starts[i]!, scanner.ends[i]!)));
       }
       start = next;

@@ -4,6 +4,7 @@ import { guessColumnType, isPlainNumber } from '../columns/guess-type.ts';
 import { isMissingWord } from '../columns/missing-marks.ts';
 import { type ColumnFacts, type ReaderLimits, TableError } from '../table.ts';
 import { chooseDelimiter, commonWidth } from './choose-delimiter.ts';
+import { isComment } from './comment-line.ts';
 import { uniqueNames } from './column-names.ts';
 import { type Delimiter, RecordScanner } from './record-scanner.ts';
 import { sampleFurther } from './sample-further.ts';
@@ -129,7 +130,7 @@ export function scanRecords(
   const records: ScannedRecord[] = [];
   let line = firstLine;
   for (let start = from; start < end && records.length < SAMPLE_RECORDS;) {
-    if (bytes[start] === 35) {
+    if (isComment(bytes, start, end)) {
       const stop = lineEnd(bytes, start);
       start = bytes[stop] === 13 && bytes[stop + 1] === 10 ? stop + 2 : stop + 1;
       line++;

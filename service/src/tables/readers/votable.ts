@@ -1,5 +1,4 @@
 import type { Content } from '../bytes/content.ts';
-import { asUtf8 } from '../bytes/encoding.ts';
 import { ChunkBuilder } from '../columns/chunk-builder.ts';
 import { type RowFiller, streamChunks } from '../columns/stream-chunks.ts';
 import { type OpenTable, type ReaderLimits, type RowChunk, TableError } from '../table.ts';
@@ -15,9 +14,8 @@ export function isVotable(head: Buffer): boolean {
   return /^\s*</.test(start) && /<([\w.-]+:)?VOTABLE[\s>/]/.test(start);
 }
 
-/** Opens a VOTable of any version with TABLEDATA, BINARY or BINARY2. */
-export async function openVotable(raw: Content, limits: ReaderLimits): Promise<OpenTable> {
-  const content = asUtf8(raw);
+/** Opens a VOTable (UTF-8) of any version with TABLEDATA, BINARY or BINARY2. */
+export async function openVotable(content: Content, limits: ReaderLimits): Promise<OpenTable> {
   const outline = await outlineVotable(content, limits);
   const tables = readVotableHead(outline.skeleton, limits);
   const rows = (index: number): AsyncIterable<RowChunk> => {
