@@ -69,29 +69,3 @@ function excessVolume(radius: number, { lengthMpc, slope }: Clustering): number 
   const sight = Math.sqrt(Math.PI) * Math.exp(logGamma((slope - 1) / 2) - logGamma(slope / 2));
   return (2 * Math.PI * lengthMpc ** slope * sight * radius ** (3 - slope)) / (3 - slope);
 }
-
-/**
- * Response of a Gaussian beam.
- *
- * @param separation distance from the pointing centre
- * @param fwhm full width at half maximum, same unit, positive
- * @returns response in (0, 1]
- */
-export function beamResponse(separation: number, fwhm: number): number {
-  return Math.exp(-4 * Math.LN2 * (separation / fwhm) ** 2);
-}
-
-/**
- * Shares of a blended flux that galaxies in a beam would contribute.
- *
- * @param galaxies expected flux of each (predicted M_HI / D^2, any common unit) and distance from the beam centre
- * @param fwhm beam FWHM, unit of the distances
- * @returns shares adding to one, in the order given
- * @throws {DomainError} if no galaxy has a positive flux
- */
-export function beamShares(galaxies: readonly { flux: number; separation: number }[], fwhm: number): number[] {
-  const parts = galaxies.map(({ flux, separation }) => flux * beamResponse(separation, fwhm));
-  const total = parts.reduce((sum, part) => sum + part, 0);
-  if (!(total > 0)) throw new DomainError('beamShares: no galaxy has a positive expected flux');
-  return parts.map((part) => part / total);
-}

@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { DomainError } from '../domain-error.ts';
-import { beamResponse, beamShares, blendNumber, hiDensity } from './blend-probability.ts';
+import { blendNumber, hiDensity } from './blend-probability.ts';
 import { blend } from './blend.ts';
 
 describe('chance of a blend', () => {
@@ -49,21 +48,5 @@ describe('doubt of a blend', () => {
   it('is not testable without a beam or a distance', () => {
     expect(blend({ beamArcmin: NaN, distanceMpc: 28, galaxiesAtVelocity: 0 }).grade).toBe('not testable here');
     expect(blend({ beamArcmin: 3, distanceMpc: NaN, galaxiesAtVelocity: 0 }).grade).toBe('not testable here');
-  });
-});
-
-describe('shares of a blended flux', () => {
-  it('follow expected flux and beam response, half at half a FWHM (definition)', () => {
-    expect(beamResponse(1.5, 3)).toBeCloseTo(0.5, 12);
-    const shares = beamShares(
-      [
-        { flux: 1, separation: 0 },
-        { flux: 2, separation: 1.5 },
-      ],
-      3,
-    );
-    expect(shares[0]).toBeCloseTo(0.5, 12);
-    expect(shares[0]! + shares[1]!).toBeCloseTo(1, 12);
-    expect(() => beamShares([], 3)).toThrow(DomainError);
   });
 });

@@ -176,7 +176,9 @@ describe('doubt of extinction', () => {
     [0.03, 50, 'clear'],
     [0.2, 50, 'watch'],
     [5, 50, 'not testable here'],
-    [0.03, -5, 'not testable here'],
+    [0.03, -5, 'watch'],
+    [0.5, -5, 'not testable here'],
+    [NaN, 3, 'not testable here'],
     [NaN, 50, 'not testable here'],
   ])('with E(B-V) %d at latitude %d is %s', (ebvMag, latitude, grade) => {
     const result = extinctionDoubt({ ebvMag, galacticLatRad: latitude * DEGREE });

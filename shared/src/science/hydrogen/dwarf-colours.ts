@@ -24,6 +24,7 @@ export const DWARF_COLOURS: DwarfColours = {
   V: optical(0.15, 0.1),
   R: optical(-0.03, 0.1),
   I: optical(-0.17),
+  G: optical(0.05, 0.3),
   'PS1 g': optical(0.33),
   'PS1 r': optical(0, 0.05),
   'PS1 i': optical(-0.15),

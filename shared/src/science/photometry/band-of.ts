@@ -4,7 +4,7 @@ import type { BandId } from './bands.ts';
 /** Words that go with a band in column names and say nothing of it. */
 const PLAIN_WORDS =
   'mag|magnitude|apparent|app|extinction|corrected|dered|galex|sdss|2mass|twomass|allwise|unwise|catwise|wise|johnson|' +
-  'cousins|bessell|cmodel|model|petro|kron|psf|mpro|total|auto|iso|band|filter|flux|ext|tot|m|ab|vega|limit|lim|depth';
+  'cousins|bessell|gaia|phot|mean|cmodel|model|petro|kron|psf|mpro|total|auto|iso|band|filter|flux|ext|tot|m|ab|vega|limit|lim|depth';
 /** The survey decides which g, r, i, z is meant. */
 const SURVEY_WORDS: readonly [string, string][] = [
   ['ps1|panstarrs1?|starrs1?|pan', 'PS1 '],
@@ -22,7 +22,8 @@ const JOINED_SURVEY = /^(ps1|decam|lsst)|(ps1|decam|lsst)$/i;
  * @param name for example "r", "R", "rmag", "mag_g", "W1mpro", "NUV", "K", "Pan-STARRS i"
  * @returns the band, or undefined where the name does not tell: never a guess
  *
- * A single letter keeps its case: r is SDSS r, R is Cousins R. K and Ks are both 2MASS Ks; y is Pan-STARRS y. A bare
+ * A single letter keeps its case: r is SDSS r, R is Cousins R, G is Gaia G; a capital U, Z or Y names no band here. K and
+ * Ks are both 2MASS Ks; y is Pan-STARRS y. A bare
  * small b, v or h is no band (latitude, velocity, hours), nor is anything that leaves a second word behind.
  */
 export function bandOf(name: string): BandId | undefined {
@@ -30,6 +31,8 @@ export function bandOf(name: string): BandId | undefined {
   const exact = BAND_IDS.find((id) => id === text || BANDS[id].name.toLowerCase() === text.toLowerCase());
   if (exact) return exact;
   if (/^[bvh]$/.test(text)) return undefined;
+
+  if (/^(gaia|phot)_?g/i.test(text)) return 'G';
 
   let survey = '';
   const rest: string[] = [];
@@ -54,8 +57,7 @@ function bandOfLetters(letters: string, survey: string): BandId | undefined {
   const upper = letters.toUpperCase();
   if (/^(FUV|NUV|W[1-4]|[BVJH])$/.test(upper)) return upper as BandId;
   if (/^KS?$/.test(upper)) return 'Ks';
-  if (upper === 'Y') return 'PS1 y';
   if (survey) return BAND_IDS.find((id) => id === survey + letters.toLowerCase());
-  if (letters === 'R' || letters === 'I') return letters;
-  return /^[UGRIZ]$/.test(upper) ? (letters.toLowerCase() as BandId) : undefined;
+  if (letters === 'y') return 'PS1 y';
+  return /^([ugriz]|[RIG])$/.test(letters) ? (letters as BandId) : undefined;
 }

@@ -160,6 +160,11 @@ describe('band of a name', () => {
     ['Cousins I', 'I'],
     ['Johnson B', 'B'],
     [' z ', 'z'],
+    ['G', 'G'],
+    ['Gmag', 'G'],
+    ['phot_g_mean_mag', 'G'],
+    ['Gaia G', 'G'],
+    ['PS1 Y', 'PS1 y'],
   ])('%s is %s', (name, band) => {
     expect(bandOf(name)).toBe(band);
   });
@@ -178,6 +183,10 @@ describe('band of a name', () => {
     're',
     'rms',
     'W5',
+    'U',
+    'Z',
+    'Y',
+    'phot_bp_mean_mag',
     'desk',
     'g_r',
     'x',

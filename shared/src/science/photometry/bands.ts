@@ -11,6 +11,7 @@ export type BandId =
   | 'V'
   | 'R'
   | 'I'
+  | 'G'
   | 'PS1 g'
   | 'PS1 r'
   | 'PS1 i'
@@ -72,6 +73,7 @@ const ROWS: readonly Row[] = [
   ['V', 'Johnson V', 'optical', 'Vega', 4.8021, 4.8151, -0.013, 2.742, 0.5511, SF11_MEMORY],
   ['R', 'Cousins R', 'optical', 'Vega', 4.6, 4.43, 0.17, 2.169, 0.6469, `Sun from memory; ${SF11_MEMORY}`],
   ['I', 'Cousins I', 'optical', 'Vega', 4.51, 4.1, 0.41, 1.505, 0.7886, `Sun from memory; ${SF11_MEMORY}`],
+  ['G', 'Gaia G', 'optical', 'Vega', 4.64, 4.53, 0.11, 2.36, 0.6218, 'Sun and extinction from memory'],
   ['PS1 g', 'Pan-STARRS1 g', 'optical', 'AB', 5.0321, 5.1442, -0.1121, 3.172, 0.4849, SF11_MEMORY],
   ['PS1 r', 'Pan-STARRS1 r', 'optical', 'AB', 4.6421, 4.5223, 0.1198, 2.271, 0.6201, SF11_MEMORY],
   ['PS1 i', 'Pan-STARRS1 i', 'optical', 'AB', 4.5221, 4.1827, 0.3394, 1.682, 0.7535, SF11_MEMORY],

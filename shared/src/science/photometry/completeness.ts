@@ -15,7 +15,7 @@ export interface DetectionSettings {
 }
 
 /** Common practice; settings of the criteria. */
-export const DEFAULT_DETECTION: DetectionSettings = { rollOffMag: 0.3, penaltyMag: 0.75, ceiling: 0.995 };
+export const DEFAULT_DETECTION: DetectionSettings = { rollOffMag: 0.3, penaltyMag: 0.5, ceiling: 0.995 };
 
 /** The magnitudes expected, AB (or the same system as the depth): a Gaussian core and a wide Gaussian tail. */
 export interface MagnitudePrior {
