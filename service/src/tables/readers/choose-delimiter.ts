@@ -18,9 +18,10 @@ export function sampleRecords(text: string, delimiter: Delimiter): string[][] {
 
 /** The delimiter under which most rows have the same number of cells; undefined when none makes a table of the text. */
 export function chooseDelimiter(text: string): Delimiter | undefined {
+  const body = text.replace(/^[ \t]+#.*$/gm, '');
   let best: { delimiter: Delimiter; share: number } | undefined;
   for (const delimiter of CANDIDATES) {
-    const records = sampleRecords(text, delimiter);
+    const records = sampleRecords(body, delimiter);
     const { cells, share } = commonWidth(records);
     if (cells > 1 && share >= ENOUGH && share > (best?.share ?? 0) + 0.15) best = { delimiter, share };
   }

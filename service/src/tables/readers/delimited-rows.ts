@@ -10,7 +10,7 @@ import type { TextLayout } from './text-layout.ts';
 
 const QUOTE = 34;
 
-type RowsLayout = Pick<TextLayout, 'delimiter' | 'columns' | 'decimalComma' | 'dataStart' | 'dataLine'>;
+type RowsLayout = Pick<TextLayout, 'delimiter' | 'columns' | 'decimalComma' | 'dataStart' | 'dataLine' | 'skip'>;
 
 /** Streams the rows of a UTF-8 delimited text. */
 export function delimitedRows(content: Content, layout: RowsLayout, limits: ReaderLimits): AsyncIterable<RowChunk> {
@@ -68,13 +68,18 @@ class DelimitedFiller implements RowFiller {
   private takeRecord(builder: ChunkBuilder, buffer: Buffer, start: number, next: number): void {
     const { starts, ends, doubled, count, newlines } = this.scanner;
     const line = this.line;
-    const width = this.layout.columns.length;
+    const { skip } = this.layout;
+    const width = this.layout.columns.length + skip;
     this.line += newlines;
     if (count === 0 || (count === 1 && starts[0] === ends[0] && buffer[starts[0]! - 1] !== QUOTE)) return;
     if (next - start > this.limits.maxLineLength) throw this.tooLong(line);
     const trailing = count === width + 1 && starts[width] === ends[width];
     if (count !== width && !trailing) {
-      return builder.breakRow(line, `The row has ${count} cells, not ${width}.`, rowText(buffer, start, next));
+      return builder.breakRow(
+        line,
+        `The row has ${count - skip} cells, not ${width - skip}.`,
+        rowText(buffer, start, next),
+      );
     }
     for (let i = 0; i < width; i++) {
       if (ends[i]! - starts[i]! > this.limits.maxCellLength) {
@@ -83,9 +88,9 @@ class DelimitedFiller implements RowFiller {
       }
     }
     const { columns, rows } = builder;
-    for (let i = 0; i < width; i++) {
-      if (doubled[i] === 0) columns[i]!.putCell(rows, buffer, starts[i]!, ends[i]!);
-      else columns[i]!.putText(rows, cellText(buffer, starts[i]!, ends[i]!).replaceAll('""', '"'));
+    for (let i = skip; i < width; i++) {
+      if (doubled[i] === 0) columns[i - skip]!.putCell(rows, buffer, starts[i]!, ends[i]!);
+      else columns[i - skip]!.putText(rows, cellText(buffer, starts[i]!, ends[i]!).replaceAll('""', '"'));
     }
     builder.endRow(line);
   }

@@ -7,7 +7,7 @@ import { delimitedRows } from './delimited-rows.ts';
 import { type EcsvColumn, readEcsvHead } from './ecsv-head.ts';
 import type { Delimiter } from './record-scanner.ts';
 import { settleLongColumns } from './settle-long-columns.ts';
-import { scanRecords } from './text-layout.ts';
+import { scanRecords } from './text-records.ts';
 
 /** Whether a text (UTF-8) begins as ECSV. */
 export function isEcsv(head: Buffer): boolean {
@@ -56,7 +56,14 @@ export async function openEcsv(content: Content, limits: ReaderLimits): Promise<
     notes,
   };
   const dataStart = first?.start ?? content.head.length;
-  const layout = { delimiter, columns, decimalComma: false, dataStart, dataLine: first?.line ?? header.line + 1 };
+  const layout = {
+    delimiter,
+    columns,
+    decimalComma: false,
+    skip: 0 as const,
+    dataStart,
+    dataLine: first?.line ?? header.line + 1,
+  };
   const rows = () => delimitedRows(content, layout, limits);
   const longs = head.columns.flatMap(({ datatype }, i) =>
     /64$/.test(datatype ?? '') && columns[i]!.type === 'integer' ? [i] : [],

@@ -1,14 +1,15 @@
 import type { Content } from '../bytes/content.ts';
 import { cellText } from '../columns/cell-text.ts';
-import { guessColumnType, isPlainNumber } from '../columns/guess-type.ts';
+import { guessColumnType } from '../columns/guess-type.ts';
 import { isMissingWord } from '../columns/missing-marks.ts';
 import { type ColumnFacts, type ReaderLimits, TableError } from '../table.ts';
 import { chooseDelimiter, commonWidth } from './choose-delimiter.ts';
-import { isComment } from './comment-line.ts';
 import { uniqueNames } from './column-names.ts';
-import { type Delimiter, RecordScanner } from './record-scanner.ts';
+import type { Delimiter } from './record-scanner.ts';
+import { findHeader } from './text-header.ts';
+import { lineEnd, type ScannedRecord, scanRecords } from './text-records.ts';
 import { sampleFurther } from './sample-further.ts';
-import { isUnitWord, unitInName } from './unit-words.ts';
+import { unitInName } from './unit-words.ts';
 
 /** How a delimited text is laid out, and where its first row of data begins. */
 export interface TextLayout {
@@ -19,15 +20,9 @@ export interface TextLayout {
   dataLine: number;
   comments: string[];
   notes: string[];
+  /** 1 when every row begins with a bar, so that its first cell is empty and no column. */
+  skip: 0 | 1;
 }
-
-interface ScannedRecord {
-  cells: string[];
-  start: number;
-  line: number;
-}
-
-const SAMPLE_RECORDS = 1_000;
 
 /** Works out delimiter, header, units and column types from the head of a UTF-8 text and some samples further on. */
 export async function sniffLayout(content: Content, limits: ReaderLimits): Promise<TextLayout> {
@@ -49,7 +44,8 @@ export async function sniffLayout(content: Content, limits: ReaderLimits): Promi
   const notes: string[] = [];
   const header = findHeader(records, comments, delimiter, notes);
   const rows = records.slice(header.rowsBefore);
-  const names = widen(header.names, rows, notes);
+  const skip = delimiter === '|' && records.every((record) => record.cells[0] === '') ? 1 : 0;
+  const names = widen(header.names, rows, notes).slice(skip);
   if (names.length > limits.maxColumns) {
     throw new TableError(
       'too-many-columns',
@@ -58,14 +54,14 @@ export async function sniffLayout(content: Content, limits: ReaderLimits): Promi
       { line, column: limits.maxColumns + 1 },
     );
   }
-  const further = await sampleFurther(content, delimiter, limits, names.length);
+  const further = await sampleFurther(content, delimiter, limits, names.length + skip);
   const sample = rows.map((row) => row.cells).concat(further);
   const decimalComma = delimiter !== ',' && usesDecimalComma(sample);
   if (decimalComma) notes.push('Numbers are read with the comma as decimal sign.');
   const columns = uniqueNames(names, notes).map((name, index): ColumnFacts => {
-    const unit = header.units?.[index] ?? unitInName(name);
+    const unit = header.units?.[index + skip] ?? unitInName(name);
     const type = guessColumnType(
-      sample.map((cells) => cells[index] ?? ''),
+      sample.map((cells) => cells[index + skip] ?? ''),
       decimalComma,
     );
     return unit === undefined || unit === '' ? { name, type } : { name, type, unit };
@@ -79,6 +75,7 @@ export async function sniffLayout(content: Content, limits: ReaderLimits): Promi
     dataLine: first?.line ?? records.at(-1)!.line + 1,
     comments,
     notes,
+    skip,
   };
 }
 
@@ -98,12 +95,6 @@ function leadingComments({ head }: Content): { comments: string[]; start: number
   return { comments, start, line };
 }
 
-function lineEnd(bytes: Uint8Array, start: number): number {
-  let end = start;
-  while (end < bytes.length && bytes[end] !== 10 && bytes[end] !== 13) end++;
-  return end;
-}
-
 function wholeLines({ head, complete }: Content, start: number, line: number): Buffer {
   if (complete) return head.subarray(start);
   const end = Math.max(head.lastIndexOf(10), head.lastIndexOf(13));
@@ -115,97 +106,6 @@ function wholeLines({ head, complete }: Content, start: number, line: number): B
     });
   }
   return head.subarray(start, end + 1);
-}
-
-/** Splits complete records; also used on samples. */
-export function scanRecords(
-  bytes: Uint8Array,
-  from: number,
-  end: number,
-  firstLine: number,
-  delimiter: Delimiter,
-  limits: ReaderLimits,
-): ScannedRecord[] {
-  const scanner = new RecordScanner(delimiter, limits.maxCellLength);
-  const records: ScannedRecord[] = [];
-  let line = firstLine;
-  for (let start = from; start < end && records.length < SAMPLE_RECORDS;) {
-    if (isComment(bytes, start, end)) {
-      const stop = lineEnd(bytes, start);
-      start = bytes[stop] === 13 && bytes[stop + 1] === 10 ? stop + 2 : stop + 1;
-      line++;
-      continue;
-    }
-    const next = scanner.scan(bytes, start, end, true);
-    const cells = Array.from({ length: scanner.count }, (_, i) => {
-      const text = cellText(bytes, scanner.starts[i]!, scanner.ends[i]!);
-      return scanner.doubled[i] === 1 ? text.replaceAll('""', '"') : text;
-    });
-    if (cells.length > 1 || (cells[0] ?? '') !== '') records.push({ cells, start, line });
-    line += scanner.newlines;
-    start = next;
-  }
-  return records;
-}
-
-interface Header {
-  names: string[];
-  units?: string[];
-  rowsBefore: number;
-}
-
-function findHeader(records: ScannedRecord[], comments: string[], delimiter: Delimiter, notes: string[]): Header {
-  const first = records[0]!.cells;
-  if (!first.some(looksNumeric)) {
-    const second = records[1]?.cells;
-    if (second !== undefined && isUnitsRow(second, records.slice(2))) {
-      return { names: first, units: second.map((unit) => (/^-*$/.test(unit) ? '' : unit)), rowsBefore: 2 };
-    }
-    if (second !== undefined && delimiter === '\t' && second.every((cell) => /^\d*[SNM]$/i.test(cell))) {
-      notes.push('The second row tells column types and is not data.');
-      return { names: first, rowsBefore: 2 };
-    }
-    return { names: first, rowsBefore: 1 };
-  }
-  const { cells: width } = commonWidth(records.map((record) => record.cells));
-  const split = comments.map((comment) => splitComment(comment, delimiter));
-  for (let i = split.length - 1; i >= Math.max(0, split.length - 3); i--) {
-    const names = split[i]!;
-    if (names.length !== width || names.some(looksNumeric)) continue;
-    const above = split[i - 1];
-    if (
-      above?.length === width &&
-      names.some(isUnitWord) &&
-      names.every((word) => isUnitWord(word) || /^-*$/.test(word))
-    ) {
-      return { names: above, units: names, rowsBefore: 0 };
-    }
-    const below = split[i + 1];
-    return below?.length === width ? { names, units: below, rowsBefore: 0 } : { names, rowsBefore: 0 };
-  }
-  notes.push('The file has no header row; columns are called by their number.');
-  return { names: Array.from({ length: width }, (_, i) => `column_${i + 1}`), rowsBefore: 0 };
-}
-
-function splitComment(comment: string, delimiter: Delimiter): string[] {
-  const cells = delimiter === 'blank' ? comment.trim().split(/\s+/) : comment.split(delimiter);
-  return cells.map((cell) => cell.trim().replace(/^"(.*)"$/, '$1'));
-}
-
-function looksNumeric(cell: string): boolean {
-  return (
-    isPlainNumber(cell.trim()) || isPlainNumber(cell.trim(), true) || /^[+-]?\d+[: ]\d+[: ][\d.]+$/.test(cell.trim())
-  );
-}
-
-function isUnitsRow(cells: string[], below: ScannedRecord[]): boolean {
-  if (below.length === 0 || cells.some(looksNumeric)) return false;
-  const words = cells.filter((cell) => !/^[-\s]*$/.test(cell));
-  const units = words.filter(isUnitWord).length;
-  const overNumbers = cells.some(
-    (cell, i) => isUnitWord(cell) && below.some((record) => looksNumeric(record.cells[i] ?? '')),
-  );
-  return overNumbers && units >= words.length * 0.5;
 }
 
 /** Rows wider than the header get further names; a comma at the end of every row does not count. */
