@@ -1,5 +1,6 @@
 import { DEGREE } from '@eremite/shared/science/constants';
 import { DomainError } from '@eremite/shared/science/domain-error';
+import { gather } from './gather.ts';
 import type { Pairs } from './pair-search.ts';
 import { raDifferenceDeg } from './separation-arcsec.ts';
 import { type Numbers, wrapRaDeg } from './sky-position.ts';
@@ -91,9 +92,9 @@ export function ellipseFilter(
   }
   const order = kept.subarray(0, count);
   return {
-    position: Uint32Array.from(order, (i) => pairs.position[i]!),
-    row: Uint32Array.from(order, (i) => pairs.row[i]!),
-    separationArcsec: Float64Array.from(order, (i) => pairs.separationArcsec[i]!),
+    position: gather(pairs.position, order),
+    row: gather(pairs.row, order),
+    separationArcsec: gather(pairs.separationArcsec, order),
     mahalanobis2: distances.slice(0, count),
   };
 }

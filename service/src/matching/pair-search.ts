@@ -1,3 +1,4 @@
+import { gather } from './gather.ts';
 import { DEFAULT_HIT_LIMIT, HitLimitError } from './hit-limit.ts';
 import { Hits, orderHits } from './hits.ts';
 import { checkSameLength } from './same-length.ts';
@@ -87,8 +88,8 @@ export function pairSearch(grid: ZoneGrid, positions: SearchPositions, range: Se
 function asPairs(grid: ZoneGrid, hits: Hits, from: number, to: number): Pairs {
   const order = orderHits(hits, grid, from, to);
   return {
-    position: Uint32Array.from(order, (hit) => hits.query[hit]!),
-    row: Uint32Array.from(order, (hit) => grid.row[hits.slot[hit]!]!),
-    separationArcsec: Float64Array.from(order, (hit) => hits.separationArcsec[hit]!),
+    position: gather(hits.query, order),
+    row: gather(grid.row, gather(hits.slot, order)),
+    separationArcsec: gather(hits.separationArcsec, order),
   };
 }
