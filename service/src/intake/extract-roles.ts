@@ -6,7 +6,7 @@ import { selectRows } from '../tiles/column-rows.ts';
 import { CellTally } from './cell-tally.ts';
 import { keptRows } from './keep-rows.ts';
 import { lineOf, numberCells, type NumberRecipe, rowOf } from './number-cells.ts';
-import { toSigma1d } from './position-error.ts';
+import { sigmaOfError } from '@eremite/shared/science/counterpart/position-error';
 import { chunkPositions, type ChunkPositions, DecimalRightAscensions } from './positions.ts';
 import { type Recipe, recipeOf } from './recipe.ts';
 import type { ResolvedSettings } from './resolved.ts';
@@ -102,7 +102,7 @@ export class RoleExtractor {
   private numbers(chunk: RowChunk, recipe: NumberRecipe, target: string, cz: Float64Array | undefined): Float64Array {
     const values = this.cells(chunk, recipe);
     const { rule } = recipe.conversion;
-    if (target === 'positionErrorArcsec') return values.map((error) => toSigma1d(error, this.resolved.errorMeaning));
+    if (target === 'positionErrorArcsec') return values.map((error) => sigmaOfError(error, this.resolved.errorMeaning));
     if (rule === 'lineWidthFromFrequency') toOpticalWidths(values, 'frequency', cz);
     else if (rule === 'fluxFromFrequency') toVelocityFlux(values, cz);
     else if (target.startsWith('width') && this.resolved.velocity.convention === 'radio')
@@ -143,8 +143,7 @@ export class RoleExtractor {
       columns[`mag:${band}`] = this.cells(chunk, value, limits);
       if (error) columns[`magError:${band}`] = this.cells(chunk, error);
       if (limitFlag !== null) readLimitFlags(chunk, limitFlag, limits);
-      // Present in every chunk or in none, for chunks are joined: a text column may hold a limit anywhere.
-      if (limitFlag !== null || chunk.columns[value.index]!.kind === 'text') columns[`magLimit:${band}`] = limits;
+      columns[`magLimit:${band}`] = limits;
     }
   }
 }

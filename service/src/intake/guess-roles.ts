@@ -59,8 +59,11 @@ function candidatesOf(column: ColumnFacts, parts: NameParts, sample: ColumnSampl
     return role === null || role === 0 ? [] : [{ column: index, role: 'positionError', confidence: role }];
   }
   const guesses: Guess[] = [];
+  const described = COLUMN_ROLES.some((role) => byUcd(role, column) >= 0.9);
   for (const role of COLUMN_ROLES) {
-    const confidence = Math.max(byUcd(role, column), byName(role, parts));
+    const said = byUcd(role, column);
+    // What a UCD says of another role is evidence against a name.
+    const confidence = Math.max(said, byName(role, parts) * (said === 0 && described ? 0.5 : 1));
     const sure = confidence * plausibility(role, column, parts, sample);
     if (sure >= 0.3) guesses.push({ column: index, role, confidence: round(sure) });
   }
@@ -93,8 +96,9 @@ function plausibility(role: ColumnRole, column: ColumnFacts, parts: NameParts, s
   const unit = column.unit ?? parts.unit;
   const conversion = unit === undefined || unit === '' ? undefined : conversionOf(quantity, unit);
   if (unit && quantity !== 'number' && !conversion) return 0.3;
-  // Without a unit a distance may be kpc, Mpc or a modulus: nothing in the numbers tells, so it is never taken unasked.
-  if (role === 'distance' && !conversion) return 0.6;
+  // Without a unit a distance may be kpc, Mpc or a modulus, a radius arcsec, arcmin or pixels: nothing in the numbers
+  // tells, so neither is taken unasked.
+  if ((role === 'distance' || role === 'effectiveRadius') && !conversion) return 0.6;
   if (column.type === 'text' && sample.texts > sample.numbers) {
     return (role === 'ra' || role === 'dec') && sample.sexagesimal > 0.5 ? 1 : 0.2;
   }
@@ -102,7 +106,9 @@ function plausibility(role: ColumnRole, column: ColumnFacts, parts: NameParts, s
   if (conversion?.rule) return 1;
   const middle = sample.median * (conversion?.factor ?? 1);
   const low = role === 'velocity' ? -500 : range[0];
-  return middle >= low && middle <= range[1] ? 1 : 0.3;
+  // Beyond a redshift of 8 the column is a z magnitude.
+  const high = role === 'redshift' ? 8 : range[1];
+  return middle >= low && middle <= high ? 1 : 0.3;
 }
 
 /** "e_cz", "rmag_err", "l_rmag" belong to the column they are named after. */

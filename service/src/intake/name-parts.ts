@@ -28,7 +28,7 @@ const UNIT_SUFFIXES: readonly [RegExp, string][] = [
   [/_mjy$/, 'mJy'],
 ];
 const ERROR_PREFIX = /^(e_|err_|error_|sig_|sigma_|unc_|u_|d_(?=[a-z]{2}))/;
-const ERROR_SUFFIX = /(_err|_error|_unc|_uncertainty|_sig|_sigma|_e|(?<=[a-z0-9])err)$/;
+const ERROR_SUFFIX = /(_err|_error|_unc|_uncertainty|_e|(?<=[a-z0-9])err)$/;
 const LIMIT = /^l_|_(limit_?flag|lim_?flag|uplim|upper_?limit|is_?limit)$/;
 
 /** Takes a column name apart. A unit in brackets ("cz [km/s]", "dist (Mpc)") is handed over as it stands. */
@@ -63,7 +63,7 @@ export function nearNames(wanted: string, names: readonly string[], most = 3): s
   return names
     .map((name) => ({ name, far: distance(target, key(name)) }))
     .filter(({ name, far }) => far <= Math.max(1, Math.ceil(Math.min(target.length, key(name).length) / 2)))
-    .sort((a, b) => a.far - b.far)
+    .sort((a, b) => a.far - b.far || a.name.length - b.name.length)
     .slice(0, most)
     .map(({ name }) => name);
 }

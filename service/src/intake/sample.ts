@@ -4,7 +4,7 @@ import type { ColumnData, RowChunk } from '../tables/table.ts';
 export interface ColumnSample {
   /** Rows looked at. */
   rows: number;
-  /** Of those, cells that are plain numbers. */
+  /** Of those, cells that are plain numbers and not a usual mark for "missing". */
   numbers: number;
   /** Of those, cells with text that is no plain number. */
   texts: number;
@@ -37,20 +37,26 @@ export function sampleColumns(chunk: RowChunk | undefined, columns: number, most
     let sexagesimal = 0;
     for (let i = 0; i < rows; i++) {
       if (data.kind === 'number' && !Number.isNaN(data.values[i]!)) {
-        numbers.push(data.values[i]!);
+        if (!isMark(data.values[i]!)) numbers.push(data.values[i]!);
         continue;
       }
       const text = cellAt(data, i).trim();
       if (text === '') continue;
       const value = Number(text);
-      if (Number.isFinite(value)) numbers.push(value);
-      else {
+      if (Number.isFinite(value)) {
+        if (!isMark(value)) numbers.push(value);
+      } else {
         texts++;
         if (SEXAGESIMAL.test(text)) sexagesimal++;
       }
     }
     return summary(numbers, texts, texts === 0 ? 0 : sexagesimal / texts, rows);
   });
+}
+
+/** Numbers written only for "no value": a column that holds mostly these is judged by the rest. */
+function isMark(value: number): boolean {
+  return value === -32768 || Math.abs(value) >= 1e20 || /^(-9{3,}(\.9+)?|99\.9+)$/.test(String(value));
 }
 
 function summary(numbers: number[], texts: number, sexagesimal: number, rows: number): ColumnSample {

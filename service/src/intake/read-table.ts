@@ -1,0 +1,84 @@
+import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { IntakeCheck, SettingsQuestion, SidelinedRow } from '@eremite/shared/contracts/intake';
+import type { ByteSource, TableFacts, TableFormat } from '../tables/table.ts';
+import type { PackedColumns } from '../tiles/column-pack.ts';
+import { concatColumns } from '../tiles/column-rows.ts';
+import { asRoleTable, type RoleTable } from '../tiles/role-table.ts';
+import type { CatalogueFacts } from './catalogue-facts.ts';
+import { type Coverage, coverageOf } from './coverage.ts';
+import { openCatalogue, type ReadOptions } from './open-catalogue.ts';
+import type { ResolvedSettings } from './resolved.ts';
+import { streamCatalogue } from './stream-catalogue.ts';
+
+export interface CatalogueReading {
+  format: TableFormat;
+  table: TableFacts;
+  resolved: ResolvedSettings;
+  /** All that was left open, in sentences: defaults taken, warnings, and questions a person would be asked. */
+  questions: SettingsQuestion[];
+  /** Sentences of what was assumed, questions that took a default included: for a summary. */
+  assumed: string[];
+  check: IntakeCheck;
+  /** The first rows put aside; `check.sidelined` counts them all. */
+  sidelined: SidelinedRow[];
+  /** Usable rows in file order. */
+  roles: RoleTable;
+  facts: CatalogueFacts;
+  coverage: Coverage;
+}
+
+const MAX_SIDELINED = 1000;
+
+/**
+ * Reads one catalogue whole into memory: what a plan does, and what a check of an upload does without the rows.
+ *
+ * @param source path of the file, or its bytes
+ * @param settings as a person wrote them; whatever they leave open takes its documented default
+ * @throws {TableError} for a file that cannot be read as a table
+ * @throws {SettingsError} for settings that do not fit it, every fault named
+ */
+export async function readCatalogue(
+  source: ByteSource | string,
+  settings: IntakeSettings,
+  options: ReadOptions = {},
+): Promise<CatalogueReading> {
+  const catalogue = await openCatalogue(source, settings, options);
+  const { resolved } = catalogue.resolution;
+  const parts: PackedColumns[] = [];
+  const sidelined: SidelinedRow[] = [];
+  const { check, facts, questions } = await streamCatalogue(catalogue, settings, (extracted) => {
+    parts.push(extracted.roles);
+    for (const { row } of extracted.sidelined) if (sidelined.length < MAX_SIDELINED) sidelined.push(row);
+  });
+  const roles = joined(parts);
+  const coverage = coverageOf(resolved, roles);
+  if (settings.footprint === undefined && resolved.kind !== 'hi') {
+    questions.push({
+      level: 'assumed',
+      pointer: '/footprint',
+      text: `The area covered is not stated: ${coverage.note}`,
+    });
+  }
+  return {
+    format: catalogue.open.format,
+    table: catalogue.table,
+    resolved,
+    questions,
+    assumed: questions.filter(({ level }) => level !== 'warning').map(({ text }) => text),
+    check,
+    sidelined,
+    roles,
+    facts,
+    coverage,
+  };
+}
+
+function joined(parts: PackedColumns[]): RoleTable {
+  const empty = { row: new Uint32Array(0), raDeg: new Float64Array(0), decDeg: new Float64Array(0) };
+  const { rows, columns } = parts.length ? concatColumns(parts) : { rows: 0, columns: empty };
+  // A limit column in which nothing is a limit says nothing.
+  const told = Object.entries(columns).filter(
+    ([name, column]) => !name.startsWith('magLimit:') || (column as Uint8Array).some((flag) => flag !== 0),
+  );
+  return asRoleTable({ rows, columns: Object.fromEntries(told) });
+}

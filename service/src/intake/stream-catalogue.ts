@@ -1,0 +1,72 @@
+import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { IntakeCheck, SettingsQuestion } from '@eremite/shared/contracts/intake';
+import type { RowChunk } from '../tables/table.ts';
+import { type CatalogueFacts, FactsGatherer } from './catalogue-facts.ts';
+import { closingQuestions } from './closing-questions.ts';
+import { type ExtractedChunk, RoleExtractor } from './extract-roles.ts';
+import type { OpenCatalogue } from './open-catalogue.ts';
+import { SettingsError } from './resolved.ts';
+import { SidelineTally } from './sideline-tally.ts';
+
+/** What is known once every row has been through. */
+export interface CatalogueSummary {
+  check: IntakeCheck;
+  facts: CatalogueFacts;
+  /** Every question of the resolution and of the rows, in that order. */
+  questions: SettingsQuestion[];
+}
+
+/**
+ * Passes every row of an opened catalogue through its settings, chunk by chunk, and sums up at the end.
+ *
+ * @param take is given each chunk with what became of it, and is waited for
+ * @throws {SettingsError} where the settings do not fit the table, or no position is named
+ */
+export async function streamCatalogue(
+  catalogue: OpenCatalogue,
+  settings: IntakeSettings,
+  take: (extracted: ExtractedChunk, chunk: RowChunk) => void | Promise<void>,
+): Promise<CatalogueSummary> {
+  const { resolution, table } = catalogue;
+  assertReadable(catalogue);
+  const extractor = new RoleExtractor(resolution.resolved, table.columns);
+  const sidelined = new SidelineTally();
+  const gatherer = new FactsGatherer();
+  let rows = 0;
+  let leftOut = 0;
+  for await (const chunk of catalogue.chunks()) {
+    const extracted = extractor.extract(chunk);
+    rows += chunk.rows + (chunk.broken?.length ?? 0);
+    leftOut += extracted.leftOut;
+    for (const { row } of extracted.sidelined) sidelined.add(row);
+    gatherer.add(extracted.roles);
+    await take(extracted, chunk);
+  }
+  const closing = closingQuestions(settings, resolution.resolved, table, extractor, catalogue.broken());
+  const questions = [...resolution.questions, ...closing];
+  const facts = gatherer.facts();
+  const check: IntakeCheck = {
+    rows,
+    usable: facts.rows,
+    sidelined: sidelined.count,
+    leftOut,
+    reasons: sidelined.summary(),
+    questions,
+    ready: facts.rows > 0 && questions.every(({ level }) => level !== 'ask'),
+  };
+  return { check, facts, questions };
+}
+
+/** Faults, and a position that is still asked for, make rows unreadable. @throws {SettingsError} */
+export function assertReadable({ resolution }: OpenCatalogue): void {
+  const { columns } = resolution.resolved;
+  const faults = [...resolution.faults];
+  if (columns.raHours === null && (columns.ra === null || columns.dec === null)) {
+    for (const { pointer, text } of resolution.questions) {
+      if (/^\/columns\/(ra|dec)$/.test(pointer) && !faults.some((fault) => fault.pointer === pointer)) {
+        faults.push({ pointer, detail: text });
+      }
+    }
+  }
+  if (faults.length) throw new SettingsError(faults);
+}
