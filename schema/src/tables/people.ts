@@ -83,6 +83,8 @@ export const invitations = pgTable(
 /** Every mail the service sends; `kept` where no mail server is configured. */
 export const mails = pgTable('mails', {
   id: id(),
+  /** Whose leads may read it; null for mails that are no team's. */
+  teamId: uuid('team_id').references(() => teams.id, { onDelete: 'cascade' }),
   to: text('to').notNull(),
   subject: text('subject').notNull(),
   text: text('text').notNull(),

@@ -1,6 +1,12 @@
 import { EventEmitter } from 'node:events';
 import type { Job } from '@eremite/shared/contracts/job';
-import { Inject, Injectable, Logger, type OnApplicationBootstrap, type OnApplicationShutdown } from '@nestjs/common';
+import {
+  Inject,
+  Injectable,
+  Logger,
+  type OnApplicationBootstrap,
+  type BeforeApplicationShutdown,
+} from '@nestjs/common';
 import { AccessService } from '../common/access.ts';
 import { AppError } from '../common/app-error.ts';
 import type { SignedInUser } from '../common/signed-in-user.ts';
@@ -18,7 +24,7 @@ const MOST_ATTEMPTS = 3;
 
 /** Long work: a row says how it stands, the queue says who does it. */
 @Injectable()
-export class JobsService implements OnApplicationBootstrap, OnApplicationShutdown {
+export class JobsService implements OnApplicationBootstrap, BeforeApplicationShutdown {
   readonly #log = new Logger(JobsService.name);
   readonly #handlers = new Map<string, JobHandler>();
   readonly #running = new Map<string, JobRun>();
@@ -51,7 +57,7 @@ export class JobsService implements OnApplicationBootstrap, OnApplicationShutdow
   }
 
   /** Running jobs are told to stop and put back, so that the next start takes them up. */
-  async onApplicationShutdown(): Promise<void> {
+  async beforeApplicationShutdown(): Promise<void> {
     this.#stopping = true;
     clearInterval(this.#sweep);
     const running = [...this.#running.values()];

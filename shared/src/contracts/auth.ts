@@ -38,10 +38,18 @@ export const createdToken = personalToken.extend({ /** Shown this once. */ token
 export const changePasswordRequest = z.strictObject({ current: z.string().max(200), next: password });
 export type ChangePasswordRequest = z.output<typeof changePasswordRequest>;
 
-export const createTeamRequest = z.strictObject({ name: z.string().trim().min(1).max(100) });
+/** A team; with `leadEmail` its first lead is invited, without it whoever makes the team leads it. */
+export const createTeamRequest = z.strictObject({
+  name: z.string().trim().min(1).max(100),
+  leadEmail: z.email().max(200).toLowerCase().optional(),
+});
+export type CreateTeamRequest = z.output<typeof createTeamRequest>;
 export const team = z.object({ id: z.uuid(), name: z.string(), role: z.enum(TEAM_ROLES).nullable(), members: z.int() });
 export const teamMember = z.object({ userId: z.uuid(), name: z.string(), email: z.string(), role: z.enum(TEAM_ROLES) });
 export const invitationRequest = z.strictObject({ email: z.email().max(200).toLowerCase(), role: z.enum(TEAM_ROLES) });
+export type InvitationRequest = z.output<typeof invitationRequest>;
+export const updateMemberRequest = z.strictObject({ role: z.enum(TEAM_ROLES) });
+export type UpdateMemberRequest = z.output<typeof updateMemberRequest>;
 export const invitation = z.object({
   id: z.uuid(),
   email: z.string(),
@@ -53,6 +61,15 @@ export const acceptInvitationRequest = z.strictObject({
   token: z.string().min(10).max(200),
   name: z.string().trim().min(1).max(100),
   password,
+});
+export type AcceptInvitationRequest = z.output<typeof acceptInvitationRequest>;
+/** What the holder of an invitation's link sees before accepting. */
+export const invitationPreview = z.object({
+  teamName: z.string(),
+  email: z.string(),
+  role: z.enum(TEAM_ROLES),
+  /** The e-mail has an account already: its own password joins the team. */
+  hasAccount: z.boolean(),
 });
 export const outboxMail = z.object({
   id: z.uuid(),

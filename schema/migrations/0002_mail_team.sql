@@ -1,0 +1,2 @@
+ALTER TABLE "mails" ADD COLUMN "team_id" uuid;--> statement-breakpoint
+ALTER TABLE "mails" ADD CONSTRAINT "mails_team_id_teams_id_fk" FOREIGN KEY ("team_id") REFERENCES "public"."teams"("id") ON DELETE cascade ON UPDATE no action;

@@ -1,0 +1,66 @@
+import { randomUUID } from 'node:crypto';
+import type { IncomingMessage, ServerResponse } from 'node:http';
+import { type LoggerService } from '@nestjs/common';
+import { pino, type Logger } from 'pino';
+import { pinoHttp } from 'pino-http';
+
+/** Log of the service: one JSON object a line, without personal data. */
+export function makeLogger(level: string): Logger {
+  return pino({
+    level,
+    base: null,
+    timestamp: pino.stdTimeFunctions.isoTime,
+    redact: {
+      paths: ['*.password', '*.token', '*.email', 'err.params', 'err.query', 'err.cause.parameters'],
+      remove: true,
+    },
+  });
+}
+
+/** What Nest tells of its own start, line by line. */
+const START_UP = new Set(['NestFactory', 'InstanceLoader', 'RoutesResolver', 'RouterExplorer', 'NestApplication']);
+
+/** Nest's messages in the same log. */
+export function nestLogger(logger: Logger): LoggerService {
+  const write =
+    (level: 'info' | 'error' | 'warn' | 'debug' | 'trace') =>
+    (message: unknown, ...rest: unknown[]) => {
+      const context = rest.findLast((part) => typeof part === 'string');
+      if (level === 'info' && START_UP.has(context as string)) return logger.debug({ context }, String(message));
+      if (typeof message === 'object' && message !== null) {
+        const text = rest.find((part) => typeof part === 'string' && part !== context);
+        return logger[level]({ ...message, context }, typeof text === 'string' ? text : undefined);
+      }
+      logger[level]({ context }, String(message));
+    };
+  return {
+    log: write('info'),
+    error: write('error'),
+    warn: write('warn'),
+    debug: write('debug'),
+    verbose: write('trace'),
+  };
+}
+
+/** One line a request: id, method, path without query, status, time. */
+export function requestLog(logger: Logger) {
+  return pinoHttp({
+    logger,
+    genReqId: (request: IncomingMessage, response: ServerResponse) => {
+      const given = request.headers['x-request-id'];
+      const id = typeof given === 'string' && /^[\w-]{8,64}$/.test(given) ? given : randomUUID();
+      response.setHeader('X-Request-Id', id);
+      return id;
+    },
+    serializers: {
+      req: (request: { id: unknown; method: unknown; url: string }) => ({
+        id: request.id,
+        method: request.method,
+        path: request.url.split('?')[0],
+      }),
+      res: (response: { statusCode: number }) => ({ status: response.statusCode }),
+    },
+    customLogLevel: (_request, response, error) =>
+      error || response.statusCode >= 500 ? 'error' : response.statusCode >= 400 ? 'info' : 'debug',
+  });
+}
