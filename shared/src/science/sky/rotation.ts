@@ -27,9 +27,23 @@ export function transpose(m: Matrix): Matrix {
 export function aboutAxis(axis: 'x' | 'y' | 'z', angle: number): Matrix {
   const c = Math.cos(angle);
   const s = Math.sin(angle);
-  if (axis === 'x') return [[1, 0, 0], [0, c, s], [0, -s, c]];
-  if (axis === 'y') return [[c, 0, -s], [0, 1, 0], [s, 0, c]];
-  return [[c, s, 0], [-s, c, 0], [0, 0, 1]];
+  if (axis === 'x')
+    return [
+      [1, 0, 0],
+      [0, c, s],
+      [0, -s, c],
+    ];
+  if (axis === 'y')
+    return [
+      [c, 0, -s],
+      [0, 1, 0],
+      [s, 0, c],
+    ];
+  return [
+    [c, s, 0],
+    [-s, c, 0],
+    [0, 0, 1],
+  ];
 }
 
 /** A direction (radians) expressed in rotated axes. @throws {DomainError} for a direction out of range */
