@@ -1,45 +1,73 @@
 import { DEGREE } from '@eremite/shared/science/constants';
 import { DomainError } from '@eremite/shared/science/domain-error';
+import {
+  allSkyFootprint,
+  circlesFootprint,
+  type Footprint,
+  mocFootprint,
+  polygonsFootprint,
+} from '@eremite/shared/science/sky/footprint';
 import { Moc } from '@eremite/shared/science/sky/moc';
-import type { RoleTable } from '../tiles/role-table.ts';
-import type { ResolvedSettings } from './resolved.ts';
-import { SettingsError } from './resolved.ts';
+import { rowsFootprint } from '@eremite/shared/science/sky/rows-footprint';
+import { type ResolvedSettings, SettingsError } from './resolved.ts';
 
 /** Where a catalogue has looked. Without a region nothing can be concluded from a place where it has no row. */
 export interface Coverage {
   type: ResolvedSettings['footprint']['type'];
   moc: Moc | null;
   areaSqDeg: number | null;
-  /** How the region was found, or why there is none. */
+  /** How the region was found, or why there is none; a sentence without its first capital. */
   note: string;
 }
 
-/** Region of a catalogue as its settings give it, or as its rows show it. @throws {SettingsError} for a faulty region */
-export function coverageOf({ footprint }: ResolvedSettings, _roles: RoleTable): Coverage {
+/**
+ * Region of a catalogue as its settings state it, or as its rows show it.
+ *
+ * @param raDeg positions of all rows, ICRS degrees
+ * @throws {SettingsError} for a region that cannot be read
+ */
+export function coverageOf(
+  { footprint, kind }: Pick<ResolvedSettings, 'footprint' | 'kind'>,
+  raDeg: Float64Array,
+  decDeg: Float64Array,
+): Coverage {
+  if (footprint.type === 'rows') return fromRows(kind, raDeg, decDeg);
+  const stated = statedFootprint(footprint);
+  if (!stated) return unknown('it is unknown, so a place without rows shows nothing.');
+  return known(stated, footprint.type === 'all-sky' ? 'the whole sky, as stated.' : `the ${WORDS[stated.kind]} given.`);
+}
+
+const WORDS = { rows: 'rows', moc: 'region', circles: 'circles', polygons: 'polygons', 'all-sky': 'sky' } as const;
+
+function fromRows(kind: ResolvedSettings['kind'], raDeg: Float64Array, decDeg: Float64Array): Coverage {
+  if (kind === 'hi' || kind === 'stars' || kind === 'groups')
+    return unknown('it is not needed for a list of this kind.');
+  const found = rowsFootprint(raDeg, decDeg);
+  if (found.known) return known(found.footprint, `${found.footprint.notes.join('; ')}.`);
+  return unknown(`it is unknown, so a place without rows shows nothing: ${found.reason}.`);
+}
+
+/**
+ * Footprint that settings state; undefined for none or one to be taken from the rows.
+ * @throws {SettingsError} that names what is wrong with it
+ */
+export function statedFootprint({ type, value }: ResolvedSettings['footprint']): Footprint | undefined {
   try {
-    switch (footprint.type) {
-      case 'all-sky':
-        return known('all-sky', Moc.allSky(), 'the whole sky, as stated.');
-      case 'moc':
-        return known('moc', mocOf(footprint.value), 'the uploaded region.');
-      case 'circles':
-        return known('circles', circles(footprint.value), 'the circles given.');
-      default:
-        return {
-          type: 'unknown',
-          moc: null,
-          areaSqDeg: null,
-          note: 'it is unknown, so a place without rows shows nothing.',
-        };
-    }
+    if (type === 'all-sky') return allSkyFootprint();
+    if (type === 'moc') return mocFootprint(mocOf(value));
+    if (type === 'circles') return circlesFootprint(circlesOf(value));
+    if (type === 'polygons') return polygonsFootprint(polygonsOf(value));
+    return undefined;
   } catch (error) {
     if (error instanceof DomainError) throw new SettingsError([{ pointer: '/footprint/value', detail: error.message }]);
     throw error;
   }
 }
 
-function known(type: Coverage['type'], moc: Moc, note: string): Coverage {
-  return { type, moc, areaSqDeg: moc.area / DEGREE ** 2, note };
+const unknown = (note: string): Coverage => ({ type: 'unknown', moc: null, areaSqDeg: null, note });
+
+function known({ kind, region }: Footprint, note: string): Coverage {
+  return { type: kind, moc: region, areaSqDeg: region.area / DEGREE ** 2, note };
 }
 
 function mocOf(value: unknown): Moc {
@@ -48,22 +76,28 @@ function mocOf(value: unknown): Moc {
   throw new DomainError('A MOC is given as text, such as "6/24185 24190", or as JSON by order.');
 }
 
-function circles(value: unknown): Moc {
-  if (!Array.isArray(value) || value.length === 0)
-    throw new DomainError('Circles are given as [[raDeg, decDeg, radiusDeg], …].');
-  return value
-    .map((circle: unknown) => {
-      const [ra, dec, radius] = Array.isArray(circle) ? (circle as unknown[]) : [];
-      if (
-        typeof ra !== 'number' ||
-        typeof dec !== 'number' ||
-        typeof radius !== 'number' ||
-        !(radius > 0 && radius <= 180)
-      ) {
-        throw new DomainError(`A circle is [raDeg, decDeg, radiusDeg], found ${JSON.stringify(circle)}.`);
-      }
-      const order = Math.min(14, Math.max(6, Math.ceil(Math.log2(58.6 / radius)) + 5));
-      return Moc.fromCone(order, ra * DEGREE, dec * DEGREE, radius * DEGREE);
-    })
-    .reduce((all, one) => all.union(one));
+const isNumbers = (value: unknown, length: number): value is number[] =>
+  Array.isArray(value) && value.length === length && value.every((item) => typeof item === 'number');
+
+function circlesOf(value: unknown) {
+  const list = Array.isArray(value) ? (value as unknown[]) : [];
+  if (list.length === 0) throw new DomainError('Circles are given as [[raDeg, decDeg, radiusDeg], …].');
+  return list.map((circle) => {
+    if (!isNumbers(circle, 3))
+      throw new DomainError(`A circle is [raDeg, decDeg, radiusDeg], found ${JSON.stringify(circle)}.`);
+    const [ra, dec, radius] = circle as [number, number, number];
+    return { lon: ra * DEGREE, lat: dec * DEGREE, radius: radius * DEGREE };
+  });
+}
+
+function polygonsOf(value: unknown) {
+  const list = Array.isArray(value) ? (value as unknown[]) : [];
+  if (list.length === 0) throw new DomainError('Polygons are given as [[[raDeg, decDeg], …], …].');
+  return list.map((polygon) => {
+    if (!Array.isArray(polygon)) throw new DomainError('A polygon is a list of corners [raDeg, decDeg].');
+    return polygon.map((corner: unknown) => {
+      if (!isNumbers(corner, 2)) throw new DomainError(`A corner is [raDeg, decDeg], found ${JSON.stringify(corner)}.`);
+      return { lon: corner[0]! * DEGREE, lat: corner[1]! * DEGREE };
+    });
+  });
 }

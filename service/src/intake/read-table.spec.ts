@@ -179,4 +179,20 @@ describe('reading a catalogue', () => {
     expect(reading.roles.rows).toBe(299);
     expect(reading.questions.some(({ level, text }) => level === 'warning' && /only in part/.test(text))).toBe(true);
   });
+
+  it('takes the area from dense rows, states it, and refuses for sparse ones', async () => {
+    const rows: string[] = [];
+    for (let i = 0; i < 80; i++) for (let j = 0; j < 80; j++) rows.push(`${150 + i / 20},${2 + j / 20}`);
+    const dense = await read(`ra,dec\n${rows.join('\n')}\n`);
+    expect(dense.coverage.type).toBe('rows');
+    expect(dense.coverage.areaSqDeg! / 16).toBeGreaterThan(0.8);
+    expect(dense.coverage.areaSqDeg! / 16).toBeLessThan(1.1);
+    const sparse = await read('ra,dec\n10,10\n200,-40\n');
+    expect(sparse.coverage).toMatchObject({ type: 'unknown', moc: null });
+    expect(sparse.assumed.join()).toMatch(/area covered is not stated: it is unknown/);
+    const stated = await read('ra,dec\n10,10\n', { footprint: { type: 'circles', value: [[10, 10, 1]] } });
+    expect(stated.coverage.areaSqDeg).toBeCloseTo(Math.PI, 1);
+    const faults = await faultsOf(read('ra,dec\n10,10\n', { footprint: { type: 'moc', value: '5/99999999' } }));
+    expect(faults[0]!.pointer).toBe('/footprint/value');
+  });
 });

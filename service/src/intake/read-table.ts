@@ -1,5 +1,6 @@
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { IntakeCheck, SettingsQuestion, SidelinedRow } from '@eremite/shared/contracts/intake';
+import { sigmaOfError } from '@eremite/shared/science/counterpart/position-error';
 import type { ByteSource, TableFacts, TableFormat } from '../tables/table.ts';
 import type { PackedColumns } from '../tiles/column-pack.ts';
 import { concatColumns } from '../tiles/column-rows.ts';
@@ -25,6 +26,8 @@ export interface CatalogueReading {
   roles: RoleTable;
   facts: CatalogueFacts;
   coverage: Coverage;
+  /** 1-D sigma of rows without an error of their own, arcsec: `resolved.positionErrorArcsec` by its meaning. */
+  positionErrorArcsec: number | null;
 }
 
 const MAX_SIDELINED = 1000;
@@ -51,7 +54,7 @@ export async function readCatalogue(
     for (const { row } of extracted.sidelined) if (sidelined.length < MAX_SIDELINED) sidelined.push(row);
   });
   const roles = joined(parts);
-  const coverage = coverageOf(resolved, roles);
+  const coverage = coverageOf(resolved, roles.columns.raDeg, roles.columns.decDeg);
   if (settings.footprint === undefined && resolved.kind !== 'hi') {
     questions.push({
       level: 'assumed',
@@ -70,6 +73,7 @@ export async function readCatalogue(
     roles,
     facts,
     coverage,
+    positionErrorArcsec: commonPositionError(resolved),
   };
 }
 
@@ -81,4 +85,9 @@ function joined(parts: PackedColumns[]): RoleTable {
     ([name, column]) => !name.startsWith('magLimit:') || (column as Uint8Array).some((flag) => flag !== 0),
   );
   return asRoleTable({ rows, columns: Object.fromEntries(told) });
+}
+
+/** Position error of a whole catalogue as the 1-D sigma, arcsec; null where none is stated. */
+export function commonPositionError({ positionErrorArcsec, errorMeaning }: ResolvedSettings): number | null {
+  return positionErrorArcsec === null ? null : sigmaOfError(positionErrorArcsec, errorMeaning);
 }

@@ -3,6 +3,7 @@ import type { IntakeCheck, SettingsQuestion } from '@eremite/shared/contracts/in
 import type { RowChunk } from '../tables/table.ts';
 import { type CatalogueFacts, FactsGatherer } from './catalogue-facts.ts';
 import { closingQuestions } from './closing-questions.ts';
+import { statedFootprint } from './coverage.ts';
 import { type ExtractedChunk, RoleExtractor } from './extract-roles.ts';
 import type { OpenCatalogue } from './open-catalogue.ts';
 import { SettingsError } from './resolved.ts';
@@ -59,8 +60,14 @@ export async function streamCatalogue(
 
 /** Faults, and a position that is still asked for, make rows unreadable. @throws {SettingsError} */
 export function assertReadable({ resolution }: OpenCatalogue): void {
-  const { columns } = resolution.resolved;
+  const { columns, footprint } = resolution.resolved;
   const faults = [...resolution.faults];
+  try {
+    statedFootprint(footprint);
+  } catch (error) {
+    if (!(error instanceof SettingsError)) throw error;
+    faults.push(...error.faults);
+  }
   if (columns.raHours === null && (columns.ra === null || columns.dec === null)) {
     for (const { pointer, text } of resolution.questions) {
       if (/^\/columns\/(ra|dec)$/.test(pointer) && !faults.some((fault) => fault.pointer === pointer)) {
