@@ -1,11 +1,10 @@
-import { sortHeavyCells } from './heavy-cells.ts';
 import type { Numbers } from './sky-position.ts';
-import { emptyGrid, type Memory, plainMemory, type ZoneGrid } from './zone-grid.ts';
-import { countRows, declinationRange, placeRows, startsOf } from './zone-grid-steps.ts';
+import { emptyGrid, type Memory, plainMemory, roomForRows, type ZoneGrid } from './zone-grid.ts';
+import { blocksOf, blockStarts, countBlocks, declinationRange, placeBlocks, spreadRows } from './zone-grid-steps.ts';
 import { layoutZones } from './zone-layout.ts';
 
 /**
- * Builds the grid of a catalogue in this thread. Time and memory are linear in the rows: 20 bytes a row to keep, 4 more
+ * Builds the grid of a catalogue in this thread. Time and memory are linear in the rows: 20 bytes a row to keep, 20 more
  * while it is built. The steps may also be run on ranges of rows side by side, to the same bytes: `zone-grid-steps.ts`.
  *
  * @param raDeg right ascensions, degrees; values outside [0, 360) are wrapped
@@ -16,11 +15,11 @@ export function buildZoneGrid(raDeg: Numbers, decDeg: Numbers, memory: Memory = 
   const rows = raDeg.length;
   const [low, high] = declinationRange(raDeg, decDeg, 0, rows);
   const grid = emptyGrid(layoutZones(rows, low, high), rows, memory);
-  const cells = new Uint32Array(rows);
-  const counts = new Uint32Array(grid.starts.length - 1);
-  countRows(grid.layout, raDeg, decDeg, 0, rows, cells, counts);
-  const [next] = startsOf(grid.starts, [counts]);
-  placeRows(grid, raDeg, decDeg, 0, rows, cells, next!);
-  sortHeavyCells(grid, 0, counts.length);
+  const { layout } = grid;
+  const blocks = blocksOf(layout);
+  const { starts, next } = blockStarts([countBlocks(layout, decDeg, 0, rows)], blocks);
+  const spread = roomForRows(rows, plainMemory);
+  spreadRows(layout, raDeg, decDeg, 0, rows, next[0]!, spread);
+  placeBlocks(grid, spread, starts, 0, blocks);
   return grid;
 }

@@ -6,12 +6,14 @@ export const HEAVY_CELL = 64;
 /**
  * Sorts the rows of every heavy cell of a range of cells by declination, then by row, so that a small radius in a
  * crowded field of a wide catalogue does not have to look at the whole crowd.
+ *
+ * @param end slot after the last row of the range: the start of the next cell may not be known yet
  */
-export function sortHeavyCells(grid: ZoneGrid, fromCell: number, toCell: number): void {
+export function sortHeavyCells(grid: ZoneGrid, end: number, fromCell: number, toCell: number): void {
   const { starts, coords, row } = grid;
   for (let cell = fromCell; cell < toCell; cell++) {
     const from = starts[cell]!;
-    const to = starts[cell + 1]!;
+    const to = cell + 1 < toCell ? starts[cell + 1]! : end;
     if (to - from <= HEAVY_CELL) continue;
     const order = Uint32Array.from({ length: to - from }, (_, i) => i);
     const some = coords.slice(2 * from, 2 * to);

@@ -1,11 +1,10 @@
-import { sortHeavyCells } from './heavy-cells.ts';
 import { type NeighbourQueries, type Neighbours, neighbourSearch } from './neighbour-search.ts';
 import { type Pairs, pairSearch, type SearchPositions } from './pair-search.ts';
 import type { SearchRange } from './search-range.ts';
 import type { Numbers } from './sky-position.ts';
 import type { VelocityGrid } from './velocity-grid.ts';
 import type { ZoneGrid } from './zone-grid.ts';
-import { countRows, declinationRange, placeRows } from './zone-grid-steps.ts';
+import { countBlocks, declinationRange, placeBlocks, type Spread, spreadRows } from './zone-grid-steps.ts';
 import type { ZoneLayout } from './zone-layout.ts';
 
 interface RowRange {
@@ -18,9 +17,12 @@ interface RowRange {
 /** What a thread can be asked, and what it answers. Grids and scratch arrays lie in shared memory and are written there. */
 export interface MatchingTasks {
   declinationRange: { task: RowRange; result: [low: number, high: number] };
-  countRows: { task: RowRange & { layout: ZoneLayout; cells: Uint32Array; counts: Uint32Array }; result: void };
-  placeRows: { task: RowRange & { grid: ZoneGrid; cells: Uint32Array; next: Uint32Array }; result: void };
-  sortHeavyCells: { task: { grid: ZoneGrid; fromCell: number; toCell: number }; result: void };
+  countBlocks: { task: Omit<RowRange, 'raDeg'> & { layout: ZoneLayout }; result: Uint32Array };
+  spreadRows: { task: RowRange & { layout: ZoneLayout; next: Uint32Array; spread: Spread }; result: void };
+  placeBlocks: {
+    task: { grid: ZoneGrid; spread: Spread; starts: Uint32Array; from: number; to: number };
+    result: void;
+  };
   pairSearch: { task: { grid: ZoneGrid; positions: SearchPositions; range: SearchRange }; result: Pairs };
   neighbourSearch: { task: { grid: VelocityGrid; queries: NeighbourQueries; range: SearchRange }; result: Neighbours };
 }
@@ -34,9 +36,9 @@ export type TaskRunner = <N extends TaskName>(
 
 const kernels: { [N in TaskName]: (task: MatchingTasks[N]['task']) => MatchingTasks[N]['result'] } = {
   declinationRange: (t) => declinationRange(t.raDeg, t.decDeg, t.from, t.to),
-  countRows: (t) => countRows(t.layout, t.raDeg, t.decDeg, t.from, t.to, t.cells, t.counts),
-  placeRows: (t) => placeRows(t.grid, t.raDeg, t.decDeg, t.from, t.to, t.cells, t.next),
-  sortHeavyCells: (t) => sortHeavyCells(t.grid, t.fromCell, t.toCell),
+  countBlocks: (t) => countBlocks(t.layout, t.decDeg, t.from, t.to),
+  spreadRows: (t) => spreadRows(t.layout, t.raDeg, t.decDeg, t.from, t.to, t.next, t.spread),
+  placeBlocks: (t) => placeBlocks(t.grid, t.spread, t.starts, t.from, t.to),
   pairSearch: (t) => pairSearch(t.grid, t.positions, t.range),
   neighbourSearch: (t) => neighbourSearch(t.grid, t.queries, t.range),
 };

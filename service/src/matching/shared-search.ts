@@ -3,8 +3,8 @@ import type { TaskRunner } from './matching-task.ts';
 import type { NeighbourQueries, Neighbours } from './neighbour-search.ts';
 import type { Pairs, SearchPositions } from './pair-search.ts';
 import type { Numbers } from './sky-position.ts';
-import { emptyGrid, sharedMemory, type ZoneGrid } from './zone-grid.ts';
-import { startsOf } from './zone-grid-steps.ts';
+import { emptyGrid, roomForRows, sharedMemory, type ZoneGrid } from './zone-grid.ts';
+import { blocksOf, blockStarts } from './zone-grid-steps.ts';
 import type { VelocityGrid } from './velocity-grid.ts';
 import { layoutZones } from './zone-layout.ts';
 
@@ -21,7 +21,7 @@ function split(count: number, parts: number): { from: number; to: number }[] {
  * or it is copied to every thread.
  *
  * @param run where the steps are run
- * @param threads ranges worked on side by side; each needs 4 bytes a cell (about 1 byte a row) while it works
+ * @param threads ranges of rows worked on side by side
  */
 export async function buildSharedGrid(
   run: TaskRunner,
@@ -35,20 +35,16 @@ export async function buildSharedGrid(
   const low = bounds.reduce((least, [lowest]) => Math.min(least, lowest), rows > 0 ? 90 : 0);
   const high = bounds.reduce((most, [, highest]) => Math.max(most, highest), rows > 0 ? -90 : 0);
   const grid = emptyGrid(layoutZones(rows, low, high), rows, sharedMemory);
-  const cellCount = grid.starts.length - 1;
-  const cells = new Uint32Array(sharedMemory(4 * rows));
-  const counts = ranges.map(() => new Uint32Array(sharedMemory(4 * cellCount)));
+  const { layout } = grid;
+  const counts = await Promise.all(ranges.map((range) => run('countBlocks', { layout, decDeg, ...range })));
+  const { starts, next } = blockStarts(counts, blocksOf(layout));
+  const spread = roomForRows(rows, sharedMemory);
   await Promise.all(
-    ranges.map((range, i) =>
-      run('countRows', { layout: grid.layout, raDeg, decDeg, ...range, cells, counts: counts[i]! }),
-    ),
+    ranges.map((range, i) => run('spreadRows', { layout, raDeg, decDeg, ...range, next: next[i]!, spread })),
   );
-  const next = startsOf(grid.starts, counts);
+  // Blocks hold unequal numbers of rows: more ranges than threads even that out.
   await Promise.all(
-    ranges.map((range, i) => run('placeRows', { grid, raDeg, decDeg, ...range, cells, next: next[i]! })),
-  );
-  await Promise.all(
-    split(cellCount, threads).map(({ from, to }) => run('sortHeavyCells', { grid, fromCell: from, toCell: to })),
+    split(blocksOf(layout), 8 * threads).map((range) => run('placeBlocks', { grid, spread, starts, ...range })),
   );
   return grid;
 }

@@ -1,13 +1,20 @@
 import { DomainError } from '@eremite/shared/science/domain-error';
+import { sortHeavyCells } from './heavy-cells.ts';
 import { checkPosition, type Numbers, wrapRaDeg } from './sky-position.ts';
 import type { ZoneGrid } from './zone-grid.ts';
 import { cellOf, type ZoneLayout, zoneOf } from './zone-layout.ts';
 
 /*
- * The steps of building a grid, each on a range of rows, so that threads can share them: declinationRange of every
- * range, layoutZones, countRows of every range into counts of its own, startsOf once over all counts in the order of
- * the ranges, placeRows of every range, sortHeavyCells. The result does not depend on the number of ranges.
+ * The steps of building a grid, each on a range, so that threads can share them. Rows are first spread over blocks of
+ * zones and then placed block by block, because a block fits into a processor's cache and a large catalogue does not.
+ * In order: declinationRange of every range of rows, layoutZones, countBlocks of every range, blockStarts over all
+ * counts in the order of the ranges, spreadRows of every range, placeBlocks of every range of blocks. The order of rows
+ * is kept at every step, so the result does not depend on the ranges.
  */
+
+const MOST_BLOCKS = 256;
+export const blocksOf = ({ zones }: ZoneLayout): number => Math.min(MOST_BLOCKS, zones);
+const blockOf = (zone: number, blocks: number, zones: number): number => Math.floor((zone * blocks) / zones);
 
 /**
  * Checks the positions from one row up to another and finds their lowest and highest declination, degrees.
@@ -31,58 +38,92 @@ export function declinationRange(raDeg: Numbers, decDeg: Numbers, from: number, 
   return from < to ? [low, high] : [0, 0];
 }
 
-/** Writes the cell of each row of the range to `cells` and adds it to `counts`, one entry a cell. */
-export function countRows(
+/** @returns rows of the range in each block */
+export function countBlocks(layout: ZoneLayout, decDeg: Numbers, from: number, to: number): Uint32Array {
+  const blocks = blocksOf(layout);
+  const counts = new Uint32Array(blocks);
+  for (let i = from; i < to; i++) counts[blockOf(zoneOf(layout, decDeg[i]!), blocks, layout.zones)]!++;
+  return counts;
+}
+
+/**
+ * @param counts of all ranges, in their order
+ * @returns first slot of each block with the number of rows at the end, and for each range its first slot in each block
+ */
+export function blockStarts(counts: Uint32Array[], blocks: number): { starts: Uint32Array; next: Uint32Array[] } {
+  const starts = new Uint32Array(blocks + 1);
+  const next = counts.map(() => new Uint32Array(blocks));
+  let slot = 0;
+  for (let block = 0; block < blocks; block++) {
+    starts[block] = slot;
+    counts.forEach((ofRange, range) => {
+      next[range]![block] = slot;
+      slot += ofRange[block]!;
+    });
+  }
+  starts[blocks] = slot;
+  return { starts, next };
+}
+
+/** Rows sorted by block: coordinates interleaved and row numbers, as in a grid. */
+export type Spread = Pick<ZoneGrid, 'coords' | 'row'>;
+
+/** Copies the rows of the range to their blocks. `next` is that range's from `blockStarts`, used up by this. */
+export function spreadRows(
   layout: ZoneLayout,
   raDeg: Numbers,
   decDeg: Numbers,
   from: number,
   to: number,
-  cells: Uint32Array,
-  counts: Uint32Array,
-): void {
-  for (let i = from; i < to; i++) {
-    const cell = cellOf(layout, zoneOf(layout, decDeg[i]!), wrapRaDeg(raDeg[i]!));
-    cells[i] = cell;
-    counts[cell] = counts[cell]! + 1;
-  }
-}
-
-/**
- * Fills the first slot of each cell and turns the counts of the ranges, in their order, into the next free slot of each
- * cell for that range (in place: the same arrays are returned).
- */
-export function startsOf(starts: Uint32Array, counts: Uint32Array[]): Uint32Array[] {
-  let slot = 0;
-  for (let cell = 0; cell < starts.length - 1; cell++) {
-    starts[cell] = slot;
-    for (const ofRange of counts) {
-      const rows = ofRange[cell]!;
-      ofRange[cell] = slot;
-      slot += rows;
-    }
-  }
-  starts[starts.length - 1] = slot;
-  return counts;
-}
-
-/** Puts the rows of the range into their slots. `next` is that range's array from `startsOf`, used up by this. */
-export function placeRows(
-  grid: ZoneGrid,
-  raDeg: Numbers,
-  decDeg: Numbers,
-  from: number,
-  to: number,
-  cells: Uint32Array,
   next: Uint32Array,
+  spread: Spread,
 ): void {
-  const { coords, row } = grid;
+  const { coords, row } = spread;
+  const blocks = blocksOf(layout);
   for (let i = from; i < to; i++) {
-    const cell = cells[i]!;
-    const slot = next[cell]!;
-    next[cell] = slot + 1;
+    const dec = decDeg[i]!;
+    const slot = next[blockOf(zoneOf(layout, dec), blocks, layout.zones)]!++;
     coords[2 * slot] = wrapRaDeg(raDeg[i]!);
-    coords[2 * slot + 1] = decDeg[i]!;
+    coords[2 * slot + 1] = dec;
     row[slot] = i;
+  }
+}
+
+/** Puts the rows of a range of blocks into the cells of the grid and fills the `starts` of those cells. */
+export function placeBlocks(grid: ZoneGrid, spread: Spread, starts: Uint32Array, from: number, to: number): void {
+  const { layout } = grid;
+  const blocks = blocksOf(layout);
+  for (let block = from; block < to; block++) {
+    const firstZone = Math.ceil((block * layout.zones) / blocks);
+    const endZone = Math.ceil(((block + 1) * layout.zones) / blocks);
+    const firstCell = layout.cellsBefore[firstZone]!;
+    const endCell = layout.cellsBefore[endZone]!;
+    placeRows(grid, spread, starts[block]!, starts[block + 1]!, firstCell, endCell);
+    sortHeavyCells(grid, starts[block + 1]!, firstCell, endCell);
+  }
+}
+
+/** Sorts the rows of one block by cell, by counting. */
+function placeRows(grid: ZoneGrid, spread: Spread, from: number, to: number, firstCell: number, endCell: number): void {
+  const { layout, coords, row } = grid;
+  const next = new Uint32Array(endCell - firstCell);
+  const cells = new Uint32Array(to - from);
+  for (let i = from; i < to; i++) {
+    const cell = cellOf(layout, zoneOf(layout, spread.coords[2 * i + 1]!), spread.coords[2 * i]!) - firstCell;
+    cells[i - from] = cell;
+    next[cell]!++;
+  }
+  let slot = from;
+  for (let cell = 0; cell < next.length; cell++) {
+    const rows = next[cell]!;
+    next[cell] = slot;
+    grid.starts[firstCell + cell] = slot;
+    slot += rows;
+  }
+  for (let i = from; i < to; i++) {
+    const to = next[cells[i - from]!]!++;
+    coords[2 * to] = spread.coords[2 * i]!;
+    coords[2 * to + 1] = spread.coords[2 * i + 1]!;
+    row[to] = spread.row[i]!;
   }
 }

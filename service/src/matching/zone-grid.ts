@@ -24,14 +24,15 @@ export type Memory = (bytes: number) => ArrayBufferLike;
 export const plainMemory: Memory = (bytes) => new ArrayBuffer(bytes);
 export const sharedMemory: Memory = (bytes) => new SharedArrayBuffer(bytes);
 
-/** A grid with room for the rows and nothing in it yet; `starts` is filled by `startsOf`, the rest by `placeRows`. */
+/** A grid with room for the rows and nothing in it yet; `placeBlocks` fills it. */
 export function emptyGrid(layout: ZoneLayout, rows: number, memory: Memory): ZoneGrid {
   const cells = layout.cellsBefore[layout.zones]!;
-  return {
-    layout,
-    rows,
-    starts: new Uint32Array(memory(4 * (cells + 1))),
-    coords: new Float64Array(memory(16 * rows)),
-    row: new Uint32Array(memory(4 * rows)),
-  };
+  const starts = new Uint32Array(memory(4 * (cells + 1)));
+  starts[cells] = rows;
+  return { layout, rows, starts, ...roomForRows(rows, memory) };
+}
+
+/** Room for coordinates and row numbers of so many rows. */
+export function roomForRows(rows: number, memory: Memory): Pick<ZoneGrid, 'coords' | 'row'> {
+  return { coords: new Float64Array(memory(16 * rows)), row: new Uint32Array(memory(4 * rows)) };
 }
