@@ -38,8 +38,8 @@ export function blend(input: BlendInput): Doubt {
       'galaxies',
     );
   }
-  if (!(beamArcmin > 0)) return doubt(RULE, 'not testable here', 'The beam is not known.');
-  if (!(distanceMpc > 0)) {
+  if (!(beamArcmin > 0 && beamArcmin < Infinity)) return doubt(RULE, 'not testable here', 'The beam is not known.');
+  if (!(distanceMpc > 0 && distanceMpc < Infinity)) {
     return doubt(
       RULE,
       'not testable here',

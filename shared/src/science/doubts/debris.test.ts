@@ -77,6 +77,7 @@ describe('doubt of debris', () => {
 
   it('never lets a missing distance or velocity pass', () => {
     expect(of(neighbour({ distanceMpc: NaN })).grade).toBe('clear');
+    expect(of(neighbour({ distanceMpc: -99 })).grade).toBe('clear');
     expect(of(neighbour({ velocityDifferenceKms: NaN })).grade).toBe('clear');
   });
 

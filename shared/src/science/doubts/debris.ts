@@ -73,9 +73,9 @@ export function debris(input: DebrisInput, settings = DEBRIS_SETTINGS): DebrisDo
     const speed = Math.abs(neighbour.velocityDifferenceKms);
     const massive = neighbour.logHiMass > minLogHiMass || neighbour.logStellarMass > minLogStellarMass;
     const unknown = !massive && !(Number.isFinite(neighbour.logHiMass) && Number.isFinite(neighbour.logStellarMass));
-    // Written so that NaN never passes.
-    const inStrong = kpc <= strong.radiusKpc && speed <= strong.windowKms;
-    const inPossible = kpc <= possible.radiusKpc && speed <= possible.windowKms;
+    // Written so that neither NaN nor a negative mark for a missing distance passes.
+    const inStrong = kpc >= 0 && kpc <= strong.radiusKpc && speed <= strong.windowKms;
+    const inPossible = kpc >= 0 && kpc <= possible.radiusKpc && speed <= possible.windowKms;
     if (!inPossible || !(massive || unknown)) return;
     if (unknown && !(inStrong || neighbour.bridge)) return;
     const grade = massive && (inStrong || neighbour.bridge) ? 'serious' : 'watch';

@@ -31,10 +31,11 @@ const RULE: DoubtRule = {
  */
 export function distanceDoubt(input: DistanceInput): Doubt {
   const { kind, distanceMpc, errorMpc, localGroupKms, cautions } = input;
-  if (kind === 'none' || !(distanceMpc > 0)) {
+  if (kind === 'none' || !(distanceMpc > 0 && distanceMpc < Infinity)) {
     return doubt(RULE, 'serious', 'No distance is usable: quantities in kpc and solar units are withheld.');
   }
-  const fraction = errorMpc / distanceMpc;
+  // A negative error is a mark for a missing one.
+  const fraction = errorMpc >= 0 ? errorMpc / distanceMpc : NaN;
   const word = { measured: 'measured', flow: 'from the flow model', hubble: "from Hubble's law" }[kind];
   const caution = cautions.length > 0 ? `; ${cautions.join('; ')}` : '';
   const say = (grade: Doubt['grade'], error: string) =>

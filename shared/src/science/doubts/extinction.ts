@@ -31,12 +31,15 @@ export const EXTINCTION_SETTINGS: ExtinctionSettings = {
  * @param input E(B-V) and latitude
  * @param settings thresholds
  * @returns the doubt; its value is E(B-V), mag. The near infrared may still be tested.
- * @throws {DomainError} if E(B-V) is negative
+ * @throws {DomainError} if E(B-V) is negative or the latitude is not finite
  */
 export function extinctionDoubt(input: ExtinctionInput, settings = EXTINCTION_SETTINGS): Doubt {
   const { ebvMag, galacticLatRad } = input;
   const { maximumReddeningMag, watchReddeningMag, minimumLatitudeDeg } = settings;
   if (ebvMag < 0) throw new DomainError(`extinctionDoubt: E(B-V) must not be negative, got ${ebvMag}`);
+  if (!Number.isFinite(galacticLatRad)) {
+    throw new DomainError(`extinctionDoubt: latitude must be finite, got ${galacticLatRad} rad`);
+  }
   const rule: DoubtRule = {
     name: 'extinction',
     rule: `not testable in the optical and the ultraviolet if E(B-V) > ${maximumReddeningMag} mag or unknown; watch if E(B-V) > ${watchReddeningMag} mag or |b| < ${minimumLatitudeDeg} deg`,

@@ -48,9 +48,14 @@ export function hydroxyl(input: HydroxylInput): Doubt {
   const { redshift, sources, radiusArcsec, covered } = input;
   if (redshift <= -1) throw new DomainError(`hydroxyl: redshift must be above -1, got ${redshift}`);
   if (!Number.isFinite(redshift)) return doubt(RULE, 'not testable here', 'The detection has no velocity.');
+  if (!(radiusArcsec > 0 && radiusArcsec < Infinity)) {
+    return doubt(RULE, 'not testable here', 'The position error of the detection is not known.');
+  }
   const asHydroxyl = redshiftIfLine(HYDROXYL_MHZ.main1667, redshift);
   const say = (grade: Doubt['grade'], sentence: string) => doubt(RULE, grade, sentence, asHydroxyl, 'redshift');
-  const red = sources.filter((s) => s.separationArcsec <= radiusArcsec && s.w1MinusW2 > RED_MAG);
+  const red = sources.filter(
+    (s) => s.separationArcsec <= radiusArcsec && s.w1MinusW2 > RED_MAG && s.w1MinusW2 < Infinity,
+  );
 
   const agreeing = red.find((s) => {
     const tolerance = Number.isFinite(s.redshiftError)

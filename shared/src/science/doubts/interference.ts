@@ -55,7 +55,7 @@ const RULE: DoubtRule = {
  */
 export function interference(input: InterferenceInput): Doubt {
   const { czKms, topocentric, width50Kms, channelKms, bands } = input;
-  const wrong = bands.find((band) => !(band.lowMhz > 0 && band.highMhz >= band.lowMhz));
+  const wrong = bands.find((band) => !(band.lowMhz > 0 && band.highMhz >= band.lowMhz && band.highMhz < Infinity));
   if (wrong)
     throw new DomainError(`interference: band ${wrong.name} runs from ${wrong.lowMhz} to ${wrong.highMhz} MHz`);
   if (!Number.isFinite(czKms)) return doubt(RULE, 'not testable here', 'The detection has no velocity.');

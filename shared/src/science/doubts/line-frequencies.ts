@@ -9,6 +9,9 @@ export const HYDROXYL_MHZ = {
   satellite1720: 1720.53,
 };
 
+/** Beyond z = 1000 there is no line to see. */
+const HIGHEST_CZ_KMS = 1000 * SPEED_OF_LIGHT_KMS;
+
 /** Rydberg frequency of hydrogen, R_inf c / (1 + m_e / m_p), MHz (CODATA 2018). */
 export const RYDBERG_HYDROGEN_MHZ = 3.2898419602508e9 / (1 + 5.44617021487e-4);
 
@@ -29,11 +32,12 @@ export function czIfHydrogen(observedMhz: number): number {
  *
  * @param czKms optical cz, km/s, above -c
  * @returns frequency, MHz
- * @throws {DomainError} if cz is not above -c
+ * @throws {DomainError} if cz is not above -c or no redshift of this universe
  */
 export function hydrogenFrequency(czKms: number): number {
-  if (!(czKms > -SPEED_OF_LIGHT_KMS))
-    throw new DomainError(`hydrogenFrequency: cz must be above -c, got ${czKms} km/s`);
+  if (!(czKms > -SPEED_OF_LIGHT_KMS && czKms < HIGHEST_CZ_KMS)) {
+    throw new DomainError(`hydrogenFrequency: cz must lie above -c and below z = 1000, got ${czKms} km/s`);
+  }
   return HI_REST_FREQUENCY_MHZ / (1 + czKms / SPEED_OF_LIGHT_KMS);
 }
 

@@ -1,4 +1,5 @@
 import { DEGREE } from '../constants.ts';
+import { DomainError } from '../domain-error.ts';
 import { doubt, inWords } from './doubt.ts';
 import type { Doubt, DoubtRule } from './doubt.ts';
 import { czIfHydrogen, recombinationFrequency } from './line-frequencies.ts';
@@ -29,9 +30,13 @@ const RULE: DoubtRule = {
  *
  * @param input velocity, width, latitude and continuum
  * @returns the doubt; its value is the distance to the nearest such line, km/s
+ * @throws {DomainError} if the latitude is not finite
  */
 export function recombinationLine(input: RecombinationInput): Doubt {
   const { czKms, width50Kms, galacticLatRad, continuumMjy } = input;
+  if (!Number.isFinite(galacticLatRad)) {
+    throw new DomainError(`recombinationLine: latitude must be finite, got ${galacticLatRad} rad`);
+  }
   if (!Number.isFinite(czKms)) return doubt(RULE, 'not testable here', 'The detection has no velocity.');
   let nearest = { n: 0, offset: Infinity };
   for (let n = 160; n <= 180; n++) {
@@ -49,7 +54,7 @@ export function recombinationLine(input: RecombinationInput): Doubt {
       'clear',
       `${where}, but the source is ${inWords(Math.abs(galacticLatRad) / DEGREE)} degrees from the plane.`,
     );
-  if (continuumMjy > CONTINUUM_MJY)
+  if (continuumMjy > CONTINUUM_MJY && continuumMjy < Infinity)
     return say('serious', `${where}, in the plane and with ${inWords(continuumMjy)} mJy of continuum in the beam.`);
   if (Number.isFinite(continuumMjy)) return say('clear', `${where}, but there is no strong continuum in the beam.`);
   return say('watch', `${where} in the plane; the continuum is not known.`);

@@ -43,15 +43,16 @@ const RULE: DoubtRule = {
  */
 export function sidelobe(input: SidelobeInput): Doubt {
   const { sources, beamArcmin, fluxJyKms, width50Kms } = input;
-  if (!(beamArcmin > 0)) return doubt(RULE, 'not testable here', 'The beam is not known.');
-  if (!(fluxJyKms > 0)) return doubt(RULE, 'not testable here', 'The detection has no flux to compare.');
+  if (!(beamArcmin > 0 && beamArcmin < Infinity)) return doubt(RULE, 'not testable here', 'The beam is not known.');
+  if (!(fluxJyKms > 0 && fluxJyKms < Infinity))
+    return doubt(RULE, 'not testable here', 'The detection has no flux to compare.');
   let worst: { source: SidelobeSource; ratio: number } | undefined;
   for (const source of sources) {
     const beams = source.separationArcmin / beamArcmin;
     const overlap = ((width50Kms || 0) + (source.width50Kms || 0)) / 2;
     const same = Math.abs(source.velocityDifferenceKms) <= Math.max(SAME_KMS, overlap);
     const ratio = source.fluxJyKms / fluxJyKms;
-    if (beams >= NEAR && beams <= FAR && same && ratio > WATCH && !(worst && worst.ratio >= ratio))
+    if (beams >= NEAR && beams <= FAR && same && ratio > WATCH && ratio < Infinity && !(worst && worst.ratio >= ratio))
       worst = { source, ratio };
   }
   if (!worst) return doubt(RULE, 'clear', 'No much stronger source at the same velocity lies within two beams.');
