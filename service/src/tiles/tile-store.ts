@@ -1,0 +1,224 @@
+import { DEGREE } from '@eremite/shared/science/constants';
+import { separation } from '@eremite/shared/science/sky/separation';
+import { Inject, Injectable } from '@nestjs/common';
+import { BulkStore } from '../database/bulk.ts';
+import { cellsOfCone } from './cells.ts';
+import { type PackedColumns, unpackColumns } from './column-pack.ts';
+import { concatColumns, selectRows } from './column-rows.ts';
+import { rowCells } from './original-cells.ts';
+import { asRoleTable, type RoleTable } from './role-table.ts';
+import { blockOf, PLACES_CELL, placesOf, type RowPlace } from './row-places.ts';
+import type { Tile } from './tile-collector.ts';
+
+/** A row as it stands in the catalogue's file, with its place. */
+export interface StoredRow {
+  row: number;
+  raDeg: number;
+  decDeg: number;
+  separationArcsec: number | null;
+  /** Original cells as text, in column order. */
+  cells: string[];
+}
+
+/** Bytes of roles asked of the database at a time. */
+const READ_BYTES = 48 * 1024 ** 2;
+
+/** The rows of catalogues, kept as packed columns by sky cell; see DEVELOPERS.md on tiles. */
+@Injectable()
+export class TileStore {
+  constructor(@Inject(BulkStore) private readonly bulk: BulkStore) {}
+
+  /** Appends tiles as they come. They are visible at once: the catalogue's state is what hides them. */
+  write(catalogueId: string, tiles: AsyncIterable<readonly Tile[]> | Iterable<readonly Tile[]>): Promise<number> {
+    const columns = [
+      { name: 'catalogue_id', type: 'uuid' },
+      { name: 'cell', type: 'int4' },
+      { name: 'part', type: 'int4' },
+      { name: 'count', type: 'int4' },
+      { name: 'roles', type: 'bytea' },
+      { name: 'originals', type: 'bytea' },
+    ] as const;
+    async function* batches() {
+      for await (const batch of tiles) {
+        yield batch.map(({ cell, part, count, roles, originals }) => [
+          catalogueId,
+          cell,
+          part,
+          count,
+          roles,
+          originals,
+        ]);
+      }
+    }
+    return this.bulk.copyInto('tiles', columns, batches());
+  }
+
+  /**
+   * Role columns of a whole catalogue.
+   *
+   * @param order `file`: ascending row numbers; `sky`: cell by cell as stored, which is faster to read and to index
+   */
+  async readRoles(catalogueId: string, order: 'file' | 'sky' = 'file'): Promise<RoleTable> {
+    const parts: PackedColumns[] = [];
+    for (const [first, last] of await this.cellGroups(catalogueId))
+      parts.push(...(await this.roleTiles(catalogueId, [[first, last]])));
+    return asRoles(parts, order);
+  }
+
+  /** Role columns of the rows in cells that a cone touches: a superset of the cone. */
+  async readRolesNear(catalogueId: string, raDeg: number, decDeg: number, radiusArcsec: number): Promise<RoleTable> {
+    return asRoles(await this.roleTiles(catalogueId, cellsOfCone(raDeg, decDeg, radiusArcsec)), 'file');
+  }
+
+  /** One row by its number in the file; undefined if the catalogue has no such usable row. */
+  async readRow(catalogueId: string, row: number): Promise<StoredRow | undefined> {
+    const [found] = await this.readRowsFrom(catalogueId, row, 1);
+    return found?.row === row ? found : undefined;
+  }
+
+  /** Rows in file order from a row number on. */
+  async readRowsFrom(catalogueId: string, firstRow: number, limit: number): Promise<StoredRow[]> {
+    const places: RowPlace[] = [];
+    for await (const block of this.placeBlocks(catalogueId, blockOf(Math.max(1, firstRow)))) {
+      for (const place of block) if (place.row >= firstRow && places.length < limit) places.push(place);
+      if (places.length >= limit) break;
+    }
+    return this.fetch(catalogueId, places);
+  }
+
+  /** Rows within a radius of a place, nearest first. */
+  async readCone(catalogueId: string, raDeg: number, decDeg: number, radiusArcsec: number): Promise<StoredRow[]> {
+    const found: StoredRow[] = [];
+    for (const [first, last] of cellsOfCone(raDeg, decDeg, radiusArcsec)) {
+      const select =
+        'select cell, part, roles, originals from tiles where catalogue_id = $1 and cell between $2 and $3 order by cell, part';
+      for await (const batch of this.bulk.read(
+        select,
+        [catalogueId, first, last],
+        ['int4', 'int4', 'bytea', 'bytea'],
+      )) {
+        for (const [, , roles, originals] of batch)
+          found.push(...within(roles as Uint8Array, originals as Uint8Array, raDeg, decDeg, radiusArcsec));
+      }
+    }
+    return found.sort((a, b) => a.separationArcsec! - b.separationArcsec! || a.row - b.row);
+  }
+
+  /** Ranges of cells whose roles together are about `READ_BYTES`. */
+  private async cellGroups(catalogueId: string): Promise<[number, number][]> {
+    const select =
+      'select cell, sum(octet_length(roles))::int8 from tiles where catalogue_id = $1 and cell >= 0 group by cell order by cell';
+    const groups: [number, number][] = [];
+    let bytes = Infinity;
+    for await (const batch of this.bulk.read(select, [catalogueId], ['int4', 'int8'])) {
+      for (const [cell, size] of batch as [number, number][]) {
+        if (bytes + size > READ_BYTES) {
+          groups.push([cell, cell]);
+          bytes = 0;
+        }
+        groups.at(-1)![1] = cell;
+        bytes += size;
+      }
+    }
+    return groups;
+  }
+
+  private async roleTiles(catalogueId: string, ranges: readonly [number, number][]): Promise<PackedColumns[]> {
+    const select = 'select roles from tiles where catalogue_id = $1 and cell between $2 and $3 order by cell, part';
+    const parts: PackedColumns[] = [];
+    for (const [first, last] of ranges) {
+      for await (const batch of this.bulk.read(select, [catalogueId, first, last], ['bytea'])) {
+        for (const [blob] of batch) parts.push(unpackColumns(blob as Uint8Array));
+      }
+    }
+    return parts;
+  }
+
+  private async *placeBlocks(catalogueId: string, from: number): AsyncIterable<RowPlace[]> {
+    const select =
+      'select part, roles from tiles where catalogue_id = $1 and cell = $2 and part >= $3 order by part limit 1';
+    for (let next = from; ;) {
+      let seen = -1;
+      for await (const batch of this.bulk.read(select, [catalogueId, PLACES_CELL, next], ['int4', 'bytea'])) {
+        for (const [part, blob] of batch) {
+          seen = part as number;
+          yield placesOf(blob as Uint8Array);
+        }
+      }
+      if (seen < 0) return;
+      next = seen + 1;
+    }
+  }
+
+  private async fetch(catalogueId: string, places: readonly RowPlace[]): Promise<StoredRow[]> {
+    const rows = new Map<number, StoredRow>();
+    const byTile = new Map<string, RowPlace[]>();
+    for (const place of places) {
+      const key = `${place.cell}:${place.part}`;
+      byTile.set(key, [...(byTile.get(key) ?? []), place]);
+    }
+    const select = 'select roles, originals from tiles where catalogue_id = $1 and cell = $2 and part = $3';
+    for (const wanted of byTile.values()) {
+      const { cell, part } = wanted[0]!;
+      for await (const batch of this.bulk.read(select, [catalogueId, cell, part], ['bytea', 'bytea'])) {
+        for (const [roleBlob, originalBlob] of batch as [Uint8Array, Uint8Array][]) {
+          const { columns } = unpackColumns(roleBlob);
+          const originals = unpackColumns(originalBlob);
+          for (const { row, at } of wanted) {
+            const [raDeg, decDeg] = [(columns['raDeg'] as Float64Array)[at]!, (columns['decDeg'] as Float64Array)[at]!];
+            rows.set(row, { row, raDeg, decDeg, separationArcsec: null, cells: rowCells(originals, at) });
+          }
+        }
+      }
+    }
+    return places.flatMap(({ row }) => rows.get(row) ?? []);
+  }
+}
+
+function within(
+  roleBlob: Uint8Array,
+  originalBlob: Uint8Array,
+  raDeg: number,
+  decDeg: number,
+  radiusArcsec: number,
+): StoredRow[] {
+  const { columns, rows } = unpackColumns(roleBlob);
+  const [ra, dec, row] = [
+    columns['raDeg'] as Float64Array,
+    columns['decDeg'] as Float64Array,
+    columns['row'] as Uint32Array,
+  ];
+  const found: StoredRow[] = [];
+  const reach = radiusArcsec / 3600;
+  let originals: PackedColumns | undefined;
+  for (let i = 0; i < rows; i++) {
+    if (Math.abs(dec[i]! - decDeg) > reach) continue;
+    const apart = (separation(raDeg * DEGREE, decDeg * DEGREE, ra[i]! * DEGREE, dec[i]! * DEGREE) / DEGREE) * 3600;
+    if (apart > radiusArcsec) continue;
+    originals ??= unpackColumns(originalBlob);
+    found.push({
+      row: row[i]!,
+      raDeg: ra[i]!,
+      decDeg: dec[i]!,
+      separationArcsec: apart,
+      cells: rowCells(originals, i),
+    });
+  }
+  return found;
+}
+
+function asRoles(parts: readonly PackedColumns[], order: 'file' | 'sky'): RoleTable {
+  const none = { row: new Uint32Array(0), raDeg: new Float64Array(0), decDeg: new Float64Array(0) };
+  let table: PackedColumns = parts.length ? concatColumns(parts) : { rows: 0, columns: none };
+  // A limit column in which nothing is a limit says nothing.
+  const told = Object.entries(table.columns).filter(
+    ([name, column]) => !name.startsWith('magLimit:') || (column as Uint8Array).some((flag) => flag !== 0),
+  );
+  table = { rows: table.rows, columns: Object.fromEntries(told) };
+  if (order === 'file') {
+    const row = table.columns['row'] as Uint32Array;
+    const indices = Uint32Array.from(row, (_, i) => i).sort((a, b) => row[a]! - row[b]!);
+    table = selectRows(table, indices);
+  }
+  return asRoleTable(table);
+}
