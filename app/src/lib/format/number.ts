@@ -62,3 +62,13 @@ export function probability(value: number | null | undefined): string {
 
 /** A count: `12 345`. */
 export const count = (value: number | null | undefined): string => fixed(value, 0);
+
+/** Pads behind the decimal point with unbreakable spaces, so that points align in a monospaced right-aligned column. */
+export function alignPoint(text: string, decimals: number): string {
+  const held = /\.(\d+)$/.exec(text)?.[1]?.length;
+  const missing = held === undefined ? decimals + 1 : decimals - held;
+  return text + '\u00a0'.repeat(Math.max(0, missing));
+}
+
+/** A probability for a column: the points of all rows stand under each other. */
+export const probabilityCell = (value: number | null | undefined): string => alignPoint(probability(value), 3);

@@ -3,7 +3,7 @@ import { Link } from 'react-router-dom';
 import type { Column } from '#components/data-table/data-table.tsx';
 import { DoubtFlags } from '#components/doubt-mark/doubt-mark.tsx';
 import { StarlightWord, SurroundingsWord } from '#components/verdict-mark/verdict-word.tsx';
-import { count, fixed, NO_VALUE, probability, signed, significant, withError } from '#lib/format/number.ts';
+import { count, fixed, NO_VALUE, probability, probabilityCell, signed, significant, withError } from '#lib/format/number.ts';
 import { declination, rightAscension } from '#lib/format/position.ts';
 
 /** Columns that cannot be switched off come first. */
@@ -62,10 +62,10 @@ export const detectionColumns = (to: (detectionId: string) => string): Column<Ve
     sort: 'logHiMass',
     cell: (v) => fixed(v.logHiMass, 2),
   },
-  { key: 'pNone', header: 'P(none)', hint: 'Probability that the gas has no stars in these catalogues’ reach.', sort: 'pNone', cell: (v) => probability(v.pNone) },
-  { key: 'pMissed', header: 'P(missed)', hint: 'Probability that it has an ordinary galaxy the catalogues missed.', cell: (v) => probability(v.pMissed) },
-  { key: 'pSpurious', header: 'P(spurious)', hint: 'Probability that the line itself is not real.', cell: (v) => probability(v.pSpurious) },
-  { key: 'power', header: 'Power', hint: 'Chance that an ordinary galaxy with this much gas would have been seen here.', sort: 'power', cell: (v) => probability(v.power) },
+  { key: 'pNone', header: 'P(none)', hint: 'Probability that the gas has no stars in these catalogues’ reach.', sort: 'pNone', cell: (v) => probabilityCell(v.pNone) },
+  { key: 'pMissed', header: 'P(missed)', hint: 'Probability that it has an ordinary galaxy the catalogues missed.', cell: (v) => probabilityCell(v.pMissed) },
+  { key: 'pSpurious', header: 'P(spurious)', hint: 'Probability that the line itself is not real.', cell: (v) => probabilityCell(v.pSpurious) },
+  { key: 'power', header: 'Power', hint: 'Chance that an ordinary galaxy with this much gas would have been seen here.', sort: 'power', cell: (v) => probabilityCell(v.power) },
   {
     key: 'counterpart',
     header: 'Best object',
@@ -74,7 +74,7 @@ export const detectionColumns = (to: (detectionId: string) => string): Column<Ve
     cell: (v) => (v.counterpart ? <>{v.counterpart.name} <span className="muted">{probability(v.counterpart.probability)}</span></> : NO_VALUE),
   },
   { key: 'gasToLight', header: <>M<sub>HI</sub>/L<sub>r</sub></>, unit: 'solar', hint: 'Gas mass over light; a lower limit where nothing was found.', cell: (v) => (v.gasToLight === null ? NO_VALUE : `${v.gasToLightIsLimit ? '>' : ''}${significant(v.gasToLight, 2)}`) },
-  { key: 'pAlone', header: 'P(alone)', hint: 'P(no neighbour): none known × none unseen × covered.', sort: 'pAlone', cell: (v) => probability(v.pAlone) },
+  { key: 'pAlone', header: 'P(alone)', hint: 'P(no neighbour): none known × none unseen × covered.', sort: 'pAlone', cell: (v) => probabilityCell(v.pAlone) },
   {
     key: 'nearest',
     header: 'Nearest',

@@ -1,0 +1,29 @@
+import type { Doubt } from '@eremite/shared/contracts/verdict';
+import { DoubtMark } from '#components/doubt-mark/doubt-mark.tsx';
+import { Prose } from '#components/prose/prose.tsx';
+
+const ORDER = ['serious', 'watch', 'not testable here', 'clear'];
+
+/** What could fake the result, worst first, each with its sentence and, on the mark, its rule. */
+export function DoubtList({ doubts }: { doubts: readonly Doubt[] }) {
+  const sorted = [...doubts].sort((a, b) => ORDER.indexOf(a.grade) - ORDER.indexOf(b.grade));
+  return (
+    <section aria-labelledby="doubts">
+      <h3 id="doubts">Doubts</h3>
+      {sorted.length === 0 && <p className="muted">None was tested.</p>}
+      <ul className="doubt-list">
+        {sorted.map(({ name, grade, sentence, rule, source }) => (
+          <li key={name} title={`${rule} (${source})`}>
+            <DoubtMark grade={grade} />
+            <span>
+              <b>{name}</b> <span className={`doubt-list__grade doubt-list__grade--${grade.split(' ')[0]}`}>{grade}</span>
+              <span className="doubt-list__sentence">
+                <Prose text={sentence} />
+              </span>
+            </span>
+          </li>
+        ))}
+      </ul>
+    </section>
+  );
+}

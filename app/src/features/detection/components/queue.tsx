@@ -1,0 +1,50 @@
+import type { VerdictItem } from '@eremite/shared/contracts/verdict';
+import { useEffect, useRef } from 'react';
+import { Link } from 'react-router-dom';
+import { StarlightMark } from '#components/verdict-mark/starlight-mark.tsx';
+import { SurroundingsMark } from '#components/verdict-mark/surroundings-mark.tsx';
+import { count, probability } from '#lib/format/number.ts';
+
+interface QueueProps {
+  title: string;
+  back: string;
+  items: readonly VerdictItem[];
+  total: number;
+  current: string;
+  to: (detectionId: string) => string;
+}
+
+/** The list one is working through, with the present one marked and always in sight. */
+export function Queue({ title, back, items, total, current, to }: QueueProps) {
+  const here = useRef<HTMLLIElement>(null);
+  useEffect(() => here.current?.scrollIntoView({ block: 'nearest' }), [current, items]);
+  return (
+    <nav className="queue" aria-label={title}>
+      <p className="queue__head">
+        <Link to={back}>{title}</Link> <span className="muted num">{count(total)}</span>
+      </p>
+      <div className="queue__legend muted">
+        <span>P(none)</span>
+        <span>P(alone)</span>
+      </div>
+      <ol>
+        {items.map((item) => (
+          <li key={item.detectionId} ref={item.detectionId === current ? here : undefined}>
+            <Link to={to(item.detectionId)} aria-current={item.detectionId === current ? 'page' : undefined}>
+              <StarlightMark verdict={item.starlight} size={14} />
+              <SurroundingsMark verdict={item.surroundings} size={14} />
+              <span className="queue__name" title={`${item.name}: ${item.starlight}, ${item.surroundings}`}>
+                {item.name}
+                <span className="visually-hidden">
+                  , {item.starlight}, {item.surroundings}
+                </span>
+              </span>
+              <span>{probability(item.pNone)}</span>
+              <span>{probability(item.pAlone)}</span>
+            </Link>
+          </li>
+        ))}
+      </ol>
+    </nav>
+  );
+}
