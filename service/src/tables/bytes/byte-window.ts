@@ -88,7 +88,8 @@ export class ByteWindow {
   }
 }
 
-function nulError(byte: number): TableError {
+/** What is said of a NUL byte in a text table. */
+export function nulError(byte: number): TableError {
   const message = `The text holds a NUL byte (byte ${byte}); text tables have none.`;
   return new TableError('nul-byte', message, 'The file is damaged or not text: export or fetch it again.', { byte });
 }

@@ -4,7 +4,7 @@ import { type ReaderLimits, TableError } from '../table.ts';
 
 /** Expansion is judged only beyond this, so that a tiny file of blanks is not called a bomb. */
 const FREE_BYTES = 4 * 1024 ** 2;
-const PIECE_BYTES = 64 * 1024;
+const PIECE_BYTES = 16 * 1024;
 
 /**
  * Decompresses a gzip stream piece by piece. What was decompressed before a fault is yielded before the error.

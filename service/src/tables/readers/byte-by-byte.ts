@@ -12,7 +12,7 @@ export interface ByteByByte {
 }
 
 const TITLE = /^\s*Byte-by-byte Description of file[s]?\s*[:(]?\s*(.*)$/i;
-const COLUMN = /^\s*(\d+)\s*(?:-\s*(\d+))?\s+([AIFED])(\d*)(?:\.\d+)?\s+(\S+)\s+(\S+)(?:\s+(.*))?$/i;
+const COLUMN = /^\s{0,12}(\d+)\s*(?:-\s*(\d+))?\s+([AIFED])(\d*)(?:\.\d+)?\s+(\S+)\s+(\S+)(?:\s+(.*))?$/i;
 /** Range, then "?" with an optional null value, then what is said. */
 const NULL_MARK = /^\s*(?:[[\]]\S*[[\]])?\s*\?(?:=(\S*))?[-+]?=?\s*(.*)$/;
 

@@ -1,3 +1,4 @@
+import { nulError } from '../bytes/byte-window.ts';
 import type { Content } from '../bytes/content.ts';
 import { cellText } from '../columns/cell-text.ts';
 import { guessColumnType } from '../columns/guess-type.ts';
@@ -28,6 +29,9 @@ export interface TextLayout {
 export async function sniffLayout(content: Content, limits: ReaderLimits): Promise<TextLayout> {
   const { comments, start, line } = leadingComments(content);
   const body = wholeLines(content, start, line);
+  if (cellText(body).trim() === '') {
+    throw new TableError('empty', 'The file holds no row.', 'Export the table again.', { line, byte: start });
+  }
   const delimiter = chooseDelimiter(cellText(body));
   if (delimiter === undefined) {
     throw new TableError(
@@ -55,7 +59,8 @@ export async function sniffLayout(content: Content, limits: ReaderLimits): Promi
     );
   }
   const further = await sampleFurther(content, delimiter, limits, names.length + skip);
-  const sample = rows.map((row) => row.cells).concat(further);
+  const full = rows.map((row) => row.cells).filter((cells) => cells.length >= names.length + skip);
+  const sample = (full.length > 0 ? full : rows.map((row) => row.cells)).concat(further);
   const decimalComma = delimiter !== ',' && usesDecimalComma(sample);
   if (decimalComma) notes.push('Numbers are read with the comma as decimal sign.');
   const columns = uniqueNames(names, notes).map((name, index): ColumnFacts => {
@@ -95,17 +100,20 @@ function leadingComments({ head }: Content): { comments: string[]; start: number
   return { comments, start, line };
 }
 
+/** The lines that are in the head to their end, up to a NUL byte if there is one. */
 function wholeLines({ head, complete }: Content, start: number, line: number): Buffer {
-  if (complete) return head.subarray(start);
-  const end = Math.max(head.lastIndexOf(10), head.lastIndexOf(13));
-  if (end < start) {
-    const message = `Line ${line} is longer than ${head.length - start} bytes; a header row is not.`;
-    throw new TableError('line-too-long', message, 'Check that the file is a table with one row a line.', {
-      line,
-      byte: start,
-    });
-  }
-  return head.subarray(start, end + 1);
+  const nul = head.indexOf(0, start);
+  if (complete && nul < 0) return head.subarray(start);
+  const text = nul < 0 ? head : head.subarray(0, nul);
+  const end = Math.max(text.lastIndexOf(10), text.lastIndexOf(13));
+  if (end >= start) return text.subarray(start, end + 1);
+  if (nul >= 0) throw nulError(nul);
+  throw new TableError(
+    'line-too-long',
+    `Line ${line} is longer than ${head.length - start} bytes; a header row is not.`,
+    'Check that the file is a table with one row a line.',
+    { line, byte: start },
+  );
 }
 
 /** Rows wider than the header get further names; a comma at the end of every row does not count. */

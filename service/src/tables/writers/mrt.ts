@@ -50,7 +50,7 @@ async function* mrtTexts(columns: OutputColumn[], rows: OutputRows, table: MrtTa
     const last = byte + width - 1;
     const bytes = width === 1 ? String(byte).padStart(8) : `${String(byte).padStart(4)}-${String(last).padStart(3)}`;
     const start = `${bytes.padStart(8)} ${format.padEnd(6)} ${unitOf(column).padEnd(unitWidth)} ${label.padEnd(labelWidth)} `;
-    yield wrap(start, `${hasNull ? '? ' : ''}${column.description ?? column.name}`);
+    yield wrap(start, `${hasNull ? '? ' : ''}${(column.description ?? column.name).replace(/^[\s?[\]]+/, '')}`);
     byte = last + 2;
   }
   if (table.description !== undefined) yield `${'-'.repeat(LINE)}\n${wrap('Note (1): ', table.description)}`;
