@@ -18,8 +18,18 @@ describe('error function', () => {
     expect(Math.abs(erfc(5) / 1.5374597944280349e-12 - 1)).toBeLessThan(1e-13);
   });
 
-  it('is seamless where the methods meet', () => {
-    expect(Math.abs(erfc(2.5 - 1e-12) / erfc(2.5 + 1e-12) - 1)).toBeLessThan(1e-10);
+  it.each([0.84375, 1.25, 1 / 0.35])('is seamless where the approximations meet, at %d', (x) => {
+    expect(Math.abs(erfc(x - 1e-13) / erfc(x + 1e-13) - 1)).toBeLessThan(1e-11);
+    expect(Math.abs(erf(x - 1e-13) / erf(x + 1e-13) - 1)).toBeLessThan(1e-11);
+  });
+
+  it('adds to one with its complement, is odd, and passes NaN on', () => {
+    for (const x of [-30, -3, -1, -0.2, 0, 0.2, 0.9, 1.1, 2, 7, 30]) {
+      expect(erf(x) + erfc(x)).toBeCloseTo(1, 14);
+      expect(erf(-x)).toBe(-erf(x));
+    }
+    expect(erf(NaN)).toBeNaN();
+    expect(erfc(NaN)).toBeNaN();
   });
 
   it('gives half at zero and 0.9750021 at 1.96', () => {
