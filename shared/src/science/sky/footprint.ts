@@ -3,6 +3,7 @@ import { assertDirection, type Direction } from './direction.ts';
 import { cellSide } from './healpix.ts';
 import { descend } from './healpix-descent.ts';
 import { Moc } from './moc.ts';
+import { distanceToRegion } from './moc-distance.ts';
 import { SphericalPolygon } from './polygon.ts';
 import { separation } from './separation.ts';
 
@@ -13,7 +14,7 @@ export type FootprintKind = 'rows' | 'moc' | 'circles' | 'polygons' | 'all-sky';
 const SAMPLES = 1024;
 /** Cells along the radius of the smallest shape, and the most cells along all edges together. */
 const CELLS_PER_RADIUS = 400;
-const MOST_EDGE_CELLS = 300_000;
+const MOST_EDGE_CELLS = 60_000;
 const FINEST_SHAPE_ORDER = 18;
 
 /** The part of the sky that a catalogue covers. Outside it, "nothing in the catalogue" is no evidence. */
@@ -63,7 +64,7 @@ export class Footprint {
    * @returns radians, good to 5 per cent or one cell; 0 for a direction outside; Infinity without an edge
    */
   distanceToEdge(lon: number, lat: number): number {
-    return this.region.distanceTo(lon, lat, false);
+    return distanceToRegion(this.region, lon, lat, false);
   }
 }
 

@@ -158,8 +158,9 @@ const STEPS = [
 ] as const;
 
 /**
- * The base cell met when leaving one over the given edge or corner, and how its axes lie: `flip` reverses both axes'
- * complement order, `swap` exchanges them. Undefined where three base cells meet and nothing lies beyond the corner.
+ * The base cell met when leaving one over the given edge or corner, and how its axes lie against those left: alike
+ * (`none`), both reversed (`half`), or turned by a quarter (`swap`). Undefined where three base cells meet and
+ * nothing lies beyond the corner.
  */
 function across(face: number, dx: number, dy: number): { face: number; turn: 'none' | 'half' | 'swap' } | undefined {
   const ring = face & 3;

@@ -89,3 +89,25 @@ export function readMocJson(text: string): ListedOrder[] {
     };
   });
 }
+
+/**
+ * Writes the ASCII form of a space MOC.
+ *
+ * @param byOrder cells of each order, ascending
+ * @returns text such as `1/1 2 4 2/12-14 21 23 25 8/`; two successive cells are written apart, as the standard does
+ */
+export function writeMocAscii(byOrder: readonly (readonly [order: number, cells: readonly number[]])[]): string {
+  return byOrder.map(([order, cells]) => `${order}/${asRuns(cells).join(' ')}`).join(' ');
+}
+
+function asRuns(cells: readonly number[]): string[] {
+  const runs: string[] = [];
+  for (let i = 0; i < cells.length;) {
+    let last = i;
+    while (last + 1 < cells.length && cells[last + 1] === cells[last]! + 1) last++;
+    if (last - i >= 2) runs.push(`${cells[i]}-${cells[last]}`);
+    else runs.push(...cells.slice(i, last + 1).map(String));
+    i = last + 1;
+  }
+  return runs;
+}

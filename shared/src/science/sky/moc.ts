@@ -1,20 +1,9 @@
 import { DomainError } from '../domain-error.ts';
 import { capPoints } from './cap-points.ts';
-import { type Direction } from './direction.ts';
-import {
-  assertOrder,
-  cellCentre,
-  cellCount,
-  cellOf,
-  cellRadius,
-  cellSide,
-  FINEST_NUMBER_ORDER,
-  FINEST_ORDER,
-} from './healpix.ts';
+import { assertOrder, cellCount, cellOf, cellSide, FINEST_NUMBER_ORDER, FINEST_ORDER } from './healpix.ts';
 import { coneRanges } from './healpix-cone.ts';
-import { type ListedOrder, readMocAscii, readMocJson } from './moc-text.ts';
+import { type ListedOrder, readMocAscii, readMocJson, writeMocAscii } from './moc-text.ts';
 import { intersectRanges, normalRanges, type Ranges, rangesHold, rangesSize, uniteRanges } from './ranges.ts';
-import { separation } from './separation.ts';
 import { fromUniq, toUniq } from './uniq.ts';
 
 /**
@@ -181,45 +170,6 @@ export class Moc {
     return holds.size === 1 ? only! : 'some';
   }
 
-  /**
-   * Distance from a direction to the nearest place that is (or is not) in the region.
-   *
-   * @param lon longitude, radians
-   * @param lat latitude, radians
-   * @param covered true for the nearest place inside, false for the nearest place outside
-   * @returns distance, radians, good to 5 per cent or one cell of the region; 0 if already there; Infinity if none
-   */
-  distanceTo(lon: number, lat: number, covered: boolean): number {
-    if (this.contains(lon, lat) === covered) return 0;
-    const wanted = covered ? 'all' : 'none';
-    const half = cellSide(this.order) / 2;
-    let best = Infinity;
-    const visit = (order: number, cell: number): void => {
-      const width = 4 ** (this.order - order);
-      const hold = rangesHold(this.ranges, cell * width, (cell + 1) * width);
-      if (hold !== 'some' && hold !== wanted) return;
-      const centre = cellCentre(order, cell);
-      const distance = separation(lon, lat, centre.lon, centre.lat);
-      const reach = cellRadius(order);
-      if (Math.max(0, distance - reach) >= best) return;
-      if (order === this.order || (hold === wanted && reach < 0.05 * distance)) {
-        best = Math.min(best, Math.max(0, order === this.order ? distance - half : distance - 0.7 * reach));
-        return;
-      }
-      const children = [0, 1, 2, 3].map((child) => {
-        const middle = cellCentre(order + 1, 4 * cell + child);
-        return { cell: 4 * cell + child, distance: separation(lon, lat, middle.lon, middle.lat) };
-      });
-      children.sort((a, b) => a.distance - b.distance);
-      for (const child of children) visit(order + 1, child.cell);
-    };
-    const bases = Array.from({ length: 12 }, (_, cell) => ({ cell, centre: cellCentre(0, cell) }));
-    const away = (c: Direction) => separation(lon, lat, c.lon, c.lat);
-    bases.sort((a, b) => away(a.centre) - away(b.centre));
-    for (const base of bases) visit(0, base.cell);
-    return best;
-  }
-
   /** The region at a coarser order, rounded outward: a cell stays if any of it was in the region. */
   degraded(order: number): Moc {
     assertOrder('Moc', order);
@@ -278,9 +228,7 @@ export class Moc {
 
   /** ASCII form: `1/1 2 4 2/12-14 21 23 25 8/`. */
   toAscii(): string {
-    return this.cellsByOrder()
-      .map(([order, cells]) => `${order}/${asRuns(cells).join(' ')}`)
-      .join(' ');
+    return writeMocAscii(this.cellsByOrder());
   }
 
   /** JSON form: `{"1":[1,2,4],"8":[]}`. */
@@ -293,17 +241,4 @@ export class Moc {
     const uniq = this.cellsByOrder().flatMap(([order, cells]) => cells.map((cell) => toUniq(order, BigInt(cell))));
     return uniq.sort((a, b) => (a < b ? -1 : a > b ? 1 : 0));
   }
-}
-
-function asRuns(cells: readonly number[]): string[] {
-  const runs: string[] = [];
-  for (let i = 0; i < cells.length;) {
-    let last = i;
-    while (last + 1 < cells.length && cells[last + 1] === cells[last]! + 1) last++;
-    // Two cells are written apart, as in the example of the standard.
-    if (last - i >= 2) runs.push(`${cells[i]}-${cells[last]}`);
-    else runs.push(...cells.slice(i, last + 1).map(String));
-    i = last + 1;
-  }
-  return runs;
 }

@@ -2,10 +2,26 @@ import { DEGREE } from '../constants.ts';
 import { DomainError } from '../domain-error.ts';
 import { cellOf, neighbours } from './healpix.ts';
 
-/** Occupied cells of one order with the number of rows in each. */
+/** Occupied cells of one order, ascending, with the number of rows in each. */
 export interface Occupancy {
   readonly order: number;
-  readonly rows: ReadonlyMap<number, number>;
+  readonly cells: Float64Array;
+  readonly rows: Float64Array;
+}
+
+/** Adds up the rows of equal cells; `cells` must ascend. */
+function joinEqual(order: number, cells: Float64Array, rowsOf: (i: number) => number): Occupancy {
+  const joined = new Float64Array(cells.length);
+  const rows = new Float64Array(cells.length);
+  let size = 0;
+  for (let i = 0; i < cells.length; i++) {
+    if (size > 0 && joined[size - 1] === cells[i]) rows[size - 1]! += rowsOf(i);
+    else {
+      joined[size] = cells[i]!;
+      rows[size++] = rowsOf(i);
+    }
+  }
+  return { order, cells: joined.slice(0, size), rows: rows.slice(0, size) };
 }
 
 /**
@@ -20,31 +36,32 @@ export function countRows(order: number, raDeg: ArrayLike<number>, decDeg: Array
   if (raDeg.length !== decDeg.length) {
     throw new DomainError(`countRows: ${raDeg.length} right ascensions but ${decDeg.length} declinations`);
   }
-  const rows = new Map<number, number>();
+  const cells = new Float64Array(raDeg.length);
+  let known = 0;
   for (let i = 0; i < raDeg.length; i++) {
     const ra = raDeg[i]!;
     const dec = decDeg[i]!;
-    if (Number.isNaN(ra) || Number.isNaN(dec)) continue;
-    const cell = cellOf(order, ra * DEGREE, dec * DEGREE);
-    rows.set(cell, (rows.get(cell) ?? 0) + 1);
+    if (!Number.isNaN(ra) && !Number.isNaN(dec)) cells[known++] = cellOf(order, ra * DEGREE, dec * DEGREE);
   }
-  return { order, rows };
+  return joinEqual(order, cells.slice(0, known).sort(), () => 1);
 }
 
 /** The same rows in cells of the next coarser order. */
-export function coarser({ order, rows }: Occupancy): Occupancy {
-  const merged = new Map<number, number>();
-  for (const [cell, count] of rows) {
-    const parent = Math.floor(cell / 4);
-    merged.set(parent, (merged.get(parent) ?? 0) + count);
-  }
-  return { order: order - 1, rows: merged };
+export function coarser({ order, cells, rows }: Occupancy): Occupancy {
+  const parents = cells.map((cell) => Math.floor(cell / 4));
+  return joinEqual(order - 1, parents, (i) => rows[i]!);
 }
 
 /** Middle value of the counts of occupied cells; 0 without any. */
 export function medianCount({ rows }: Occupancy): number {
-  const counts = [...rows.values()].sort((a, b) => a - b);
-  return counts[Math.floor(counts.length / 2)] ?? 0;
+  return rows.slice().sort()[Math.floor(rows.length / 2)] ?? 0;
+}
+
+/** Rows by cell, for look-ups. */
+export function rowsByCell({ cells, rows }: Occupancy): Map<number, number> {
+  const byCell = new Map<number, number>();
+  for (let i = 0; i < cells.length; i++) byCell.set(cells[i]!, rows[i]!);
+  return byCell;
 }
 
 /** An empty cell among occupied ones. */
@@ -57,7 +74,7 @@ export interface Hole {
 }
 
 /** Empty cells of which at most two neighbours are empty too: gaps inside, not the outside. */
-export function findHoles({ order, rows }: Occupancy): Hole[] {
+export function findHoles(order: number, rows: ReadonlyMap<number, number>): Hole[] {
   const touched = new Map<number, number>();
   for (const cell of rows.keys()) {
     for (const near of neighbours(order, cell)) if (!rows.has(near)) touched.set(near, (touched.get(near) ?? 0) + 1);

@@ -2,7 +2,7 @@ import { DEGREE } from '../constants.ts';
 import { Footprint } from './footprint.ts';
 import { cellSide, neighbours } from './healpix.ts';
 import { Moc } from './moc.ts';
-import { coarser, countRows, findHoles, medianCount, type Occupancy } from './occupancy.ts';
+import { coarser, countRows, findHoles, type Hole, medianCount, rowsByCell } from './occupancy.ts';
 
 /** A footprint estimated from rows, or why the rows cannot tell. */
 export type RowsFootprint =
@@ -25,14 +25,14 @@ const CHANCE_HOLES = 0.01;
 
 const sizeOf = (order: number) => `${((cellSide(order) / DEGREE) * 60).toFixed(1)} arcmin`;
 
-function rowsPerCell(occupancy: Occupancy, total: number, holes: number): number {
-  return total / Math.max(1, occupancy.rows.size + holes);
-}
-
 /** Cells covered: occupied ones and chance gaps, without edge cells that are mostly outside. */
-function coveredCells(occupancy: Occupancy): { cells: number[]; filled: number; dropped: number } {
-  const { order, rows } = occupancy;
-  const filled = findHoles(occupancy)
+function coveredCells(
+  order: number,
+  rows: ReadonlyMap<number, number>,
+  holes: readonly Hole[],
+  typical: number,
+): { cells: number[]; filled: number; dropped: number } {
+  const filled = holes
     .filter(({ enclosed, expected }) => enclosed && rows.size * Math.exp(-expected) > CHANCE_HOLES)
     .map((hole) => hole.cell);
   const covered = new Set([...rows.keys(), ...filled]);
@@ -44,7 +44,6 @@ function coveredCells(occupancy: Occupancy): { cells: number[]; filled: number; 
     isEdge.add(cell);
     around.set(cell, near);
   }
-  const typical = medianCount(occupancy);
   const dropped = [...isEdge].filter((cell) => {
     const inside = around.get(cell)!.filter((near) => covered.has(near) && !isEdge.has(near));
     const expected =
@@ -71,17 +70,17 @@ function coveredCells(occupancy: Occupancy): { cells: number[]; filled: number; 
  */
 export function rowsFootprint(raDeg: ArrayLike<number>, decDeg: ArrayLike<number>): RowsFootprint {
   let occupancy = countRows(FINEST, raDeg, decDeg);
-  const total = [...occupancy.rows.values()].reduce((sum, count) => sum + count, 0);
+  const total = occupancy.rows.reduce((sum, count) => sum + count, 0);
   if (total === 0) return { known: false, reason: 'the table has no row with a position' };
-  for (; ; occupancy = coarser(occupancy)) {
+  for (; occupancy.order >= COARSEST; occupancy = coarser(occupancy)) {
     const { order } = occupancy;
-    if (order < COARSEST) break;
-    if (rowsPerCell(occupancy, total, 0) < LEAST_ROWS_PER_CELL || medianCount(occupancy) < LEAST_ROWS_PER_CELL)
-      continue;
-    const holes = findHoles(occupancy).length;
-    const expected = rowsPerCell(occupancy, total, holes);
-    if (expected < LEAST_ROWS_PER_CELL || holes > MOST_HOLES * occupancy.rows.size) continue;
-    const { cells, filled, dropped } = coveredCells(occupancy);
+    const typical = medianCount(occupancy);
+    if (total / occupancy.cells.length < LEAST_ROWS_PER_CELL || typical < LEAST_ROWS_PER_CELL) continue;
+    const rows = rowsByCell(occupancy);
+    const holes = findHoles(order, rows);
+    const expected = total / (rows.size + holes.length);
+    if (expected < LEAST_ROWS_PER_CELL || holes.length > MOST_HOLES * rows.size) continue;
+    const { cells, filled, dropped } = coveredCells(order, rows, holes, typical);
     if (cells.length < LEAST_CELLS) {
       return {
         known: false,
