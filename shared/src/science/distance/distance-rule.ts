@@ -33,16 +33,6 @@ export interface DistanceRule {
   readonly clusterPeculiarVelocityKms: number;
 }
 
-/** Default rule; every number may be changed in the criteria. */
-export const DEFAULT_DISTANCE_RULE: DistanceRule = {
-  flowModel: 'mould2000',
-  hubbleFrame: 'km96',
-  minimumVelocityKms: 500,
-  warnVelocityKms: 1500,
-  peculiarVelocityKms: 200,
-  clusterPeculiarVelocityKms: 500,
-};
-
 /** A distance with where it came from, or the reason there is none. */
 export type Distance =
   | {
@@ -65,6 +55,9 @@ export type Distance =
 const UNSTATED_ERROR_FRACTION = 0.1;
 /** A redshift distance this small or smaller is noise, Mpc. */
 const LEAST_DISTANCE_MPC = 0.1;
+/** Redshift beyond which a cz cannot belong to a catalogued object; above 1 no survey has found the HI line. */
+const HIGHEST_REDSHIFT = 1000;
+const SUSPECT_REDSHIFT = 1;
 /** The zone about Virgo in which one velocity belongs to three distances. */
 const TRIPLE_VALUED = { radius: 25 * DEGREE, belowKms: 2500 };
 
@@ -107,6 +100,9 @@ function redshiftCautions(
   flow: FlowVelocity,
 ): string[] {
   const cautions: string[] = [];
+  if (input.czKms > SUSPECT_REDSHIFT * SPEED_OF_LIGHT_KMS) {
+    cautions.push(`a velocity of ${kms(input.czKms)} is beyond any HI survey; is the column in m/s?`);
+  }
   if (localGroupKms < rule.warnVelocityKms) {
     cautions.push(
       `the Local Group velocity of ${kms(localGroupKms)} is below ${kms(rule.warnVelocityKms)}: peculiar motion is a ` +
@@ -134,7 +130,7 @@ function redshiftCautions(
  * @param cosmology flat ΛCDM for redshift distances
  * @returns Mpc for luminosities, D_L = (1+z) D_C(v/c), and for projections, D_A = D_C(v/c)/(1+z), with z the observed
  *   barycentric redshift and v the velocity in the frame or by the model; the error and every caution
- * @throws {DomainError} for a position, velocity, error or measured distance out of range
+ * @throws {DomainError} for a position, an error or a measured distance out of range; an impossible velocity gives none
  *
  * A redshift gives no distance where the Local Group velocity is below the least one: there peculiar motion is as
  * large as the Hubble flow. The Local Group velocity for this test is that of `hubbleFrame`, and for the CMB frame
@@ -145,6 +141,9 @@ export function chooseDistance(input: DistanceInput, rule: DistanceRule, cosmolo
   const { czKms, raRad, decRad } = input;
   if (known(input.measuredMpc)) return measuredDistance(input, input.measuredMpc);
   if (!known(czKms)) return { kind: 'none', reason: 'there is neither a measured distance nor a velocity' };
+  if (!(Math.abs(czKms) < SPEED_OF_LIGHT_KMS || (czKms > 0 && czKms < HIGHEST_REDSHIFT * SPEED_OF_LIGHT_KMS))) {
+    return { kind: 'none', reason: `${czKms} km/s is not a possible velocity; check its unit and its missing values` };
+  }
 
   const branches = flowVelocity(czKms, raRad, decRad);
   const flow = rule.flowModel === 'mould2000' ? branches : undefined;
