@@ -1,101 +1,159 @@
 import type { Candidate, Neighbour } from '@eremite/shared/contracts/verdict';
-import { packColumns, unpackColumns, type PackedColumns } from '../tiles/column-pack.ts';
-import { textAt, type TextColumn } from '../tiles/column-pack.ts';
+import { DEGREE } from '@eremite/shared/science/constants';
+import { hiMass } from '@eremite/shared/science/hydrogen/hi-mass';
+import { positionAngle } from '@eremite/shared/science/sky/position-angle';
+import { projectedKpc } from '@eremite/shared/science/surroundings/projected-separation';
+import { packColumns, textAt, textColumn, type Column, type TextColumn, unpackColumns } from '../tiles/column-pack.ts';
+import type { CandidateRow } from './candidate-row.ts';
+import type { Detection } from './detection-table.ts';
+import { type PreparedCatalogue, rowName } from './prepared-catalogue.ts';
+import type { NeighbourRow } from './surroundings.ts';
 
-/** The tables of a run in the order that `catalogue` indexes. */
+/** A table of the run, in the order in which the engine had them. */
 export interface EvidenceCatalogue {
   catalogueId: string;
   name: string;
   kind: string;
 }
 
-/**
- * Candidates of one detection as packed columns, in order of separation. Float64 unless said; NaN is "none".
- * `catalogue` (Uint32, index into the run's tables), `row` (Uint32), `name` (text), `raDeg`, `decDeg`,
- * `separationArcsec`, `positionAngleDeg`, `separationKpc`, `velocityKms`, `velocityDifferenceKms`, `band` (text),
- * `magnitude`, `chanceProbability`, `likelihoodRatio`, `probability`, `object` (Uint32), `isStar` (Uint8).
- */
-export type CandidateColumns = PackedColumns;
+interface Placed {
+  catalogue: PreparedCatalogue;
+  index: number;
+  separationArcsec: number;
+}
 
-/**
- * Neighbours of one detection as packed columns, in order of projected separation. As for candidates:
- * `catalogue`, `row`, `name`, `raDeg`, `decDeg`, `separationArcsec`, `positionAngleDeg`, `separationKpc`, `velocityKms`,
- * `velocityDifferenceKms`, `band`, `magnitude`, `absoluteMagnitude`, `logHiMass`, `qualifies` (Uint8).
- */
-export type NeighbourColumns = PackedColumns;
+const numbers = <T>(rows: readonly T[], of: (row: T) => number) => Float64Array.from(rows, of);
 
-export const packEvidence = packColumns;
-
-/** Reads a column at a row: NaN and empty text become null. */
-function cellReader({ columns }: PackedColumns) {
+function common(rows: readonly Placed[]): Record<string, Column> {
   return {
-    number: (name: string, i: number): number => (columns[name] as Float64Array)[i]!,
-    optional: (name: string, i: number): number | null => {
-      const value = (columns[name] as Float64Array | undefined)?.[i] ?? NaN;
-      return Number.isFinite(value) ? value : null;
-    },
-    text: (name: string, i: number): string => textAt(columns[name] as TextColumn, i),
+    catalogue: Uint32Array.from(rows, ({ catalogue }) => catalogue.index),
+    row: Uint32Array.from(rows, ({ catalogue, index }) => catalogue.input.roles.columns.row[index]!),
+    name: textColumn(rows.map(({ catalogue, index }) => rowName(catalogue, index))),
+    raDeg: numbers(rows, ({ catalogue, index }) => catalogue.raDeg[index]!),
+    decDeg: numbers(rows, ({ catalogue, index }) => catalogue.decDeg[index]!),
+    separationArcsec: numbers(rows, ({ separationArcsec }) => separationArcsec),
+    czKms: numbers(rows, ({ catalogue, index }) => catalogue.czKms?.[index] ?? NaN),
   };
 }
 
-export function readCandidates(
-  packed: Uint8Array | PackedColumns,
-  catalogues: readonly EvidenceCatalogue[],
-): Omit<Candidate, 'override'>[] {
-  const table = packed instanceof Uint8Array ? unpackColumns(packed) : packed;
-  const cell = cellReader(table);
-  return Array.from({ length: table.rows }, (_, i) => {
-    const catalogue = catalogues[cell.number('catalogue', i)]!;
-    return {
-      catalogueId: catalogue.catalogueId,
-      catalogueName: catalogue.name,
-      kind: catalogue.kind,
-      rowId: cell.number('row', i),
-      name: cell.text('name', i),
-      raDeg: cell.number('raDeg', i),
-      decDeg: cell.number('decDeg', i),
-      separationArcsec: cell.number('separationArcsec', i),
-      positionAngleDeg: cell.number('positionAngleDeg', i),
-      separationKpc: cell.optional('separationKpc', i),
-      velocityKms: cell.optional('velocityKms', i),
-      velocityDifferenceKms: cell.optional('velocityDifferenceKms', i),
-      band: cell.text('band', i) || null,
-      magnitude: cell.optional('magnitude', i),
-      chanceProbability: cell.optional('chanceProbability', i),
-      likelihoodRatio: cell.optional('likelihoodRatio', i),
-      probability: cell.number('probability', i),
-      object: cell.number('object', i),
-      isStar: cell.number('isStar', i) === 1,
-    };
+/** Packs the candidates of one detection, in the order given. */
+export function packCandidates(rows: readonly CandidateRow[], { angularMpc }: Detection): Uint8Array {
+  return packColumns({
+    rows: rows.length,
+    columns: {
+      ...common(rows),
+      positionAngleDeg: numbers(rows, ({ positionAngleRad }) => positionAngleRad / DEGREE),
+      separationKpc: numbers(rows, ({ separationArcsec }) => projectedKpc(separationArcsec, angularMpc)),
+      differenceKms: numbers(rows, ({ velocityDifferenceKms }) => velocityDifferenceKms),
+      band: textColumn(rows.map(({ catalogue, band }) => (band < 0 ? '' : catalogue.bands[band]!.name))),
+      magnitude: numbers(rows, ({ magnitude }) => magnitude),
+      chance: numbers(rows, ({ chanceProbability }) => chanceProbability),
+      likelihoodRatio: numbers(rows, ({ likelihoodRatio }) => likelihoodRatio),
+      probability: numbers(rows, ({ probability }) => probability),
+      object: Int32Array.from(rows, ({ object }) => object),
+      isStar: Uint8Array.from(rows, ({ isStar }) => (isStar ? 1 : 0)),
+    },
   });
 }
 
-export function readNeighbours(
-  packed: Uint8Array | PackedColumns,
-  catalogues: readonly EvidenceCatalogue[],
-): Neighbour[] {
-  const table = packed instanceof Uint8Array ? unpackColumns(packed) : packed;
-  const cell = cellReader(table);
-  return Array.from({ length: table.rows }, (_, i) => {
-    const catalogue = catalogues[cell.number('catalogue', i)]!;
-    return {
-      catalogueId: catalogue.catalogueId,
-      catalogueName: catalogue.name,
-      kind: catalogue.kind,
-      rowId: cell.number('row', i),
-      name: cell.text('name', i),
-      raDeg: cell.number('raDeg', i),
-      decDeg: cell.number('decDeg', i),
-      separationArcsec: cell.number('separationArcsec', i),
-      positionAngleDeg: cell.number('positionAngleDeg', i),
-      separationKpc: cell.number('separationKpc', i),
-      velocityKms: cell.optional('velocityKms', i),
-      velocityDifferenceKms: cell.number('velocityDifferenceKms', i),
-      band: cell.text('band', i) || null,
-      magnitude: cell.optional('magnitude', i),
-      absoluteMagnitude: cell.optional('absoluteMagnitude', i),
-      logHiMass: cell.optional('logHiMass', i),
-      qualifies: cell.number('qualifies', i) === 1,
-    };
+/** Position angles and masses of neighbours are made when they are packed: nobody asks for those of a plan. */
+export function packNeighbours(
+  rows: readonly NeighbourRow[],
+  { angularMpc, luminosityMpc, raDeg, decDeg }: Detection,
+): Uint8Array {
+  const modulus = 5 * Math.log10(luminosityMpc) + 25;
+  return packColumns({
+    rows: rows.length,
+    columns: {
+      ...common(rows),
+      positionAngleDeg: numbers(
+        rows,
+        ({ catalogue, index }) =>
+          positionAngle(
+            raDeg * DEGREE,
+            decDeg * DEGREE,
+            catalogue.raDeg[index]! * DEGREE,
+            catalogue.decDeg[index]! * DEGREE,
+          ) / DEGREE,
+      ),
+      separationKpc: numbers(rows, ({ separationArcsec }) => projectedKpc(separationArcsec, angularMpc)),
+      differenceKms: numbers(rows, ({ velocityDifferenceKms }) => velocityDifferenceKms),
+      band: textColumn(rows.map(({ band }) => band ?? '')),
+      magnitude: numbers(rows, ({ magnitude }) => magnitude),
+      absoluteMagnitude: numbers(rows, ({ magnitudeR }) => magnitudeR - modulus),
+      logHiMass: numbers(rows, ({ fluxJyKms }) => (fluxJyKms > 0 ? Math.log10(hiMass(fluxJyKms, luminosityMpc)) : NaN)),
+      qualifies: Uint8Array.from(rows, (row) =>
+        angularMpc <= row.insideBelowMpc && angularMpc >= row.countsAboveMpc ? 1 : 0,
+      ),
+    },
   });
+}
+
+/** One detection's evidence read back; a column it was not written with is a fault of the store and throws. */
+class Evidence {
+  readonly rows: number;
+  private readonly columns: Record<string, Column>;
+  constructor(
+    packed: Uint8Array,
+    private readonly tables: readonly EvidenceCatalogue[],
+  ) {
+    const { rows, columns } = unpackColumns(packed);
+    this.rows = rows;
+    this.columns = columns;
+  }
+
+  number = (name: string, i: number): number => (this.columns[name] as Float64Array)[i]!;
+  orNull = (name: string, i: number): number | null => {
+    const value = this.number(name, i);
+    return Number.isFinite(value) ? value : null;
+  };
+  text = (name: string, i: number): string => textAt(this.columns[name] as TextColumn, i);
+
+  common(i: number) {
+    const table = this.tables[this.number('catalogue', i)];
+    return {
+      catalogueId: table?.catalogueId ?? '',
+      catalogueName: table?.name ?? '',
+      kind: table?.kind ?? '',
+      rowId: this.number('row', i),
+      name: this.text('name', i),
+      raDeg: this.number('raDeg', i),
+      decDeg: this.number('decDeg', i),
+      separationArcsec: this.number('separationArcsec', i),
+      positionAngleDeg: this.number('positionAngleDeg', i),
+      velocityKms: this.orNull('czKms', i),
+      band: this.text('band', i) || null,
+      magnitude: this.orNull('magnitude', i),
+    };
+  }
+}
+
+/** Candidates as stored; overrides are not part of a run and are joined by who reads them. */
+export function readCandidates(
+  packed: Uint8Array,
+  tables: readonly EvidenceCatalogue[],
+): Omit<Candidate, 'override'>[] {
+  const evidence = new Evidence(packed, tables);
+  return Array.from({ length: evidence.rows }, (_, i) => ({
+    ...evidence.common(i),
+    separationKpc: evidence.orNull('separationKpc', i),
+    velocityDifferenceKms: evidence.orNull('differenceKms', i),
+    chanceProbability: evidence.orNull('chance', i),
+    likelihoodRatio: evidence.orNull('likelihoodRatio', i),
+    probability: evidence.number('probability', i),
+    object: evidence.number('object', i),
+    isStar: evidence.number('isStar', i) === 1,
+  }));
+}
+
+export function readNeighbours(packed: Uint8Array, tables: readonly EvidenceCatalogue[]): Neighbour[] {
+  const evidence = new Evidence(packed, tables);
+  return Array.from({ length: evidence.rows }, (_, i) => ({
+    ...evidence.common(i),
+    separationKpc: evidence.number('separationKpc', i),
+    velocityDifferenceKms: evidence.number('differenceKms', i),
+    absoluteMagnitude: evidence.orNull('absoluteMagnitude', i),
+    logHiMass: evidence.orNull('logHiMass', i),
+    qualifies: evidence.number('qualifies', i) === 1,
+  }));
 }

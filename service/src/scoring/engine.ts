@@ -1,0 +1,315 @@
+import { DEFAULT_VELOCITY_MODEL, type VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
+import type { LearntPrior } from '@eremite/shared/science/counterpart/learn-prior';
+import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
+import { neighbourSearch } from '../matching/neighbour-search.ts';
+import { pairSearch } from '../matching/pair-search.ts';
+import { assessStarlight, type AssessmentContext, type StarlightAssessment } from './assess.ts';
+import { type CandidateRow, makeCandidate, type OverrideOf } from './candidate-row.ts';
+import { describeDetail, describeItem } from './describe.ts';
+import { type Detection, readDetections } from './detection-table.ts';
+import type { EngineInput } from './engine-input.ts';
+import { relationOf } from './expectation.ts';
+import { readGroups } from './group-list.ts';
+import { judgeDoubts } from './judge-doubts.ts';
+import { learnPriors, learnRelation, learntNotes, type Lesson, lessonOf } from './learning.ts';
+import { MissedTable } from './missed-table.ts';
+import { buildNeighbourPool, type NeighbourPool } from './neighbour-pool.ts';
+import { type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
+import { redshiftReaches } from './redshift-reach.ts';
+import type { Assessment, ScoredDetection } from './scored-detection.ts';
+import { StarMasks } from './star-masks.ts';
+import {
+  judgeSurroundings,
+  makeNeighbour,
+  neighbourAngleDeg,
+  type NeighbourRow,
+  type SurroundingsContext,
+} from './surroundings.ts';
+import { rateRows, type WeighingModel } from './weigh-objects.ts';
+
+/** Kinds of tables in which a counterpart is looked for. */
+const COUNTERPART_KINDS = ['optical', 'infrared', 'ultraviolet', 'continuum'];
+/** How far beyond the window the nearest row with a velocity is still looked for, Mpc. */
+const FAR_MPC = 5;
+/** And without a distance: neighbours with a distance of their own, degrees. */
+const NO_DISTANCE_DEG = 10;
+
+/** What a run learns from its own data before it scores. */
+export interface Learnt {
+  relation: GasStarRelation | null;
+  priors: LearntPrior[];
+  velocity: VelocityModel;
+  notes: string[];
+}
+
+/**
+ * Scores the detections of a run. Pure: the same input gives the same results, in any split into ranges.
+ *
+ * Use: make one (tables are indexed), `learn` once or take over what another worker learnt with `setLearnt`, then `score`
+ * ranges of detections in any order.
+ */
+export class Engine {
+  readonly detections: Detection[];
+  readonly catalogues: PreparedCatalogue[];
+  private readonly searched: PreparedCatalogue[];
+  private readonly pool: NeighbourPool;
+  private readonly masks: StarMasks;
+  private readonly surroundings: SurroundingsContext;
+  private readonly overrideOf: OverrideOf | null;
+  private learnt: Learnt;
+
+  constructor(readonly input: EngineInput) {
+    const { criteria, survey } = input;
+    this.detections = readDetections(input);
+    this.catalogues = input.catalogues.map((catalogue, index) =>
+      prepareCatalogue(catalogue, index, criteria, COUNTERPART_KINDS.includes(catalogue.kind)),
+    );
+    this.searched = this.catalogues.filter(({ input: { kind } }) => COUNTERPART_KINDS.includes(kind));
+    this.pool = buildNeighbourPool(this.catalogues);
+    this.masks = new StarMasks(criteria.absence.starMask ? this.catalogues : []);
+    this.surroundings = {
+      criteria,
+      reaches: redshiftReaches(this.catalogues),
+      groups: readGroups(this.catalogues, input),
+      missed: new MissedTable(criteria, survey.h0),
+      hasVelocities: this.catalogues.some(
+        ({ input: { kind }, czKms }) => kind !== 'hi' && czKms?.some(Number.isFinite),
+      ),
+    };
+    this.overrideOf = overridesBy(input);
+    this.learnt = { relation: null, priors: [], velocity: this.velocityModel(), notes: [] };
+  }
+
+  private velocityModel(): VelocityModel {
+    const { counterpart } = this.input.criteria;
+    return {
+      ...DEFAULT_VELOCITY_MODEL,
+      clusteredFraction: counterpart.concordantClustering,
+      badFraction: counterpart.badRedshiftFloor,
+      discordantKms: counterpart.discordantKms,
+    };
+  }
+
+  private context(relation: GasStarRelation | null, priors: readonly LearntPrior[]): AssessmentContext {
+    const { criteria } = this.input;
+    const model: WeighingModel = {
+      criteria,
+      relation: relation ?? relationOf(criteria),
+      velocity: this.learnt.velocity,
+    };
+    return { model, catalogues: this.searched, priors };
+  }
+
+  /** Candidate rows of each detection of a range, nearest first within each catalogue. */
+  private candidatesOf(from: number, to: number): CandidateRow[][] {
+    const range = this.detections.slice(from, to);
+    const rows: CandidateRow[][] = range.map(() => []);
+    const positions = {
+      raDeg: Float64Array.from(range, ({ raDeg }) => raDeg),
+      decDeg: Float64Array.from(range, ({ decDeg }) => decDeg),
+      radiusArcsec: Float64Array.from(range, ({ searchArcsec }) => searchArcsec),
+    };
+    for (const catalogue of this.searched) {
+      const pairs = pairSearch(catalogue.grid, positions);
+      for (let k = 0; k < pairs.position.length; k++) {
+        const p = pairs.position[k]!;
+        rows[p]!.push(makeCandidate(range[p]!, catalogue, pairs.row[k]!, pairs.separationArcsec[k]!, this.overrideOf));
+      }
+    }
+    return rows;
+  }
+
+  private assess(from: number, to: number, context: AssessmentContext): StarlightAssessment[] {
+    const candidates = this.candidatesOf(from, to);
+    const masks = this.masks.of(this.detections.slice(from, to));
+    return candidates.map((rows, i) => assessStarlight(this.detections[from + i]!, rows, masks[i]!, context));
+  }
+
+  /** What the detections of a range teach, given a relation. */
+  lessons(from: number, to: number, relation: GasStarRelation | null): Lesson[] {
+    const context = this.context(relation, []);
+    return this.assess(from, to, context).map((assessment) => lessonOf(assessment, context.model.relation));
+  }
+
+  /** Whether there are enough detections to learn anything from. */
+  get canLearn(): boolean {
+    const { learnPrior, learnMagnitudes } = this.input.criteria.counterpart;
+    return (learnPrior || learnMagnitudes) && this.detections.length >= 100;
+  }
+
+  /**
+   * Learns relation and priors from lessons of all detections.
+   *
+   * @param again gives the lessons anew under another relation
+   */
+  learnFrom(lessons: Lesson[], again: (relation: GasStarRelation) => Lesson[]): Learnt {
+    const { criteria } = this.input;
+    const base = relationOf(criteria);
+    const relation = criteria.counterpart.learnMagnitudes ? learnRelation(lessons, base) : undefined;
+    const known = relation ? again(relation) : lessons;
+    const priors = learnPriors(known, criteria);
+    this.learnt = {
+      ...this.learnt,
+      relation: relation ?? null,
+      priors,
+      notes: learntNotes(relation, priors, known),
+    };
+    return this.learnt;
+  }
+
+  /** Takes over what was learnt elsewhere from the same input. */
+  setLearnt(learnt: Learnt): void {
+    this.learnt = learnt;
+  }
+
+  /** Sentences about the run as a whole: what the tables leave open and what was learnt. */
+  get notes(): string[] {
+    const notes = [...this.learnt.notes];
+    for (const { input, areaFromRows } of this.searched) {
+      if (areaFromRows)
+        notes.push(`${input.name}: ${input.coverageNote} Densities are taken over the cells its rows occupy.`);
+      const shallow = input.bands.filter(({ depth5Sigma }) => depth5Sigma === null).map(({ name }) => name);
+      if (shallow.length > 0)
+        notes.push(
+          `${input.name}: no depth is stated for ${shallow.join(', ')}; its silence there counts for nothing.`,
+        );
+    }
+    for (const reach of this.surroundings.reaches) {
+      if (reach.measured)
+        notes.push(
+          `${reach.catalogue.input.name}: redshifts reach ${reach.band} ${reach.magnitude.toFixed(1)}, measured from its rows.`,
+        );
+    }
+    return notes;
+  }
+
+  /** Rows with a velocity about each assessed detection. */
+  private neighboursOf(assessed: readonly StarlightAssessment[]): NeighbourRow[][] {
+    const { criteria } = this.input;
+    const window = Math.max(500, criteria.surroundings.velocityWindowKms, criteria.doubts.possibleDebrisKms);
+    return this.searchPool(
+      assessed.map(({ detection }) => detection),
+      (detection) => {
+        const angle = neighbourAngleDeg(detection, criteria);
+        return Number.isNaN(angle) && Number.isFinite(detection.czKms) ? NO_DISTANCE_DEG : angle;
+      },
+      window,
+    );
+  }
+
+  private searchPool(
+    detections: readonly Detection[],
+    angleDeg: (d: Detection) => number,
+    windowKms: number,
+  ): NeighbourRow[][] {
+    const rows: NeighbourRow[][] = detections.map(() => []);
+    const found = neighbourSearch(this.pool.grid, {
+      raDeg: Float64Array.from(detections, ({ raDeg }) => raDeg),
+      decDeg: Float64Array.from(detections, ({ decDeg }) => decDeg),
+      czKms: Float64Array.from(detections, ({ czKms }) => czKms),
+      angularRadiusDeg: Float64Array.from(detections, angleDeg),
+      windowKms: new Float64Array(detections.length).fill(windowKms),
+    });
+    for (let k = 0; k < found.detection.length; k++) {
+      const d = found.detection[k]!;
+      const at = found.row[k]!;
+      const catalogue = this.catalogues[this.pool.catalogue[at]!]!;
+      rows[d]!.push(
+        makeNeighbour(
+          detections[d]!,
+          catalogue,
+          this.pool.row[at]!,
+          found.separationArcsec[k]!,
+          found.velocityDifferenceKms[k]!,
+          this.surroundings,
+        ),
+      );
+    }
+    return rows;
+  }
+
+  /** Scores detections [from, to). */
+  score(from: number, to: number): ScoredDetection[] {
+    const { criteria } = this.input;
+    const context = this.context(this.learnt.relation, this.learnt.priors);
+    const assessed = this.assess(from, to, context);
+    const around = this.neighboursOf(assessed);
+    const far = this.farNearest(assessed, around);
+    return assessed.map((starlight, i) => {
+      const { detection } = starlight;
+      const own = ownRows(starlight, criteria.counterpart.minimumProbability);
+      const surroundings = judgeSurroundings(detection, around[i]!, own, far[i]!, this.surroundings);
+      const assessment: Assessment = { ...starlight, surroundings };
+      const doubts = judgeDoubts(starlight, surroundings, this.searched, criteria);
+      rateRows(detection, starlight.candidates, starlight.expectations, starlight.prior);
+      return {
+        position: detection.position,
+        catalogueId: this.input.catalogues[detection.catalogue]!.id,
+        row: detection.row,
+        item: describeItem(assessment, doubts, criteria),
+        candidates: starlight.candidates,
+        neighbours: surroundings.neighbours,
+        detail: () => describeDetail(assessment, doubts, criteria),
+      };
+    });
+  }
+
+  /** The nearest row with a velocity for detections that have none in their window. */
+  private farNearest(
+    assessed: readonly StarlightAssessment[],
+    around: readonly NeighbourRow[][],
+  ): (NeighbourRow | null)[] {
+    const { velocityWindowKms } = this.input.criteria.surroundings;
+    const { minimumProbability } = this.input.criteria.counterpart;
+    const lonely: number[] = [];
+    assessed.forEach((starlight, i) => {
+      const own = ownRows(starlight, minimumProbability);
+      const some = around[i]!.some((row) => Math.abs(row.velocityDifferenceKms) <= velocityWindowKms && !own(row));
+      if (!some && starlight.detection.angularMpc > 0) lonely.push(i);
+    });
+    const nearest: (NeighbourRow | null)[] = assessed.map(() => null);
+    if (lonely.length === 0) return nearest;
+    const found = this.searchPool(
+      lonely.map((i) => assessed[i]!.detection),
+      ({ angularMpc }) => Math.min(30, (FAR_MPC / angularMpc) * (180 / Math.PI)),
+      velocityWindowKms,
+    );
+    lonely.forEach((i, k) => {
+      const own = ownRows(assessed[i]!, minimumProbability);
+      nearest[i] = found[k]!.find((row) => !own(row)) ?? null;
+    });
+    return nearest;
+  }
+}
+
+/** Rows that are the detection itself, the same source in another HI list, or its counterpart. */
+function ownRows(
+  { detection, objects, accepted, probabilities }: StarlightAssessment,
+  least: number,
+): (row: NeighbourRow) => boolean {
+  const j = probabilities.objects.findIndex((p) => p >= least);
+  const counterpart = accepted ?? (j >= 0 ? objects[j]! : null);
+  const sameVelocity = Math.max(50, detection.width50Kms > 0 ? detection.width50Kms / 2 : 0);
+  return (row) => {
+    const { input, index } = row.catalogue;
+    if (input.kind === 'hi') {
+      if (index === detection.catalogue) return row.index === detection.index;
+      return row.separationArcsec <= detection.searchArcsec && Math.abs(row.velocityDifferenceKms) <= sameVelocity;
+    }
+    return (
+      counterpart !== null && counterpart.rows.some((own) => own.catalogue === row.catalogue && own.index === row.index)
+    );
+  };
+}
+
+function overridesBy({ decisions, catalogues }: EngineInput): OverrideOf | null {
+  if (decisions.overrides.length === 0) return null;
+  const byPair = new Map(
+    decisions.overrides.map((o) => [
+      `${o.detectionCatalogueId}/${o.detectionRow}/${o.catalogueId}/${o.rowId}`,
+      o.action,
+    ]),
+  );
+  return (detection, catalogue, row) =>
+    byPair.get(`${catalogues[detection.catalogue]!.id}/${detection.row}/${catalogue.input.id}/${row}`) ?? null;
+}

@@ -1,0 +1,19 @@
+/** Numbers as sentences carry them: sensible digits, units beside. */
+export const percent = (p: number): string => {
+  const value = 100 * p;
+  if (value > 0 && value < 0.1) return 'under 0.1 per cent';
+  if (value > 99.9 && value < 100) return 'over 99.9 per cent';
+  return `${value >= 10 ? Number(value.toPrecision(3)) : Number(value.toPrecision(2))} per cent`;
+};
+export const arcsec = (x: number): string => `${x >= 100 ? x.toFixed(0) : x.toFixed(1)} arcsec`;
+export const kms = (x: number): string => `${x.toFixed(0)} km/s`;
+export const signedKms = (x: number): string => `${x < 0 ? '-' : '+'}${Math.abs(x).toFixed(0)} km/s`;
+export const kpc = (x: number): string => (x >= 1000 ? `${(x / 1000).toFixed(2)} Mpc` : `${x.toFixed(0)} kpc`);
+export const mpc = (x: number): string => `${x >= 100 ? x.toFixed(0) : x.toFixed(1)} Mpc`;
+export const mag = (x: number): string => x.toFixed(1);
+export const ratio = (x: number): string => (x >= 100 ? x.toFixed(0) : Number(x.toPrecision(2)).toString());
+export const probability = (p: number): string => {
+  if (p > 0 && p < 0.001) return 'under 0.001';
+  if (p > 0.999 && p < 1) return 'over 0.999';
+  return p.toFixed(p > 0.99 || p < 0.01 ? 3 : 2);
+};

@@ -1,0 +1,161 @@
+import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
+import type { Doubt, Ground } from '@eremite/shared/contracts/verdict';
+import { projectedKpc } from '@eremite/shared/science/surroundings/projected-separation';
+import type { StarlightAssessment } from './assess.ts';
+import { arcsec, kms, kpc, mag, mpc, percent, probability, signedKms } from './figures.ts';
+import { rowName } from './prepared-catalogue.ts';
+import type { NeighbourRow, SurroundingsResult } from './surroundings.ts';
+
+const neighbourName = (row: NeighbourRow): string =>
+  `${rowName(row.catalogue, row.index)} (${row.catalogue.input.name})`;
+
+/** Why the surroundings verdict is what it is. */
+export function surroundingsGrounds(
+  { detection }: StarlightAssessment,
+  result: SurroundingsResult,
+  criteria: CriteriaSettings,
+): Ground[] {
+  const grounds: Ground[] = [];
+  const say = (weight: Ground['weight'], text: string) =>
+    grounds.push({ about: 'surroundings', weight, text, method: 'surroundings' });
+  const { radiusMpc, velocityWindowKms, faintestNeighbourMag } = criteria.surroundings;
+  const scope = `brighter than M_r ${faintestNeighbourMag} within ${radiusMpc} Mpc and ${velocityWindowKms} km/s`;
+  const { membership, deciding, factors, verdict } = result;
+  if (membership) {
+    const { group } = membership;
+    say(
+      'for',
+      `It lies ${kpc(membership.separationKpc)} and ${signedKms(membership.differenceKms)} from ${group.name} at that structure's distance of ${mpc(group.angularMpc)} (R200 ${kpc(group.r200Kpc)}, velocity dispersion ${kms(group.dispersionKms)}).`,
+    );
+  }
+  if (deciding) {
+    const at = detection.angularMpc > 0 ? detection.angularMpc : result.decidingAtMpc;
+    const far = kpc(projectedKpc(deciding.separationArcsec, at));
+    const where = detection.angularMpc > 0 ? '' : ` at its own distance of ${mpc(at)}`;
+    const bright = Number.isNaN(deciding.magnitudeR)
+      ? deciding.catalogue.input.kind === 'hi'
+        ? 'an HI detection'
+        : 'of unknown brightness'
+      : `M_r about ${mag(deciding.magnitudeR - 5 * Math.log10(at) - 25)}`;
+    say(
+      'for',
+      `${neighbourName(deciding)}, ${bright}, lies ${far}${where} and ${signedKms(deciding.velocityDifferenceKms)} away.`,
+    );
+  }
+  if (verdict === 'alone' || verdict === 'cannot tell') {
+    const others = result.neighbours.length;
+    if (others > 0)
+      say('against', `${others} known galax${others === 1 ? 'y lies' : 'ies lie'} in the window, too faint to count.`);
+    const nearest = result.nearest;
+    if (nearest) {
+      say(
+        'note',
+        `The nearest row with a velocity in the window is ${neighbourName(nearest)}, ${kpc(projectedKpc(nearest.separationArcsec, detection.angularMpc))} and ${signedKms(nearest.velocityDifferenceKms)} away.`,
+      );
+    }
+  }
+  if (verdict === 'cannot tell')
+    for (const obstacle of result.obstacles) say('for', `It cannot be called alone: ${obstacle}.`);
+  if (factors && result.reach) {
+    const { reach } = result;
+    const how = reach.measured ? ' (measured from its rows)' : '';
+    say(
+      verdict === 'alone' ? 'for' : 'note',
+      `P(no neighbour ${scope}) is ${probability(factors.probability)}: none known in ${percent(factors.noneKnown)} of the distance draws, none unseen ${probability(factors.noneUnseen)}, covered ${percent(factors.covered)}. ` +
+        `Redshifts of ${reach.catalogue.input.name} reach ${reach.band} ${mag(reach.magnitude)}${how}, so that ${result.missed.toFixed(2)} neighbours are missed in the mean field and ${result.missedClustered.toFixed(2)} with clustering.`,
+    );
+  }
+  const flip = nearestFlip(detection.angularMpc, result);
+  if (flip) say('against', flip);
+  return grounds;
+}
+
+/** The distance at which the verdict on neighbours would change, as a sentence. */
+export function nearestFlip(angularMpc: number, { verdict, pool }: SurroundingsResult): string | undefined {
+  if (!(angularMpc > 0) || verdict !== 'alone') return undefined;
+  const reach = pool.filter(
+    ({ insideBelowMpc, countsAboveMpc }) => insideBelowMpc < angularMpc && countsAboveMpc < insideBelowMpc,
+  );
+  const best = reach.reduce<NeighbourRow | undefined>(
+    (most, row) => (most && most.insideBelowMpc >= row.insideBelowMpc ? most : row),
+    undefined,
+  );
+  return best && `It would be accompanied by ${neighbourName(best)} were it nearer than ${mpc(best.insideBelowMpc)}.`;
+}
+
+/** What the numbers rest on: distance, position, data that are missing. */
+export function dataGrounds({ detection, prior, priorSource, reliability, candidates }: StarlightAssessment): Ground[] {
+  const grounds: Ground[] = [];
+  const say = (about: Ground['about'], text: string, method: string | null = null) =>
+    grounds.push({ about, weight: 'note', text, method });
+  const { distance } = detection;
+  if (distance.kind === 'none')
+    say(
+      'distance',
+      `No distance is used: ${distance.reason}. Quantities in kpc and solar masses are withheld.`,
+      'distance',
+    );
+  else {
+    const how = {
+      measured: detection.distanceSource
+        ? `given by a person (${detection.distanceSource})`
+        : 'measured, from the table',
+      flow: `from the flow model at ${kms(distance.velocityUsedKms)}`,
+      hubble: `from the Hubble law at ${kms(distance.velocityUsedKms)}`,
+    }[distance.kind];
+    say('distance', `Distance ${mpc(distance.luminosityMpc)} +/- ${mpc(distance.errorMpc)}, ${how}.`, 'distance');
+    for (const caution of distance.cautions) say('distance', `Caution: ${caution}.`, 'distance');
+  }
+  say(
+    'data',
+    `Position error ${arcsec(detection.error.majorArcsec)} (one-dimensional), ${detection.errorSource}; search radius ${arcsec(detection.searchArcsec)}, ${detection.searchSource}.`,
+    'position',
+  );
+  say('data', `Prior share with a galaxy of stars: ${prior.toFixed(3)}, ${priorSource}.`, 'prior');
+  if (Number.isNaN(reliability))
+    say('data', 'No reliability of the line is given: it is taken as real.', 'reliability');
+  if (!(detection.fluxJyKms > 0))
+    say('data', 'No HI flux is given: the expected counterpart is known only roughly.', 'expected');
+  if (Number.isNaN(detection.ebvMag)) say('data', 'No reddening is given: extinction is taken as zero.', 'extinction');
+  const absurd = candidates.filter(
+    ({ czKms, usableCzKms }) => Number.isNaN(usableCzKms) && Number.isFinite(czKms),
+  ).length;
+  if (absurd > 0)
+    say(
+      'data',
+      `${absurd} redshift${absurd > 1 ? 's' : ''} above 0.3 or below -0.01 ${absurd > 1 ? 'are' : 'is'} ignored as nonsense for so near a detection.`,
+      'velocity',
+    );
+  return grounds;
+}
+
+const SERIOUS_WORDS: Record<string, string> = {
+  'spurious line': 'the line is to be confirmed',
+  cloud: 'a cloud of the Galaxy is not excluded',
+  debris: 'debris likely',
+  hydroxyl: 'a hydroxyl line is not excluded',
+  'recombination line': 'a recombination line is not excluded',
+  interference: 'interference is not excluded',
+  blend: 'a blend is likely',
+  sidelobe: 'a sidelobe is likely',
+  continuum: 'a continuum ripple is not excluded',
+  edge: 'at the edge of coverage',
+  distance: 'no reliable distance',
+};
+
+/** The headline with its qualification. */
+export function headlineOf(assessment: StarlightAssessment, doubts: readonly Doubt[]): string {
+  const name = assessment.dominating
+    ? rowName(assessment.dominating.face.catalogue, assessment.dominating.face.index)
+    : '';
+  const said = {
+    dark: 'no starlight found',
+    'nearly dark': `very little starlight for so much gas: ${name}`,
+    starlit: `starlight found: ${name}`,
+    contested: 'several possible hosts, none dominating',
+    confused: `${assessment.inBeam.length} galaxies at this velocity in the beam`,
+    'cannot tell': 'starlight cannot be told here',
+  }[assessment.starlight];
+  const serious = doubts.filter(({ grade }) => grade === 'serious').map(({ name: doubt }) => SERIOUS_WORDS[doubt]);
+  return [said, ...serious.filter((word) => word !== undefined)].join('; ');
+}

@@ -1,0 +1,64 @@
+import type { Doubt as ContractDoubt, Ground, VerdictDetail, VerdictItem } from '@eremite/shared/contracts/verdict';
+import type { Hypotheses } from '@eremite/shared/science/counterpart/exclusive';
+import type { Starlight } from '@eremite/shared/science/counterpart/starlight';
+import type { CandidateRow } from './candidate-row.ts';
+import type { Detection } from './detection-table.ts';
+import type { BeamGalaxy } from './gas-and-light.ts';
+import type { Silence } from './silence.ts';
+import type { NeighbourRow, SurroundingsResult } from './surroundings.ts';
+import type { ExpectationCache, WeighedObject } from './weigh-objects.ts';
+
+/** A bright star whose mask touches the search circle. */
+export interface StarMask {
+  raDeg: number;
+  decDeg: number;
+  radiusArcsec: number;
+  label: string;
+  eastArcsec: number;
+  northArcsec: number;
+}
+
+/** Everything found out about one detection before it is put into words. */
+export interface Assessment {
+  detection: Detection;
+  candidates: CandidateRow[];
+  objects: WeighedObject[];
+  expectations: ExpectationCache;
+  silence: Silence;
+  masks: StarMask[];
+  prior: number;
+  priorSource: string;
+  /** Reliability of the line used; NaN where none was given and 1 is taken. */
+  reliability: number;
+  probabilities: Hypotheses;
+  starlight: Starlight;
+  /** Most probable object, and the one that dominates, if any. */
+  best: WeighedObject | null;
+  dominating: WeighedObject | null;
+  accepted: WeighedObject | null;
+  inBeam: BeamGalaxy[];
+  gasToLight: number;
+  gasToLightIsLimit: boolean;
+  surroundings: SurroundingsResult;
+}
+
+export type ScoredItem = Omit<VerdictItem, 'detectionId' | 'settled' | 'reviews' | 'overrides'>;
+export type ScoredDetail = Omit<
+  VerdictDetail,
+  'runId' | 'runNumber' | 'criteriaNumber' | 'verdict' | 'candidates' | 'neighbours'
+>;
+
+/** One detection of a run, ready to be stored or written. */
+export interface ScoredDetection {
+  /** Place in the input order. */
+  position: number;
+  catalogueId: string;
+  row: number;
+  item: ScoredItem;
+  candidates: CandidateRow[];
+  neighbours: NeighbourRow[];
+  /** Made only when asked for. */
+  detail(): ScoredDetail;
+}
+
+export type { ContractDoubt, Ground };

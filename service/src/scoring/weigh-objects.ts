@@ -1,0 +1,217 @@
+import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
+import { chanceProbability } from '@eremite/shared/science/counterpart/chance';
+import {
+  backgroundDensity,
+  brighterDensity,
+  counterpartDensity,
+} from '@eremite/shared/science/counterpart/magnitude-term';
+import { mergeIntoObjects } from '@eremite/shared/science/counterpart/merge-objects';
+import { offsetDensity } from '@eremite/shared/science/counterpart/offset-density';
+import { velocityFactor, type VelocityModel, velocityScatter } from '@eremite/shared/science/counterpart/velocity-term';
+import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
+import type { CandidateRow } from './candidate-row.ts';
+import type { Detection } from './detection-table.ts';
+import { expectIn, type BandExpectation } from './expectation.ts';
+import type { PreparedBand, PreparedCatalogue } from './prepared-catalogue.ts';
+
+/** A physical object: rows of one or more catalogues. */
+export interface WeighedObject {
+  rows: CandidateRow[];
+  /** Best-measured row: the object's place. */
+  head: CandidateRow;
+  /** Row that stands for the object: that of its magnitude, else the best-measured one. */
+  face: CandidateRow;
+  band: PreparedBand | null;
+  /** Total over the pieces in one catalogue, in the system of the band; NaN where none. */
+  magnitude: number;
+  /** NaN where unknown. */
+  czKms: number;
+  velocityDifferenceKms: number;
+  discordant: boolean;
+  isStar: boolean;
+  override: 'accept' | 'reject' | null;
+  /** Factors of X for prior one. */
+  positionFactor: number;
+  magnitudeFactor: number;
+  velocityFactor: number;
+  /** X for prior one. */
+  weight: number;
+}
+
+/** What is fixed for a run once everything that is learnt has been learnt. */
+export interface WeighingModel {
+  criteria: CriteriaSettings;
+  relation: GasStarRelation;
+  velocity: VelocityModel;
+}
+
+/** Velocity errors where tables give none, km/s. Common practice. */
+const HI_ERROR_KMS = 5;
+const OPTICAL_ERROR_KMS = 30;
+/** Share of HI-selected galaxies that continuum tables of ordinary depth show; from memory, our choice. */
+const CONTINUUM_SHARE = 0.05;
+
+/** Scatter of gas and star velocities of a detection, km/s. */
+export function velocityScatterOf({ width50Kms }: Detection, criteria: CriteriaSettings): number {
+  const rotation = width50Kms > 0 ? width50Kms / 4 : 0;
+  return velocityScatter(
+    HI_ERROR_KMS,
+    OPTICAL_ERROR_KMS,
+    Math.max(criteria.counterpart.intrinsicVelocityKms, rotation),
+  );
+}
+
+/** Expectations of a detection by band, each made once. */
+export class ExpectationCache {
+  private readonly byBand = new Map<PreparedBand, BandExpectation | undefined>();
+  constructor(
+    private readonly detection: Detection,
+    private readonly relation: GasStarRelation,
+  ) {}
+
+  in(band: PreparedBand): BandExpectation | undefined {
+    if (!this.byBand.has(band)) this.byBand.set(band, expectIn(this.detection, band, this.relation));
+    return this.byBand.get(band);
+  }
+}
+
+/** Groups candidate rows into objects, in the order in which they first appear. Sets `object` of each row. */
+export function groupObjects(rows: readonly CandidateRow[]): WeighedObject[] {
+  const numbers = mergeIntoObjects(
+    rows.map((row) => ({
+      eastArcsec: row.eastArcsec,
+      northArcsec: row.northArcsec,
+      sigmaArcsec: row.sigmaArcsec,
+      effectiveRadiusArcsec: row.effectiveRadiusArcsec,
+      catalogue: row.catalogue.index,
+      density: row.catalogue.density,
+      czKms: row.usableCzKms,
+    })),
+  );
+  const members: CandidateRow[][] = [];
+  rows.forEach((row, i) => {
+    row.object = numbers[i]!;
+    (members[row.object] ??= []).push(row);
+  });
+  return members.map(makeObject);
+}
+
+function makeObject(rows: CandidateRow[]): WeighedObject {
+  let head = rows[0]!;
+  for (const row of rows) if (row.sigmaArcsec < head.sigmaArcsec) head = row;
+  const moving = rows.find((row) => !Number.isNaN(row.usableCzKms));
+  return {
+    rows,
+    head,
+    face: head,
+    band: null,
+    magnitude: NaN,
+    czKms: moving ? moving.usableCzKms : NaN,
+    velocityDifferenceKms: moving ? moving.velocityDifferenceKms : NaN,
+    discordant: false,
+    isStar: rows.some((row) => row.isStar),
+    override: rows.some((row) => row.override === 'accept')
+      ? 'accept'
+      : rows.some((row) => row.override === 'reject')
+        ? 'reject'
+        : null,
+    positionFactor: 0,
+    magnitudeFactor: 1,
+    velocityFactor: 1,
+    weight: 0,
+  };
+}
+
+/** Chooses the magnitude of an object: the band best liked, and in it the brightest piece with the flux of all pieces. */
+function chooseMagnitude(object: WeighedObject, rank: (band: PreparedBand) => number): void {
+  let best: CandidateRow | undefined;
+  let bestRank = Infinity;
+  for (const row of object.rows) {
+    if (row.band < 0) continue;
+    const place = rank(row.catalogue.bands[row.band]!);
+    if (!best || place < bestRank || (place === bestRank && better(row, best))) {
+      best = row;
+      bestRank = place;
+    }
+  }
+  if (!best) return;
+  const band = best.catalogue.bands[best.band]!;
+  let flux = 0;
+  for (const row of object.rows) {
+    if (row.catalogue === best.catalogue && row.band === best.band) flux += 10 ** (-0.4 * row.magnitude);
+  }
+  object.face = best;
+  object.band = band;
+  object.magnitude = -2.5 * Math.log10(flux);
+}
+
+const better = (row: CandidateRow, than: CandidateRow): boolean =>
+  row.catalogue === than.catalogue ? row.magnitude < than.magnitude : false;
+
+/**
+ * Weighs the objects about a detection: X of each for prior one, position x magnitude x velocity, each entering once.
+ */
+export function weighObjects(
+  detection: Detection,
+  objects: readonly WeighedObject[],
+  expectations: ExpectationCache,
+  model: WeighingModel,
+): void {
+  const { criteria } = model;
+  const preference = criteria.counterpart.bandPreference;
+  const rank = (band: PreparedBand) => {
+    const place = preference.indexOf(band.name);
+    return place < 0 ? 1000 : place;
+  };
+  const scatter = velocityScatterOf(detection, criteria);
+  for (const object of objects) {
+    chooseMagnitude(object, rank);
+    const { head, band, magnitude } = object;
+    const f = offsetDensity(detection.covariance, head.sigmaArcsec, head.eastArcsec, head.northArcsec, detection.tail);
+    object.positionFactor = f / object.face.catalogue.density;
+    object.magnitudeFactor = magnitudeFactor(object.face.catalogue, band, magnitude, expectations);
+    object.discordant = Math.abs(object.velocityDifferenceKms) > criteria.counterpart.discordantKms;
+    object.velocityFactor = Number.isNaN(object.velocityDifferenceKms)
+      ? 1
+      : velocityFactor(object.velocityDifferenceKms, scatter, model.velocity);
+    const excluded = object.isStar || object.override === 'reject';
+    object.weight = excluded ? 0 : object.positionFactor * object.magnitudeFactor * object.velocityFactor;
+  }
+}
+
+/** w_m = q(m) / [n(m) / n]: 1 where the magnitude is unknown or the band's light cannot be predicted. */
+function magnitudeFactor(
+  catalogue: PreparedCatalogue,
+  band: PreparedBand | null,
+  magnitude: number,
+  expectations: ExpectationCache,
+): number {
+  if (!band?.counts) return catalogue.input.kind === 'continuum' ? CONTINUUM_SHARE : 1;
+  const expected = expectations.in(band);
+  if (!expected) return 1;
+  return (counterpartDensity(expected, magnitude) * catalogue.density) / backgroundDensity(band.counts, magnitude);
+}
+
+/** Chance probability and likelihood ratio of each row by itself, for those who want them. */
+export function rateRows(
+  detection: Detection,
+  rows: readonly CandidateRow[],
+  expectations: ExpectationCache,
+  foundFraction: number,
+): void {
+  for (const row of rows) {
+    const { catalogue } = row;
+    const band = row.band < 0 ? null : catalogue.bands[row.band]!;
+    const counts = band?.counts;
+    const brighter = counts ? brighterDensity(counts, row.magnitude) : catalogue.density;
+    row.chanceProbability = chanceProbability(
+      row.separationArcsec,
+      brighter,
+      detection.searchArcsec,
+      counts ? counts.total : catalogue.density,
+    );
+    const f = offsetDensity(detection.covariance, row.sigmaArcsec, row.eastArcsec, row.northArcsec, detection.tail);
+    row.likelihoodRatio =
+      (foundFraction * f * magnitudeFactor(catalogue, band, row.magnitude, expectations)) / catalogue.density;
+  }
+}
