@@ -24,7 +24,7 @@ const SEPARATED = new RegExp(
 );
 const MARKED = new RegExp(String.raw`^(${NUMBER})\s*([hd])(?:\s*(${NUMBER})\s*(?:m|$)(?:\s*(${NUMBER})\s*s?)?)?$`);
 
-/** Text with the many signs for minus, degree, minute and second brought to `-`, `d`, `m`, `s`. */
+/** Text with the many signs for minus, hour, degree, minute, second brought to `-hdms`; `49s.4` becomes `49.4s`. */
 function plainText(text: string): string {
   return text
     .replace(/[\u00A0\u2000-\u200A\u202F\u3000]/g, ' ')
@@ -33,7 +33,11 @@ function plainText(text: string): string {
     .replace(SECOND_MARK, 's')
     .replace(MINUTE_MARK, 'm')
     .replace(DEGREE_MARK, 'd')
-    .toLowerCase();
+    .replace(/\u02B0/g, 'h')
+    .replace(/\u1D50/g, 'm')
+    .replace(/\u02E2/g, 's')
+    .toLowerCase()
+    .replace(/s\.(\d+)$/, '.$1s');
 }
 
 /**
