@@ -1,0 +1,154 @@
+import type { VerdictItem } from '@eremite/shared/contracts/verdict';
+import { Injectable } from '@nestjs/common';
+import { BulkStore } from '../../database/bulk.ts';
+import type { JobContext, JobHandler } from '../../jobs/job-handler.ts';
+import { LedgerService } from '../ledger/ledger.service.ts';
+import { RunInputs } from './run-inputs.ts';
+import type { StoredVerdict } from './run-messages.ts';
+import { scoreInThread } from './run-thread.ts';
+import { type RunRow, RunsRepository } from './runs.repository.ts';
+
+interface Payload {
+  runId: string;
+}
+type Counts = { detections: number; starlight: Record<string, number>; surroundings: Record<string, number> };
+
+/** Share of a run's time that goes into reading its tables. */
+const READING = 0.15;
+const VERDICT_COLUMNS = [
+  ['run_id', 'uuid'],
+  ['detection_id', 'uuid'],
+  ['position', 'int4'],
+  ['name', 'text'],
+  ['ra_deg', 'float8'],
+  ['dec_deg', 'float8'],
+  ['velocity_kms', 'float8'],
+  ['distance_mpc', 'float8'],
+  ['log_hi_mass', 'float8'],
+  ['starlight', 'text'],
+  ['p_none', 'float8'],
+  ['p_missed', 'float8'],
+  ['p_spurious', 'float8'],
+  ['power', 'float8'],
+  ['surroundings', 'text'],
+  ['p_alone', 'float8'],
+  ['item', 'jsonb'],
+  ['detail', 'jsonb'],
+] as const;
+const EVIDENCE_COLUMNS = [
+  ['run_id', 'uuid'],
+  ['detection_id', 'uuid'],
+  ['candidates', 'bytea'],
+  ['neighbours', 'bytea'],
+] as const;
+
+/**
+ * Does a run: reads its tables, scores in a thread, stages verdicts and evidence, and makes them visible together with
+ * the run's end in one transaction. A run that was interrupted starts again from nothing, since its inputs are fixed.
+ */
+@Injectable()
+export class RunJob implements JobHandler<Payload, { runId: string }> {
+  readonly kind = 'run';
+
+  constructor(
+    private readonly runs: RunsRepository,
+    private readonly inputs: RunInputs,
+    private readonly bulk: BulkStore,
+    private readonly ledger: LedgerService,
+  ) {}
+
+  async run({ runId }: Payload, { signal, progress }: JobContext): Promise<{ runId: string }> {
+    await this.runs.clear(runId);
+    await this.runs.update(runId, { state: 'running', startedAt: new Date(), error: null });
+    const run = (await this.runs.find(runId))!;
+    const input = await this.inputs.load(run, signal, (fraction, message) => progress(READING * fraction, message));
+    const ids = new Map<string, string>();
+    const lists = input.catalogues.filter((catalogue) => catalogue.kind === 'hi').map((catalogue) => catalogue.id);
+    for (const { id, catalogueId, row } of await this.runs.detectionIds(lists)) ids.set(`${catalogueId}/${row}`, id);
+    const counts: Counts = { detections: 0, starlight: {}, surroundings: {} };
+    const outcome = await scoreInThread(input, {
+      signal,
+      progress: (fraction, message) => progress(READING + (1 - READING) * fraction * 0.99, message),
+      take: (verdicts) => this.#store(runId, verdicts, ids, counts),
+    });
+    signal.throwIfAborted();
+    await this.#finish(run, { ...counts, ...outcome.totals }, outcome);
+    return { runId };
+  }
+
+  async #store(runId: string, verdicts: StoredVerdict[], ids: Map<string, string>, counts: Counts): Promise<void> {
+    const rows: unknown[][] = [];
+    const evidence: unknown[][] = [];
+    for (const verdict of verdicts) {
+      const detectionId = ids.get(`${verdict.catalogueId}/${verdict.row}`)!;
+      const stored = {
+        ...(JSON.parse(verdict.item) as VerdictItem),
+        detectionId,
+        settled: null,
+        reviews: 0,
+        overrides: 0,
+      };
+      counts.detections += 1;
+      counts.starlight[stored.starlight] = (counts.starlight[stored.starlight] ?? 0) + 1;
+      counts.surroundings[stored.surroundings] = (counts.surroundings[stored.surroundings] ?? 0) + 1;
+      rows.push([
+        runId,
+        detectionId,
+        verdict.position,
+        stored.name,
+        stored.raDeg,
+        stored.decDeg,
+        stored.velocityKms,
+        stored.distanceMpc,
+        stored.logHiMass,
+        stored.starlight,
+        stored.pNone,
+        stored.pMissed,
+        stored.pSpurious,
+        stored.power,
+        stored.surroundings,
+        stored.pAlone,
+        stored,
+        JSON.parse(verdict.detail),
+      ]);
+      evidence.push([runId, detectionId, verdict.candidates, verdict.neighbours]);
+    }
+    await this.bulk.copyInto(
+      'verdicts',
+      VERDICT_COLUMNS.map(([name, type]) => ({ name, type })),
+      [rows],
+    );
+    await this.bulk.copyInto(
+      'evidence',
+      EVIDENCE_COLUMNS.map(([name, type]) => ({ name, type })),
+      [evidence],
+    );
+  }
+
+  async #finish(run: RunRow, counts: object, { notes, control }: { notes: string[]; control: unknown }): Promise<void> {
+    await this.runs.transaction(async (tx) => {
+      await this.runs.update(run.id, { state: 'done', finishedAt: new Date(), counts, control, notes }, tx);
+      const actor = { id: run.createdById, name: run.createdBy };
+      await this.ledger.append(
+        {
+          surveyId: run.surveyId,
+          actor,
+          action: 'finished a run',
+          subject: `run ${run.number}`,
+          detail: { runId: run.id, counts },
+        },
+        tx,
+      );
+    });
+  }
+
+  async recover({ runId }: Payload): Promise<void> {
+    await this.runs.clear(runId);
+    await this.runs.update(runId, { state: 'queued', startedAt: null });
+  }
+
+  async ended({ runId }: Payload, { state, error }: { state: 'failed' | 'cancelled'; error: string }): Promise<void> {
+    await this.runs.clear(runId);
+    await this.runs.update(runId, { state, error, finishedAt: new Date() });
+  }
+}

@@ -1,0 +1,44 @@
+import { once } from 'node:events';
+import { parentPort, workerData } from 'node:worker_threads';
+import { packCandidates, packNeighbours } from '../../scoring/evidence.ts';
+import { runEngine } from '../../scoring/run-engine.ts';
+import type { RunMessage, RunTask, StoredVerdict } from './run-messages.ts';
+
+// Scoring keeps a thread busy for seconds to minutes; here it does so without keeping requests waiting.
+const port = parentPort!;
+const { input } = workerData as RunTask;
+const send = (message: RunMessage, transfer: ArrayBuffer[] = []): void => port.postMessage(message, transfer);
+const totals = { candidates: 0, neighbours: 0 };
+
+runEngine(
+  input,
+  async (scored, engine) => {
+    const verdicts = scored.map((one): StoredVerdict => {
+      const detection = engine.detections[one.position]!;
+      totals.candidates += one.candidates.length;
+      totals.neighbours += one.neighbours.length;
+      return {
+        position: one.position,
+        catalogueId: one.catalogueId,
+        row: one.row,
+        item: JSON.stringify(one.item),
+        detail: JSON.stringify(one.detail()),
+        candidates: packCandidates(one.candidates, detection),
+        neighbours: packNeighbours(one.neighbours, detection),
+      };
+    });
+    const taken = once(port, 'message');
+    send(
+      { kind: 'verdicts', verdicts },
+      verdicts.flatMap((one) => [one.candidates.buffer, one.neighbours.buffer] as ArrayBuffer[]),
+    );
+    await taken;
+  },
+  { onProgress: (fraction, message) => send({ kind: 'progress', fraction, message }) },
+)
+  .then(({ notes, control }) => send({ kind: 'done', notes, control, totals }))
+  .catch((error: unknown) => {
+    const { message, stack } = error instanceof Error ? error : new Error(String(error));
+    send({ kind: 'failed', message, ...(stack !== undefined && { stack }) });
+  })
+  .finally(() => port.close());

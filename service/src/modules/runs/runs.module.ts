@@ -1,0 +1,34 @@
+import { Module } from '@nestjs/common';
+import { TileStore } from '../../tiles/tile-store.ts';
+import { CriteriaModule } from '../criteria/criteria.module.ts';
+import { LedgerModule } from '../ledger/ledger.module.ts';
+import { SurveysModule } from '../surveys/surveys.module.ts';
+import { DocketService } from './docket.service.ts';
+import { EvidenceService } from './evidence.service.ts';
+import { OverviewService } from './overview.service.ts';
+import { RunInputs } from './run-inputs.ts';
+import { RunJob } from './run.job.ts';
+import { RunsController } from './runs.controller.ts';
+import { RunsRepository } from './runs.repository.ts';
+import { RunsService } from './runs.service.ts';
+import { VerdictsRepository } from './verdicts.repository.ts';
+import { VerdictsService } from './verdicts.service.ts';
+
+@Module({
+  imports: [LedgerModule, CriteriaModule, SurveysModule],
+  controllers: [RunsController],
+  providers: [
+    RunsService,
+    VerdictsService,
+    EvidenceService,
+    DocketService,
+    OverviewService,
+    RunJob,
+    RunInputs,
+    TileStore,
+    RunsRepository,
+    VerdictsRepository,
+  ],
+  exports: [RunsService, VerdictsService],
+})
+export class RunsModule {}
