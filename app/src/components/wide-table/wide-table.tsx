@@ -1,0 +1,40 @@
+import { Cell, Column, ColumnHeaderCell, RenderMode, RowHeaderCell, SelectionModes, Table } from '@blueprintjs/table';
+import '@blueprintjs/table/lib/css/table.css';
+import './wide-table.css';
+
+interface WideTableProps {
+  label: string;
+  columns: readonly { name: string; note?: string | null }[];
+  rows: readonly (readonly string[])[];
+  /** Number of the first row, counted as the file counts them. */
+  firstRow?: number;
+  rowNumbers?: readonly number[];
+}
+
+/** Many columns for reading: only the cells in sight are drawn. Nothing is decided here, so it needs no roles. */
+export function WideTable({ label, columns, rows, firstRow = 1, rowNumbers }: WideTableProps) {
+  return (
+    <div className="wide-table" role="region" aria-label={label} tabIndex={0}>
+      <Table
+        numRows={rows.length}
+        renderMode={RenderMode.BATCH_ON_UPDATE}
+        selectionModes={SelectionModes.NONE}
+        defaultColumnWidth={128}
+        defaultRowHeight={24}
+        enableRowResizing={false}
+        enableGhostCells={false}
+        cellRendererDependencies={[rows, columns]}
+        rowHeaderCellRenderer={(row) => <RowHeaderCell name={String(rowNumbers?.[row] ?? firstRow + row)} />}
+      >
+        {columns.map(({ name, note }, at) => (
+          <Column
+            key={name + String(at)}
+            name={name}
+            columnHeaderCellRenderer={() => <ColumnHeaderCell name={note ? `${name}  ${note}` : name} />}
+            cellRenderer={(row) => <Cell>{rows[row]?.[at] ?? ''}</Cell>}
+          />
+        ))}
+      </Table>
+    </div>
+  );
+}

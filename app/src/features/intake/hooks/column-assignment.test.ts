@@ -1,0 +1,46 @@
+import type { IntakeColumn } from '@eremite/shared/contracts/intake';
+import { describe, expect, it } from 'vitest';
+import { assign, readAssignment, writeAssignment } from './column-assignment.ts';
+
+const column = (name: string, guess: string | null): IntakeColumn => ({
+  name,
+  guess,
+  unit: null,
+  ucd: null,
+  description: null,
+  type: 'number',
+  confidence: guess ? 0.9 : 0,
+});
+const COLUMNS = [column('id', 'name'), column('ra', 'ra'), column('rmag', 'magnitude:r'), column('e_rmag', 'magnitudeError:r'), column('x', null)];
+
+describe('the roles of columns', () => {
+  it('are the guesses where the settings are silent', () => {
+    expect(readAssignment(COLUMNS, {})).toEqual({
+      id: 'name',
+      ra: 'ra',
+      rmag: 'magnitude:r',
+      e_rmag: 'magnitudeError:r',
+      x: null,
+    });
+  });
+
+  it('stay none where the settings say none, though there is a guess', () => {
+    expect(readAssignment(COLUMNS, { columns: { name: null } })['id']).toBeNull();
+  });
+
+  it('survive being written and read again', () => {
+    const moved = assign(readAssignment(COLUMNS, {}), 'x', 'velocity');
+    expect(readAssignment(COLUMNS, { columns: writeAssignment(moved) })).toEqual(moved);
+  });
+
+  it('belong to one column only', () => {
+    const moved = assign(readAssignment(COLUMNS, {}), 'x', 'ra');
+    expect([moved['ra'], moved['x']]).toEqual([null, 'ra']);
+  });
+
+  it('keep a magnitude with its error and its band', () => {
+    expect(writeAssignment(readAssignment(COLUMNS, {})).magnitudes).toEqual([
+      { column: 'rmag', error: 'e_rmag', limitFlag: null, band: 'r' },
+    ]);
+  });
+});
