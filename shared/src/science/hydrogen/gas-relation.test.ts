@@ -87,5 +87,6 @@ describe('gas-to-light ratio', () => {
     const direct = gasToLightFromFlux(1.2, 18.3, BANDS.r.solarAb, false).ratio;
     expect(at(5) / direct).toBeCloseTo(1, 9);
     expect(at(90) / direct).toBeCloseTo(1, 9);
+    expect(gasToLightFromFlux(1.2, 18.3, BANDS.r.solarAb, false, 0.05).ratio).toBeCloseTo(direct / 1.05 ** 2, 9);
   });
 });
