@@ -30,7 +30,11 @@ export class ChunkBuilder {
       const mark = column.nullMark === undefined ? {} : { nullMark: column.nullMark };
       return column.type === 'text' || column.type === 'boolean'
         ? new TextColumn(this.capacity, column.nullMark)
-        : new NumberColumn(this.capacity, { ...options, ...mark });
+        : new NumberColumn(this.capacity, {
+            ...options,
+            ...mark,
+            isFloat: Boolean(options.lenient) && column.type === 'number',
+          });
     });
     this.lines = new Uint32Array(options.withLines ? this.capacity : 0);
     this.rowNumbers = new Uint32Array(this.capacity);

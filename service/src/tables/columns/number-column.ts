@@ -12,6 +12,8 @@ export interface NumberColumnOptions {
   decimalComma?: boolean;
   /** Reads 1.5D+03 as FORTRAN programs write it, and 0x1F as VOTable allows. */
   lenient?: boolean;
+  /** The file declares floating-point numbers, so that no digits of an identifier can be lost. */
+  isFloat?: boolean;
 }
 
 /** Collects one column of numbers. */
@@ -79,7 +81,8 @@ export class NumberColumn {
   private putOddCell(row: number, value: number, text: string): void {
     if (text === this.options.nullMark || value === this.nullValue || isMissingWord(text)) this.values[row] = NaN;
     else if (Number.isFinite(value)) {
-      const losesDigits = /^[+-]?\d+$/.test(text) && (/^0\d\d/.test(text) || !Number.isSafeInteger(value));
+      const losesDigits =
+        !this.options.isFloat && /^[+-]?\d+$/.test(text) && (/^0\d\d/.test(text) || !Number.isSafeInteger(value));
       if (losesDigits) this.keep(row, value, text);
       else this.values[row] = value;
     } else {

@@ -9,10 +9,12 @@ export interface ByteByByte {
   starts: number[];
   ends: number[];
   notes: string[];
+  /** Index of the rule that closes it; -1 when the text breaks off before. */
+  endLine: number;
 }
 
 const TITLE = /^\s*Byte-by-byte Description of file[s]?\s*[:(]?\s*(.*)$/i;
-const COLUMN = /^\s{0,12}(\d+)\s*(?:-\s*(\d+))?\s+([AIFED])(\d*)(?:\.\d+)?\s+(\S+)\s+(\S+)(?:\s+(.*))?$/i;
+const COLUMN = /^\s{0,12}(\d+)\s*(?:-\s*(\d+))?\s+([AIFED])\d*(?:\.\d+)?\s+(\S+)\s+(\S+)(?:\s+(.*))?$/i;
 /** Range, then "?" with an optional null value, then what is said. */
 const NULL_MARK = /^\s*(?:[[\]]\S*[[\]])?\s*\?(?:=(\S*))?[-+]?=?\s*(.*)$/;
 
@@ -20,7 +22,6 @@ interface Entry {
   start: number;
   end: number;
   format: string;
-  width: number;
   unit: string;
   label: string;
   explanation: string;
@@ -49,7 +50,7 @@ export function readByteByByte(lines: string[]): ByteByByte[] {
     at += 2;
     const entries: Entry[] = [];
     for (; at < lines.length && !isRule(lines[at]!); at++) addLine(entries, lines[at]!);
-    found.push(describe(files, entries));
+    found.push(describe(files, entries, at < lines.length ? at : -1));
   }
   return found;
 }
@@ -61,19 +62,18 @@ function addLine(entries: Entry[], line: string): void {
     if (last !== undefined && line.trim() !== '') last.explanation += ` ${line.trim()}`;
     return;
   }
-  const [, first, until, format, width, unit, label, explanation] = parts;
+  const [, first, until, format, unit, label, explanation] = parts;
   entries.push({
     start: Number(first) - 1,
     end: Number(until ?? first),
     format: format!.toUpperCase(),
-    width: Number(width || 0),
     unit: unit!,
     label: label!,
     explanation: explanation ?? '',
   });
 }
 
-function describe(files: string[], entries: Entry[]): ByteByByte {
+function describe(files: string[], entries: Entry[], endLine: number): ByteByByte {
   // Columns labelled "---" hold separators such as "=" or ":", not data.
   const kept = entries.filter((entry) => !/^-+$/.test(entry.label) && entry.end > entry.start);
   const notes: string[] = [];
@@ -87,12 +87,13 @@ function describe(files: string[], entries: Entry[]): ByteByByte {
     starts: kept.map((entry) => entry.start),
     ends: kept.map((entry) => entry.end),
     notes,
+    endLine,
   };
 }
 
-function columnFacts({ format, width, unit, explanation }: Entry, name: string): ColumnFacts {
+function columnFacts({ format, unit, explanation }: Entry, name: string): ColumnFacts {
   const isWhole = format === 'I';
-  const type = format === 'A' || (isWhole && width > 15) ? 'text' : isWhole ? 'integer' : 'number';
+  const type = format === 'A' ? 'text' : isWhole ? 'integer' : 'number';
   const facts: ColumnFacts = { name, type };
   if (!/^-+$/.test(unit)) facts.unit = unit;
   const mark = NULL_MARK.exec(explanation);

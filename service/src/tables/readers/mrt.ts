@@ -1,10 +1,11 @@
 import { type Content, readHead } from '../bytes/content.ts';
 import { detectEncoding } from '../bytes/encoding.ts';
 import { cellText } from '../columns/cell-text.ts';
-import { type OpenTable, type ReaderLimits, TableError } from '../table.ts';
+import { type OpenTable, type ReaderLimits, TableError, type TableFacts } from '../table.ts';
 import { type ByteByByte, hasByteByByte, isRule, readByteByByte } from './byte-by-byte.ts';
 import { tableName } from './delimited.ts';
 import { type FixedWidthLayout, fixedWidthRows } from './fixed-width-rows.ts';
+import { settleLongColumns } from './settle-long-columns.ts';
 
 /** Whether a file begins as a journal's machine-readable table or is a ReadMe with byte-by-byte descriptions. */
 export function isMrt(head: Buffer): boolean {
@@ -28,9 +29,13 @@ export async function openMrt(content: Content, limits: ReaderLimits): Promise<O
       { line: last + 1 },
     );
   }
+  if (description.endLine < 0) {
+    const message = 'The byte-by-byte description breaks off before the rule that closes it.';
+    throw new TableError('truncated', message, 'Fetch the table again.', { line: lines.length });
+  }
   let first = last + 1;
   // Notes that no rule closes: "Note (1): ..." and what is indented below it.
-  if (/^Note\b/.test(lines[first] ?? '')) while (/^(Note\b|\s{8})/.test(lines[first] ?? '')) first++;
+  if (/^Notes?\b/.test(lines[first] ?? '')) while (/^(Notes?\b|\s{8})/.test(lines[first] ?? '')) first++;
   const dataStart = byteOfLine(content.head, first);
   return openDescribed(content, description, { dataStart, dataLine: first + 1 }, headline(lines), limits);
 }
@@ -54,13 +59,13 @@ export async function openWithReadMe(content: Content, readMe: Content, limits: 
   return openDescribed(content, description, { dataStart: 0, dataLine: 1 }, headline(lines), limits);
 }
 
-function openDescribed(
+async function openDescribed(
   content: Content,
   description: ByteByByte,
   place: Pick<FixedWidthLayout, 'dataStart' | 'dataLine'>,
   title: string | undefined,
   limits: ReaderLimits,
-): OpenTable {
+): Promise<OpenTable> {
   const { columns, starts, ends, notes } = description;
   if (columns.length === 0) {
     throw new TableError('bad-header', 'The byte-by-byte description names no column.', 'Fetch the table again.');
@@ -73,20 +78,18 @@ function openDescribed(
     const message = 'The table is UTF-16, but its columns are counted in bytes.';
     throw new TableError('encoding', message, 'Save it as plain text (ASCII or UTF-8).', { byte: 0 });
   }
-  return {
-    format: 'mrt',
-    tables: [
-      {
-        index: 0,
-        name: tableName(content.name ?? description.files[0]),
-        ...(title === undefined ? {} : { description: title }),
-        columns,
-        declaredRows: null,
-        notes,
-      },
-    ],
-    rows: () => fixedWidthRows(content, columns, { starts, ends, ...place }, limits),
+  const facts: TableFacts = {
+    index: 0,
+    name: tableName(content.name ?? description.files[0]),
+    ...(title === undefined ? {} : { description: title }),
+    columns,
+    declaredRows: null,
+    notes,
   };
+  const rows = () => fixedWidthRows(content, columns, { starts, ends, ...place }, limits);
+  const longs = columns.flatMap(({ type }, i) => (type === 'integer' && ends[i]! - starts[i]! > 15 ? [i] : []));
+  await settleLongColumns(facts, longs, rows);
+  return { format: 'mrt', tables: [facts], rows };
 }
 
 function chooseDescription(descriptions: ByteByByte[], name: string | undefined): ByteByByte | undefined {
