@@ -1,8 +1,11 @@
 import { join } from 'node:path';
 import { openMatchingPool } from '@eremite/service/matching/matching-pool.ts';
-import { buildSharedGrid, sharedNeighbourSearch, sharedPairSearch } from '@eremite/service/matching/shared-search.ts';
-import { buildVelocityGrid } from '@eremite/service/matching/velocity-grid.ts';
-import { sharedMemory } from '@eremite/service/matching/zone-grid.ts';
+import {
+  buildSharedGrid,
+  buildSharedVelocityGrid,
+  sharedNeighbourSearch,
+  sharedPairSearch,
+} from '@eremite/service/matching/shared-search.ts';
 import { seeded } from '@eremite/service/matching/testing/brute-force.ts';
 import { inTileOrder, type Shared, shared, sky } from './sky-data.ts';
 
@@ -43,7 +46,7 @@ function pairCase(title: string, rows: number, aim: number, decLowDeg = -90, til
     close: pool.close,
     once: async () => {
       const start = performance.now();
-      const grid = await buildSharedGrid(pool.runner(), pool.threads, row.raDeg, row.decDeg);
+      const grid = await buildSharedGrid(pool.runner(), pool.threads, row);
       const built = performance.now();
       const pairs = await sharedPairSearch(pool.runner(), pool.threads, grid, positions);
       const done = performance.now();
@@ -80,7 +83,7 @@ function neighbourCase(): BenchCase {
     close: pool.close,
     once: async () => {
       const start = performance.now();
-      const grid = buildVelocityGrid(rows.raDeg, rows.decDeg, rowCzKms, sharedMemory);
+      const grid = await buildSharedVelocityGrid(pool.runner(), pool.threads, { ...rows, only: rowCzKms });
       const built = performance.now();
       const found = await sharedNeighbourSearch(pool.runner(), pool.threads, grid, queries);
       const done = performance.now();

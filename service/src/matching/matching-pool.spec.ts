@@ -47,7 +47,7 @@ describe('the pool of matching threads', () => {
   const positions = { ...evenSky(300, 96), radiusArcsec: new Float64Array(300).fill(20_000) };
 
   it('gives the grid and pairs of one thread', async () => {
-    const grid = await buildSharedGrid(pool.runner(), 2, rows.raDeg, rows.decDeg);
+    const grid = await buildSharedGrid(pool.runner(), 2, rows);
     const alone = buildZoneGrid(rows.raDeg, rows.decDeg);
     expect([...grid.row]).toEqual([...alone.row]);
     const pairs = await sharedPairSearch(pool.runner(), 2, grid, positions);
@@ -55,7 +55,7 @@ describe('the pool of matching threads', () => {
     expect(pairs).toEqual(pairSearch(alone, positions));
   });
   it('hands on refusals with their class and numbers', async () => {
-    const grid = await buildSharedGrid(pool.runner(), 2, rows.raDeg, rows.decDeg);
+    const grid = await buildSharedGrid(pool.runner(), 2, rows);
     const limited = sharedPairSearch(pool.runner(), 2, grid, positions, 10);
     await expect(limited).rejects.toBeInstanceOf(HitLimitError);
     await expect(limited).rejects.toMatchObject({ limit: 10 });
@@ -64,7 +64,7 @@ describe('the pool of matching threads', () => {
   });
   it('stops within a second when told, and works on', async () => {
     const all = { ...evenSky(20_000, 97), radiusArcsec: new Float64Array(20_000).fill(648_000) };
-    const grid = await buildSharedGrid(pool.runner(), 2, rows.raDeg, rows.decDeg);
+    const grid = await buildSharedGrid(pool.runner(), 2, rows);
     const stop = new AbortController();
     const search = sharedPairSearch(pool.runner(stop.signal), 2, grid, all, 1e9).catch((error: Error) => error.name);
     await new Promise((resolve) => setTimeout(resolve, 200));

@@ -1,26 +1,24 @@
 import { type NeighbourQueries, type Neighbours, neighbourSearch } from './neighbour-search.ts';
 import { type Pairs, pairSearch, type SearchPositions } from './pair-search.ts';
 import type { SearchRange } from './search-range.ts';
-import type { Numbers } from './sky-position.ts';
 import type { VelocityGrid } from './velocity-grid.ts';
-import type { ZoneGrid } from './zone-grid.ts';
-import { countBlocks, declinationRange, placeBlocks, type Spread, spreadRows } from './zone-grid-steps.ts';
+import type { GridSource, ZoneGrid } from './zone-grid.ts';
+import { countBlocks, measureRows, placeBlocks, type RowsMeasured, spreadRows } from './zone-grid-steps.ts';
 import type { ZoneLayout } from './zone-layout.ts';
 
 interface RowRange {
-  raDeg: Numbers;
-  decDeg: Numbers;
+  source: GridSource;
   from: number;
   to: number;
 }
 
 /** What a thread can be asked, and what it answers. Grids and scratch arrays lie in shared memory and are written there. */
 export interface MatchingTasks {
-  declinationRange: { task: RowRange; result: [low: number, high: number] };
-  countBlocks: { task: Omit<RowRange, 'raDeg'> & { layout: ZoneLayout }; result: Uint32Array };
-  spreadRows: { task: RowRange & { layout: ZoneLayout; next: Uint32Array; spread: Spread }; result: void };
+  measureRows: { task: RowRange; result: RowsMeasured };
+  countBlocks: { task: RowRange & { layout: ZoneLayout }; result: Uint32Array };
+  spreadRows: { task: RowRange & { layout: ZoneLayout; next: Uint32Array; spread: Uint32Array }; result: void };
   placeBlocks: {
-    task: { grid: ZoneGrid; spread: Spread; starts: Uint32Array; from: number; to: number };
+    task: { grid: ZoneGrid; spread: Uint32Array; starts: Uint32Array; from: number; to: number };
     result: void;
   };
   pairSearch: { task: { grid: ZoneGrid; positions: SearchPositions; range: SearchRange }; result: Pairs };
@@ -35,9 +33,9 @@ export type TaskRunner = <N extends TaskName>(
 ) => Promise<MatchingTasks[N]['result']>;
 
 const kernels: { [N in TaskName]: (task: MatchingTasks[N]['task']) => MatchingTasks[N]['result'] } = {
-  declinationRange: (t) => declinationRange(t.raDeg, t.decDeg, t.from, t.to),
-  countBlocks: (t) => countBlocks(t.layout, t.decDeg, t.from, t.to),
-  spreadRows: (t) => spreadRows(t.layout, t.raDeg, t.decDeg, t.from, t.to, t.next, t.spread),
+  measureRows: (t) => measureRows(t.source, t.from, t.to),
+  countBlocks: (t) => countBlocks(t.layout, t.source, t.from, t.to),
+  spreadRows: (t) => spreadRows(t.layout, t.source, t.from, t.to, t.next, t.spread),
   placeBlocks: (t) => placeBlocks(t.grid, t.spread, t.starts, t.from, t.to),
   pairSearch: (t) => pairSearch(t.grid, t.positions, t.range),
   neighbourSearch: (t) => neighbourSearch(t.grid, t.queries, t.range),

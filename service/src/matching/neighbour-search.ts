@@ -59,7 +59,7 @@ export function neighbourSearch(grid: VelocityGrid, queries: NeighbourQueries, r
   const { raDeg, decDeg, czKms, angularRadiusDeg, windowKms, leftOut } = queries;
   const length = checkSameLength({ raDeg, decDeg, czKms, angularRadiusDeg, windowKms });
   const { from = 0, to = length, limit = DEFAULT_HIT_LIMIT } = range;
-  const { coords, row, czKms: velocities } = grid;
+  const { row, raDeg: rowRaDeg, decDeg: rowDecDeg, czKms: velocities } = grid;
   const hits = new Hits();
   const box = makeSkyBox();
   const order = skyOrder(grid, raDeg, decDeg, from, to);
@@ -85,15 +85,16 @@ export function neighbourSearch(grid: VelocityGrid, queries: NeighbourQueries, r
       for (let slot = slots[2 * r]!; slot < end; slot++) {
         const rowCz = velocities[slot]!;
         if (!(rowCz >= lowCz && rowCz <= highCz)) continue;
-        const rowDec = coords[2 * slot + 1]!;
+        const index = row[slot]!;
+        const rowDec = rowDecDeg[index]!;
         if (rowDec < decLowDeg || rowDec > decHighDeg) continue;
-        const rowRa = coords[2 * slot]!;
+        const rowRa = wrapRaDeg(rowRaDeg[index]!);
         const apart = Math.abs(rowRa - ra);
         if (apart > halfWidthDeg && 360 - apart > halfWidthDeg) continue;
         const difference = differenceKms(rowCz, cz);
         if (!(difference <= window && difference >= -window)) continue;
         const separation = separationArcsec(ra, dec, rowRa, rowDec);
-        if (separation <= radius && !isLeftOut(leftOut, d, row[slot]!)) hits.add(d, slot, separation);
+        if (separation <= radius && !isLeftOut(leftOut, d, index)) hits.add(d, slot, separation);
       }
     }
     if (hits.count > limit) throw new HitLimitError(limit, Math.round((hits.count / (i + 1)) * order.length));

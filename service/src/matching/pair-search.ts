@@ -51,7 +51,7 @@ export function pairSearch(grid: ZoneGrid, positions: SearchPositions, range: Se
   const { raDeg, decDeg, radiusArcsec } = positions;
   const length = checkSameLength({ raDeg, decDeg, radiusArcsec });
   const { from = 0, to = length, limit = DEFAULT_HIT_LIMIT } = range;
-  const { coords } = grid;
+  const { row, raDeg: rowRaDeg, decDeg: rowDecDeg } = grid;
   const hits = new Hits();
   const box = makeSkyBox();
   const order = skyOrder(grid, raDeg, decDeg, from, to);
@@ -67,9 +67,10 @@ export function pairSearch(grid: ZoneGrid, positions: SearchPositions, range: Se
     for (let r = 0; r < box.ranges; r++) {
       const end = slots[2 * r + 1]!;
       for (let slot = slots[2 * r]!; slot < end; slot++) {
-        const rowDec = coords[2 * slot + 1]!;
+        const index = row[slot]!;
+        const rowDec = rowDecDeg[index]!;
         if (rowDec < decLowDeg || rowDec > decHighDeg) continue;
-        const rowRa = coords[2 * slot]!;
+        const rowRa = wrapRaDeg(rowRaDeg[index]!);
         const apart = Math.abs(rowRa - ra);
         if (apart > halfWidthDeg && 360 - apart > halfWidthDeg) continue;
         const separation = separationArcsec(ra, dec, rowRa, rowDec);

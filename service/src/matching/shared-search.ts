@@ -3,9 +3,9 @@ import type { TaskRunner } from './matching-task.ts';
 import type { NeighbourQueries, Neighbours } from './neighbour-search.ts';
 import type { Pairs, SearchPositions } from './pair-search.ts';
 import type { Numbers } from './sky-position.ts';
-import { emptyGrid, roomForRows, sharedMemory, type ZoneGrid } from './zone-grid.ts';
+import { emptyGrid, type GridSource, sharedMemory, type ZoneGrid } from './zone-grid.ts';
 import { blocksOf, blockStarts } from './zone-grid-steps.ts';
-import type { VelocityGrid } from './velocity-grid.ts';
+import { type VelocityGrid, withVelocities } from './velocity-grid.ts';
 import { layoutZones } from './zone-layout.ts';
 
 /** [0, count) in so many nearly equal ranges; the empty ones are left out. */
@@ -23,30 +23,33 @@ function split(count: number, parts: number): { from: number; to: number }[] {
  * @param run where the steps are run
  * @param threads ranges of rows worked on side by side
  */
-export async function buildSharedGrid(
-  run: TaskRunner,
-  threads: number,
-  raDeg: Numbers,
-  decDeg: Numbers,
-): Promise<ZoneGrid> {
-  const rows = raDeg.length;
-  const ranges = split(rows, threads);
-  const bounds = await Promise.all(ranges.map((range) => run('declinationRange', { raDeg, decDeg, ...range })));
-  const low = bounds.reduce((least, [lowest]) => Math.min(least, lowest), rows > 0 ? 90 : 0);
-  const high = bounds.reduce((most, [, highest]) => Math.max(most, highest), rows > 0 ? -90 : 0);
-  const grid = emptyGrid(layoutZones(rows, low, high), rows, sharedMemory);
+export async function buildSharedGrid(run: TaskRunner, threads: number, source: GridSource): Promise<ZoneGrid> {
+  const length = source.raDeg.length;
+  const ranges = split(length, threads);
+  const measured = await Promise.all(ranges.map((range) => run('measureRows', { source, ...range })));
+  const rows = measured.reduce((sum, range) => sum + range.rows, 0);
+  const low = measured.reduce((least, range) => Math.min(least, range.low), 90);
+  const high = measured.reduce((most, range) => Math.max(most, range.high), -90);
+  const grid = emptyGrid(layoutZones(rows, low, high), rows, source, sharedMemory);
   const { layout } = grid;
-  const counts = await Promise.all(ranges.map((range) => run('countBlocks', { layout, decDeg, ...range })));
+  const counts = await Promise.all(ranges.map((range) => run('countBlocks', { layout, source, ...range })));
   const { starts, next } = blockStarts(counts, blocksOf(layout));
-  const spread = roomForRows(rows, sharedMemory);
-  await Promise.all(
-    ranges.map((range, i) => run('spreadRows', { layout, raDeg, decDeg, ...range, next: next[i]!, spread })),
-  );
+  const spread = new Uint32Array(sharedMemory(4 * rows));
+  await Promise.all(ranges.map((range, i) => run('spreadRows', { layout, source, ...range, next: next[i]!, spread })));
   // Blocks hold unequal numbers of rows: more ranges than threads even that out.
   await Promise.all(
     split(blocksOf(layout), 8 * threads).map((range) => run('placeBlocks', { grid, spread, starts, ...range })),
   );
   return grid;
+}
+
+/** `buildVelocityGrid` with several threads. */
+export async function buildSharedVelocityGrid(
+  run: TaskRunner,
+  threads: number,
+  source: GridSource & { only: Numbers },
+): Promise<VelocityGrid> {
+  return withVelocities(await buildSharedGrid(run, threads, source), source.only, sharedMemory);
 }
 
 const joinNumbers = <T extends Uint32Array | Float64Array>(parts: T[]): T => {

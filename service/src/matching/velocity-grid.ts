@@ -1,12 +1,18 @@
-import { DomainError } from '@eremite/shared/science/domain-error';
-import { buildZoneGrid } from './build-zone-grid.ts';
+import { buildGridOf } from './build-zone-grid.ts';
 import type { Numbers } from './sky-position.ts';
 import { type Memory, plainMemory, type ZoneGrid } from './zone-grid.ts';
 
-/** A grid of those rows of a catalogue that have a velocity; `row` still numbers the rows of the whole catalogue. */
+/** A grid of those rows of a catalogue that have a velocity. */
 export interface VelocityGrid extends ZoneGrid {
-  /** optical barycentric cz of each slot, km/s */
-  czKms: Float64Array<ArrayBufferLike>;
+  /** optical barycentric cz of the row in each slot, km/s */
+  czKms: Numbers;
+}
+
+/** Adds the velocities to a grid built with them as `only`. */
+export function withVelocities(grid: ZoneGrid, czKms: Numbers, memory: Memory): VelocityGrid {
+  const ordered = new Float64Array(memory(8 * grid.rows));
+  for (let slot = 0; slot < grid.rows; slot++) ordered[slot] = czKms[grid.row[slot]!]!;
+  return { ...grid, czKms: ordered };
 }
 
 /**
@@ -22,28 +28,5 @@ export function buildVelocityGrid(
   czKms: Numbers,
   memory: Memory = plainMemory,
 ): VelocityGrid {
-  const rows = czKms.length;
-  if (raDeg.length !== rows || decDeg.length !== rows) {
-    throw new DomainError(`${raDeg.length} and ${decDeg.length} coordinates against ${rows} velocities`);
-  }
-  let known = 0;
-  for (let i = 0; i < rows; i++) if (Number.isFinite(czKms[i])) known++;
-  const kept = new Uint32Array(known);
-  const ra = new Float64Array(known);
-  const dec = new Float64Array(known);
-  for (let i = 0, k = 0; i < rows; i++) {
-    if (!Number.isFinite(czKms[i])) continue;
-    kept[k] = i;
-    ra[k] = raDeg[i]!;
-    dec[k] = decDeg[i]!;
-    k++;
-  }
-  const grid = buildZoneGrid(ra, dec, memory);
-  const velocities = new Float64Array(memory(8 * known));
-  for (let slot = 0; slot < known; slot++) {
-    const row = kept[grid.row[slot]!]!;
-    grid.row[slot] = row;
-    velocities[slot] = czKms[row]!;
-  }
-  return { ...grid, czKms: velocities };
+  return withVelocities(buildGridOf({ raDeg, decDeg, only: czKms }, memory), czKms, memory);
 }

@@ -1,48 +1,63 @@
 import { DomainError } from '@eremite/shared/science/domain-error';
 import { sortHeavyCells } from './heavy-cells.ts';
-import { checkPosition, type Numbers, wrapRaDeg } from './sky-position.ts';
-import type { ZoneGrid } from './zone-grid.ts';
+import { checkPosition, wrapRaDeg } from './sky-position.ts';
+import type { GridSource, ZoneGrid } from './zone-grid.ts';
 import { cellOf, type ZoneLayout, zoneOf } from './zone-layout.ts';
 
 /*
  * The steps of building a grid, each on a range, so that threads can share them. Rows are first spread over blocks of
  * zones and then placed block by block, because a block fits into a processor's cache and a large catalogue does not.
- * In order: declinationRange of every range of rows, layoutZones, countBlocks of every range, blockStarts over all
+ * In order: measureRows of every range of rows, layoutZones, countBlocks of every range, blockStarts over all
  * counts in the order of the ranges, spreadRows of every range, placeBlocks of every range of blocks. The order of rows
  * is kept at every step, so the result does not depend on the ranges.
  */
 
-const MOST_BLOCKS = 256;
+const MOST_BLOCKS = 32;
 export const blocksOf = ({ zones }: ZoneLayout): number => Math.min(MOST_BLOCKS, zones);
 const blockOf = (zone: number, blocks: number, zones: number): number => Math.floor((zone * blocks) / zones);
 
+/** Lowest and highest declination of some rows, degrees, and how many they are. */
+export interface RowsMeasured {
+  low: number;
+  high: number;
+  rows: number;
+}
+
 /**
- * Checks the positions from one row up to another and finds their lowest and highest declination, degrees.
+ * Checks and measures the rows from one index up to another.
  *
- * @returns [0, 0] if there is no row
+ * @returns low above high if there is no row
  * @throws {DomainError} if the arrays differ in length or a row has no position
  */
-export function declinationRange(raDeg: Numbers, decDeg: Numbers, from: number, to: number): [number, number] {
-  if (raDeg.length !== decDeg.length) {
-    throw new DomainError(`${raDeg.length} right ascensions against ${decDeg.length} declinations`);
+export function measureRows({ raDeg, decDeg, only }: GridSource, from: number, to: number): RowsMeasured {
+  if (raDeg.length !== decDeg.length || (only && only.length !== raDeg.length)) {
+    const others = only ? ` and ${only.length} values` : '';
+    throw new DomainError(`${raDeg.length} right ascensions against ${decDeg.length} declinations${others}`);
   }
   let low = 90;
   let high = -90;
+  let rows = 0;
   for (let i = from; i < to; i++) {
+    if (only && !Number.isFinite(only[i]!)) continue;
     const ra = raDeg[i]!;
     const dec = decDeg[i]!;
     if (!(ra >= 0 && ra < 360 && dec >= -90 && dec <= 90)) checkPosition('row', i, ra, dec);
     if (dec < low) low = dec;
     if (dec > high) high = dec;
+    rows++;
   }
-  return from < to ? [low, high] : [0, 0];
+  return { low, high, rows };
 }
 
 /** @returns rows of the range in each block */
-export function countBlocks(layout: ZoneLayout, decDeg: Numbers, from: number, to: number): Uint32Array {
+export function countBlocks(layout: ZoneLayout, source: GridSource, from: number, to: number): Uint32Array {
+  const { decDeg, only } = source;
   const blocks = blocksOf(layout);
   const counts = new Uint32Array(blocks);
-  for (let i = from; i < to; i++) counts[blockOf(zoneOf(layout, decDeg[i]!), blocks, layout.zones)]!++;
+  for (let i = from; i < to; i++) {
+    if (only && !Number.isFinite(only[i]!)) continue;
+    counts[blockOf(zoneOf(layout, decDeg[i]!), blocks, layout.zones)]!++;
+  }
   return counts;
 }
 
@@ -65,32 +80,27 @@ export function blockStarts(counts: Uint32Array[], blocks: number): { starts: Ui
   return { starts, next };
 }
 
-/** Rows sorted by block: coordinates interleaved and row numbers, as in a grid. */
-export type Spread = Pick<ZoneGrid, 'coords' | 'row'>;
-
-/** Copies the rows of the range to their blocks. `next` is that range's from `blockStarts`, used up by this. */
+/**
+ * Writes the indices of the rows of the range to `spread`, sorted by block. `next` is that range's from `blockStarts`,
+ * used up by this.
+ */
 export function spreadRows(
   layout: ZoneLayout,
-  raDeg: Numbers,
-  decDeg: Numbers,
+  { decDeg, only }: GridSource,
   from: number,
   to: number,
   next: Uint32Array,
-  spread: Spread,
+  spread: Uint32Array,
 ): void {
-  const { coords, row } = spread;
   const blocks = blocksOf(layout);
   for (let i = from; i < to; i++) {
-    const dec = decDeg[i]!;
-    const slot = next[blockOf(zoneOf(layout, dec), blocks, layout.zones)]!++;
-    coords[2 * slot] = wrapRaDeg(raDeg[i]!);
-    coords[2 * slot + 1] = dec;
-    row[slot] = i;
+    if (only && !Number.isFinite(only[i]!)) continue;
+    spread[next[blockOf(zoneOf(layout, decDeg[i]!), blocks, layout.zones)]!++] = i;
   }
 }
 
 /** Puts the rows of a range of blocks into the cells of the grid and fills the `starts` of those cells. */
-export function placeBlocks(grid: ZoneGrid, spread: Spread, starts: Uint32Array, from: number, to: number): void {
+export function placeBlocks(grid: ZoneGrid, spread: Uint32Array, starts: Uint32Array, from: number, to: number): void {
   const { layout } = grid;
   const blocks = blocksOf(layout);
   for (let block = from; block < to; block++) {
@@ -104,12 +114,20 @@ export function placeBlocks(grid: ZoneGrid, spread: Spread, starts: Uint32Array,
 }
 
 /** Sorts the rows of one block by cell, by counting. */
-function placeRows(grid: ZoneGrid, spread: Spread, from: number, to: number, firstCell: number, endCell: number): void {
-  const { layout, coords, row } = grid;
+function placeRows(
+  grid: ZoneGrid,
+  spread: Uint32Array,
+  from: number,
+  to: number,
+  firstCell: number,
+  endCell: number,
+): void {
+  const { layout, row, raDeg, decDeg } = grid;
   const next = new Uint32Array(endCell - firstCell);
   const cells = new Uint32Array(to - from);
   for (let i = from; i < to; i++) {
-    const cell = cellOf(layout, zoneOf(layout, spread.coords[2 * i + 1]!), spread.coords[2 * i]!) - firstCell;
+    const index = spread[i]!;
+    const cell = cellOf(layout, zoneOf(layout, decDeg[index]!), wrapRaDeg(raDeg[index]!)) - firstCell;
     cells[i - from] = cell;
     next[cell]!++;
   }
@@ -120,10 +138,5 @@ function placeRows(grid: ZoneGrid, spread: Spread, from: number, to: number, fir
     grid.starts[firstCell + cell] = slot;
     slot += rows;
   }
-  for (let i = from; i < to; i++) {
-    const to = next[cells[i - from]!]!++;
-    coords[2 * to] = spread.coords[2 * i]!;
-    coords[2 * to + 1] = spread.coords[2 * i + 1]!;
-    row[to] = spread.row[i]!;
-  }
+  for (let i = from; i < to; i++) row[next[cells[i - from]!]!++] = spread[i]!;
 }

@@ -23,6 +23,7 @@ const ROWS_PER_CELL = 4;
 export function layoutZones(rows: number, decMinDeg: number, decMaxDeg: number): ZoneLayout {
   const target = Math.max(1, Math.ceil(rows / ROWS_PER_CELL));
   const height = Math.max(0, decMaxDeg - decMinDeg);
+  if (rows === 0) return { decFloorDeg: 0, zonesPerDeg: 0, zones: 1, cellsBefore: Uint32Array.of(0, 1) };
   const area = (360 * (Math.sin(decMaxDeg * DEGREE) - Math.sin(decMinDeg * DEGREE))) / DEGREE;
   const side = Math.max(Math.sqrt(Math.max(0, area) / target), 360 / target, 1e-9);
   const zones = Math.max(1, Math.min(Math.ceil(height / side), target));
