@@ -34,6 +34,7 @@ describe('column density', () => {
     expect(off(columnDensity(flux, major, minor, z, 'source'), source)).toBeLessThan(1e-4);
     expect(off(columnDensity(flux, major, minor, z, 'radio'), radio)).toBeLessThan(1e-4);
     const local = columnDensity(flux, major, minor, z, 'local');
+    expect(off(local, optical / (1 + z) ** 2)).toBeLessThan(1e-9);
     // The listed surface density uses 8.008e-21 solar masses per pc^2 per cm^-2, 0.07 per cent from the constants.
     expect(off(local / COLUMN_DENSITY_PER_SOLAR_MASS_PC2, surface)).toBeLessThan(1e-3);
   });

@@ -48,6 +48,40 @@ describe('bands', () => {
     expect(Math.abs(solarAb - solarVega - abMinusVega)).toBeLessThan(0.0011);
   });
 
+  // Willmer (2018), ApJS 236, 47: pivot wavelengths, micron
+  it.each<[BandId, number]>([
+    ['FUV', 0.1535],
+    ['NUV', 0.2301],
+    ['B', 0.4396],
+    ['V', 0.5511],
+    ['u', 0.3556],
+    ['g', 0.4702],
+    ['r', 0.6176],
+    ['i', 0.749],
+    ['z', 0.8947],
+    ['PS1 g', 0.4849],
+    ['PS1 r', 0.6201],
+    ['PS1 i', 0.7535],
+    ['PS1 z', 0.8674],
+    ['PS1 y', 0.9628],
+    ['DES g', 0.482],
+    ['DES r', 0.6423],
+    ['DES i', 0.7807],
+    ['DES z', 0.9158],
+    ['LSST g', 0.4808],
+    ['LSST r', 0.621],
+    ['LSST i', 0.7537],
+    ['J', 1.2393],
+    ['H', 1.6495],
+    ['Ks', 2.1638],
+    ['W1', 3.3897],
+    ['W2', 4.6406],
+    ['W3', 12.5705],
+    ['W4', 22.3142],
+  ])('know the wavelength of %s', (band, micron) => {
+    expect(BANDS[band].pivotMicron).toBeCloseTo(micron, 4);
+  });
+
   it('convert to AB and back, and leave a missing magnitude missing', () => {
     expect(toVega(toAb(14.3, 'Ks', 'Vega'), 'Ks', 'AB')).toBeCloseTo(14.3, 12);
     expect(toAb(20, 'r', 'AB')).toBe(20);

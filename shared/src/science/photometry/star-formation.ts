@@ -23,7 +23,8 @@ export const STOCHASTIC_RATE = 1e-3;
 const MEGAPARSEC_CM = 3.0856775814913673e24;
 const LIGHT_MICRON_HZ = 2.99792458e14;
 const JANSKY_CGS = 1e-23;
-const SOLAR_LUMINOSITY_ERG = 3.828e33;
+/** Nominal luminosity of the Sun, erg/s (IAU 2015). */
+export const SOLAR_LUMINOSITY_ERG = 3.828e33;
 
 /**
  * nu L_nu of a flux density.

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { DomainError } from '../domain-error.ts';
 import {
+  SOLAR_LUMINOSITY_ERG,
   STAR_FORMATION_LOG_C,
   nuLuminosity,
   nuLuminosityOfAb,
@@ -37,11 +38,12 @@ describe('star-formation limit', () => {
 
   // 24 micron: Kennicutt & Evans (2012); W4: Cluver et al. (2017), ApJ 850, 68 (from memory)
   it.each([
-    [6, 7.4005521519725e40, 0.015109988140188177, 0.045389704757772965],
-    [5, 6.167126793310418e40, 0.012591656783490139, 0.038415502436746046],
-  ])('of W4 %d mJy', (mjy, erg, ke12, cluver) => {
+    [6, 7.4005521519725e40, 19332685.872446448, 0.015109988140188177, 0.045389704757772965],
+    [5, 6.167126793310418e40, 16110571.560372042, 0.012591656783490139, 0.038415502436746046],
+  ])('of W4 %d mJy', (mjy, erg, solar, ke12, cluver) => {
     const light = nuLuminosity(mjy, 22.8, 28);
     expect(off(light, erg)).toBeLessThan(1e-4);
+    expect(off(light / SOLAR_LUMINOSITY_ERG, solar)).toBeLessThan(1e-4);
     expect(off(starFormationRate(light, '24um'), ke12)).toBeLessThan(1e-4);
     expect(off(starFormationRateW4(light), cluver)).toBeLessThan(1e-4);
   });
