@@ -74,7 +74,8 @@ describe('stability', () => {
     // 3.5 standard errors of 2000 draws; over 300 seeds the mean was 0.5903 and the scatter binomial.
     expect(Math.abs(far.agreement - 0.5896678)).toBeLessThan(0.0385);
     expect(far.interval.high - far.interval.low).toBeCloseTo(2 * 1.96 * 0.011, 2);
-    expect(run(0.59).draws).toBe(10_000);
+    expect(run(far.agreement).draws).toBeGreaterThan(2000);
+    expect(stability('even', (k) => (k % 2 ? 'odd' : 'even'), { cut: 0.5 }).draws).toBe(10_000);
     expect(run(0.9)).toEqual(far);
     expect((far.counts.get('accompanied') ?? 0) + (far.counts.get('alone') ?? 0)).toBe(2000);
   });
