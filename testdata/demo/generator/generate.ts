@@ -5,7 +5,7 @@
  */
 import { writeFileSync } from 'node:fs';
 import { gzipSync } from 'node:zlib';
-import { areaSqDeg, C_KMS, FIELD, H0, inside } from './field.ts';
+import { areaSqDeg, C_KMS, FIELD, H0, inside, localGroupCorrection } from './field.ts';
 import { detect, isCatalogued } from './observe.ts';
 import { Random } from './random.ts';
 import { tellStories } from './stories.ts';
@@ -51,7 +51,8 @@ function isClear(source: Source, cleared: ReturnType<typeof tellStories>['cleare
       source.decDeg - place.decDeg,
     );
     const apartMpc = (degrees * Math.PI * place.distanceMpc) / 180;
-    return apartMpc < radiusMpc && Math.abs(source.distanceMpc - place.distanceMpc) * H0 + 0 < windowKms;
+    const placeKms = H0 * place.distanceMpc - localGroupCorrection(place.raDeg, place.decDeg);
+    return apartMpc < radiusMpc && Math.abs(source.czKms - placeKms) < windowKms;
   });
 }
 

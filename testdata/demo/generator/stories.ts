@@ -36,14 +36,14 @@ export function tellStories(random: Random): Stories {
   };
 
   for (const [logHi, distance] of [
-    [9.45, 33],
-    [9.3, 28],
-    [9.6, 41],
-    [9.5, 36],
-    [9.35, 24],
+    [9.05, 13.5],
+    [9.75, 56],
+    [9.8, 64],
+    [9.9, 73],
+    [9.95, 82],
   ] as const) {
     const place = next(distance);
-    cleared.push({ place, radiusMpc: 1.3, windowKms: 700 });
+    cleared.push({ place, radiusMpc: 1.25, windowKms: 750 });
     sources.push(darkAt(place, logHi, random, 'dark and alone'));
   }
   for (const [logHi, distance, kpc, kms] of [
@@ -141,8 +141,8 @@ export function tellStories(random: Random): Stories {
   for (const distance of [110, 125]) {
     const place = next(distance);
     for (const angle of [70, 250]) {
-      const host = beside(place, (11 * distance) / 206.265, angle, 0);
-      sources.push({ ...withStars(host, NaN, -15.6, 8, 1.6, random, 'contested host'), width50Kms: NaN });
+      const host = beside(place, (2.2 * distance) / 206.265, angle, 0);
+      sources.push({ ...withStars(host, NaN, -15.9, 8, 0.5, random, 'contested host'), width50Kms: NaN });
     }
     sources.push(darkAt(place, 9.0, random, 'contested'));
   }
