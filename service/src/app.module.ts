@@ -14,16 +14,37 @@ import { JobsModule } from './jobs/jobs.module.ts';
 import { AdminModule } from './modules/admin/admin.module.ts';
 import { AuthGuard } from './modules/auth/auth.guard.ts';
 import { AuthModule } from './modules/auth/auth.module.ts';
+import { CataloguesModule } from './modules/catalogues/catalogues.module.ts';
+import { DetectionsModule } from './modules/detections/detections.module.ts';
 import { FilesModule } from './modules/files/files.module.ts';
 import { HealthModule } from './modules/health/health.module.ts';
+import { IntakesModule } from './modules/intakes/intakes.module.ts';
 import { LedgerModule } from './modules/ledger/ledger.module.ts';
 import { MailModule } from './modules/mail/mail.module.ts';
 import { SurveysModule } from './modules/surveys/surveys.module.ts';
 import { TeamsModule } from './modules/teams/teams.module.ts';
+import { TilesModule } from './tiles/tiles.module.ts';
 
 /** What every feature stands on. */
-const FOUNDATION = [DatabaseModule, CommonModule, JobsModule, AuthModule, FilesModule, LedgerModule, MailModule];
-const FEATURES = [HealthModule, AdminModule, TeamsModule, SurveysModule];
+const FOUNDATION = [
+  DatabaseModule,
+  CommonModule,
+  JobsModule,
+  AuthModule,
+  FilesModule,
+  LedgerModule,
+  MailModule,
+  TilesModule,
+];
+const FEATURES = [
+  HealthModule,
+  AdminModule,
+  TeamsModule,
+  SurveysModule,
+  IntakesModule,
+  CataloguesModule,
+  DetectionsModule,
+];
 
 @Module({})
 export class AppModule {

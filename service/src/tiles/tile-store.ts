@@ -3,7 +3,7 @@ import { separation } from '@eremite/shared/science/sky/separation';
 import { Inject, Injectable } from '@nestjs/common';
 import { BulkStore } from '../database/bulk.ts';
 import { cellsOfCone } from './cells.ts';
-import { type PackedColumns, unpackColumns } from './column-pack.ts';
+import { type PackedColumns, textAt, unpackColumns } from './column-pack.ts';
 import { concatColumns, selectRows } from './column-rows.ts';
 import { rowCells } from './original-cells.ts';
 import { asRoleTable, type RoleTable } from './role-table.ts';
@@ -76,14 +76,24 @@ export class TileStore {
     return found?.row === row ? found : undefined;
   }
 
+  /** Name of a row: '' where the catalogue gives none, undefined where there is no such usable row. */
+  async readName(catalogueId: string, row: number): Promise<string | undefined> {
+    if (!Number.isInteger(row) || row < 1) return undefined;
+    const [place] = await this.placesFrom(catalogueId, row, 1);
+    if (place?.row !== row) return undefined;
+    const select = 'select roles from tiles where catalogue_id = $1 and cell = $2 and part = $3';
+    for await (const batch of this.bulk.read(select, [catalogueId, place.cell, place.part], ['bytea'])) {
+      for (const [blob] of batch) {
+        const names = unpackColumns(blob as Uint8Array).columns['name'];
+        return names && 'kind' in names ? textAt(names, place.at) : '';
+      }
+    }
+    return undefined;
+  }
+
   /** Rows in file order from a row number on. */
   async readRowsFrom(catalogueId: string, firstRow: number, limit: number): Promise<StoredRow[]> {
-    const places: RowPlace[] = [];
-    for await (const block of this.placeBlocks(catalogueId, blockOf(Math.max(1, firstRow)))) {
-      for (const place of block) if (place.row >= firstRow && places.length < limit) places.push(place);
-      if (places.length >= limit) break;
-    }
-    return this.fetch(catalogueId, places);
+    return this.fetch(catalogueId, await this.placesFrom(catalogueId, firstRow, limit));
   }
 
   /** Rows within a radius of a place, nearest first. */
@@ -132,6 +142,15 @@ export class TileStore {
       }
     }
     return parts;
+  }
+
+  private async placesFrom(catalogueId: string, firstRow: number, limit: number): Promise<RowPlace[]> {
+    const places: RowPlace[] = [];
+    for await (const block of this.placeBlocks(catalogueId, blockOf(Math.max(1, firstRow)))) {
+      for (const place of block) if (place.row >= firstRow && places.length < limit) places.push(place);
+      if (places.length >= limit) break;
+    }
+    return places;
   }
 
   private async *placeBlocks(catalogueId: string, from: number): AsyncIterable<RowPlace[]> {

@@ -49,3 +49,22 @@ export const catalogueRow = z.object({
   /** Every original cell as text, in the catalogue's column order. */
   cells: z.array(z.string()),
 });
+
+/** Counts of magnitudes by band: bin `i` runs from `start + i * step` to the next, limits left out. */
+export const catalogueMagnitudes = z.object({
+  bands: z.array(
+    z.object({
+      band: z.string(),
+      system: z.enum(['AB', 'Vega']),
+      depth5Sigma: z.number().nullable(),
+      count: z.int(),
+      limits: z.int(),
+      brightest: z.number(),
+      faintest: z.number(),
+      start: z.number(),
+      step: z.number(),
+      counts: z.array(z.int()),
+    }),
+  ),
+});
+export type CatalogueMagnitudes = z.output<typeof catalogueMagnitudes>;

@@ -1,0 +1,137 @@
+import type { ColumnRole, IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { Intake, IntakeCheck, IntakeColumn, SettingsQuestion } from '@eremite/shared/contracts/intake';
+import { type ByteSource } from '../tables/table.ts';
+import { coverageOf } from './coverage.ts';
+import { openCatalogue, type OpenCatalogue, type ReadOptions } from './open-catalogue.ts';
+import { cellAt } from './sample.ts';
+import { SettingsError } from './resolved.ts';
+import { assertReadable, streamCatalogue } from './stream-catalogue.ts';
+
+/** All that the wizard shows of an upload, found by reading every row once. */
+export interface Inspection {
+  format: string;
+  tables: Intake['tables'];
+  columns: IntakeColumn[];
+  preview: string[][];
+  check: IntakeCheck;
+  /** Settings that cannot be carried out; with one of these the rows are only counted. */
+  faults: { pointer: string; detail: string }[];
+  /** The settings as the person wrote them, with the columns that were taken by guess written out. */
+  filled: IntakeSettings;
+}
+
+const PREVIEW_ROWS = 50;
+const MOST_CELL = 500;
+
+/**
+ * Reads an uploaded file under settings and says what would become of it. Any readable table is accepted: what is
+ * wrong with the settings is part of the answer.
+ *
+ * @throws {TableError} for a file that is no readable table
+ */
+export async function inspect(
+  source: ByteSource | string,
+  settings: IntakeSettings,
+  options: ReadOptions = {},
+): Promise<Inspection> {
+  const catalogue = await openCatalogue(source, settings, options);
+  const { open, table, resolution } = catalogue;
+  const { check, faults } = await checkAll(catalogue, settings);
+  return {
+    format: open.format,
+    tables: open.tables.map(({ index, name, declaredRows, columns }) => ({
+      index,
+      name,
+      rows: index === table.index ? check.rows : declaredRows,
+      columns: columns.length,
+    })),
+    columns: columnsOf(catalogue),
+    preview: previewOf(catalogue),
+    check,
+    faults,
+    filled: {
+      ...settings,
+      table: table.index,
+      name: resolution.resolved.name,
+      columns: takenColumns(catalogue, settings),
+    },
+  };
+}
+
+async function checkAll(
+  catalogue: OpenCatalogue,
+  settings: IntakeSettings,
+): Promise<{ check: IntakeCheck; faults: Inspection['faults'] }> {
+  const { resolution } = catalogue;
+  try {
+    assertReadable(catalogue);
+  } catch (error) {
+    if (!(error instanceof SettingsError)) throw error;
+    const asked = resolution.questions.map(({ pointer }) => pointer);
+    const more = error.faults
+      .filter(({ pointer }) => !asked.includes(pointer))
+      .map(({ pointer, detail }): SettingsQuestion => ({ level: 'ask', pointer, text: detail }));
+    let rows = 0;
+    for await (const chunk of catalogue.chunks()) rows += chunk.rows + (chunk.broken?.length ?? 0);
+    const questions = [...more, ...resolution.questions];
+    const check = { rows, usable: 0, sidelined: 0, leftOut: 0, reasons: [], questions, ready: false };
+    return { check, faults: [...error.faults] };
+  }
+  const positions: [Float64Array, Float64Array][] = [];
+  const wantsArea = settings.footprint === undefined || settings.footprint.type === 'rows';
+  const { check } = await streamCatalogue(catalogue, settings, ({ roles }) => {
+    if (wantsArea) positions.push([roles.columns['raDeg'] as Float64Array, roles.columns['decDeg'] as Float64Array]);
+  });
+  if (wantsArea && check.usable > 0 && resolution.resolved.kind !== 'hi') {
+    const { note } = coverageOf(
+      resolution.resolved,
+      joined(positions.map(([ra]) => ra)),
+      joined(positions.map(([, dec]) => dec)),
+    );
+    const said =
+      settings.footprint === undefined ? 'The area covered is not stated' : 'The area is taken from the rows';
+    check.questions.push({ level: 'assumed', pointer: '/footprint', text: `${said}: ${note}` });
+  }
+  return { check, faults: [] };
+}
+
+function joined(parts: readonly Float64Array[]): Float64Array {
+  const all = new Float64Array(parts.reduce((sum, part) => sum + part.length, 0));
+  let at = 0;
+  for (const part of parts) {
+    all.set(part, at);
+    at += part.length;
+  }
+  return all;
+}
+
+/** The columns with what each seems to hold. */
+export function columnsOf({ table, resolution }: OpenCatalogue): IntakeColumn[] {
+  return table.columns.map(({ name, unit, ucd, description, type }, i) => {
+    const guess = resolution.guesses.find(({ column }) => column === i);
+    return {
+      name,
+      unit: unit ?? null,
+      ucd: ucd ?? null,
+      description: description ?? null,
+      type,
+      guess: guess?.role ?? null,
+      confidence: guess?.confidence ?? 0,
+    };
+  });
+}
+
+function previewOf({ firstChunk }: OpenCatalogue): string[][] {
+  if (!firstChunk) return [];
+  return Array.from({ length: Math.min(PREVIEW_ROWS, firstChunk.rows) }, (_, i) =>
+    firstChunk.columns.map((data) => cellAt(data, i).slice(0, MOST_CELL)),
+  );
+}
+
+/** Roles with their columns, guesses written out; roles that have none stay open to later guesses. */
+function takenColumns({ resolution }: OpenCatalogue, settings: IntakeSettings): IntakeSettings['columns'] {
+  const { magnitudes, ...roles } = resolution.resolved.columns;
+  const taken = Object.entries(roles).filter(([, column]) => column !== null) as [ColumnRole, string][];
+  const { magnitude: _single, ...given } = settings.columns ?? {};
+  return { ...given, ...Object.fromEntries(taken), ...(magnitudes.length ? { magnitudes } : {}) };
+}

@@ -1,0 +1,29 @@
+import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { ErrorPlace } from '../tables/table.ts';
+import type { Tile } from '../tiles/tile-collector.ts';
+import type { Inspection } from './inspect.ts';
+import type { Published, SidelinedCells } from './publish.ts';
+import type { SettingsFault } from './resolved.ts';
+
+/** What the worker thread is started with. */
+export interface IntakeTask {
+  what: 'inspect' | 'publish';
+  path: string;
+  fileName: string;
+  settings: IntakeSettings;
+}
+
+/** Errors cross threads as data; each kind is told differently. */
+export type IntakeFailure =
+  | ({ kind: 'table'; message: string; mend: string } & ErrorPlace)
+  | { kind: 'settings'; faults: SettingsFault[] }
+  | { kind: 'unexpected'; message: string; stack?: string };
+
+/** From the worker. After `tiles` and `sidelined` it waits for one `taken`, so that it never runs ahead of the database. */
+export type IntakeMessage =
+  | { kind: 'progress'; fraction: number; rows: number }
+  | { kind: 'tiles'; tiles: Tile[] }
+  | { kind: 'sidelined'; rows: SidelinedCells[] }
+  | { kind: 'inspected'; inspection: Inspection }
+  | { kind: 'published'; published: Published }
+  | { kind: 'failed'; failure: IntakeFailure };

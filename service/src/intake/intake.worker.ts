@@ -1,0 +1,63 @@
+import { once } from 'node:events';
+import { parentPort, workerData } from 'node:worker_threads';
+import { fileSource } from '../tables/bytes/byte-source.ts';
+import { TableError } from '../tables/table.ts';
+import { inspect } from './inspect.ts';
+import type { IntakeFailure, IntakeMessage, IntakeTask } from './intake-messages.ts';
+import { publish } from './publish.ts';
+import { SettingsError } from './resolved.ts';
+
+// Reading a table keeps a thread busy for seconds; here it does so without keeping requests waiting.
+const port = parentPort!;
+const task = workerData as IntakeTask;
+const send = (message: IntakeMessage, transfer: ArrayBuffer[] = []): void => port.postMessage(message, transfer);
+const REPORT_MS = 100;
+let lastReport = 0;
+
+async function handOver(message: IntakeMessage, transfer: ArrayBuffer[] = []): Promise<void> {
+  const taken = once(port, 'message');
+  send(message, transfer);
+  await taken;
+}
+
+function onProgress(fraction: number, rows: number): void {
+  if (Date.now() - lastReport < REPORT_MS) return;
+  lastReport = Date.now();
+  send({ kind: 'progress', fraction, rows });
+}
+
+async function work(): Promise<void> {
+  const source = await fileSource(task.path, task.fileName);
+  if (task.what === 'inspect') {
+    send({ kind: 'inspected', inspection: await inspect(source, task.settings, { onProgress }) });
+    return;
+  }
+  const sink = {
+    tiles: (tiles: Extract<IntakeMessage, { kind: 'tiles' }>['tiles']) => {
+      const buffers = tiles.flatMap(({ roles, originals }) => [roles.buffer, originals.buffer] as ArrayBuffer[]);
+      return handOver({ kind: 'tiles', tiles }, buffers);
+    },
+    sidelined: (rows: Extract<IntakeMessage, { kind: 'sidelined' }>['rows']) => handOver({ kind: 'sidelined', rows }),
+  };
+  send({ kind: 'published', published: await publish(source, task.settings, sink, { onProgress }) });
+}
+
+function failureOf(error: unknown): IntakeFailure {
+  if (error instanceof TableError) {
+    const { message, mend, line, column, byte, rowsRead } = error;
+    const place = { line, column, byte, rowsRead };
+    return {
+      kind: 'table',
+      message,
+      mend,
+      ...Object.fromEntries(Object.entries(place).filter(([, v]) => v !== undefined)),
+    };
+  }
+  if (error instanceof SettingsError) return { kind: 'settings', faults: [...error.faults] };
+  const { message, stack } = error instanceof Error ? error : new Error(String(error));
+  return { kind: 'unexpected', message, ...(stack === undefined ? {} : { stack }) };
+}
+
+work()
+  .catch((error: unknown) => send({ kind: 'failed', failure: failureOf(error) }))
+  .finally(() => port.close());

@@ -1,0 +1,49 @@
+import { createHash } from 'node:crypto';
+import type { Intake, IntakeCheck } from '@eremite/shared/contracts/intake';
+import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { Inspection } from '../../intake/inspect.ts';
+import type { IntakeRow } from './intakes.repository.ts';
+
+/** The check as it is stored: with the faults that forbid publishing and the settings with guesses written out. */
+export interface StoredCheck extends IntakeCheck {
+  faults: Inspection['faults'];
+  filled: IntakeSettings;
+}
+
+/** The columns of an intake's row that an inspection fills. */
+export function inspectedValues({ format, tables, columns, preview, check, faults, filled }: Inspection) {
+  const stored: StoredCheck = { ...check, faults, filled };
+  return { format, tables, columns, preview, rows: check.rows, check: stored };
+}
+
+/** Of the column names in order: tables of one shape share their settings. */
+export function headerHash(columns: readonly { name: string }[]): string {
+  return createHash('sha256')
+    .update(JSON.stringify(columns.map(({ name }) => name)))
+    .digest('hex');
+}
+
+export const storedCheck = (row: Pick<IntakeRow, 'check'>): StoredCheck => row.check as StoredCheck;
+
+/** The contract's form of a row. */
+export function toIntake(row: IntakeRow): Intake {
+  const { id, surveyId, fileName, bytes, sha256, format, rows, catalogueId } = row;
+  return {
+    id,
+    surveyId,
+    fileName,
+    bytes,
+    sha256,
+    state: row.state as Intake['state'],
+    format,
+    tables: row.tables as Intake['tables'],
+    columns: row.columns as Intake['columns'],
+    preview: row.preview as Intake['preview'],
+    rows,
+    settings: storedCheck(row).filled,
+    check: storedCheck(row),
+    warnings: row.warnings as string[],
+    catalogueId,
+    createdAt: row.createdAt.toISOString(),
+  };
+}
