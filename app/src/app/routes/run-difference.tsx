@@ -1,1 +1,77 @@
-export function Component() { return null; }
+import { useQuery } from '@tanstack/react-query';
+import { Link, useParams, useSearchParams } from 'react-router-dom';
+import { Caution } from '#components/caution/caution.tsx';
+import { EmptyState } from '#components/feedback/empty-state.tsx';
+import { Loading } from '#components/feedback/loading.tsx';
+import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
+import { useSurvey } from '#components/survey-context/use-survey.ts';
+import { differenceQuery } from '#features/runs/api/runs.ts';
+import { DifferenceTable } from '#features/runs/components/difference-table.tsx';
+import { paths } from '#config/paths.ts';
+import { count } from '#lib/format/number.ts';
+import { useTitle } from '#lib/use-title.ts';
+
+const text = (value: unknown) => (typeof value === 'object' ? JSON.stringify(value) : String(value));
+
+export function Component() {
+  const survey = useSurvey();
+  const runId = useParams()['runId']!;
+  const from = useSearchParams()[0].get('from') ?? '';
+  const { data, error, isPending } = useQuery(differenceQuery(runId, from));
+  useTitle('Difference of two runs', survey.name);
+  if (isPending) return <Loading what="Comparing the runs" />;
+  if (!data) {
+    return (
+      <div className="page">
+        <ProblemCallout error={error} />
+      </div>
+    );
+  }
+  return (
+    <div className="page stack">
+      <div className="page__head" style={{ marginBottom: 0 }}>
+        <div>
+          <h1>
+            Run {data.from.number} to run {data.to.number}
+          </h1>
+          <p className="page__lede">
+            <span className="num">{count(data.changed.length)}</span> verdicts moved,{' '}
+            <span className="num">{count(data.unchanged)}</span> stand.
+          </p>
+        </div>
+        <Link to={paths.run(survey.id, runId)}>Run {data.to.number}</Link>
+      </div>
+      {(data.criteriaChanged.length > 0 || data.inputsChanged.length > 0) && (
+        <section className="panel">
+          <div className="panel__head">
+            <h2>What was changed</h2>
+          </div>
+          <div className="panel__body">
+            <dl className="facts">
+              {data.criteriaChanged.map(({ key, from: before, to }) => (
+                <div key={key} style={{ display: 'contents' }}>
+                  <dt className="mono small">{key}</dt>
+                  <dd className="mono">
+                    {text(before)} → {text(to)}
+                  </dd>
+                </div>
+              ))}
+              {data.inputsChanged.map((change) => (
+                <div key={change} style={{ display: 'contents' }}>
+                  <dt>tables</dt>
+                  <dd>{change}</dd>
+                </div>
+              ))}
+            </dl>
+          </div>
+        </section>
+      )}
+      {data.changed.length === 0 ? (
+        <EmptyState title="No verdict moved">Both runs say the same of every detection.</EmptyState>
+      ) : (
+        <DifferenceTable surveyId={survey.id} difference={data} />
+      )}
+      <Caution />
+    </div>
+  );
+}

@@ -17,7 +17,7 @@ export function WideTable({ label, columns, rows, firstRow = 1, rowNumbers }: Wi
     <div className="wide-table" role="region" aria-label={label} tabIndex={0}>
       <Table
         numRows={rows.length}
-        renderMode={RenderMode.BATCH_ON_UPDATE}
+        renderMode={RenderMode.NONE}
         selectionModes={SelectionModes.NONE}
         defaultColumnWidth={128}
         defaultRowHeight={24}
@@ -30,7 +30,7 @@ export function WideTable({ label, columns, rows, firstRow = 1, rowNumbers }: Wi
           <Column
             key={name + String(at)}
             name={name}
-            columnHeaderCellRenderer={() => <ColumnHeaderCell name={note ? `${name}  ${note}` : name} />}
+            columnHeaderCellRenderer={() => <ColumnHeaderCell name={note ? `${name} [${note}]` : name} />}
             cellRenderer={(row) => <Cell>{rows[row]?.[at] ?? ''}</Cell>}
           />
         ))}

@@ -1,4 +1,5 @@
 import { HTMLSelect, InputGroup } from '@blueprintjs/core';
+import '#components/data-table/data-table.css';
 import type { Intake } from '@eremite/shared/contracts/intake';
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { useMemo } from 'react';

@@ -1,0 +1,35 @@
+import { Link } from 'react-router-dom';
+import { DataTable, type Column } from '#components/data-table/data-table.tsx';
+import { paths } from '#config/paths.ts';
+import { probability } from '#lib/format/number.ts';
+import type { RunDifference } from '../api/runs.ts';
+
+type Change = RunDifference['changed'][number];
+
+const moved = <T,>(pair: readonly [T, T], text: (value: T) => string) =>
+  text(pair[0]) === text(pair[1]) ? <span className="muted">{text(pair[1])}</span> : `${text(pair[0])} → ${text(pair[1])}`;
+
+const columns = (surveyId: string, runId: string): Column<Change>[] => [
+  {
+    key: 'name',
+    header: 'Detection',
+    align: 'left',
+    cell: ({ detectionId, name }) => <Link to={paths.detection(surveyId, detectionId, `?run=${runId}`)}>{name}</Link>,
+  },
+  { key: 'starlight', header: 'Starlight', align: 'left', cell: ({ starlight }) => <span className="prose">{moved(starlight, (v) => v ?? 'absent')}</span> },
+  { key: 'surroundings', header: 'Surroundings', align: 'left', cell: ({ surroundings }) => <span className="prose">{moved(surroundings, (v) => v ?? 'absent')}</span> },
+  { key: 'pNone', header: 'P(none)', align: 'left', cell: ({ pNone }) => moved(pNone, probability) },
+  { key: 'why', header: 'Why', align: 'left', cell: ({ why }) => <span className="prose">{why.join('; ')}</span> },
+];
+
+/** The detections whose verdict moved between two runs, each with what moved it. */
+export function DifferenceTable({ surveyId, difference }: { surveyId: string; difference: RunDifference }) {
+  return (
+    <DataTable
+      caption={`Verdicts that differ between run ${difference.from.number} and run ${difference.to.number}`}
+      columns={columns(surveyId, difference.to.id)}
+      rows={difference.changed}
+      rowKey={({ detectionId }) => detectionId}
+    />
+  );
+}
