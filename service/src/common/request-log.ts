@@ -10,11 +10,23 @@ export function makeLogger(level: string): Logger {
     level,
     base: null,
     timestamp: pino.stdTimeFunctions.isoTime,
-    redact: {
-      paths: ['*.password', '*.token', '*.email', 'err.params', 'err.query', 'err.cause.parameters'],
-      remove: true,
-    },
+    serializers: { err: loggedError },
+    redact: { paths: ['*.password', '*.token', '*.email'], remove: true },
   });
+}
+
+/**
+ * An error as the log shows it. The database layer puts the values of a failed query, which may be personal, into the
+ * message; what the database itself said is the useful part.
+ */
+export function loggedError(error: unknown): Record<string, unknown> {
+  if (!(error instanceof Error)) return { message: String(error) };
+  const { query, cause } = error as Error & { query?: unknown };
+  if (typeof query === 'string' && cause instanceof Error) {
+    const { message, stack, code, constraint } = cause as Error & { code?: unknown; constraint?: unknown };
+    return { type: error.name, message, stack, code, constraint, query };
+  }
+  return { type: error.name, message: error.message, stack: error.stack };
 }
 
 /** What Nest tells of its own start, line by line. */

@@ -47,11 +47,10 @@ export class JobsService implements OnApplicationBootstrap, BeforeApplicationShu
 
   async onApplicationBootstrap(): Promise<void> {
     await this.queue.start();
-    // The built-in database belongs to one process, so whatever was running when it opened is nobody's.
-    await this.#recover(this.env.databaseUrl ? ABANDONED_AFTER : 0);
+    await this.takeUp();
     await this.queue.work(this.env.jobWorkers, (id) => this.#run(id));
     if (this.env.databaseUrl) {
-      this.#sweep = setInterval(() => void this.#recover(ABANDONED_AFTER).catch(this.#warn), ABANDONED_AFTER * 1000);
+      this.#sweep = setInterval(() => void this.takeUp().catch(this.#warn), ABANDONED_AFTER * 1000);
       this.#sweep.unref();
     }
   }
@@ -187,9 +186,12 @@ export class JobsService implements OnApplicationBootstrap, BeforeApplicationShu
     this.#changes.emit(row.id);
   }
 
-  /** Takes up what a process that died left behind. */
-  async #recover(seconds: number): Promise<void> {
-    for (const row of await this.jobs.abandoned(seconds)) {
+  /**
+   * Takes up what a process that died left behind: puts it back or ends it. The built-in database belongs to one
+   * process, so there whatever is not running here is nobody's.
+   */
+  async takeUp(): Promise<void> {
+    for (const row of await this.jobs.abandoned(this.env.databaseUrl ? ABANDONED_AFTER : 0)) {
       const handler = this.#handlers.get(row.kind);
       if (this.#running.has(row.id)) continue;
       await handler?.recover?.(row.payload, { id: row.id });
