@@ -14,6 +14,11 @@ import { JobsModule } from './jobs/jobs.module.ts';
 import { AdminModule } from './modules/admin/admin.module.ts';
 import { AuthGuard } from './modules/auth/auth.guard.ts';
 import { AuthModule } from './modules/auth/auth.module.ts';
+import { CriteriaModule } from './modules/criteria/criteria.module.ts';
+import { DemoModule } from './modules/demo/demo.module.ts';
+import { ReviewsModule } from './modules/reviews/reviews.module.ts';
+import { RunsModule } from './modules/runs/runs.module.ts';
+import { ShortlistsModule } from './modules/shortlists/shortlists.module.ts';
 import { CataloguesModule } from './modules/catalogues/catalogues.module.ts';
 import { DetectionsModule } from './modules/detections/detections.module.ts';
 import { FilesModule } from './modules/files/files.module.ts';
@@ -44,6 +49,11 @@ const FEATURES = [
   IntakesModule,
   CataloguesModule,
   DetectionsModule,
+  CriteriaModule,
+  RunsModule,
+  ReviewsModule,
+  ShortlistsModule,
+  DemoModule,
 ];
 
 @Module({})

@@ -1,5 +1,5 @@
 import { Worker } from 'node:worker_threads';
-import { Injectable } from '@nestjs/common';
+import { Injectable, type OnModuleDestroy } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
 import { workerUrl } from '../../common/worker-url.ts';
 import type { Inspection } from '../../intake/inspect.ts';
@@ -17,55 +17,85 @@ const MOST_THREADS = 2;
 
 /** Reads uploaded tables in threads of their own, and tells their failures as the errors of the interface. */
 @Injectable()
-export class IntakeWorker {
+export class IntakeWorker implements OnModuleDestroy {
   private running = 0;
   private readonly waiting: (() => void)[] = [];
+  /** Threads that wait for a table; starting one takes as long as reading a small table. */
+  private idle: Worker[] = [];
 
   /** @throws {AppError} TABLE_UNREADABLE */
   async inspect(file: Omit<IntakeTask, 'what'>): Promise<Inspection> {
-    const { inspection } = await this.queued(() => run({ what: 'inspect', ...file }));
+    const { inspection } = await this.queued((worker) => run(worker, { what: 'inspect', ...file }));
     return inspection!;
   }
 
   /** @throws {AppError} TABLE_UNREADABLE, SETTINGS_INCOMPLETE; and the signal's reason */
   async publish(file: Omit<IntakeTask, 'what'>, hooks: PublishHooks): Promise<Published> {
-    const { published } = await this.queued(() => run({ what: 'publish', ...file }, hooks));
+    const { published } = await this.queued((worker) => run(worker, { what: 'publish', ...file }, hooks));
     return published!;
   }
 
-  private async queued<T>(work: () => Promise<T>): Promise<T> {
+  async onModuleDestroy(): Promise<void> {
+    await Promise.all(this.idle.splice(0).map((worker) => worker.terminate()));
+  }
+
+  private async queued<T>(work: (worker: Worker) => Promise<T>): Promise<T> {
     if (this.running >= MOST_THREADS) await new Promise<void>((resolve) => this.waiting.push(resolve));
     else this.running++;
+    const worker = this.idle.pop() ?? new Worker(workerUrl('intake'));
+    worker.ref();
     try {
-      return await work();
+      const result = await work(worker);
+      this.rest(worker);
+      return result;
+    } catch (error) {
+      // A thread that said clearly what is wrong with a table can go on; any other may be in the middle of something.
+      if (error instanceof AppError) this.rest(worker);
+      else await worker.terminate();
+      throw error;
     } finally {
       const next = this.waiting.shift();
       if (next) next();
       else this.running--;
     }
   }
+
+  private rest(worker: Worker): void {
+    worker.unref();
+    this.idle.push(worker);
+    worker.once('exit', () => (this.idle = this.idle.filter((other) => other !== worker)));
+  }
 }
 
-function run(task: IntakeTask, hooks?: PublishHooks): Promise<Finished> {
+function run(worker: Worker, task: IntakeTask, hooks?: PublishHooks): Promise<Finished> {
   hooks?.signal.throwIfAborted();
-  const worker = new Worker(workerUrl('intake'), { workerData: task });
   return new Promise<Finished>((resolve, reject) => {
-    const onAbort = () => reject(hooks?.signal.reason as Error);
-    hooks?.signal.addEventListener('abort', onAbort, { once: true });
+    const onAbort = () => end(() => reject(hooks?.signal.reason as Error));
+    const onError = (error: Error) => end(() => reject(error));
+    const onExit = (code: number) =>
+      end(() => reject(new Error(`the thread reading the table ended early (code ${code})`)));
+    const end = (settle: () => void) => {
+      hooks?.signal.removeEventListener('abort', onAbort);
+      worker.off('message', onMessage).off('error', onError).off('exit', onExit);
+      settle();
+    };
     const take = async (message: IntakeMessage): Promise<void> => {
-      if (message.kind === 'inspected') resolve({ inspection: message.inspection });
-      else if (message.kind === 'published') resolve({ published: message.published });
-      else if (message.kind === 'failed') reject(told(message.failure));
+      if (message.kind === 'inspected') end(() => resolve({ inspection: message.inspection }));
+      else if (message.kind === 'published') end(() => resolve({ published: message.published }));
+      else if (message.kind === 'failed') end(() => reject(told(message.failure)));
       else if (message.kind === 'progress') hooks?.progress(message.fraction, message.rows);
       else {
         await (message.kind === 'tiles' ? hooks?.tiles(message.tiles) : hooks?.sidelined(message.rows));
         worker.postMessage('taken');
       }
     };
-    worker.on('message', (message: IntakeMessage) => void take(message).catch(reject));
-    worker.once('error', reject);
-    worker.once('exit', (code) => reject(new Error(`the thread reading the table ended early (code ${code})`)));
-  }).finally(() => void worker.terminate());
+    // What fails while taking is no word of the thread about its table: wrapped, so that the thread is not kept.
+    const onMessage = (message: IntakeMessage) =>
+      void take(message).catch((cause: unknown) => onError(new Error('storing the table failed', { cause })));
+    hooks?.signal.addEventListener('abort', onAbort, { once: true });
+    worker.on('message', onMessage).on('error', onError).on('exit', onExit);
+    worker.postMessage(task);
+  });
 }
 
 function told(failure: IntakeFailure): Error {

@@ -11,5 +11,6 @@ import { ReviewsService } from './reviews.service.ts';
   imports: [LedgerModule, RunsModule, CataloguesModule],
   controllers: [ReviewsController],
   providers: [ReviewsService, OverridesService, ReviewsRepository],
+  exports: [ReviewsService, OverridesService],
 })
 export class ReviewsModule {}

@@ -1,5 +1,4 @@
 import { Module } from '@nestjs/common';
-import { TileStore } from '../../tiles/tile-store.ts';
 import { CriteriaModule } from '../criteria/criteria.module.ts';
 import { LedgerModule } from '../ledger/ledger.module.ts';
 import { SurveysModule } from '../surveys/surveys.module.ts';
@@ -25,7 +24,6 @@ import { VerdictsService } from './verdicts.service.ts';
     OverviewService,
     RunJob,
     RunInputs,
-    TileStore,
     RunsRepository,
     VerdictsRepository,
   ],

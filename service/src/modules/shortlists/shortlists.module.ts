@@ -9,5 +9,6 @@ import { ShortlistsService } from './shortlists.service.ts';
   imports: [LedgerModule, RunsModule],
   controllers: [ShortlistsController],
   providers: [ShortlistsService, ShortlistsRepository],
+  exports: [ShortlistsService],
 })
 export class ShortlistsModule {}
