@@ -9,11 +9,12 @@ function textCell(text: string): string {
   return /[",\r\n]|^[\s#]|\s$/.test(guarded) ? `"${guarded.replaceAll('"', '""')}"` : guarded;
 }
 
-/** Six significant digits, or as many as whole numbers have; missing is empty. */
+/** Nine decimals, or eight significant digits of what is smaller; missing is empty. */
 function numberCell(value: number): string {
   if (!Number.isFinite(value)) return '';
-  if (Number.isInteger(value)) return String(value);
-  return String(Number(value.toPrecision(10)));
+  const size = Math.abs(value);
+  if (size >= 1e-3 && size < 1e6) return String(Math.round(value * 1e9) / 1e9);
+  return Number.isInteger(value) ? String(value) : String(Number(value.toPrecision(8)));
 }
 
 export type Cell = string | number | null;

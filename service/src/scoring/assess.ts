@@ -3,6 +3,7 @@ import { exclusiveProbabilities, type Hypotheses } from '@eremite/shared/science
 import { type LearntPrior, priorOf } from '@eremite/shared/science/counterpart/learn-prior';
 import { dominatingObject, starlightVerdict } from '@eremite/shared/science/counterpart/starlight';
 import type { CandidateRow } from './candidate-row.ts';
+import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import { galaxiesInBeam, gasToLightLimit, gasToLightOf } from './gas-and-light.ts';
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
@@ -15,6 +16,7 @@ export interface AssessmentContext {
   /** Catalogues in which a counterpart is looked for. */
   catalogues: readonly PreparedCatalogue[];
   priors: readonly LearntPrior[];
+  shares: CoveredShares;
 }
 
 /** Q of a detection and where it comes from. */
@@ -45,13 +47,13 @@ export function assessStarlight(
   detection: Detection,
   candidates: CandidateRow[],
   masks: StarMask[],
-  { model, catalogues, priors }: AssessmentContext,
+  { model, catalogues, priors, shares }: AssessmentContext,
 ): StarlightAssessment {
   const { criteria } = model;
   const expectations = new ExpectationCache(detection, model.relation);
   const objects = groupObjects(candidates);
   weighObjects(detection, objects, expectations, model);
-  const silence = weighSilence(detection, catalogues, masks, expectations, criteria);
+  const silence = weighSilence(detection, catalogues, masks, expectations, criteria, shares);
   const { prior, source } = priorFor(detection, priors, criteria);
   const { reliability } = detection;
   const r = reliability >= 0 && reliability <= 1 ? reliability : 1;

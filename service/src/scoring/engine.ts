@@ -5,6 +5,7 @@ import { neighbourSearch } from '../matching/neighbour-search.ts';
 import { pairSearch } from '../matching/pair-search.ts';
 import { assessStarlight, type AssessmentContext, type StarlightAssessment } from './assess.ts';
 import { type CandidateRow, makeCandidate, type OverrideOf } from './candidate-row.ts';
+import { CoveredShares } from './covered-share.ts';
 import { describeDetail, describeItem } from './describe.ts';
 import { type Detection, readDetections } from './detection-table.ts';
 import type { EngineInput } from './engine-input.ts';
@@ -31,6 +32,8 @@ import { rateRows, type WeighingModel } from './weigh-objects.ts';
 const COUNTERPART_KINDS = ['optical', 'infrared', 'ultraviolet', 'continuum'];
 /** How far beyond the window the nearest row with a velocity is still looked for, Mpc. */
 const FAR_MPC = 5;
+/** Detections to learn from: more would move what is learnt by less than its error. */
+const MOST_PUPILS = 6000;
 /** And without a distance: neighbours with a distance of their own, degrees. */
 const NO_DISTANCE_DEG = 10;
 
@@ -56,6 +59,7 @@ export class Engine {
   private readonly masks: StarMasks;
   private readonly surroundings: SurroundingsContext;
   private readonly overrideOf: OverrideOf | null;
+  private readonly shares: CoveredShares;
   private learnt: Learnt;
 
   constructor(readonly input: EngineInput) {
@@ -77,6 +81,7 @@ export class Engine {
       ),
     };
     this.overrideOf = overridesBy(input);
+    this.shares = new CoveredShares(this.detections.length, this.catalogues.length);
     this.learnt = { relation: null, priors: [], velocity: this.velocityModel(), notes: [] };
   }
 
@@ -97,12 +102,11 @@ export class Engine {
       relation: relation ?? relationOf(criteria),
       velocity: this.learnt.velocity,
     };
-    return { model, catalogues: this.searched, priors };
+    return { model, catalogues: this.searched, priors, shares: this.shares };
   }
 
   /** Candidate rows of each detection of a range, nearest first within each catalogue. */
-  private candidatesOf(from: number, to: number): CandidateRow[][] {
-    const range = this.detections.slice(from, to);
+  private candidatesOf(range: readonly Detection[]): CandidateRow[][] {
     const rows: CandidateRow[][] = range.map(() => []);
     const positions = {
       raDeg: Float64Array.from(range, ({ raDeg }) => raDeg),
@@ -119,16 +123,22 @@ export class Engine {
     return rows;
   }
 
-  private assess(from: number, to: number, context: AssessmentContext): StarlightAssessment[] {
-    const candidates = this.candidatesOf(from, to);
-    const masks = this.masks.of(this.detections.slice(from, to));
-    return candidates.map((rows, i) => assessStarlight(this.detections[from + i]!, rows, masks[i]!, context));
+  private assess(range: readonly Detection[], context: AssessmentContext): StarlightAssessment[] {
+    const candidates = this.candidatesOf(range);
+    const masks = this.masks.of(range);
+    return candidates.map((rows, i) => assessStarlight(range[i]!, rows, masks[i]!, context));
   }
 
-  /** What the detections of a range teach, given a relation. */
-  lessons(from: number, to: number, relation: GasStarRelation | null): Lesson[] {
+  /** Detections a run learns from: all, or every k-th so that there are at most so many. */
+  get pupils(): Detection[] {
+    const step = Math.ceil(this.detections.length / MOST_PUPILS);
+    return this.detections.filter((_, i) => i % step === 0);
+  }
+
+  /** What some detections teach, given a relation. */
+  lessons(pupils: readonly Detection[], relation: GasStarRelation | null): Lesson[] {
     const context = this.context(relation, []);
-    return this.assess(from, to, context).map((assessment) => lessonOf(assessment, context.model.relation));
+    return this.assess(pupils, context).map((assessment) => lessonOf(assessment, context.model.relation));
   }
 
   /** Whether there are enough detections to learn anything from. */
@@ -232,7 +242,7 @@ export class Engine {
   score(from: number, to: number): ScoredDetection[] {
     const { criteria } = this.input;
     const context = this.context(this.learnt.relation, this.learnt.priors);
-    const assessed = this.assess(from, to, context);
+    const assessed = this.assess(this.detections.slice(from, to), context);
     const around = this.neighboursOf(assessed);
     const far = this.farNearest(assessed, around);
     return assessed.map((starlight, i) => {

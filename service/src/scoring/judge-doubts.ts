@@ -24,7 +24,6 @@ import { numberRole } from '../tiles/role-table.ts';
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
 import { rowName } from './prepared-catalogue.ts';
 import type { StarlightAssessment } from './assess.ts';
-import { coveredShare } from './silence.ts';
 import type { NeighbourRow, SurroundingsResult } from './surroundings.ts';
 
 /** Everything that could fake the result, each with its number and grade, the worst first. */
@@ -135,7 +134,8 @@ function strongestContinuum(
     const value = catalogue.continuum ? catalogue.continuum[index]! : NaN;
     if (value > 0 && !(flux >= value)) flux = value;
   }
-  const covered = catalogues.some((c) => c.input.kind === 'continuum' && (coveredShare(detection, c) ?? 0) > 0);
+  const ra = (((detection.raDeg % 360) + 360) % 360) * DEGREE;
+  const covered = catalogues.some((c) => c.input.kind === 'continuum' && c.moc?.contains(ra, detection.decDeg * DEGREE));
   return { flux, covered };
 }
 
@@ -180,7 +180,7 @@ function debrisDoubt(
           separationRad: row.separationArcsec * ARCSECOND,
           distanceMpc,
           velocityDifferenceKms: row.velocityDifferenceKms,
-          logHiMass: row.fluxJyKms > 0 ? Math.log10(hiMass(row.fluxJyKms, distanceMpc)) : expectedGas,
+          logHiMass: row.fluxJyKms > 0 && distanceMpc > 0 ? Math.log10(hiMass(row.fluxJyKms, distanceMpc)) : expectedGas,
           logStellarMass: row.catalogue.input.kind === 'hi' && Number.isNaN(logStellarMass) ? -99 : logStellarMass,
         };
       }),

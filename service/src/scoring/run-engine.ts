@@ -37,19 +37,20 @@ export async function runEngine(
   const engine = new Engine(input);
   const count = engine.detections.length;
   const learning = engine.canLearn;
-  const share = learning ? 0.35 : 0.05;
+  const share = learning ? 0.25 : 0.05;
   const pause = async () => {
     await new Promise<void>((resolve) => setImmediate(resolve));
     signal?.throwIfAborted();
   };
   if (learning) {
+    const { pupils } = engine;
     const lessons: ReturnType<Engine['lessons']> = [];
-    for (let from = 0; from < count; from += UNIT) {
+    for (let from = 0; from < pupils.length; from += UNIT) {
       await pause();
-      lessons.push(...engine.lessons(from, Math.min(count, from + UNIT), null));
-      onProgress?.(0.05 + (share - 0.05) * (lessons.length / count), 'learning from the survey');
+      lessons.push(...engine.lessons(pupils.slice(from, from + UNIT), null));
+      onProgress?.(0.05 + (share - 0.05) * (lessons.length / pupils.length), 'learning from the survey');
     }
-    engine.learnFrom(lessons, (relation) => engine.lessons(0, count, relation));
+    engine.learnFrom(lessons, (relation) => engine.lessons(pupils, relation));
   }
   for (let from = 0; from < count; from += UNIT) {
     await pause();

@@ -1,11 +1,11 @@
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import { DEGREE } from '@eremite/shared/science/constants';
 import { effectiveCompleteness } from '@eremite/shared/science/counterpart/exclusive';
-import { ARCSECOND } from '@eremite/shared/science/constants';
 import { BANDS } from '@eremite/shared/science/photometry/bands';
 import { type DetectionSettings, expectedDetection } from '@eremite/shared/science/photometry/completeness';
 import { type MaskCircle, maskedProbability } from '@eremite/shared/science/photometry/mask-overlap';
 import { toGalactic } from '@eremite/shared/science/sky/galactic';
+import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import type { BandExpectation } from './expectation.ts';
 import type { PreparedBand, PreparedCatalogue } from './prepared-catalogue.ts';
@@ -40,13 +40,6 @@ export function detectionSettings({ absence }: CriteriaSettings): DetectionSetti
   return { rollOffMag: absence.rollOffMag, penaltyMag: absence.depthPenaltyMag, ceiling: 1 };
 }
 
-/** Covered share of the search circle in a catalogue; null where its coverage is unknown. */
-export function coveredShare(detection: Detection, catalogue: PreparedCatalogue): number | null {
-  if (!catalogue.moc) return null;
-  const ra = (((detection.raDeg % 360) + 360) % 360) * DEGREE;
-  return catalogue.moc.coveredFraction(ra, detection.decDeg * DEGREE, detection.searchArcsec * ARCSECOND);
-}
-
 /** What hides a band here whatever its depth; undefined if nothing does. */
 function hiddenBecause(detection: Detection, band: PreparedBand, criteria: CriteriaSettings): string | undefined {
   if (!band.id || BANDS[band.id].regime === 'infrared') return undefined;
@@ -78,6 +71,7 @@ export function weighSilence(
   masks: readonly MaskCircle[],
   expectations: ExpectationCache,
   criteria: CriteriaSettings,
+  shares: CoveredShares,
 ): Silence {
   const settings = detectionSettings(criteria);
   const masked =
@@ -92,7 +86,7 @@ export function weighSilence(
   let best: BandSilence | null = null;
   for (const catalogue of catalogues) {
     if (catalogue.input.kind === 'continuum') continue;
-    const covered = coveredShare(detection, catalogue);
+    const covered = shares.of(detection, catalogue);
     for (const band of catalogue.bands) {
       const silence = bandSilence(detection, catalogue, band, covered, 1 - masked, expectations, criteria, settings);
       bands.push(silence);

@@ -5,6 +5,7 @@ import { type AloneFactors, aloneProbability } from '@eremite/shared/science/sur
 import { projectedKpc } from '@eremite/shared/science/surroundings/projected-separation';
 import { type Surroundings, surroundingsVerdict } from '@eremite/shared/science/surroundings/surroundings-verdict';
 import { numberRole } from '../tiles/role-table.ts';
+import { coveredCircle } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import { type GroupRow, type Membership, membershipOf } from './group-list.ts';
 import type { MissedTable } from './missed-table.ts';
@@ -102,6 +103,7 @@ export function makeNeighbour(
   const magnitudeR = band ? asR(magnitude - dust, band.id, band.toAb) : NaN;
   const fluxJyKms = numberRole(catalogue.input.roles, 'fluxJyKms')?.[index] ?? NaN;
   const angle = separationArcsec * ARCSECOND;
+  const elsewhere = isElsewhere(detection, catalogue, index, surroundings.radiusMpc);
   return {
     catalogue,
     index,
@@ -112,8 +114,25 @@ export function makeNeighbour(
     magnitudeR,
     fluxJyKms,
     insideBelowMpc: angle > 0 ? surroundings.radiusMpc / angle : Infinity,
-    countsAboveMpc: countsAbove(detection, catalogue, magnitudeR, fluxJyKms, context),
+    countsAboveMpc: elsewhere ? Infinity : countsAbove(detection, catalogue, magnitudeR, fluxJyKms, context),
   };
+}
+
+/** Fractional error of a measured distance without one of its own. Common practice. */
+const UNSTATED_ERROR = 0.1;
+
+/** Whether both have measured distances, and these differ by more than the radius and three times their errors. */
+function isElsewhere(
+  { distance, angularMpc, distanceErrorMpc }: Detection,
+  catalogue: PreparedCatalogue,
+  index: number,
+  radiusMpc: number,
+): boolean {
+  if (distance.kind !== 'measured') return false;
+  const own = numberRole(catalogue.input.roles, 'distanceMpc')?.[index] ?? NaN;
+  const stated = numberRole(catalogue.input.roles, 'distanceErrorMpc')?.[index] ?? NaN;
+  const error = Math.hypot(distanceErrorMpc, stated > 0 ? stated : UNSTATED_ERROR * own);
+  return Math.abs(own - angularMpc) > radiusMpc + 3 * error;
 }
 
 function countsAbove(
@@ -222,9 +241,7 @@ export function judgeSurroundings(
 
 function coveredWindow(detection: Detection, { catalogue }: RedshiftReach, radiusMpc: number): number | null {
   if (!catalogue.moc) return null;
-  const ra = (((detection.raDeg % 360) + 360) % 360) * DEGREE;
-  const angle = Math.min(Math.PI, radiusMpc / detection.angularMpc);
-  return catalogue.moc.coveredFraction(ra, detection.decDeg * DEGREE, angle);
+  return coveredCircle(catalogue.moc, detection.raDeg, detection.decDeg, radiusMpc / detection.angularMpc);
 }
 
 function obstaclesOf(
