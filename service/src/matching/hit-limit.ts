@@ -4,7 +4,7 @@ export class HitLimitError extends Error {
 
   /**
    * @param limit most hits the caller allows
-   * @param about estimate of the hits the whole search would give, from the share of looked-at rows that are hits
+   * @param about estimate of the hits the whole search would give
    */
   constructor(
     readonly limit: number,

@@ -46,8 +46,8 @@ describe('pair search finds exactly the pairs of all against all', () => {
     expect(search(evenSky(20, 4), evenSky(300, 5), 180 * 3600).row).toHaveLength(20 * 300);
   });
   it.each([1, -1])('round the pole, sign %d, and on it', (sign) => {
-    const rows = join(evenSky(1500, 6, 89, 90), points([0, 90], [123, 90], [359.99, 89.9999999]));
-    const at = join(evenSky(200, 7, 88.9, 90), points([0, 90], [200, 90], [77, 89.9999]));
+    const rows = join(evenSky(600, 6, 89, 90), points([0, 90], [123, 90], [359.99, 89.9999999]));
+    const at = join(evenSky(120, 7, 88.9, 90), points([0, 90], [200, 90], [77, 89.9999]));
     const turn = (p: SkyPoints) => ({ raDeg: p.raDeg, decDeg: p.decDeg.map((dec) => sign * dec) });
     for (const radius of [30, 400, 5000]) expectExact(turn(at), turn(rows), radius);
   });
@@ -174,6 +174,30 @@ describe('pair search', () => {
       expect(error).toBeInstanceOf(HitLimitError);
       expect(error).toMatchObject({ limit: 10_000, about: 1_000_000 });
     }
+  });
+  it('refuses what is only a little too much too, and lets through what is just at the limit', () => {
+    const rows = evenSky(2000, 19);
+    const at = withRadius(evenSky(500, 20), 100_000);
+    const grid = buildZoneGrid(rows.raDeg, rows.decDeg);
+    const count = pairSearch(grid, at).row.length;
+    expect(pairSearch(grid, at, { limit: count }).row).toHaveLength(count);
+    try {
+      pairSearch(grid, at, { limit: count - 1 });
+      expect.unreachable();
+    } catch (error) {
+      expect(error).toBeInstanceOf(HitLimitError);
+      expect(Math.abs((error as HitLimitError).about / count - 1)).toBeLessThan(0.1);
+    }
+  });
+  it('finds all of 100,000 rows at one place, and refuses all pairs of them before they fill the memory', () => {
+    const place = points(...Array<[number, number]>(100_000).fill([150, 2]));
+    const grid = buildZoneGrid(place.raDeg, place.decDeg);
+    const { row } = pairSearch(grid, withRadius(points([150, 2], [150, 2.001]), 0.5));
+    expect(row).toHaveLength(100_000);
+    expect(row.every((index, i) => index === i)).toBe(true);
+    expect(() => pairSearch(grid, withRadius(place, 1))).toThrow(
+      /about 1.0e\+10 pairs, more than the limit of 50000000/,
+    );
   });
   it.each([-1, NaN, 648_001, Infinity])('refuses a radius of %d arcsec', (radius) => {
     expect(() => search(points([1, 1]), points([1, 1]), radius)).toThrow(/search radius/);

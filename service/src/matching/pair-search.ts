@@ -1,4 +1,5 @@
 import { gather } from './gather.ts';
+import { candidateRows, estimateHits } from './hit-estimate.ts';
 import { DEFAULT_HIT_LIMIT, HitLimitError } from './hit-limit.ts';
 import { Hits, orderHits } from './hits.ts';
 import { checkSameLength } from './same-length.ts';
@@ -26,18 +27,6 @@ export interface Pairs {
   separationArcsec: Float64Array;
 }
 
-/** Rows in the boxes of positions `done` onwards of an order: what is left of a search, cheap to count. */
-function candidatesLeft(grid: ZoneGrid, where: SearchPositions, order: Uint32Array, done: number): number {
-  const box = makeSkyBox();
-  let rows = 0;
-  for (let i = done; i < order.length; i++) {
-    const p = order[i]!;
-    findBox(grid, box, wrapRaDeg(where.raDeg[p]!), where.decDeg[p]!, where.radiusArcsec[p]! / 3600);
-    for (let r = 0; r < box.ranges; r++) rows += box.slots[2 * r + 1]! - box.slots[2 * r]!;
-  }
-  return rows;
-}
-
 /**
  * All rows within the radius of each position, no more and no fewer: a row belongs if `separationArcsec` says it lies
  * at the radius or nearer. Anywhere on the sky; rows at one place are all found. Same input, same bytes.
@@ -55,13 +44,17 @@ export function pairSearch(grid: ZoneGrid, positions: SearchPositions, range: Se
   const hits = new Hits();
   const box = makeSkyBox();
   const order = skyOrder(grid, raDeg, decDeg, from, to);
-  let candidates = 0;
+  for (const p of order) checkRadius('position', p, radiusArcsec[p]! / 3600);
+  if (candidateRows(grid, positions, order) > limit) {
+    // Most hopeless searches are refused here, before they have filled the memory.
+    const about = estimateHits(grid, positions, order);
+    if (about > 2 * limit) throw new HitLimitError(limit, about);
+  }
   for (let i = 0; i < order.length; i++) {
     const p = order[i]!;
     const ra = wrapRaDeg(raDeg[p]!);
     const dec = decDeg[p]!;
     const radius = radiusArcsec[p]!;
-    checkRadius('position', p, radius / 3600);
     findBox(grid, box, ra, dec, radius / 3600);
     const { halfWidthDeg, decLowDeg, decHighDeg, slots } = box;
     for (let r = 0; r < box.ranges; r++) {
@@ -76,12 +69,8 @@ export function pairSearch(grid: ZoneGrid, positions: SearchPositions, range: Se
         const separation = separationArcsec(ra, dec, rowRa, rowDec);
         if (separation <= radius) hits.add(p, slot, separation);
       }
-      candidates += end - slots[2 * r]!;
     }
-    if (hits.count > limit) {
-      const left = candidatesLeft(grid, positions, order, i + 1);
-      throw new HitLimitError(limit, Math.round(hits.count * (1 + left / candidates)));
-    }
+    if (hits.count > limit) throw new HitLimitError(limit, estimateHits(grid, positions, order));
   }
   return asPairs(grid, hits, from, to);
 }
