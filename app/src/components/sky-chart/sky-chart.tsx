@@ -17,14 +17,18 @@ interface SkyChartProps {
 const WIDTH = 900;
 const MARGIN = 34;
 
+// Spreading a hundred thousand values into Math.min would overflow the stack.
+const least = (values: readonly number[]) => values.reduce((a, b) => Math.min(a, b), Infinity);
+const most = (values: readonly number[]) => values.reduce((a, b) => Math.max(a, b), -Infinity);
+
 /** Scale and shift that bring all marks (or the whole sky) into the frame. */
 function layOut(marks: readonly Mark[]) {
   const projection = chooseProjection(marks);
-  const places = marks.map(({ raDeg, decDeg }) => projection.place(raDeg, decDeg) ?? [0, 0]);
+  const places = marks.map(({ raDeg, decDeg }): [number, number] => projection.place(raDeg, decDeg) ?? [0, 0]);
   const whole = projection.kind === 'whole sky';
   const xs = whole ? [-2.83, 2.83] : places.map(([x]) => x);
   const ys = whole ? [-1.415, 1.415] : places.map(([, y]) => y);
-  const [left, right, low, high] = [Math.min(...xs), Math.max(...xs), Math.min(...ys), Math.max(...ys)];
+  const [left, right, low, high] = [least(xs), most(xs), least(ys), most(ys)];
   const span = Math.max(right - left, high - low, 0.004);
   const ratio = Math.min(0.72, Math.max(0.32, (high - low) / Math.max(right - left, 1e-9)));
   const height = Math.round((WIDTH - 2 * MARGIN) * ratio + 2 * MARGIN);
