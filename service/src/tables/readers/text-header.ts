@@ -62,17 +62,26 @@ function headerInComments(comments: string[], delimiter: Delimiter, width: numbe
 function numberedComments(comments: string[], width: number): TextHeader | undefined {
   const names: string[] = [];
   const units: string[] = [];
+  let vector = '';
+  let unit = '';
+  let element = 0;
+  const fillTo = (count: number) => {
+    for (; names.length < count; names.push(`${vector}_${++element}`)) units[names.length] = unit;
+  };
   for (const comment of comments) {
     const parts = /^\s*(\d{1,4})\s+([A-Za-z_]\S*)(?:\s.*?)?(?:\[([^\]]*)\])?\s*$/.exec(comment);
     const place = Number(parts?.[1]);
-    if (parts === null || place <= names.length || place > width) continue;
-    while (names.length < place - 1) names.push(`${names.at(-1) ?? 'column'}_${names.length + 1}`);
+    if (parts === null || place <= names.length || place > width || (place > 1 && vector === '')) continue;
+    fillTo(place - 1);
     names.push(parts[2]!);
-    units[place - 1] = parts[3] ?? '';
+    unit = parts[3] ?? '';
+    units[place - 1] = unit;
+    vector = parts[2]!;
+    element = 0;
   }
-  if (names.length < 2 && width > 1) return undefined;
-  while (names.length < width) names.push(`${names.at(-1)!}_${names.length + 1}`);
-  return names.length === 0 ? undefined : { names, units: names.map((_, i) => units[i] ?? ''), rowsBefore: 0 };
+  if (names.length === 0 || (names.length < 2 && width > 1)) return undefined;
+  fillTo(width);
+  return { names, units: names.map((_, i) => units[i] ?? ''), rowsBefore: 0 };
 }
 
 function splitComment(comment: string, delimiter: Delimiter): string[] {

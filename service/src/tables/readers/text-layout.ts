@@ -122,7 +122,9 @@ function widen(names: string[], rows: ScannedRecord[], notes: string[]): string[
   if (names.length > 1 && names.at(-1) === '' && rows.every((row) => (row.cells[names.length - 1] ?? '') === '')) {
     return names.slice(0, -1);
   }
-  if (width <= names.length) return names;
+  const asNamed = rows.filter((row) => row.cells.length === names.length).length;
+  const asWide = rows.filter((row) => row.cells.length === width).length;
+  if (width <= names.length || asNamed >= asWide) return names;
   const full = rows.filter((row) => row.cells.length === width);
   if (width === names.length + 1 && full.every((row) => row.cells[width - 1] === '')) return names;
   notes.push(`The header names ${names.length} columns, the rows have ${width}; the last ones have no name.`);

@@ -156,7 +156,10 @@ function putArray(column: Column, row: number, field: VotableField, bytes: Buffe
     return column.putText(row, text.replace(/\0[\s\S]*$/, '').trimEnd());
   }
   const items: string[] = [];
-  for (let i = 0; i < count; i++) items.push(itemText(field.datatype, bytes, at, i));
+  for (let i = 0; i < count; i++) {
+    const item = itemText(field.datatype, bytes, at, i);
+    items.push(item === field.nullMark ? 'NaN' : item);
+  }
   column.putText(row, items.join(' '));
 }
 

@@ -1,6 +1,5 @@
 import type { ChunkBuilder } from '../columns/chunk-builder.ts';
 import { NumberColumn } from '../columns/number-column.ts';
-import { TextColumn } from '../columns/text-column.ts';
 import type { VotableField } from './votable-head.ts';
 
 type Column = ChunkBuilder['columns'][number];
@@ -27,15 +26,23 @@ export function putTableCell(
   else if (isText) column.putCell(row, bytes, start, end);
   else if (column instanceof NumberColumn) column.putCell(row, bytes, start, end);
   else if (field.datatype === 'boolean' && !field.isArray) column.putText(row, booleanText(bytes, start, end));
-  else putArray(column, row, bytes.toString('utf8', start, end));
+  else column.putText(row, arrayText(field, bytes.toString('utf8', start, end)));
 }
 
-function putArray(column: TextColumn, row: number, text: string): void {
-  column.putText(row, text.replace(/\s+/g, ' '));
+/** Elements with one blank between; bits and booleans are spelled as they are elsewhere. */
+function arrayText({ datatype, nullMark }: VotableField, text: string): string {
+  if (datatype === 'bit') return text.replace(/\s+/g, '').split('').join(' ');
+  const items = text.split(/\s*,\s*|\s+/);
+  if (datatype === 'boolean') return items.map(booleanWord).join(' ');
+  return (nullMark === undefined ? items : items.map((item) => (item === nullMark ? 'NaN' : item))).join(' ');
 }
 
 function booleanText(bytes: Buffer, start: number, end: number): string {
-  const word = bytes.toString('latin1', start, end).toLowerCase();
+  return booleanWord(bytes.toString('latin1', start, end));
+}
+
+function booleanWord(text: string): string {
+  const word = text.toLowerCase();
   if (word === 't' || word === 'true' || word === '1') return 'true';
   if (word === 'f' || word === 'false' || word === '0') return 'false';
   return word === '?' ? '' : word;

@@ -152,11 +152,12 @@ function readTable(
     );
   }
   const notes: string[] = [];
+  const shared = sharedValues(root);
   const names = uniqueNames(
     elements.map(({ attributes }) => attributes['name'] ?? attributes['ID'] ?? ''),
     notes,
   );
-  const fields = elements.map((element, i) => readField(element, names[i]!, notes));
+  const fields = elements.map((element, i) => readField(element, names[i]!, shared, notes));
   const columns = fields.map((field, i) => describe(field, elements[i]!, names[i]!));
   const description = childText(table, 'DESCRIPTION') || (resource && childText(resource, 'DESCRIPTION'));
   const refs = elements
@@ -176,6 +177,14 @@ function readTable(
   return { facts, fields };
 }
 
+/** VALUES elements that others refer to by their ID. */
+function sharedValues(root: Element, found = new Map<string, Element>()): Map<string, Element> {
+  const id = root.attributes['ID'];
+  if (root.name === 'VALUES' && id !== undefined) found.set(id, root);
+  for (const child of root.children) sharedValues(child, found);
+  return found;
+}
+
 /** A table without columns of its own may refer to another that has them. */
 function fieldsOf(table: Element, root: Element): Element[] {
   const own = table.children.filter((child) => child.name === 'FIELD');
@@ -188,7 +197,8 @@ function fieldsOf(table: Element, root: Element): Element[] {
   return model?.children.filter((child) => child.name === 'FIELD') ?? [];
 }
 
-function readField({ attributes, children }: Element, name: string, notes: string[]): VotableField {
+function readField(element: Element, name: string, shared: Map<string, Element>, notes: string[]): VotableField {
+  const { attributes, children } = element;
   const written = attributes['datatype'] ?? '';
   let datatype = DATATYPES[written];
   if (datatype === undefined) {
@@ -200,8 +210,10 @@ function readField({ attributes, children }: Element, name: string, notes: strin
   const factors = size.split('x').map((factor) => factor.trim());
   const variable = size.includes('*') || (text && written !== datatype && size === '');
   const length = size === '' || variable ? 1 : factors.reduce((product, factor) => product * (Number(factor) || 1), 1);
-  const values = children.find((child) => child.name === 'VALUES' && child.attributes['null'] !== undefined);
-  const nullMark = values?.attributes['null'];
+  const values = children
+    .filter((child) => child.name === 'VALUES')
+    .map((child) => shared.get(child.attributes['ref'] ?? '') ?? child);
+  const nullMark = values.find((child) => child.attributes['null'] !== undefined)?.attributes['null'];
   return {
     datatype,
     length: variable ? null : length,
