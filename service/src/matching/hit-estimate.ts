@@ -1,4 +1,4 @@
-import type { SearchPositions } from './pair-search.ts';
+import type { SearchPositions } from './search-positions.ts';
 import { separationArcsec } from './separation-arcsec.ts';
 import { findBox, makeSkyBox } from './sky-box.ts';
 import { wrapRaDeg } from './sky-position.ts';

@@ -1,5 +1,6 @@
 import { type NeighbourQueries, type Neighbours, neighbourSearch } from './neighbour-search.ts';
-import { type Pairs, pairSearch, type SearchPositions } from './pair-search.ts';
+import { type Pairs, pairSearch } from './pair-search.ts';
+import type { SearchPositions } from './search-positions.ts';
 import type { SearchRange } from './search-range.ts';
 import type { VelocityGrid } from './velocity-grid.ts';
 import type { GridSource, ZoneGrid } from './zone-grid.ts';

@@ -1,11 +1,13 @@
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { buildZoneGrid } from './build-zone-grid.ts';
 import { HitLimitError } from './hit-limit.ts';
 import { pairSearch, type Pairs } from './pair-search.ts';
 import { separationArcsec } from './separation-arcsec.ts';
 import { brutePairs, evenSky, near, seeded, type SkyPoints, testSeparation } from './testing/brute-force.ts';
 import { sharedMemory } from './zone-grid.ts';
+
+vi.setConfig({ testTimeout: 30_000 }); // all against all is slow on a busy machine
 
 const join = (...parts: SkyPoints[]): SkyPoints => ({
   raDeg: Float64Array.from(parts.flatMap((part) => [...part.raDeg])),
@@ -49,7 +51,7 @@ describe('pair search finds exactly the pairs of all against all', () => {
     const rows = join(evenSky(600, 6, 89, 90), points([0, 90], [123, 90], [359.99, 89.9999999]));
     const at = join(evenSky(120, 7, 88.9, 90), points([0, 90], [200, 90], [77, 89.9999]));
     const turn = (p: SkyPoints) => ({ raDeg: p.raDeg, decDeg: p.decDeg.map((dec) => sign * dec) });
-    for (const radius of [30, 400, 5000]) expectExact(turn(at), turn(rows), radius);
+    for (const radius of [60, 400, 5000]) expectExact(turn(at), turn(rows), radius);
   });
   it('across right ascension 0', () => {
     const strip = (seed: number, count: number) => {
@@ -62,7 +64,7 @@ describe('pair search finds exactly the pairs of all against all', () => {
         [0, 0],
       );
     };
-    for (const radius of [20, 90, 900]) expectExact(strip(8, 200), strip(9, 1500), radius);
+    for (const radius of [20, 90, 900]) expectExact(strip(8, 150), strip(9, 800), radius, 5);
   });
   it('down to milliarcseconds, also beside right ascension 0 and the pole', () => {
     const places = points([10, 20], [359.9999999999, 1], [0, -45], [200, 89.9999], [0, 0]);

@@ -3,20 +3,13 @@ import { candidateRows, estimateHits } from './hit-estimate.ts';
 import { DEFAULT_HIT_LIMIT, HitLimitError } from './hit-limit.ts';
 import { Hits, orderHits } from './hits.ts';
 import { checkSameLength } from './same-length.ts';
+import type { SearchPositions } from './search-positions.ts';
 import type { SearchRange } from './search-range.ts';
 import { separationArcsec } from './separation-arcsec.ts';
 import { findBox, makeSkyBox } from './sky-box.ts';
 import { skyOrder } from './sky-order.ts';
-import { checkRadius, type Numbers, wrapRaDeg } from './sky-position.ts';
+import { checkRadius, wrapRaDeg } from './sky-position.ts';
 import type { ZoneGrid } from './zone-grid.ts';
-
-/** Where to search: one entry a position. */
-export interface SearchPositions {
-  raDeg: Numbers;
-  decDeg: Numbers;
-  /** radius of each position, seconds of arc, 0 to 648000; a row exactly at the radius is found */
-  radiusArcsec: Numbers;
-}
 
 /** Pairs of a position and a row of the grid's input, by position, then separation, then row. */
 export interface Pairs {

@@ -1,7 +1,8 @@
 import { DEFAULT_HIT_LIMIT, HitLimitError } from './hit-limit.ts';
 import type { TaskRunner } from './matching-task.ts';
 import type { NeighbourQueries, Neighbours } from './neighbour-search.ts';
-import type { Pairs, SearchPositions } from './pair-search.ts';
+import type { Pairs } from './pair-search.ts';
+import type { SearchPositions } from './search-positions.ts';
 import type { Numbers } from './sky-position.ts';
 import { emptyGrid, type GridSource, sharedMemory, type ZoneGrid } from './zone-grid.ts';
 import { blocksOf, blockStarts } from './zone-grid-steps.ts';

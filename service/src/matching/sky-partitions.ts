@@ -1,7 +1,7 @@
 import { ARCSECOND, DEGREE } from '@eremite/shared/science/constants';
 import { DomainError } from '@eremite/shared/science/domain-error';
 import { cellOf } from '@eremite/shared/science/sky/healpix';
-import type { SearchPositions } from './pair-search.ts';
+import type { SearchPositions } from './search-positions.ts';
 import { checkSameLength } from './same-length.ts';
 import { checkPosition, checkRadius } from './sky-position.ts';
 import { tileCover } from './tile-cover.ts';
