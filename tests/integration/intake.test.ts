@@ -128,7 +128,10 @@ describe('an upload', () => {
       settings: { kind: 'optical', units: { ra: 'h' } },
     });
     expect(answered.body.check.ready).toBe(true);
-    const useless = await upload('ra_deg,dec_deg\n400,95\n', { kind: 'optical', columns: { ra: 'ra_deg', dec: 'dec_deg' } });
+    const useless = await upload('ra_deg,dec_deg\n400,95\n', {
+      kind: 'optical',
+      columns: { ra: 'ra_deg', dec: 'dec_deg' },
+    });
     expect((await staff.lead.post(`/intakes/${useless.body.id}/publish`)).body.type).toBe(
       'urn:eremite:error:nothing-to-publish',
     );

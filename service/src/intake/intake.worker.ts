@@ -1,5 +1,5 @@
 import { once } from 'node:events';
-import { parentPort, workerData } from 'node:worker_threads';
+import { parentPort } from 'node:worker_threads';
 import { fileSource } from '../tables/bytes/byte-source.ts';
 import { TableError } from '../tables/table.ts';
 import { inspect } from './inspect.ts';
@@ -7,12 +7,11 @@ import type { IntakeFailure, IntakeMessage, IntakeTask } from './intake-messages
 import { publish } from './publish.ts';
 import { SettingsError } from './resolved.ts';
 
-// Reading a table keeps a thread busy for seconds; here it does so without keeping requests waiting.
+// Reading a table keeps a thread busy for seconds; here it does so without keeping requests waiting. The thread stays
+// for the next table, one at a time.
 const port = parentPort!;
-const task = workerData as IntakeTask;
 const send = (message: IntakeMessage, transfer: ArrayBuffer[] = []): void => port.postMessage(message, transfer);
 const REPORT_MS = 100;
-let lastReport = 0;
 
 async function handOver(message: IntakeMessage, transfer: ArrayBuffer[] = []): Promise<void> {
   const taken = once(port, 'message');
@@ -20,13 +19,13 @@ async function handOver(message: IntakeMessage, transfer: ArrayBuffer[] = []): P
   await taken;
 }
 
-function onProgress(fraction: number, rows: number): void {
-  if (Date.now() - lastReport < REPORT_MS) return;
-  lastReport = Date.now();
-  send({ kind: 'progress', fraction, rows });
-}
-
-async function work(): Promise<void> {
+async function work(task: IntakeTask): Promise<void> {
+  let lastReport = 0;
+  const onProgress = (fraction: number, rows: number) => {
+    if (Date.now() - lastReport < REPORT_MS) return;
+    lastReport = Date.now();
+    send({ kind: 'progress', fraction, rows });
+  };
   const source = await fileSource(task.path, task.fileName);
   if (task.what === 'inspect') {
     send({ kind: 'inspected', inspection: await inspect(source, task.settings, { onProgress }) });
@@ -45,19 +44,15 @@ async function work(): Promise<void> {
 function failureOf(error: unknown): IntakeFailure {
   if (error instanceof TableError) {
     const { message, mend, line, column, byte, rowsRead } = error;
-    const place = { line, column, byte, rowsRead };
-    return {
-      kind: 'table',
-      message,
-      mend,
-      ...Object.fromEntries(Object.entries(place).filter(([, v]) => v !== undefined)),
-    };
+    const place = Object.entries({ line, column, byte, rowsRead }).filter(([, value]) => value !== undefined);
+    return { kind: 'table', message, mend, ...Object.fromEntries(place) };
   }
   if (error instanceof SettingsError) return { kind: 'settings', faults: [...error.faults] };
   const { message, stack } = error instanceof Error ? error : new Error(String(error));
   return { kind: 'unexpected', message, ...(stack === undefined ? {} : { stack }) };
 }
 
-work()
-  .catch((error: unknown) => send({ kind: 'failed', failure: failureOf(error) }))
-  .finally(() => port.close());
+port.on('message', (message: IntakeTask | 'taken') => {
+  if (message === 'taken') return;
+  void work(message).catch((error: unknown) => send({ kind: 'failed', failure: failureOf(error) }));
+});

@@ -42,7 +42,7 @@ export class IntakeWorker implements OnModuleDestroy {
   private async queued<T>(work: (worker: Worker) => Promise<T>): Promise<T> {
     if (this.running >= MOST_THREADS) await new Promise<void>((resolve) => this.waiting.push(resolve));
     else this.running++;
-    const worker = this.idle.pop() ?? new Worker(workerUrl('intake'));
+    const worker = this.idle.pop() ?? this.start();
     worker.ref();
     try {
       const result = await work(worker);
@@ -63,7 +63,14 @@ export class IntakeWorker implements OnModuleDestroy {
   private rest(worker: Worker): void {
     worker.unref();
     this.idle.push(worker);
+  }
+
+  private start(): Worker {
+    const worker = new Worker(workerUrl('intake'));
     worker.once('exit', () => (this.idle = this.idle.filter((other) => other !== worker)));
+    // Without a listener an error in an idle thread would end the process.
+    worker.on('error', () => undefined);
+    return worker;
   }
 }
 
