@@ -37,9 +37,10 @@ export class NumberColumn {
   }
 
   /** Takes a cell without surrounding blanks. */
-  putCell(row: number, bytes: Uint8Array, start: number, end: number): void {
+  putCell(row: number, bytes: Buffer, start: number, end: number): void {
     const value = start === end ? NaN : parsePlainNumber(bytes, start, end, this.decimal);
-    const identifier = bytes[start] === 48 && end - start > 2;
+    const second = bytes[start + 1]!;
+    const identifier = bytes[start] === 48 && end - start > 2 && second >= 48 && second <= 57;
     if (value < SAFE && value > -SAFE && value !== this.nullValue && !identifier) this.values[row] = value;
     else if (start === end) this.values[row] = NaN;
     else this.putOddCell(row, value, cellText(bytes, start, end));

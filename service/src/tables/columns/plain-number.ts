@@ -6,7 +6,7 @@ const DOT = 46;
  * Equals `Number()` of the same text for every such number; anything else, also hex and blanks, is NaN.
  * Up to 15 digits and powers of ten up to 22 are exact in a double, so one operation rounds correctly (Clinger 1990).
  */
-export function parsePlainNumber(bytes: Uint8Array, start: number, end: number, decimal = DOT): number {
+export function parsePlainNumber(bytes: Buffer, start: number, end: number, decimal = DOT): number {
   let i = start;
   let byte = bytes[i]!;
   const negative = byte === 45;
@@ -56,7 +56,7 @@ export function parsePlainNumber(bytes: Uint8Array, start: number, end: number, 
   return negative ? -value : value;
 }
 
-function slowNumber(bytes: Uint8Array, start: number, end: number, decimal: number): number {
-  const text = String.fromCharCode(...bytes.subarray(start, Math.min(end, start + 4096)));
+function slowNumber(bytes: Buffer, start: number, end: number, decimal: number): number {
+  const text = bytes.toString('latin1', start, end);
   return Number(decimal === DOT ? text : text.replace(String.fromCharCode(decimal), '.'));
 }

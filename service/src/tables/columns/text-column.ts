@@ -20,7 +20,7 @@ export class TextColumn {
     return this.length;
   }
 
-  putCell(row: number, bytes: Uint8Array, start: number, end: number): void {
+  putCell(row: number, bytes: Buffer, start: number, end: number): void {
     const size = end - start;
     if (this.nullMark !== undefined && size > 0 && cellText(bytes, start, end) === this.nullMark) {
       this.offsets[row + 1] = this.length;
