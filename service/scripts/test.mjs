@@ -1,5 +1,5 @@
 // npm test: installs and builds what is missing, then lint, types and every test. The last line of the output is
-// `N passed, N failed`, over tests and the checks before them.
+// `N passed, N failed`, over tests and the checks before them. Arguments go to vitest: npm test -- --project unit.
 import { mkdirSync, readFileSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { ensureChromium } from './chromium.mjs';
@@ -7,6 +7,7 @@ import { install } from './install.mjs';
 import { CACHE } from './paths.mjs';
 
 const LONG = process.argv.includes('--long');
+const ARGUMENTS = process.argv.slice(2).filter((argument) => argument !== '--long');
 const RESULTS = join(CACHE, 'test-results.json');
 let passed = 0;
 let failed = 0;
@@ -48,7 +49,7 @@ async function main() {
   rmSync(RESULTS, { force: true });
   console.log('\n--- tests');
   const env = { ...process.env, ...(LONG && { EREMITE_TEST_LONG: '1' }) };
-  const args = ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`];
+  const args = ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`, ...ARGUMENTS];
   const before = failed;
   const status = await run('vitest', args, { env });
   try {
