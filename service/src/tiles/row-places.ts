@@ -18,7 +18,13 @@ export class RowPlaces {
   private parts = new Uint32Array(0);
   private offsets = new Uint32Array(0);
   private block = 0;
-  private pending: { row: number[]; cell: number[]; part: number[]; at: number[] } = empty();
+  private count = 0;
+  private readonly pending = {
+    row: new Uint32Array(1 << BLOCK_BITS),
+    cell: new Int32Array(1 << BLOCK_BITS),
+    part: new Uint32Array(1 << BLOCK_BITS),
+    at: new Uint32Array(1 << BLOCK_BITS),
+  };
 
   /** Notes the place of row `i` of the table being cut up. */
   put(i: number, cell: number, part: number, at: number): void {
@@ -31,32 +37,31 @@ export class RowPlaces {
   /** Takes over what was put, for the rows of these numbers; returns the blocks that are now complete. */
   commit(rows: Uint32Array): Tile[] {
     const done: Tile[] = [];
+    const { row, cell, part, at } = this.pending;
     for (let i = 0; i < rows.length; i++) {
       const block = blockOf(rows[i]!);
       if (block !== this.block) {
         done.push(...this.finish());
         this.block = block;
       }
-      this.pending.row.push(rows[i]!);
-      this.pending.cell.push(this.cells[i]!);
-      this.pending.part.push(this.parts[i]!);
-      this.pending.at.push(this.offsets[i]!);
+      const next = this.count++;
+      row[next] = rows[i]!;
+      cell[next] = this.cells[i]!;
+      part[next] = this.parts[i]!;
+      at[next] = this.offsets[i]!;
     }
     return done;
   }
 
   finish(): Tile[] {
-    const { row, cell, part, at } = this.pending;
-    this.pending = empty();
-    if (row.length === 0) return [];
-    const columns = {
-      row: Uint32Array.from(row),
-      cell: Int32Array.from(cell),
-      part: Uint32Array.from(part),
-      at: Uint32Array.from(at),
-    };
-    const roles = packColumns({ rows: row.length, columns });
-    return [{ cell: PLACES_CELL, part: this.block, count: row.length, roles, originals: new Uint8Array(0) }];
+    const { count, block } = this;
+    if (count === 0) return [];
+    const columns = Object.fromEntries(
+      Object.entries(this.pending).map(([name, values]) => [name, values.slice(0, count)]),
+    );
+    this.count = 0;
+    const roles = packColumns({ rows: count, columns });
+    return [{ cell: PLACES_CELL, part: block, count, roles, originals: new Uint8Array(0) }];
   }
 
   private grow(length: number): void {
@@ -67,8 +72,6 @@ export class RowPlaces {
     this.offsets = copy(this.offsets, new Uint32Array(room));
   }
 }
-
-const empty = () => ({ row: [] as number[], cell: [] as number[], part: [] as number[], at: [] as number[] });
 
 export interface RowPlace {
   row: number;
