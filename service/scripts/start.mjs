@@ -14,4 +14,9 @@ try {
   process.exit(1);
 }
 process.env.NODE_ENV ??= 'production';
+if (process.env.npm_lifecycle_event === 'start') {
+  // npm killed outright cannot hand its signal on; a server no one can stop any more must not stay behind.
+  const parent = process.ppid;
+  setInterval(() => process.ppid === parent || process.kill(process.pid, 'SIGTERM'), 1000).unref();
+}
 await import(pathToFileURL(join(ROOT, 'service', 'dist', 'main.js')).href);
