@@ -16,7 +16,7 @@ export function createRouter(client: QueryClient) {
       HydrateFallback: Loading,
       children: [
         { path: '/sign-in', ...page(() => import('./routes/sign-in.tsx')) },
-        { path: '/invitations/:token', ...page(() => import('./routes/accept-invitation.tsx')) },
+        { path: '/accept-invitation', ...page(() => import('./routes/accept-invitation.tsx')) },
         {
           path: '/',
           Component: Shell,

@@ -1,21 +1,28 @@
-import { useNavigate, useParams } from 'react-router-dom';
+import { useQuery } from '@tanstack/react-query';
+import { useNavigate, useSearchParams } from 'react-router-dom';
+import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
+import { invitationPreviewQuery } from '#features/session/api/accept-invitation.ts';
 import { AcceptInvitationForm } from '#features/session/components/accept-invitation-form.tsx';
 import { Door } from '#features/session/components/door.tsx';
 import { paths } from '#config/paths.ts';
-import { say } from '#lib/toaster.ts';
 import { useTitle } from '#lib/use-title.ts';
 
 export function Component() {
-  const token = useParams()['token']!;
+  const token = useSearchParams()[0].get('token') ?? '';
+  const { data, error } = useQuery(invitationPreviewQuery(token));
   const navigate = useNavigate();
   useTitle('Accept invitation');
-  const onAccepted = () => {
-    void say('You have joined the team. Sign in with your e-mail and the password you chose.');
-    void navigate(paths.signIn());
-  };
+  const lede = data ? `${data.teamName} invites ${data.email} as ${data.role}.` : 'Reading the invitation…';
   return (
-    <Door title="Join your team" lede="Choose a password; your e-mail is the one the invitation was sent to.">
-      <AcceptInvitationForm token={token} onAccepted={onAccepted} />
+    <Door title="Join your team" lede={error ? 'This invitation cannot be used.' : lede}>
+      <ProblemCallout error={error} />
+      {data && (
+        <AcceptInvitationForm
+          token={token}
+          hasAccount={data.hasAccount}
+          onAccepted={() => void navigate(paths.surveys(), { replace: true })}
+        />
+      )}
     </Door>
   );
 }

@@ -89,6 +89,7 @@ export function Component() {
         <DetectionView
           key={detectionId}
           detail={detail.data}
+          surveyId={survey.id}
           role={survey.role}
           settings={criteria.data?.settings}
           catalogues={catalogues.data?.items}

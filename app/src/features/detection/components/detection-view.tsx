@@ -8,6 +8,7 @@ import { SkyPanel } from '#components/sky-map/sky-panel.tsx';
 import { SurroundingsStrip } from '#components/surroundings-strip/surroundings-strip.tsx';
 import { overridesQuery, reviewsQuery } from '../api/decisions.ts';
 import { chosenCandidate, useDecisions } from '../hooks/use-decisions.ts';
+import { useShortlisting } from '../hooks/use-shortlisting.ts';
 import { usePanelData } from '../hooks/use-panel-data.ts';
 import { CommandsBar, type Command } from './commands-bar.tsx';
 import { DecisionDialogs } from './decision-dialogs.tsx';
@@ -20,6 +21,7 @@ import { VerdictSummary } from './verdict-summary.tsx';
 
 interface DetectionViewProps {
   detail: VerdictDetail;
+  surveyId: string;
   role: TeamRole;
   settings: CriteriaSettings | undefined;
   catalogues: readonly Catalogue[] | undefined;
@@ -32,12 +34,13 @@ interface DetectionViewProps {
 
 /** One detection with all that speaks for and against it, and the means to decide. */
 export function DetectionView(props: DetectionViewProps) {
-  const { detail, role, settings, catalogues, tab, onTab, onNext, onPrevious, onBack } = props;
+  const { detail, surveyId, role, settings, catalogues, tab, onTab, onNext, onPrevious, onBack } = props;
   const id = detail.verdict.detectionId;
   const [hovered, setHovered] = useState<string | null>(null);
   const [selected, setSelected] = useState<string | null>(null);
   const panel = usePanelData(detail, settings, catalogues);
   const decisions = useDecisions(detail, role, onNext);
+  const shortlisting = useShortlisting(surveyId, detail);
   const { data: reviews } = useQuery(reviewsQuery(id));
   const { data: overrides } = useQuery(overridesQuery(id));
   const link = { hovered, selected, onHover: setHovered, onSelect: setSelected };
@@ -51,6 +54,10 @@ export function DetectionView(props: DetectionViewProps) {
       mayDecide && { combo: 'o', keyName: 'O', label: 'override…', group: 'Decide', disabled: off, run: () => ask({ what: 'review' }) },
       mayDecide && { combo: 'n', keyName: 'N', label: 'agree with a note…', group: 'Decide', disabled: off, run: () => ask({ what: 'note' }) },
       maySettle && { combo: 's', keyName: 'S', label: 'settle…', group: 'Decide', disabled: off, run: () => ask({ what: 'settle' }) },
+      maySettle && {
+        combo: 'l', keyName: 'L', label: shortlisting.isOn ? 'off the shortlist' : 'shortlist', group: 'Decide',
+        disabled: off || shortlisting.isPending, run: shortlisting.toggle,
+      },
       mayDecide && {
         combo: 'c', keyName: 'C', label: 'make the chosen object the counterpart…', group: 'Decide', hidden: true,
         disabled: off || !chosen, run: () => chosen && ask({ what: 'accept', candidate: chosen }),
@@ -66,7 +73,7 @@ export function DetectionView(props: DetectionViewProps) {
       { combo: 'u', keyName: 'U', label: 'up to the list', group: 'Move', hidden: true, disabled: off, run: onBack },
     ];
     return all.filter((command): command is Command => command !== false);
-  }, [decisions, chosen, onNext, onPrevious, onBack]);
+  }, [decisions, shortlisting, chosen, onNext, onPrevious, onBack]);
 
   return (
     <>

@@ -1,10 +1,24 @@
-import { acceptInvitationRequest } from '@eremite/shared/contracts/auth';
-import { useMutation } from '@tanstack/react-query';
-import type { z } from 'zod';
-import { act } from '#lib/api-client.ts';
+import { invitationPreview, meResponse, type AcceptInvitationRequest } from '@eremite/shared/contracts/auth';
+import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import { call } from '#lib/api-client.ts';
+import { meQuery } from '#lib/queries/me.ts';
 
-export const useAcceptInvitation = () =>
-  useMutation({
-    mutationFn: (json: z.input<typeof acceptInvitationRequest>) =>
-      act('/invitations/accept', { method: 'POST', json }),
+/** What an invitation's link is for. */
+export const invitationPreviewQuery = (token: string) =>
+  queryOptions({
+    queryKey: ['invitation', token],
+    queryFn: ({ signal }) => call(invitationPreview, `/invitations/preview?token=${encodeURIComponent(token)}`, { signal }),
+    retry: false,
   });
+
+/** Joins the team and is signed in by it. */
+export function useAcceptInvitation() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (json: AcceptInvitationRequest) => call(meResponse, '/invitations/accept', { method: 'POST', json }),
+    onSuccess: (me) => {
+      client.clear();
+      client.setQueryData(meQuery().queryKey, me);
+    },
+  });
+}

@@ -3,7 +3,14 @@ import { useState, type FormEvent } from 'react';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { useAcceptInvitation } from '../api/accept-invitation.ts';
 
-export function AcceptInvitationForm({ token, onAccepted }: { token: string; onAccepted: () => void }) {
+interface AcceptInvitationFormProps {
+  token: string;
+  /** The e-mail has an account already: its own password joins. */
+  hasAccount: boolean;
+  onAccepted: () => void;
+}
+
+export function AcceptInvitationForm({ token, hasAccount, onAccepted }: AcceptInvitationFormProps) {
   const [name, setName] = useState('');
   const [password, setPassword] = useState('');
   const accept = useAcceptInvitation();
@@ -16,11 +23,15 @@ export function AcceptInvitationForm({ token, onAccepted }: { token: string; onA
       <FormGroup label="Your name" labelFor="name" helperText="As it should stand beside your decisions.">
         <InputGroup id="name" autoComplete="name" autoFocus required value={name} onValueChange={setName} />
       </FormGroup>
-      <FormGroup label="Password" labelFor="new-password" helperText="At least 10 characters.">
+      <FormGroup
+        label="Password"
+        labelFor="new-password"
+        helperText={hasAccount ? 'The one of your account here.' : 'At least 10 characters.'}
+      >
         <InputGroup
           id="new-password"
           type="password"
-          autoComplete="new-password"
+          autoComplete={hasAccount ? 'current-password' : 'new-password'}
           minLength={10}
           required
           value={password}
