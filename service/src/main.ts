@@ -30,7 +30,10 @@ async function main(): Promise<void> {
   say(`\nEremite is ready: ${env.publicUrl ?? `http://localhost:${port}`}`);
   if (!hasApp) say('The application is not built; only the API is served (npm start builds both).');
   if (demo) {
-    say(`\nDemo accounts, password ${demo.password} (shown only now unless you set EREMITE_DEMO_PASSWORD):`);
+    const password = demo.password
+      ? `password ${demo.password} (shown only now, unless you set EREMITE_DEMO_PASSWORD)`
+      : 'with the password of the first start';
+    say(`\nDemo accounts, ${password}:`);
     for (const { email, role } of demo.accounts) say(`  ${email.padEnd(28)} ${role}`);
   }
 }

@@ -1,5 +1,13 @@
 import { Inject, Injectable, Optional } from '@nestjs/common';
 
+/** The demo's accounts, one of each kind. */
+export const DEMO_ACCOUNTS = [
+  { email: 'lead@eremite.example', role: 'lead' },
+  { email: 'reviewer@eremite.example', role: 'reviewer' },
+  { email: 'observer@eremite.example', role: 'observer' },
+  { email: 'admin@eremite.example', role: 'administrator' },
+] as const;
+
 /** Fills an empty database with the demo: provided by the demo's module, called once before the service is ready. */
 export interface DemoFiller {
   /** @returns the accounts made */

@@ -16,6 +16,12 @@ export class FirstAccounts {
     return (await this.accounts.countUsers()) === 0;
   }
 
+  /** Which of these have an account. */
+  async present<T extends { readonly email: string }>(wanted: readonly T[]): Promise<T[]> {
+    const found = await Promise.all(wanted.map((one) => this.accounts.userByEmail(one.email)));
+    return wanted.filter((_, i) => found[i]);
+  }
+
   /** Makes the administrator the environment names; answers whether it did. */
   async makeAdministrator(): Promise<boolean> {
     const { adminEmail: email, adminPassword: password } = this.env;
