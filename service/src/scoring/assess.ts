@@ -52,7 +52,7 @@ export function assessStarlight(
   const { criteria } = model;
   const expectations = new ExpectationCache(detection, model.relation);
   const objects = groupObjects(candidates);
-  weighObjects(detection, objects, expectations, model);
+  weighObjects(detection, objects, expectations, model, catalogues, shares);
   const silence = weighSilence(detection, catalogues, masks, expectations, criteria, shares);
   const { prior, source } = priorFor(detection, priors, criteria);
   const { reliability } = detection;

@@ -60,7 +60,7 @@ export class Engine {
   private readonly surroundings: SurroundingsContext;
   private readonly overrideOf: OverrideOf | null;
   private readonly shares: CoveredShares;
-  private learnt: Learnt;
+  learnt: Learnt;
 
   constructor(readonly input: EngineInput) {
     const { criteria, survey } = input;
@@ -251,7 +251,7 @@ export class Engine {
       const surroundings = judgeSurroundings(detection, around[i]!, own, far[i]!, this.surroundings);
       const assessment: Assessment = { ...starlight, surroundings };
       const doubts = judgeDoubts(starlight, surroundings, this.searched, criteria);
-      rateRows(detection, starlight.candidates, starlight.expectations, starlight.prior);
+      rateRows(detection, starlight.candidates, starlight.expectations, starlight.prior, criteria);
       return {
         position: detection.position,
         catalogueId: this.input.catalogues[detection.catalogue]!.id,

@@ -81,7 +81,9 @@ export function packNeighbours(
       band: textColumn(rows.map(({ band }) => band ?? '')),
       magnitude: numbers(rows, ({ magnitude }) => magnitude),
       absoluteMagnitude: numbers(rows, ({ magnitudeR }) => magnitudeR - modulus),
-      logHiMass: numbers(rows, ({ fluxJyKms }) => (fluxJyKms > 0 && luminosityMpc > 0 ? Math.log10(hiMass(fluxJyKms, luminosityMpc)) : NaN)),
+      logHiMass: numbers(rows, ({ fluxJyKms }) =>
+        fluxJyKms > 0 && luminosityMpc > 0 ? Math.log10(hiMass(fluxJyKms, luminosityMpc)) : NaN,
+      ),
       qualifies: Uint8Array.from(rows, (row) =>
         angularMpc <= row.insideBelowMpc && angularMpc >= row.countsAboveMpc ? 1 : 0,
       ),

@@ -135,7 +135,9 @@ function strongestContinuum(
     if (value > 0 && !(flux >= value)) flux = value;
   }
   const ra = (((detection.raDeg % 360) + 360) % 360) * DEGREE;
-  const covered = catalogues.some((c) => c.input.kind === 'continuum' && c.moc?.contains(ra, detection.decDeg * DEGREE));
+  const covered = catalogues.some(
+    (c) => c.input.kind === 'continuum' && c.moc?.contains(ra, detection.decDeg * DEGREE),
+  );
   return { flux, covered };
 }
 
@@ -180,7 +182,8 @@ function debrisDoubt(
           separationRad: row.separationArcsec * ARCSECOND,
           distanceMpc,
           velocityDifferenceKms: row.velocityDifferenceKms,
-          logHiMass: row.fluxJyKms > 0 && distanceMpc > 0 ? Math.log10(hiMass(row.fluxJyKms, distanceMpc)) : expectedGas,
+          logHiMass:
+            row.fluxJyKms > 0 && distanceMpc > 0 ? Math.log10(hiMass(row.fluxJyKms, distanceMpc)) : expectedGas,
           logStellarMass: row.catalogue.input.kind === 'hi' && Number.isNaN(logStellarMass) ? -99 : logStellarMass,
         };
       }),

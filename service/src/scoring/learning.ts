@@ -20,7 +20,8 @@ const SECURE = 0.9;
 
 export function lessonOf(assessment: StarlightAssessment, relation: GasStarRelation): Lesson {
   const { detection, silence, objects, dominating, probabilities } = assessment;
-  const evidence = objects.reduce((sum, { weight }) => sum + weight, 1 - (silence.power ?? 0));
+  // Where the power is unknown nothing is learnt about the prior: one says nothing.
+  const evidence = silence.power === null ? 1 : objects.reduce((sum, { weight }) => sum + weight, 1 - silence.power);
   let logStellarMass = NaN;
   const secure = dominating !== null && probabilities.objects[objects.indexOf(dominating)]! >= SECURE;
   if (secure && dominating.override === null && detection.luminosityMpc > 0) {

@@ -5,6 +5,7 @@ import { BANDS } from '@eremite/shared/science/photometry/bands';
 import { type DetectionSettings, expectedDetection } from '@eremite/shared/science/photometry/completeness';
 import { type MaskCircle, maskedProbability } from '@eremite/shared/science/photometry/mask-overlap';
 import { toGalactic } from '@eremite/shared/science/sky/galactic';
+import { detectionSettings } from './detection-settings.ts';
 import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import type { BandExpectation } from './expectation.ts';
@@ -33,11 +34,6 @@ export interface Silence {
   best: BandSilence | null;
   /** c of the best band. */
   power: number | null;
-}
-
-export function detectionSettings({ absence }: CriteriaSettings): DetectionSettings {
-  // No ceiling below one: what hides even bright galaxies (stars, edges) is counted by masks and coverage.
-  return { rollOffMag: absence.rollOffMag, penaltyMag: absence.depthPenaltyMag, ceiling: 1 };
 }
 
 /** What hides a band here whatever its depth; undefined if nothing does. */

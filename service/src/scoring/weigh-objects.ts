@@ -9,10 +9,18 @@ import { mergeIntoObjects } from '@eremite/shared/science/counterpart/merge-obje
 import { offsetDensity } from '@eremite/shared/science/counterpart/offset-density';
 import { velocityFactor, type VelocityModel, velocityScatter } from '@eremite/shared/science/counterpart/velocity-term';
 import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
+import {
+  type DetectionSettings,
+  detectionProbability,
+  expectedDetection,
+} from '@eremite/shared/science/photometry/completeness';
 import type { CandidateRow } from './candidate-row.ts';
+import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import { expectIn, type BandExpectation } from './expectation.ts';
 import type { PreparedBand, PreparedCatalogue } from './prepared-catalogue.ts';
+import { detectionSettings } from './detection-settings.ts';
+import { unseenElsewhere } from './unseen-elsewhere.ts';
 
 /** A physical object: rows of one or more catalogues. */
 export interface WeighedObject {
@@ -156,6 +164,8 @@ export function weighObjects(
   objects: readonly WeighedObject[],
   expectations: ExpectationCache,
   model: WeighingModel,
+  catalogues: readonly PreparedCatalogue[],
+  shares: CoveredShares,
 ): void {
   const { criteria } = model;
   const preference = criteria.counterpart.bandPreference;
@@ -164,32 +174,69 @@ export function weighObjects(
     return place < 0 ? 1000 : place;
   };
   const scatter = velocityScatterOf(detection, criteria);
+  const settings = detectionSettings(criteria);
   for (const object of objects) {
     chooseMagnitude(object, rank);
     const { head, band, magnitude } = object;
     const f = offsetDensity(detection.covariance, head.sigmaArcsec, head.eastArcsec, head.northArcsec, detection.tail);
     object.positionFactor = f / object.face.catalogue.density;
-    object.magnitudeFactor = magnitudeFactor(object.face.catalogue, band, magnitude, expectations);
+    object.magnitudeFactor = magnitudeFactor(
+      object.face.catalogue,
+      band,
+      magnitude,
+      object.face.effectiveRadiusArcsec,
+      expectations,
+      settings,
+    );
     object.discordant = Math.abs(object.velocityDifferenceKms) > criteria.counterpart.discordantKms;
     object.velocityFactor = Number.isNaN(object.velocityDifferenceKms)
       ? 1
       : velocityFactor(object.velocityDifferenceKms, scatter, model.velocity);
     const excluded = object.isStar || object.override === 'reject';
-    object.weight = excluded ? 0 : object.positionFactor * object.magnitudeFactor * object.velocityFactor;
+    if (excluded) continue;
+    object.magnitudeFactor *= unseenElsewhere(detection, object, catalogues, rank, expectations, shares, criteria);
+    object.weight = object.positionFactor * object.magnitudeFactor * object.velocityFactor;
   }
 }
 
-/** w_m = q(m) / [n(m) / n]: 1 where the magnitude is unknown or the band's light cannot be predicted. */
+/** A row that is there was seen, however much fainter than the limit a typical galaxy of its brightness is. Our choice. */
+const LEAST_SEEN = 0.35;
+
+/**
+ * w_m = q(m) p(m) / [n(m) / n], p(m) being the chance that a counterpart of this magnitude is in the table: with it the
+ * weights of unrelated objects add, on average, to c and no more. 1 where the magnitude is unknown or the band's light
+ * cannot be predicted.
+ */
 function magnitudeFactor(
   catalogue: PreparedCatalogue,
   band: PreparedBand | null,
   magnitude: number,
+  effectiveRadius: number,
   expectations: ExpectationCache,
+  settings: DetectionSettings,
 ): number {
   if (!band?.counts) return catalogue.input.kind === 'continuum' ? CONTINUUM_SHARE : 1;
   const expected = expectations.in(band);
   if (!expected) return 1;
-  return (counterpartDensity(expected, magnitude) * catalogue.density) / backgroundDensity(band.counts, magnitude);
+  const seen = seenShare(band, magnitude, effectiveRadius, expected, settings);
+  return (
+    (seen * counterpartDensity(expected, magnitude) * catalogue.density) / backgroundDensity(band.counts, magnitude)
+  );
+}
+
+function seenShare(
+  band: PreparedBand,
+  magnitude: number,
+  effectiveRadius: number,
+  { sizes }: BandExpectation,
+  settings: DetectionSettings,
+): number {
+  if (band.depth5Sigma === null) return 1;
+  const depth = { limitMag: band.depth5Sigma, fwhmArcsec: band.seeing };
+  const exactly = { magnitudeAb: magnitude, scatterMag: 0, tailFraction: 0, tailScatterMag: 0 };
+  const typical = expectedDetection(exactly, sizes, depth, settings);
+  const own = effectiveRadius > 0 ? detectionProbability(magnitude, effectiveRadius, depth, settings) : 0;
+  return Math.max(LEAST_SEEN, typical, own);
 }
 
 /** Chance probability and likelihood ratio of each row by itself, for those who want them. */
@@ -198,7 +245,9 @@ export function rateRows(
   rows: readonly CandidateRow[],
   expectations: ExpectationCache,
   foundFraction: number,
+  criteria: CriteriaSettings,
 ): void {
+  const settings = detectionSettings(criteria);
   for (const row of rows) {
     const { catalogue } = row;
     const band = row.band < 0 ? null : catalogue.bands[row.band]!;
@@ -212,6 +261,9 @@ export function rateRows(
     );
     const f = offsetDensity(detection.covariance, row.sigmaArcsec, row.eastArcsec, row.northArcsec, detection.tail);
     row.likelihoodRatio =
-      (foundFraction * f * magnitudeFactor(catalogue, band, row.magnitude, expectations)) / catalogue.density;
+      (foundFraction *
+        f *
+        magnitudeFactor(catalogue, band, row.magnitude, row.effectiveRadiusArcsec, expectations, settings)) /
+      catalogue.density;
   }
 }

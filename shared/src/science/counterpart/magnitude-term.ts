@@ -28,6 +28,8 @@ export interface NumberCounts {
   cumulative: Float64Array;
   /** All objects with a magnitude, per square arcsec. */
   total: number;
+  /** Magnitude at which nine tenths of the objects are brighter: where the table ends. */
+  faintEnd: number;
 }
 
 /** Slope of the counts of galaxies brighter than any in the table: Euclidean, 0.6 dex per magnitude. */
@@ -75,9 +77,12 @@ export function countMagnitudes(
   const cumulative = new Float64Array(bins);
   let sum = 0;
   for (let i = 0; i < bins; i++) cumulative[i] = (sum += counts[i]!) / areaSquareArcsec;
+  let end = 0;
+  while (cumulative[end]! < 0.9 * cumulative[bins - 1]!) end++;
   return {
     firstMag,
     widthMag,
+    faintEnd: firstMag + widthMag * (end + 1),
     density: smoothed(counts, widthMag, areaSquareArcsec),
     cumulative,
     total: total / areaSquareArcsec,
