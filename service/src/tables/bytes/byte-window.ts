@@ -56,10 +56,15 @@ export class ByteWindow {
     this.buffer = kept.length === 0 ? piece : Buffer.concat([kept, piece]);
     this.start = 0;
     this.end = this.buffer.length;
-    if (this.end > this.limits.maxHeadBytes + 8 * this.limits.maxLineLength) {
-      throw new TableError('line-too-long', 'A record is longer than any limit allows.', 'Check the file.', {
-        byte: this.offset,
-      });
+    if (kept.length > this.limits.maxHeadBytes + 8 * this.limits.maxLineLength) {
+      throw new TableError(
+        'line-too-long',
+        'A record is longer than any limit allows.',
+        'Check that the file is whole.',
+        {
+          byte: this.offset,
+        },
+      );
     }
     return true;
   }

@@ -12,6 +12,8 @@ export interface Content {
   complete: boolean;
   /** Bytes in all; null when only reading to the end would tell. */
   size: number | null;
+  /** Of a text that was not UTF-8: what it was. */
+  encoding?: string;
   stream(from?: number): AsyncIterable<Uint8Array>;
 }
 

@@ -41,6 +41,7 @@ export function asUtf8(content: Content): Content {
   const text = new TextDecoder(encoding).decode(content.head, { stream: true });
   return {
     ...content,
+    encoding,
     head: Buffer.from(text),
     size: null,
     stream: (from = 0) => dropFirst(recode(content.stream()), from),

@@ -15,6 +15,7 @@ const FORMATS: Record<Delimiter, TableFormat> = {
 /** Opens CSV, TSV, semicolon-, bar- or blank-separated text (UTF-8). */
 export async function openDelimited(content: Content, limits: ReaderLimits): Promise<OpenTable> {
   const layout = await sniffLayout(content, limits);
+  if (content.encoding !== undefined) layout.notes.push(`The text is read as ${content.encoding.toUpperCase()}.`);
   const description = layout.comments.join('\n').slice(0, 4000).trim();
   return {
     format: FORMATS[layout.delimiter],

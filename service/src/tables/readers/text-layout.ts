@@ -110,7 +110,7 @@ function wholeLines({ head, complete }: Content, start: number, line: number): B
   if (nul >= 0) throw nulError(nul);
   throw new TableError(
     'line-too-long',
-    `Line ${line} is longer than ${head.length - start} bytes; a header row is not.`,
+    `Line ${line} is longer than ${head.length - start} bytes, the limit for a header row.`,
     'Check that the file is a table with one row a line.',
     { line, byte: start },
   );

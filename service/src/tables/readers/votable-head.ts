@@ -101,7 +101,13 @@ function toElements(nodes: Record<string, unknown>[]): Element[] {
   });
 }
 
-const ENTITIES: Record<string, string> = { lt: '<', gt: '>', amp: '&', quot: '"', apos: "'" };
+const ENTITIES = new Map([
+  ['lt', '<'],
+  ['gt', '>'],
+  ['amp', '&'],
+  ['quot', '"'],
+  ['apos', "'"],
+]);
 
 /** Decodes the five entities of XML and character references; any other stays as it stands. */
 export function decodeXml(text: string): string {
@@ -109,7 +115,7 @@ export function decodeXml(text: string): string {
   return text.replace(
     /&(?:#x([\da-f]{1,6})|#(\d{1,7})|([a-z]+));/gi,
     (whole, hex?: string, decimal?: string, name?: string) => {
-      if (name !== undefined) return ENTITIES[name] ?? whole;
+      if (name !== undefined) return ENTITIES.get(name) ?? whole;
       const code = hex === undefined ? Number(decimal) : parseInt(hex, 16);
       return code > 0 && code <= 0x10ffff ? String.fromCodePoint(code) : whole;
     },
@@ -200,7 +206,7 @@ function fieldsOf(table: Element, root: Element): Element[] {
 function readField(element: Element, name: string, shared: Map<string, Element>, notes: string[]): VotableField {
   const { attributes, children } = element;
   const written = attributes['datatype'] ?? '';
-  let datatype = DATATYPES[written];
+  let datatype = Object.hasOwn(DATATYPES, written) ? DATATYPES[written] : undefined;
   if (datatype === undefined) {
     notes.push(`Column ${name} has the unknown datatype "${written}" and is read as text.`);
     datatype = 'char';
