@@ -1,3 +1,6 @@
+/** From this share of rows with a velocity on, a table lists nothing but redshifts. Our choice. */
+const ONLY_REDSHIFTS = 0.95;
+
 /**
  * Magnitude to which the rows of a table have redshifts, measured from the table.
  *
@@ -18,25 +21,30 @@ export function measuredRedshiftDepth(
   const width = 0.5;
   const all = new Map<number, [rows: number, withVelocity: number]>();
   let total = 0;
+  let moving = 0;
   for (let i = 0; i < magnitudes.length; i++) {
     const m = magnitudes[i]!;
     if (!(m === m)) continue;
     const bin = Math.floor(m / width);
     const counts = all.get(bin) ?? [0, 0];
     counts[0]++;
-    if (hasVelocity(i)) counts[1]++;
+    if (hasVelocity(i)) {
+      counts[1]++;
+      moving++;
+    }
     all.set(bin, counts);
     total++;
   }
   if (total < 100) return undefined;
   const bins = [...all.keys()].sort((a, b) => a - b);
   let peak = bins[0]!;
-  for (const bin of bins) if (all.get(bin)![0] > all.get(peak)![0]) peak = bin;
+  for (const bin of bins) if (all.get(bin)![0] >= all.get(peak)![0]) peak = bin;
+  const onlyRedshifts = moving >= ONLY_REDSHIFTS * total;
   let reached: number | undefined;
   for (const bin of bins) {
     const [rows, withVelocity] = all.get(bin)!;
     if (rows >= 20 && withVelocity < completeness * rows) break;
-    if (bin > peak) break;
+    if (onlyRedshifts && bin > peak) break;
     if (rows >= 20) reached = (bin + 1) * width;
   }
   return reached;
