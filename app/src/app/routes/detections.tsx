@@ -34,7 +34,9 @@ export function Component() {
   const { search, set } = useSearchFilters();
   useTitle('Detections', survey.name);
   const run = chosenRun(runs.items, search.get('run'));
-  const filters = Object.fromEntries(FILTERS.map((key) => [key, search.get(key)]));
+  // The likeliest dark ones first, unless told otherwise.
+  const sort = search.get('sort') ?? '-pNone';
+  const filters = { ...Object.fromEntries(FILTERS.map((key) => [key, search.get(key)])), sort };
   const query = useQuery({
     ...verdictsQuery(run?.id ?? '', searchString({ ...filters, limit: PAGE, cursor: search.get('cursor') })),
     enabled: run !== undefined,
@@ -83,7 +85,7 @@ export function Component() {
             columns={shown}
             rows={query.data.items}
             rowKey={(item) => item.detectionId}
-            sort={search.get('sort') ?? undefined}
+            sort={sort}
             onSort={(sort) => set({ sort })}
             isStale={query.isPlaceholderData}
           />

@@ -30,7 +30,7 @@ function layOut(marks: readonly Mark[]) {
   const ys = whole ? [-1.415, 1.415] : places.map(([, y]) => y);
   const [left, right, low, high] = [least(xs), most(xs), least(ys), most(ys)];
   const span = Math.max(right - left, high - low, 0.004);
-  const ratio = Math.min(0.72, Math.max(0.32, (high - low) / Math.max(right - left, 1e-9)));
+  const ratio = Math.min(0.62, Math.max(0.32, (high - low) / Math.max(right - left, 1e-9)));
   const height = Math.round((WIDTH - 2 * MARGIN) * ratio + 2 * MARGIN);
   const scale = Math.min((WIDTH - 2 * MARGIN) / Math.max(right - left, span * 0.02), (height - 2 * MARGIN) / Math.max(high - low, span * 0.02));
   const toPage = ([x, y]: readonly [number, number]): [number, number] => [

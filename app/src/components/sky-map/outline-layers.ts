@@ -52,7 +52,9 @@ export function hatchedFeatures({ masks, uncovered }: Outlines, palette: Palette
   const hatch = new Fill({ color: hatchPattern(palette.hatch) });
   const stroke = new Stroke({ color: palette.hatch, width: 1 });
   return [
-    ...uncovered.map(({ cells }) => styled(new MultiPolygon(cells.map((ring) => [ring])), new Style({ fill: hatch }))),
+    ...uncovered.map(({ cells, kind }) =>
+      styled(new MultiPolygon(cells.map((ring) => [ring])), new Style({ fill: new Fill({ color: hatchPattern(palette.hatch, kind) }) })),
+    ),
     ...masks.map(({ at, radiusArcsec, label: text }) =>
       styled(new Circle(at, radiusArcsec), new Style({ fill: hatch, stroke, text: label(text, palette.muted, palette, [0, 0]) })),
     ),

@@ -31,18 +31,26 @@ export function readPalette(element: Element): Palette {
   };
 }
 
+/** Spacing and slant of the strokes, so that what several catalogues left out is hatched both ways. */
+const HATCHES: Record<string, { gap: number; falling: boolean }> = {
+  ultraviolet: { gap: 22, falling: false },
+  infrared: { gap: 22, falling: true },
+  continuum: { gap: 16, falling: true },
+};
+
 /** Slanted strokes for what was not observed, so that empty never looks like unobserved. */
-export function hatchPattern(colour: string): CanvasPattern | string {
+export function hatchPattern(colour: string, kind?: string): CanvasPattern | string {
+  const { gap, falling } = HATCHES[kind ?? ''] ?? { gap: 9, falling: false };
   const tile = document.createElement('canvas');
-  tile.width = tile.height = 9;
+  tile.width = tile.height = gap;
   const context = tile.getContext('2d');
   if (!context) return colour;
   context.strokeStyle = colour;
   context.lineWidth = 1.2;
   context.beginPath();
-  for (const shift of [-9, 0, 9]) {
-    context.moveTo(shift - 1, 10);
-    context.lineTo(shift + 10, -1);
+  for (const shift of [-gap, 0, gap]) {
+    context.moveTo(shift - 1, falling ? -1 : gap + 1);
+    context.lineTo(shift + gap + 1, falling ? gap + 1 : -1);
   }
   context.stroke();
   return context.createPattern(tile, 'repeat') ?? colour;

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { ellipseOutline, rayleighRadius, toPanel } from './project.ts';
+import { containsOrigin, ellipseOutline, rayleighRadius, toPanel } from './project.ts';
 
 describe('the sky panel', () => {
   const centre = { raDeg: 48, decDeg: 14 };
@@ -22,6 +22,11 @@ describe('the sky panel', () => {
     const [x, y] = ellipseOutline(10, 5, 90)[0]!;
     expect(x).toBeCloseTo(-10, 9);
     expect(y).toBeCloseTo(0, 9);
+  });
+
+  it('knows whether the detection itself lies in a cell', () => {
+    const square = (x: number): [number, number][] => [[x - 1, -1], [x + 1, -1], [x + 1, 1], [x - 1, 1], [x - 1, -1]];
+    expect([containsOrigin(square(0)), containsOrigin(square(3)), containsOrigin(square(-3))]).toEqual([true, false, false]);
   });
 
   it('draws error circles at the radii of a circular Gaussian', () => {

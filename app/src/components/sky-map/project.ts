@@ -34,3 +34,14 @@ export function ellipseOutline(major: number, minor: number, angleDeg: number, s
 
 /** Radius in units of the one-dimensional sigma that holds a share of a circular Gaussian: sqrt(-2 ln(1 - share)). */
 export const rayleighRadius = (share: number): number => Math.sqrt(-2 * Math.log(1 - share));
+
+/** Whether the centre of the panel lies inside a closed ring (even-odd rule). */
+export function containsOrigin(ring: readonly PanelPoint[]): boolean {
+  let inside = false;
+  for (let i = 1; i < ring.length; i++) {
+    const [x1, y1] = ring[i - 1]!;
+    const [x2, y2] = ring[i]!;
+    if (y1 > 0 !== y2 > 0 && x1 - (y1 * (x2 - x1)) / (y2 - y1) > 0) inside = !inside;
+  }
+  return inside;
+}

@@ -4,13 +4,14 @@ export interface Tick {
   text: string;
 }
 
-const STEPS = [1, 2, 5];
+const STEPS = [1, 2, 5, 10];
 
-/** A round step that leaves about `wanted` ticks over a span: 1, 2 or 5 times a power of ten. */
+/** The round step (1, 2 or 5 times a power of ten) that comes nearest to `wanted` ticks over a span. */
 export function roundStep(span: number, wanted: number): number {
   const rough = span / wanted;
   const power = 10 ** Math.floor(Math.log10(rough));
-  return (STEPS.find((step) => step * power >= rough) ?? 10) * power;
+  const off = (step: number) => Math.abs(Math.log((step * power) / rough));
+  return STEPS.reduce((best, step) => (off(step) < off(best) ? step : best)) * power;
 }
 
 const tidy = (value: number): string => String(Number(value.toPrecision(6)));

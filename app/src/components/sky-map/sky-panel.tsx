@@ -6,7 +6,7 @@ import { usePreferences } from '#lib/preferences.ts';
 import { Frame } from './frame.tsx';
 import { hatchedFeatures, outlineFeatures, type Outlines } from './outline-layers.ts';
 import { readPalette, type Palette } from './palette.ts';
-import { rayleighRadius } from './project.ts';
+import { containsOrigin, rayleighRadius } from './project.ts';
 import { SkyLegend } from './sky-legend.tsx';
 import type { SkyMark } from './sky-mark.ts';
 import { useMarkLayer } from './use-mark-layer.ts';
@@ -52,6 +52,7 @@ export function SkyPanel(props: SkyPanelProps) {
   }, [map, outlines, palette]);
   useMarkLayer({ map, marks, centre, palette, hovered, selected, onHover, onSelect });
 
+  const unseen = useMemo(() => unseenAtCentre(outlines), [outlines]);
   const reach = useMemo(() => reaches(outlines), [outlines]);
   /** Shows a circle of a radius in arcsec about the detection. */
   const show = useMemo(
@@ -88,10 +89,15 @@ export function SkyPanel(props: SkyPanelProps) {
           <Button size="small" text="−" aria-label="Zoom out" onClick={() => zoom(1.5)} />
         </ButtonGroup>
       </div>
+      {unseen.length > 0 && <p className="sky-panel__unseen">not observed here: {unseen.join(', ')}</p>}
       <SkyLegend id={legend} uncovered={outlines.uncovered.map(({ name }) => name)} />
     </figure>
   );
 }
+
+/** Catalogues whose hatching covers the detection itself. */
+const unseenAtCentre = ({ uncovered }: Outlines) =>
+  uncovered.filter(({ cells }) => cells.some((ring) => containsOrigin(ring))).map(({ name }) => name);
 
 function reaches({ beam, positionError, searchRadiusArcsec, neighbourRadiusArcsec }: Outlines) {
   const search = Math.max(searchRadiusArcsec, (beam?.major ?? 0) / 2);

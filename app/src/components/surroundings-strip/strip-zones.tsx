@@ -48,7 +48,7 @@ export function StripZones({ scale, zones }: { scale: StripScale; zones: Zones }
       <text x={left - 8} y={STRIP_MARGIN.top + 6} textAnchor="end">
         km/s
       </text>
-      <text x={width - STRIP_MARGIN.right} y={height - 8} textAnchor="end">
+      <text x={left - 8} y={height - 8} textAnchor="end">
         kpc
       </text>
       {zones.counterpartKpc !== null && (

@@ -1,25 +1,31 @@
 import type { Ground } from '@eremite/shared/contracts/verdict';
 import { Prose } from '#components/prose/prose.tsx';
 
-const SIGNS = { for: 'for', against: 'against', note: 'note' } as const;
-
-/** Why the verdict is what it is, in sentences; what speaks against it first. */
+/** Why the verdict is what it is, in sentences: what speaks against it first, what is only worth knowing folded away. */
 export function Grounds({ grounds }: { grounds: readonly Ground[] }) {
-  if (grounds.length === 0) return null;
-  const order = { against: 0, for: 1, note: 2 };
-  const sorted = [...grounds].sort((a, b) => order[a.weight] - order[b.weight]);
+  const against = grounds.filter(({ weight }) => weight === 'against');
+  const speaking = grounds.filter(({ weight }) => weight === 'for');
+  const notes = grounds.filter(({ weight }) => weight === 'note');
   return (
     <section aria-label="Grounds">
-      <ol className="grounds">
-        {sorted.map(({ text, weight, about }) => (
-          <li key={about + text} className={`grounds__item grounds__item--${weight}`}>
-            <span className="grounds__weight">{SIGNS[weight]}</span>
-            <span>
-              <Prose text={text} />
-            </span>
-          </li>
-        ))}
-      </ol>
+      <ol className="grounds">{[...against, ...speaking].map(item)}</ol>
+      {notes.length > 0 && (
+        <details className="grounds__notes">
+          <summary>
+            {notes.length} {notes.length === 1 ? 'note' : 'notes'} on distance, position and data
+          </summary>
+          <ul className="grounds">{notes.map(item)}</ul>
+        </details>
+      )}
     </section>
   );
 }
+
+const item = ({ text, weight, about }: Ground) => (
+  <li key={about + text} className={`grounds__item grounds__item--${weight}`}>
+    <span className="grounds__weight">{weight}</span>
+    <span>
+      <Prose text={text} />
+    </span>
+  </li>
+);
