@@ -56,6 +56,8 @@ export const runs = pgTable(
     control: jsonb('control'),
     /** Sentences about the run as a whole: what was learnt, what was assumed. */
     notes: jsonb('notes').notNull().default([]),
+    /** What the engine learnt from the survey before it scored; previews go by it. */
+    learnt: jsonb('learnt'),
     error: text('error'),
     createdBy: uuid('created_by')
       .notNull()

@@ -4,9 +4,9 @@ import { Inject, Injectable } from '@nestjs/common';
 import { BulkStore } from '../database/bulk.ts';
 import { cellsOfCone } from './cells.ts';
 import { type PackedColumns, textAt, unpackColumns } from './column-pack.ts';
-import { concatColumns, selectRows } from './column-rows.ts';
 import { rowCells } from './original-cells.ts';
-import { asRoleTable, type RoleTable } from './role-table.ts';
+import { joinRoles } from './join-roles.ts';
+import type { RoleTable } from './role-table.ts';
 import { blockOf, PLACES_CELL, placesOf, type RowPlace } from './row-places.ts';
 import type { Tile } from './tile-collector.ts';
 
@@ -59,15 +59,27 @@ export class TileStore {
    * @param order `file`: ascending row numbers; `sky`: cell by cell as stored, which is faster to read and to index
    */
   async readRoles(catalogueId: string, order: 'file' | 'sky' = 'file'): Promise<RoleTable> {
-    const parts: PackedColumns[] = [];
-    for (const [first, last] of await this.cellGroups(catalogueId))
-      parts.push(...(await this.roleTiles(catalogueId, [[first, last]])));
-    return asRoles(parts, order);
+    return joinRoles(await this.readPackedRoles(catalogueId), order);
+  }
+
+  /**
+   * The same still packed, one blob a tile, for {@link joinRoles} in another thread: joining a large catalogue takes longer
+   * than a request may be kept waiting.
+   */
+  async readPackedRoles(catalogueId: string): Promise<Uint8Array[]> {
+    const blobs: Uint8Array[] = [];
+    for (const group of await this.cellGroups(catalogueId)) blobs.push(...(await this.roleTiles(catalogueId, [group])));
+    return blobs;
+  }
+
+  /** Packed roles of some cells, given as ranges [first, last] that do not overlap. */
+  readPackedCells(catalogueId: string, ranges: readonly [number, number][]): Promise<Uint8Array[]> {
+    return this.roleTiles(catalogueId, ranges);
   }
 
   /** Role columns of the rows in cells that a cone touches: a superset of the cone. */
   async readRolesNear(catalogueId: string, raDeg: number, decDeg: number, radiusArcsec: number): Promise<RoleTable> {
-    return asRoles(await this.roleTiles(catalogueId, cellsOfCone(raDeg, decDeg, radiusArcsec)), 'file');
+    return joinRoles(await this.roleTiles(catalogueId, cellsOfCone(raDeg, decDeg, radiusArcsec)), 'file');
   }
 
   /** One row by its number in the file; undefined if the catalogue has no such usable row. */
@@ -133,15 +145,15 @@ export class TileStore {
     return groups;
   }
 
-  private async roleTiles(catalogueId: string, ranges: readonly [number, number][]): Promise<PackedColumns[]> {
+  private async roleTiles(catalogueId: string, ranges: readonly [number, number][]): Promise<Uint8Array[]> {
     const select = 'select roles from tiles where catalogue_id = $1 and cell between $2 and $3 order by cell, part';
-    const parts: PackedColumns[] = [];
+    const blobs: Uint8Array[] = [];
     for (const [first, last] of ranges) {
       for await (const batch of this.bulk.read(select, [catalogueId, first, last], ['bytea'])) {
-        for (const [blob] of batch) parts.push(unpackColumns(blob as Uint8Array));
+        for (const [blob] of batch) blobs.push(blob as Uint8Array);
       }
     }
-    return parts;
+    return blobs;
   }
 
   private async placesFrom(catalogueId: string, firstRow: number, limit: number): Promise<RowPlace[]> {
@@ -224,20 +236,4 @@ function within(
     });
   }
   return found;
-}
-
-function asRoles(parts: readonly PackedColumns[], order: 'file' | 'sky'): RoleTable {
-  const none = { row: new Uint32Array(0), raDeg: new Float64Array(0), decDeg: new Float64Array(0) };
-  let table: PackedColumns = parts.length ? concatColumns(parts) : { rows: 0, columns: none };
-  // A limit column in which nothing is a limit says nothing.
-  const told = Object.entries(table.columns).filter(
-    ([name, column]) => !name.startsWith('magLimit:') || (column as Uint8Array).some((flag) => flag !== 0),
-  );
-  table = { rows: table.rows, columns: Object.fromEntries(told) };
-  if (order === 'file') {
-    const row = table.columns['row'] as Uint32Array;
-    const indices = Uint32Array.from(row, (_, i) => i).sort((a, b) => row[a]! - row[b]!);
-    table = selectRows(table, indices);
-  }
-  return asRoleTable(table);
 }

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { listQuery } from './list.ts';
+import { verdictSort } from './run.ts';
 import { verdictItem } from './verdict.ts';
 import { STARLIGHT_VERDICTS, SURROUNDINGS_VERDICTS } from './words.ts';
 
@@ -63,6 +64,7 @@ export const settleRequest = z.strictObject({
 export type SettleRequest = z.output<typeof settleRequest>;
 
 export const docketQuery = listQuery.extend({
+  sort: verdictSort,
   assigned: z.enum(['me', 'all']).default('all'),
   state: z.enum(['open', 'done', 'all']).default('open'),
 });

@@ -54,22 +54,8 @@ export const run = z.object({
 });
 export type Run = z.output<typeof run>;
 
-const listOfText = z
-  .union([z.string(), z.array(z.string())])
-  .transform((value) => (Array.isArray(value) ? value : value.split(',')))
-  .optional();
-
-export const verdictsQuery = listQuery.extend({
-  starlight: listOfText,
-  surroundings: listOfText,
-  doubt: z.string().max(60).optional(),
-  doubtGrade: z.enum(DOUBT_GRADES).optional(),
-  search: z.string().max(200).optional(),
-  minPNone: z.coerce.number().min(0).max(1).optional(),
-  reviewed: z.enum(['yes', 'no']).optional(),
-});
-export type VerdictsQuery = z.output<typeof verdictsQuery>;
 export const VERDICT_SORTS = [
+  'position',
   'name',
   'raDeg',
   'decDeg',
@@ -84,6 +70,33 @@ export const VERDICT_SORTS = [
   'surroundings',
   'docket',
 ] as const;
+/** A key of {@link VERDICT_SORTS}; a leading `-` turns it round. */
+export const verdictSort = z
+  .string()
+  .refine((sort) => (VERDICT_SORTS as readonly string[]).includes(sort.replace(/^-/, '')), {
+    error: `sort is one of ${VERDICT_SORTS.join(', ')}, with a leading - for descending`,
+  })
+  .optional();
+
+/** Several words: repeated, or with commas between them. */
+const listOfWords = <const T extends readonly [string, ...string[]]>(words: T) =>
+  z
+    .union([z.string(), z.array(z.string())])
+    .transform((value) => (Array.isArray(value) ? value : value.split(',')))
+    .pipe(z.array(z.enum(words)))
+    .optional();
+
+export const verdictsQuery = listQuery.extend({
+  sort: verdictSort,
+  starlight: listOfWords(STARLIGHT_VERDICTS),
+  surroundings: listOfWords(SURROUNDINGS_VERDICTS),
+  doubt: z.string().max(60).optional(),
+  doubtGrade: z.enum(DOUBT_GRADES).optional(),
+  search: z.string().max(200).optional(),
+  minPNone: z.coerce.number().min(0).max(1).optional(),
+  reviewed: z.enum(['yes', 'no']).optional(),
+});
+export type VerdictsQuery = z.output<typeof verdictsQuery>;
 
 export const evidenceQuery = listQuery.extend({
   format: z.enum(['json', 'csv', 'votable']).default('json'),

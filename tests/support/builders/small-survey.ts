@@ -6,9 +6,9 @@ import type { Client } from '../client.ts';
 import type { TestApp } from '../start-app.ts';
 
 const ARCSEC = 1 / 3600;
-/** Twelve detections a third of a degree apart at cz 5000 km/s, far from the poles and from RA 0. */
+/** Twelve detections two degrees (some 2.5 Mpc) apart at cz 5000 km/s, so that they are no neighbours of each other. */
 export const NAMES = Array.from({ length: 12 }, (_, i) => `S${String(i + 1).padStart(2, '0')}`);
-const places = NAMES.map((name, i) => ({ name, raDeg: 150 + (i % 4) / 3, decDeg: 2 + Math.floor(i / 4) / 3 }));
+const places = NAMES.map((name, i) => ({ name, raDeg: 150 + 2 * (i % 4), decDeg: 2 + 2 * Math.floor(i / 4) }));
 const csv = (head: string, rows: readonly (readonly (string | number)[])[]): string =>
   [head, ...rows.map((row) => row.join(','))].join('\n') + '\n';
 
@@ -89,7 +89,10 @@ export async function aCatalogue(
   return job.result.catalogueId as string;
 }
 
-export async function someCriteria(lead: Client, surveyId: string, settings: object = {}): Promise<Criteria> {
+/** With a prior that lets a deep and empty place be called dark: twelve detections teach nothing. */
+export const SETTINGS = { counterpart: { priorFraction: 0.9 } };
+
+export async function someCriteria(lead: Client, surveyId: string, settings: object = SETTINGS): Promise<Criteria> {
   const answer = await lead.post(`/surveys/${surveyId}/criteria`, { settings, note: 'of a test' });
   if (answer.status !== 201) throw new Error(`criteria answered ${answer.status}: ${answer.text}`);
   return answer.body as Criteria;

@@ -1,4 +1,4 @@
-import { criteria, runs, users } from '@eremite/schema';
+import { criteria, runs, surveys, users } from '@eremite/schema';
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import { Inject, Injectable } from '@nestjs/common';
 import { desc, eq, sql } from 'drizzle-orm';
@@ -41,11 +41,12 @@ export class CriteriaRepository {
       .orderBy(desc(criteria.number));
   }
 
-  /** Stores the next number; two at once collide on the unique index rather than share one. */
+  /** Stores the next number; the survey is locked, so that two at once take turns. */
   async insert(
     values: { surveyId: string; settings: CriteriaSettings; note: string; createdBy: string },
-    db = this.db,
+    db: Database,
   ) {
+    await db.select({ id: surveys.id }).from(surveys).where(eq(surveys.id, values.surveyId)).for('update');
     const number = sql`(select coalesce(max(number), 0) + 1 from criteria where survey_id = ${values.surveyId})`;
     const [row] = await db
       .insert(criteria)

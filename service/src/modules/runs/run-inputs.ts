@@ -1,18 +1,23 @@
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import { Moc } from '@eremite/shared/science/sky/moc';
 import { Injectable } from '@nestjs/common';
-import { type CatalogueSettings, engineCatalogue } from '../../scoring/engine-catalogue.ts';
-import type { EngineCatalogue, EngineInput } from '../../scoring/engine-input.ts';
+import { AppError } from '../../common/app-error.ts';
+import type { CatalogueSettings } from '../../scoring/engine-catalogue.ts';
+import type { EngineInput } from '../../scoring/engine-input.ts';
 import { TileStore } from '../../tiles/tile-store.ts';
+import { type PackedInput, type PackedTable, packTable } from './packed-input.ts';
 import { type RunRow, RunsRepository } from './runs.repository.ts';
 
-type Decisions = {
+export type CatalogueRow = Awaited<ReturnType<RunsRepository['publishedCatalogues']>>[number];
+
+/** People's words as they stood when a run was started, as its row keeps them. */
+export interface StoredDecisions {
   cosmology: EngineInput['survey'];
   overrides: Awaited<ReturnType<RunsRepository['overridesInForce']>>;
   distances: Awaited<ReturnType<RunsRepository['distancesInForce']>>;
-};
+}
 
-/** Reads everything a run depends on into memory, as it stood when the run was started. */
+/** Reads everything a run depends on, as it stood when the run was started. */
 @Injectable()
 export class RunInputs {
   constructor(
@@ -24,46 +29,56 @@ export class RunInputs {
     run: RunRow,
     signal: AbortSignal,
     progress: (fraction: number, message: string) => void,
-  ): Promise<EngineInput> {
+  ): Promise<PackedInput> {
     const inputs = run.inputs as { catalogueId: string; name: string }[];
-    const tables = await this.runs.publishedCatalogues(
+    const found = await this.runs.publishedCatalogues(
       run.surveyId,
       inputs.map((input) => input.catalogueId),
     );
-    const catalogues: EngineCatalogue[] = [];
+    const tables: PackedTable[] = [];
     for (const { catalogueId, name } of inputs) {
       signal.throwIfAborted();
-      progress(catalogues.length / inputs.length, `reading ${name}`);
-      const table = tables.find((entry) => entry.id === catalogueId);
-      if (!table) throw new Error(`${name} is no longer published`);
-      const { moc, note } = table.coverage as { moc: string | null; note: string };
-      const roles = await this.tiles.readRoles(catalogueId);
-      const region = moc ? Moc.parse(moc) : null;
-      const coverage = { region: region && { order: region.order, ranges: region.ranges }, note };
-      catalogues.push(
-        engineCatalogue(
-          { id: catalogueId, hash: table.contentHash },
-          table.settings as CatalogueSettings,
-          roles,
-          coverage,
-        ),
-      );
+      progress(tables.length / inputs.length, `reading ${name}`);
+      const table = found.find((entry) => entry.id === catalogueId);
+      if (!table) throw new AppError('RUN_FAILED', `${name} is no longer published.`);
+      tables.push(packTable(aboutTable(table), await this.tiles.readPackedRoles(catalogueId)));
     }
-    const { cosmology, overrides, distances } = run.decisions as Decisions;
     return {
-      survey: cosmology,
+      ...engineDecisions(run.decisions as StoredDecisions),
       criteria: run.criteriaSettings as CriteriaSettings,
-      catalogues,
-      decisions: {
-        overrides: overrides.map(
-          ({ row, ...override }) => ({ ...override, rowId: row }) as EngineInput['decisions']['overrides'][number],
-        ),
-        distances: distances.map(({ detectionCatalogueId, detectionRow, ...distance }) => ({
-          ...distance,
-          catalogueId: detectionCatalogueId,
-          row: detectionRow,
-        })),
-      },
+      tables,
     };
   }
+}
+
+/** What the engine is told of a published table besides its rows. */
+export function aboutTable(table: CatalogueRow): Pick<PackedTable, 'identity' | 'settings' | 'coverage'> {
+  const { moc, note } = table.coverage as { moc: string | null; note: string };
+  const region = moc ? Moc.parse(moc) : null;
+  return {
+    identity: { id: table.id, hash: table.contentHash },
+    settings: table.settings as CatalogueSettings,
+    coverage: { region: region && { order: region.order, ranges: region.ranges }, note },
+  };
+}
+
+/** Stored decisions in the engine's terms. */
+export function engineDecisions({
+  cosmology,
+  overrides,
+  distances,
+}: StoredDecisions): Pick<EngineInput, 'survey' | 'decisions'> {
+  return {
+    survey: cosmology,
+    decisions: {
+      overrides: overrides.map(
+        ({ row, ...override }) => ({ ...override, rowId: row }) as EngineInput['decisions']['overrides'][number],
+      ),
+      distances: distances.map(({ detectionCatalogueId, detectionRow, ...distance }) => ({
+        ...distance,
+        catalogueId: detectionCatalogueId,
+        row: detectionRow,
+      })),
+    },
+  };
 }

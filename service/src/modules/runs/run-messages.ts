@@ -1,9 +1,10 @@
-import type { EngineInput } from '../../scoring/engine-input.ts';
+import type { Learnt } from '../../scoring/engine.ts';
 import type { ControlResult } from '../../scoring/run-engine.ts';
+import type { PackedInput } from './packed-input.ts';
 
-/** What the worker thread is started with; arrays may lie over shared memory. */
+/** What the worker thread is started with. */
 export interface RunTask {
-  input: EngineInput;
+  input: PackedInput;
 }
 
 /** A scored detection as it is stored: JSON as text, evidence packed. */
@@ -26,5 +27,12 @@ export interface RunTotals {
 export type RunMessage =
   | { kind: 'progress'; fraction: number; message: string }
   | { kind: 'verdicts'; verdicts: StoredVerdict[] }
-  | { kind: 'done'; notes: string[]; control: ControlResult | null; totals: RunTotals }
-  | { kind: 'failed'; message: string; stack?: string };
+  | { kind: 'done'; notes: string[]; control: ControlResult | null; totals: RunTotals; learnt: Learnt }
+  | ({ kind: 'failed' } & ThreadFailure);
+
+/** Why a thread gave up; `told` where the message is made for people and says nothing of the inside. */
+export interface ThreadFailure {
+  message: string;
+  stack?: string;
+  told: boolean;
+}

@@ -5,7 +5,7 @@ import type { JobContext, JobHandler } from '../../jobs/job-handler.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { RunInputs } from './run-inputs.ts';
 import type { StoredVerdict } from './run-messages.ts';
-import { scoreInThread } from './run-thread.ts';
+import { type RunOutcome, scoreInThread } from './run-thread.ts';
 import { type RunRow, RunsRepository } from './runs.repository.ts';
 
 interface Payload {
@@ -58,12 +58,15 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
   ) {}
 
   async run({ runId }: Payload, { signal, progress }: JobContext): Promise<{ runId: string }> {
-    await this.runs.clear(runId);
-    await this.runs.update(runId, { state: 'running', startedAt: new Date(), error: null });
+    // Killed between the end of the run and the end of its job: what is done stays as it is.
+    if (!(await this.runs.begin(runId))) return { runId };
     const run = (await this.runs.find(runId))!;
-    const input = await this.inputs.load(run, signal, (fraction, message) => progress(READING * fraction, message));
+    const input = await unlessAborted(
+      this.inputs.load(run, signal, (fraction, message) => progress(READING * fraction, message)),
+      signal,
+    );
     const ids = new Map<string, string>();
-    const lists = input.catalogues.filter((catalogue) => catalogue.kind === 'hi').map((catalogue) => catalogue.id);
+    const lists = input.tables.filter(({ settings }) => settings.kind === 'hi').map(({ identity }) => identity.id);
     for (const { id, catalogueId, row } of await this.runs.detectionIds(lists)) ids.set(`${catalogueId}/${row}`, id);
     const counts: Counts = { detections: 0, starlight: {}, surroundings: {} };
     const outcome = await scoreInThread(input, {
@@ -125,9 +128,9 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
     );
   }
 
-  async #finish(run: RunRow, counts: object, { notes, control }: { notes: string[]; control: unknown }): Promise<void> {
+  async #finish(run: RunRow, counts: object, { notes, control, learnt }: RunOutcome): Promise<void> {
     await this.runs.transaction(async (tx) => {
-      await this.runs.update(run.id, { state: 'done', finishedAt: new Date(), counts, control, notes }, tx);
+      await this.runs.update(run.id, { state: 'done', finishedAt: new Date(), counts, control, notes, learnt }, tx);
       const actor = { id: run.createdById, name: run.createdBy };
       await this.ledger.append(
         {
@@ -143,12 +146,19 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
   }
 
   async recover({ runId }: Payload): Promise<void> {
-    await this.runs.clear(runId);
-    await this.runs.update(runId, { state: 'queued', startedAt: null });
+    await this.runs.reopen(runId, { state: 'queued', startedAt: null });
   }
 
   async ended({ runId }: Payload, { state, error }: { state: 'failed' | 'cancelled'; error: string }): Promise<void> {
-    await this.runs.clear(runId);
-    await this.runs.update(runId, { state, error, finishedAt: new Date() });
+    await this.runs.reopen(runId, { state, error, finishedAt: new Date() });
   }
+}
+
+/** Does not wait for work that nobody wants any more; it ends by itself and its result is dropped. */
+function unlessAborted<T>(work: Promise<T>, signal: AbortSignal): Promise<T> {
+  return new Promise<T>((resolve, reject) => {
+    const onAbort = () => reject(signal.reason as Error);
+    signal.addEventListener('abort', onAbort, { once: true });
+    work.then(resolve, reject).finally(() => signal.removeEventListener('abort', onAbort));
+  });
 }

@@ -100,7 +100,7 @@ export class RunsController {
     @Res({ passthrough: true }) response: Response,
   ) {
     if (query.format === 'json') return this.verdicts.list(user, id, query as VerdictsQuery);
-    const { number } = await this.runs.get(user, id);
+    const { number } = await this.runs.finished(user, id);
     return sendTable(
       response,
       query.format,

@@ -11,7 +11,7 @@ import {
   verdicts,
 } from '@eremite/schema';
 import { Inject, Injectable } from '@nestjs/common';
-import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNull, ne, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
 const columns = {
@@ -29,6 +29,7 @@ const columns = {
   counts: runs.counts,
   control: runs.control,
   notes: runs.notes,
+  learnt: runs.learnt,
   error: runs.error,
   createdBy: users.name,
   createdById: runs.createdBy,
@@ -71,8 +72,9 @@ export class RunsRepository {
     return row;
   }
 
-  /** Stores the next number; two at once collide on the unique index rather than share one. */
-  async insert(values: Omit<typeof runs.$inferInsert, 'number'>, db = this.db) {
+  /** Stores the next number; the survey is locked, so that two at once take turns. */
+  async insert(values: Omit<typeof runs.$inferInsert, 'number'>, db: Database) {
+    await db.select({ id: surveys.id }).from(surveys).where(eq(surveys.id, values.surveyId)).for('update');
     const number = sql`(select coalesce(max(number), 0) + 1 from runs where survey_id = ${values.surveyId})`;
     const [row] = await db
       .insert(runs)
@@ -85,10 +87,24 @@ export class RunsRepository {
     await db.update(runs).set(values).where(eq(runs.id, id));
   }
 
-  /** Removes what an unfinished attempt staged. */
-  async clear(id: string, db = this.db): Promise<void> {
-    await db.delete(evidence).where(eq(evidence.runId, id));
-    await db.delete(verdicts).where(eq(verdicts.runId, id));
+  /** Begins an attempt on a clean table; false where the run is done, since then it is never touched again. */
+  async begin(id: string): Promise<boolean> {
+    return this.reopen(id, { state: 'running', startedAt: new Date(), error: null });
+  }
+
+  /** Gives an unfinished run another state and removes what it staged; false where it is done. */
+  async reopen(id: string, values: Partial<typeof runs.$inferInsert>): Promise<boolean> {
+    return this.transaction(async (tx) => {
+      const rows = await tx
+        .update(runs)
+        .set(values)
+        .where(and(eq(runs.id, id), ne(runs.state, 'done')))
+        .returning({ id: runs.id });
+      if (rows.length === 0) return false;
+      await tx.delete(evidence).where(eq(evidence.runId, id));
+      await tx.delete(verdicts).where(eq(verdicts.runId, id));
+      return true;
+    });
   }
 
   /** Published tables of a survey in the order they were published. */

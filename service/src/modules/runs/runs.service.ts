@@ -46,8 +46,17 @@ export class RunsService implements OnModuleInit {
     return toRun(row);
   }
 
-  async surveyOf(id: string): Promise<string | undefined> {
-    return (await this.runs.find(id))?.surveyId;
+  /** A run whose results can be read: until it is done, what there is of them is staged and nobody's. */
+  async finished(user: SignedInUser, id: string): Promise<Run> {
+    const run = await this.get(user, id);
+    if (run.state !== 'done') throw new AppError('NOT_READY', `Run ${run.number} is ${run.state}; it has no results.`);
+    return run;
+  }
+
+  /** Whether a run of the survey is done, for those who have asked for access already. */
+  async isDone(id: string, surveyId?: string): Promise<boolean> {
+    const row = await this.runs.find(id);
+    return row?.state === 'done' && (surveyId === undefined || row.surveyId === surveyId);
   }
 
   async latestDone(surveyId: string): Promise<Run | undefined> {
@@ -128,10 +137,8 @@ export class RunsService implements OnModuleInit {
   }
 
   async difference(user: SignedInUser, id: string, fromId: string): Promise<z.output<typeof runDifference>> {
-    const [to, from] = [await this.get(user, id), await this.get(user, fromId)];
+    const [to, from] = [await this.finished(user, id), await this.finished(user, fromId)];
     if (to.surveyId !== from.surveyId) throw new AppError('NOT_FOUND', 'The two runs are of different surveys.');
-    for (const run of [from, to])
-      if (run.state !== 'done') throw new AppError('NOT_READY', `Run ${run.number} is ${run.state}.`);
     const settings = async (run: Run) => (await this.criteria.get(user, run.criteriaId)).settings as CriteriaSettings;
     const summaries = async (run: Run) => (await this.verdicts.summary(run.id)) as VerdictSummary[];
     const before = new Map(from.inputs.map((input) => [input.sha256, input.name]));
@@ -154,7 +161,8 @@ function hashOf(value: unknown): string {
 }
 
 function toRun(row: RunRow): Run {
-  const { criteriaSettings: _, decisions: __, createdById: ___, startedAt, finishedAt, createdAt, ...rest } = row;
+  const { criteriaSettings: _, decisions: __, createdById: ___, learnt: ____, ...shown } = row;
+  const { startedAt, finishedAt, createdAt, ...rest } = shown;
   return {
     ...rest,
     createdAt: createdAt.toISOString(),

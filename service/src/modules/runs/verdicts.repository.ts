@@ -84,6 +84,16 @@ export class VerdictsRepository {
       .offset(page.offset);
   }
 
+  /** Ids of the detections of a run that a filter lets through, in order. */
+  async ids(runId: string, filter: VerdictFilter, sort: string | undefined, db = this.db): Promise<string[]> {
+    const rows = await db
+      .select({ id: verdicts.detectionId })
+      .from(verdicts)
+      .where(this.#where(runId, filter))
+      .orderBy(...this.#order(sort));
+    return rows.map((row) => row.id);
+  }
+
   async count(runId: string, filter: VerdictFilter = {}, db = this.db): Promise<number> {
     const [row] = await db
       .select({ count: sql<number>`count(*)::int` })
@@ -106,22 +116,28 @@ export class VerdictsRepository {
     return row;
   }
 
-  /** Packed evidence in input order, for the flat lists. */
+  /** Packed evidence in input order from a place on, for the flat lists. */
   evidence(
     runId: string,
     which: 'candidates' | 'neighbours',
-    page: { limit: number; offset: number },
+    page: { limit: number; from: number },
     detectionId?: string,
     db = this.db,
   ) {
+    const { position, name } = verdicts;
     return db
-      .select({ detectionId: verdicts.detectionId, name: verdicts.name, packed: evidence[which] })
-      .from(evidence)
-      .innerJoin(verdicts, and(eq(evidence.runId, verdicts.runId), eq(evidence.detectionId, verdicts.detectionId)))
-      .where(and(eq(evidence.runId, runId), detectionId ? eq(evidence.detectionId, detectionId) : undefined))
-      .orderBy(asc(verdicts.position))
-      .limit(page.limit)
-      .offset(page.offset);
+      .select({ detectionId: verdicts.detectionId, position, name, packed: evidence[which] })
+      .from(verdicts)
+      .innerJoin(evidence, and(eq(evidence.runId, verdicts.runId), eq(evidence.detectionId, verdicts.detectionId)))
+      .where(
+        and(
+          eq(verdicts.runId, runId),
+          gte(position, page.from),
+          detectionId ? eq(verdicts.detectionId, detectionId) : undefined,
+        ),
+      )
+      .orderBy(asc(position))
+      .limit(page.limit);
   }
 
   /** What people said since: settlements, reviews and overrides of some detections. */

@@ -11,6 +11,8 @@ import { RunsService } from './runs.service.ts';
 import { type VerdictFilter, VerdictsRepository } from './verdicts.repository.ts';
 import type { VerdictLine } from './verdict-columns.ts';
 
+/** Verdicts held at a time while exporting. */
+const EXPORT_BLOCK = 500;
 type Said = Awaited<ReturnType<VerdictsRepository['said']>>;
 
 /** Reads what runs found, together with what people said of it since. */
@@ -22,7 +24,7 @@ export class VerdictsService {
   ) {}
 
   async list(user: SignedInUser, runId: string, query: VerdictsQuery): Promise<List<VerdictItem>> {
-    await this.runs.get(user, runId);
+    await this.runs.finished(user, runId);
     return this.page(runId, query, query);
   }
 
@@ -44,13 +46,13 @@ export class VerdictsService {
     );
   }
 
-  /** Every verdict of a run in input order, page by page, so that an export of any size streams. */
+  /** Verdicts of a run in order, a block at a time, so that an export of any size streams. Only ids are held. */
   async *lines(runId: string, filter: VerdictFilter = {}, sort?: string): AsyncIterable<VerdictLine> {
-    for (let offset = 0; ; offset += 1000) {
-      const rows = await this.verdicts.page(runId, filter, { sort, limit: 1000, offset });
-      const said = await this.verdicts.said(rows.map((row) => row.detectionId));
-      for (const row of rows) yield { item: withSaid(row.item as VerdictItem, row.detectionId, said) };
-      if (rows.length < 1000) return;
+    const ids = await this.verdicts.ids(runId, filter, sort);
+    for (let from = 0; from < ids.length; from += EXPORT_BLOCK) {
+      const block = ids.slice(from, from + EXPORT_BLOCK);
+      const items = await this.items(runId, block);
+      for (const id of block) yield { item: items.get(id)! };
     }
   }
 
@@ -66,13 +68,13 @@ export class VerdictsService {
     return found;
   }
 
-  /** The verdict as computed; undefined where the run has none, or is of another survey. */
+  /** The verdict as computed; undefined where the run has none, is not done, or is of another survey. */
   async computed(
     runId: string,
     detectionId: string,
     surveyId?: string,
   ): Promise<{ starlight: StarlightVerdict; surroundings: SurroundingsVerdict } | undefined> {
-    if (surveyId && (await this.runs.surveyOf(runId)) !== surveyId) return undefined;
+    if (!(await this.runs.isDone(runId, surveyId))) return undefined;
     const row = await this.verdicts.find(runId, detectionId);
     const item = row?.item as VerdictItem | undefined;
     return item && { starlight: item.starlight, surroundings: item.surroundings };
@@ -80,7 +82,7 @@ export class VerdictsService {
 
   /** Everything behind one verdict. */
   async detail(user: SignedInUser, runId: string, detectionId: string): Promise<VerdictDetail> {
-    const run = await this.runs.get(user, runId);
+    const run = await this.runs.finished(user, runId);
     const row = await this.verdicts.find(runId, detectionId);
     if (!row) throw new AppError('NOT_FOUND', 'That run has no verdict on this detection.');
     const said = await this.verdicts.said([detectionId]);

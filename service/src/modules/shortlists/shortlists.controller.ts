@@ -2,18 +2,13 @@ import { putShortlistRequest, shortlist, type PutShortlistRequest } from '@eremi
 import { Body, Controller, Get, Headers, Param, Put, Query, Res, SerializeOptions } from '@nestjs/common';
 import type { Response } from 'express';
 import { z } from 'zod';
+import { etagOf } from '../../common/etag.ts';
 import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
 import { sendTable } from '../runs/send-table.ts';
 import { verdictTable } from '../runs/verdict-columns.ts';
 import { ShortlistsService } from './shortlists.service.ts';
 
 const formatQuery = z.object({ format: z.enum(['csv', 'votable']).default('csv') });
-/** `"7"` or `W/"7"` to 7. */
-const versionOf = (ifMatch: string | undefined): number | undefined => {
-  const match = /^(?:W\/)?"(\d+)"$/.exec(ifMatch ?? '');
-  return match ? Number(match[1]) : undefined;
-};
-
 @Controller('surveys/:surveyId/shortlist')
 export class ShortlistsController {
   constructor(private readonly shortlists: ShortlistsService) {}
@@ -26,7 +21,7 @@ export class ShortlistsController {
     @Res({ passthrough: true }) response: Response,
   ) {
     const list = await this.shortlists.get(user, surveyId);
-    response.setHeader('ETag', `"${list.version}"`);
+    response.setHeader('ETag', etagOf(list.version));
     return list;
   }
 
@@ -39,8 +34,8 @@ export class ShortlistsController {
     @Headers('if-match') ifMatch: string | undefined,
     @Res({ passthrough: true }) response: Response,
   ) {
-    const list = await this.shortlists.put(user, surveyId, request, versionOf(ifMatch));
-    response.setHeader('ETag', `"${list.version}"`);
+    const list = await this.shortlists.put(user, surveyId, request, ifMatch);
+    response.setHeader('ETag', etagOf(list.version));
     return list;
   }
 

@@ -1,6 +1,6 @@
 import { shortlistEntries, shortlists } from '@eremite/schema';
 import { Inject, Injectable } from '@nestjs/common';
-import { and, asc, eq, sql } from 'drizzle-orm';
+import { asc, eq, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
 export interface EntryValues {
@@ -30,15 +30,22 @@ export class ShortlistsRepository {
       .orderBy(asc(shortlistEntries.rank));
   }
 
-  /** Moves the version on; false where it is no longer `version`. */
-  async advance(surveyId: string, runId: string, version: number, db: Database): Promise<boolean> {
+  /** Locks the list until the transaction ends; answers its version. */
+  async lock(surveyId: string, db: Database): Promise<number> {
     await db.insert(shortlists).values({ surveyId, version: 0 }).onConflictDoNothing();
-    const rows = await db
+    const [row] = await db
+      .select({ version: shortlists.version })
+      .from(shortlists)
+      .where(eq(shortlists.surveyId, surveyId))
+      .for('update');
+    return row!.version;
+  }
+
+  async advance(surveyId: string, runId: string, db: Database): Promise<void> {
+    await db
       .update(shortlists)
       .set({ runId, version: sql`${shortlists.version} + 1`, updatedAt: new Date() })
-      .where(and(eq(shortlists.surveyId, surveyId), eq(shortlists.version, version)))
-      .returning({ version: shortlists.version });
-    return rows.length > 0;
+      .where(eq(shortlists.surveyId, surveyId));
   }
 
   async replaceEntries(surveyId: string, entries: readonly EntryValues[], db: Database): Promise<void> {

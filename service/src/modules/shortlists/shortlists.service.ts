@@ -2,6 +2,7 @@ import type { PutShortlistRequest, Shortlist } from '@eremite/shared/contracts/s
 import { Injectable } from '@nestjs/common';
 import { AccessService } from '../../common/access.ts';
 import { AppError } from '../../common/app-error.ts';
+import { requireMatch } from '../../common/etag.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { RunsService } from '../runs/runs.service.ts';
@@ -43,12 +44,12 @@ export class ShortlistsService {
     };
   }
 
-  /** @param version the version last seen; undefined overwrites whatever stands */
+  /** @param ifMatch ETag of the version last seen; without it the change is taken as it comes */
   async put(
     user: SignedInUser,
     surveyId: string,
     request: PutShortlistRequest,
-    version: number | undefined,
+    ifMatch: string | undefined,
   ): Promise<Shortlist> {
     await this.access.survey(user, surveyId, 'lead');
     const run = await this.runs.get(user, request.runId);
@@ -67,23 +68,21 @@ export class ShortlistsService {
         { pointer: `/entries/${missing}/detectionId`, detail: 'not in this run' },
       ]);
     }
-    await this.shortlists.transaction(async (tx) => {
-      const seen = version ?? (await this.shortlists.find(surveyId, tx))?.version ?? 0;
-      if (!(await this.shortlists.advance(surveyId, request.runId, seen, tx))) {
-        throw new AppError('CHANGED_MEANWHILE', 'Someone else changed the shortlist; look at it again.', undefined, {
-          version: (await this.shortlists.find(surveyId, tx))?.version,
-        });
-      }
+    const seen = await this.get(user, surveyId);
+    requireMatch(ifMatch, seen.version, seen);
+    const stood = await this.shortlists.transaction(async (tx) => {
+      const version = await this.shortlists.lock(surveyId, tx);
+      if (ifMatch !== undefined && version !== seen.version) return false;
+      await this.shortlists.advance(surveyId, request.runId, tx);
       await this.shortlists.replaceEntries(surveyId, request.entries, tx);
       const names = ids.map((id) => items.get(id)!.name);
-      const entry = {
-        surveyId,
-        actor: user,
-        action: 'changed the shortlist',
-        subject: `${ids.length} detections of run ${run.number}`,
-      };
+      const subject = `${ids.length} ${ids.length === 1 ? 'detection' : 'detections'} of run ${run.number}`;
+      const entry = { surveyId, actor: user, action: 'changed the shortlist', subject };
       await this.ledger.append({ ...entry, detail: { runId: request.runId, names } }, tx);
+      return true;
     });
+    // Someone was quicker between the look and the lock.
+    if (!stood) requireMatch(ifMatch, '', await this.get(user, surveyId));
     return this.get(user, surveyId);
   }
 }
