@@ -4,13 +4,17 @@ import { cellText } from '../columns/cell-text.ts';
 import { ChunkBuilder } from '../columns/chunk-builder.ts';
 import { type RowFiller, streamChunks } from '../columns/stream-chunks.ts';
 import { type ReaderLimits, type RowChunk, TableError } from '../table.ts';
+import { jsonArrayText } from './json-array.ts';
 import { isComment } from './comment-line.ts';
 import { RecordScanner } from './record-scanner.ts';
 import type { TextLayout } from './text-layout.ts';
 
 const QUOTE = 34;
 
-type RowsLayout = Pick<TextLayout, 'delimiter' | 'columns' | 'decimalComma' | 'dataStart' | 'dataLine' | 'skip'>;
+type RowsLayout = Pick<TextLayout, 'delimiter' | 'columns' | 'decimalComma' | 'dataStart' | 'dataLine' | 'skip'> & {
+  /** Columns whose cells are arrays in JSON. */
+  jsonArrays?: boolean[];
+};
 
 /** Streams the rows of a UTF-8 delimited text. */
 export function delimitedRows(content: Content, layout: RowsLayout, limits: ReaderLimits): AsyncIterable<RowChunk> {
@@ -68,7 +72,7 @@ class DelimitedFiller implements RowFiller {
   private takeRecord(builder: ChunkBuilder, buffer: Buffer, start: number, next: number): void {
     const { starts, ends, doubled, count, newlines } = this.scanner;
     const line = this.line;
-    const { skip } = this.layout;
+    const { skip, jsonArrays } = this.layout;
     const width = this.layout.columns.length + skip;
     this.line += newlines;
     if (count === 0 || (count === 1 && starts[0] === ends[0] && buffer[starts[0]! - 1] !== QUOTE)) return;
@@ -89,8 +93,13 @@ class DelimitedFiller implements RowFiller {
     }
     const { columns, rows } = builder;
     for (let i = skip; i < width; i++) {
-      if (doubled[i] === 0) columns[i - skip]!.putCell(rows, buffer, starts[i]!, ends[i]!);
-      else columns[i - skip]!.putText(rows, cellText(buffer, starts[i]!, ends[i]!).replaceAll('""', '"'));
+      const column = columns[i - skip]!;
+      const isJson = jsonArrays?.[i] === true;
+      if (doubled[i] === 0 && !isJson) column.putCell(rows, buffer, starts[i]!, ends[i]!);
+      else {
+        const text = cellText(buffer, starts[i]!, ends[i]!).replaceAll('""', '"');
+        column.putText(rows, isJson ? jsonArrayText(text) : text);
+      }
     }
     builder.endRow(line);
   }

@@ -121,7 +121,7 @@ describe('openDelimited', () => {
       ['NUMBER', undefined],
       ['X_WORLD', 'deg'],
       ['FLUX', undefined],
-      ['FLUX_4', undefined],
+      ['FLUX_1', undefined],
     ]);
   });
 

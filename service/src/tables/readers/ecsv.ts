@@ -14,7 +14,7 @@ export function isEcsv(head: Buffer): boolean {
   return /^# ?%ECSV /.test(head.toString('latin1', 0, 16));
 }
 
-/** Opens an ECSV table (UTF-8). Cells of arrays stay as the file writes them, in JSON. */
+/** Opens an ECSV table (UTF-8). */
 export async function openEcsv(content: Content, limits: ReaderLimits): Promise<OpenTable> {
   const { lines, start } = headLines(content.head);
   const head = readEcsvHead(lines);
@@ -63,6 +63,7 @@ export async function openEcsv(content: Content, limits: ReaderLimits): Promise<
     skip: 0 as const,
     dataStart,
     dataLine: first?.line ?? header.line + 1,
+    jsonArrays: columns.map((column) => column.arraySize !== undefined),
   };
   const rows = () => delimitedRows(content, layout, limits);
   const longs = head.columns.flatMap(({ datatype }, i) =>

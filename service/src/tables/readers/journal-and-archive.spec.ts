@@ -81,6 +81,14 @@ describe('openEcsv', () => {
     ]);
   });
 
+  it('reads arrays, in block style too', async () => {
+    const head =
+      "# %ECSV 1.0\n# ---\n# delimiter: ','\n# datatype:\n# -\n#   name: a\n#   datatype: string\n#   subtype: 'int32[2,2]'\n# -\n#   name: b\n#   datatype: float32\n";
+    const open = await openMemory(`${head}a,b\n"[[1,2],[null,4]]",2.5\n`);
+    expect(open.tables[0]!.columns[0]!.arraySize).toBe('2x2');
+    expect((await readAll(open)).rows).toEqual([['1 2 NaN 4', 2.5]]);
+  });
+
   it('refuses a header row that does not fit', async () => {
     expect((await faultOf(String(sample('columns.ecsv')).replace('name ra source_id', 'name source_id'))).code).toBe(
       'bad-header',

@@ -3,9 +3,10 @@ import type { Content } from '../bytes/content.ts';
 import type { ChunkBuilder } from '../columns/chunk-builder.ts';
 import type { RowFiller } from '../columns/stream-chunks.ts';
 import { type ReaderLimits, TableError } from '../table.ts';
+import { decodeXml } from './decode-xml.ts';
 import { checkRowCount } from './row-count.ts';
 import { putTableCell } from './votable-cells.ts';
-import { decodeXml, type VotableTable } from './votable-head.ts';
+import type { VotableTable } from './votable-head.ts';
 
 const LESS = 0x3c;
 const GREATER = 0x3e;

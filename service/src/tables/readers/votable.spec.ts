@@ -81,6 +81,17 @@ describe('openVotable', () => {
     expect((await readAll(open, 1)).rows).toEqual([[31]]);
   });
 
+  it('applies null values told once for several columns, also to elements of arrays', async () => {
+    const open = await openMemory(
+      votable(
+        '<TABLE><FIELD name="a" datatype="int"><VALUES ID="v" null="-9"/></FIELD><FIELD name="b" datatype="int"><VALUES ref="v"/></FIELD>' +
+          '<FIELD name="c" datatype="int" arraysize="2"><VALUES null="-9"/></FIELD>' +
+          '<DATA><TABLEDATA><TR><TD>-9</TD><TD>-9</TD><TD>1 -9</TD></TR></TABLEDATA></DATA></TABLE>',
+      ),
+    );
+    expect((await readAll(open)).rows).toEqual([[null, null, '1 NaN']]);
+  });
+
   it('sidelines rows with the wrong number of cells and goes on', async () => {
     const rows = '<TR><TD>1</TD></TR><TR><TD>1</TD><TD>2</TD></TR><TR><TD>3</TD></TR>';
     const read = await readAll(
