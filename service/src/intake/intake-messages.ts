@@ -1,6 +1,6 @@
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { ErrorPlace } from '../tables/table.ts';
-import type { Tile } from '../tiles/tile-collector.ts';
+import type { Tile } from '../tiles/tile.ts';
 import type { Inspection } from './inspect.ts';
 import type { Published, SidelinedCells } from './publish.ts';
 import type { SettingsFault } from './resolved.ts';

@@ -3,7 +3,8 @@ import type { IntakeCheck, SidelinedRow } from '@eremite/shared/contracts/intake
 import type { ByteSource, RowChunk } from '../tables/table.ts';
 import type { PackedColumns } from '../tiles/column-pack.ts';
 import { selectRows } from '../tiles/column-rows.ts';
-import { type Tile, TileCollector } from '../tiles/tile-collector.ts';
+import type { Tile } from '../tiles/tile.ts';
+import { TileCollector } from '../tiles/tile-collector.ts';
 import type { CatalogueFacts } from './catalogue-facts.ts';
 import { coverageOf } from './coverage.ts';
 import { openCatalogue, type ReadOptions } from './open-catalogue.ts';

@@ -1,5 +1,5 @@
 import { packColumns, type PackedColumns, unpackColumns } from './column-pack.ts';
-import type { Tile } from './tile-collector.ts';
+import type { Tile } from './tile.ts';
 
 /** Cell number under which the table of places is kept: none of the sky. */
 export const PLACES_CELL = -1;

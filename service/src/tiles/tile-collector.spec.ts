@@ -3,7 +3,8 @@ import { tileCells } from './cells.ts';
 import { type PackedColumns, textColumn, unpackColumns } from './column-pack.ts';
 import { rowCells } from './original-cells.ts';
 import { PLACES_CELL, placesOf } from './row-places.ts';
-import { type Tile, TileCollector } from './tile-collector.ts';
+import type { Tile } from './tile.ts';
+import { TileCollector } from './tile-collector.ts';
 
 /** Rows spread over a few cells, numbered with gaps, in chunks as a reader gives them. */
 function chunks(count: number, chunkRows: number): { roles: PackedColumns; originals: PackedColumns }[] {

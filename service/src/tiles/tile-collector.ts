@@ -3,15 +3,7 @@ import { type Column, type PackedColumns, packColumns } from './column-pack.ts';
 import { concatColumns, selectRows } from './column-rows.ts';
 import { alike } from './original-cells.ts';
 import { RowPlaces } from './row-places.ts';
-
-/** One row of the `tiles` table. */
-export interface Tile {
-  cell: number;
-  part: number;
-  count: number;
-  roles: Uint8Array;
-  originals: Uint8Array;
-}
+import type { Tile } from './tile.ts';
 
 /** Rows in one tile at most, so that a crowded cell is still read in pieces. */
 const MOST_ROWS = 32_768;

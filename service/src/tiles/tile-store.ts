@@ -8,7 +8,7 @@ import { rowCells } from './original-cells.ts';
 import { joinRoles } from './join-roles.ts';
 import type { RoleTable } from './role-table.ts';
 import { blockOf, PLACES_CELL, placesOf, type RowPlace } from './row-places.ts';
-import type { Tile } from './tile-collector.ts';
+import type { Tile } from './tile.ts';
 
 /** A row as it stands in the catalogue's file, with its place. */
 export interface StoredRow {

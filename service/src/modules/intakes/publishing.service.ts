@@ -7,7 +7,7 @@ import { BulkStore } from '../../database/bulk.ts';
 import type { Published, SidelinedCells } from '../../intake/publish.ts';
 import type { JobContext } from '../../jobs/job-handler.ts';
 import { JobsService } from '../../jobs/jobs.service.ts';
-import type { Tile } from '../../tiles/tile-collector.ts';
+import type { Tile } from '../../tiles/tile.ts';
 import { TileStore } from '../../tiles/tile-store.ts';
 import { FilesService } from '../files/files.service.ts';
 import { canonicalJson } from '../ledger/ledger-hash.ts';
