@@ -6,6 +6,7 @@ import { pairSearch } from '../matching/pair-search.ts';
 import { assessStarlight, type AssessmentContext, type StarlightAssessment } from './assess.ts';
 import { type CandidateRow, makeCandidate, type OverrideOf } from './candidate-row.ts';
 import { CoveredShares } from './covered-share.ts';
+import { shiftedDetections } from './control-run.ts';
 import { describeDetail, describeItem } from './describe.ts';
 import { type Detection, readDetections } from './detection-table.ts';
 import type { EngineInput } from './engine-input.ts';
@@ -17,6 +18,7 @@ import { MissedTable } from './missed-table.ts';
 import { buildNeighbourPool, type NeighbourPool } from './neighbour-pool.ts';
 import { type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
 import { redshiftReaches } from './redshift-reach.ts';
+import { judgeStability } from './robustness.ts';
 import type { Assessment, ScoredDetection } from './scored-detection.ts';
 import { StarMasks } from './star-masks.ts';
 import {
@@ -106,7 +108,7 @@ export class Engine {
   }
 
   /** Candidate rows of each detection of a range, nearest first within each catalogue. */
-  private candidatesOf(range: readonly Detection[]): CandidateRow[][] {
+  private candidatesOf(range: readonly Detection[], overrideOf: OverrideOf | null): CandidateRow[][] {
     const rows: CandidateRow[][] = range.map(() => []);
     const positions = {
       raDeg: Float64Array.from(range, ({ raDeg }) => raDeg),
@@ -117,14 +119,18 @@ export class Engine {
       const pairs = pairSearch(catalogue.grid, positions);
       for (let k = 0; k < pairs.position.length; k++) {
         const p = pairs.position[k]!;
-        rows[p]!.push(makeCandidate(range[p]!, catalogue, pairs.row[k]!, pairs.separationArcsec[k]!, this.overrideOf));
+        rows[p]!.push(makeCandidate(range[p]!, catalogue, pairs.row[k]!, pairs.separationArcsec[k]!, overrideOf));
       }
     }
     return rows;
   }
 
-  private assess(range: readonly Detection[], context: AssessmentContext): StarlightAssessment[] {
-    const candidates = this.candidatesOf(range);
+  private assess(
+    range: readonly Detection[],
+    context: AssessmentContext,
+    overrideOf: OverrideOf | null = this.overrideOf,
+  ): StarlightAssessment[] {
+    const candidates = this.candidatesOf(range, overrideOf);
     const masks = this.masks.of(range);
     return candidates.map((rows, i) => assessStarlight(range[i]!, rows, masks[i]!, context));
   }
@@ -251,17 +257,33 @@ export class Engine {
       const surroundings = judgeSurroundings(detection, around[i]!, own, far[i]!, this.surroundings);
       const assessment: Assessment = { ...starlight, surroundings };
       const doubts = judgeDoubts(starlight, surroundings, this.searched, criteria);
+      const robustness = judgeStability(assessment, context.model, this.surroundings);
       rateRows(detection, starlight.candidates, starlight.expectations, starlight.prior, criteria);
       return {
         position: detection.position,
         catalogueId: this.input.catalogues[detection.catalogue]!.id,
         row: detection.row,
-        item: describeItem(assessment, doubts, criteria),
+        item: { ...describeItem(assessment, doubts, criteria), robustness },
         candidates: starlight.candidates,
         neighbours: surroundings.neighbours,
         detail: () => describeDetail(assessment, doubts, criteria),
       };
     });
+  }
+
+  /** Shifted detections of the control; none where it is switched off. */
+  shifted(): Detection[] {
+    const { control, robustness } = this.input.criteria;
+    if (control.offsetsPerSource === 0) return [];
+    return shiftedDetections(this.detections, this.searched, control.offsetsPerSource, robustness.seed);
+  }
+
+  /** How many of some shifted detections would have been given a counterpart, by the same code and without overrides. */
+  chanceMatches(shifted: readonly Detection[]): number {
+    const context = this.context(this.learnt.relation, this.learnt.priors);
+    const numbered = shifted.map((detection, position) => ({ ...detection, position }));
+    const shares = new CoveredShares(numbered.length, this.catalogues.length);
+    return this.assess(numbered, { ...context, shares }, null).filter(({ dominating }) => dominating !== null).length;
   }
 
   /** The nearest row with a velocity for detections that have none in their window. */

@@ -1,11 +1,12 @@
-import type { controlResult } from '@eremite/shared/contracts/run';
-import type { z } from 'zod';
+import { type ControlResult, controlSummary } from './control-run.ts';
 import { Engine } from './engine.ts';
 import type { EngineInput } from './engine-input.ts';
 import type { ScoredDetection } from './scored-detection.ts';
 
 /** Detections scored between two looks at the clock: the unit of progress and of cancel. */
 const UNIT = 500;
+
+export type { ControlResult };
 
 export interface RunOptions {
   /** Work done, 0 to 1, and what is being done. */
@@ -14,7 +15,8 @@ export interface RunOptions {
   signal?: AbortSignal;
 }
 
-export type ControlResult = z.output<typeof controlResult>;
+/** Verdicts in which an object was accepted as the counterpart. */
+const FOUND = new Set(['starlit', 'nearly dark']);
 
 export interface RunResult {
   engine: Engine;
@@ -52,11 +54,24 @@ export async function runEngine(
     }
     engine.learnFrom(lessons, (relation) => engine.lessons(pupils, relation));
   }
+  let matched = 0;
+  const shifted = engine.shifted();
+  const scored = shifted.length > 0 ? 0.8 : 1;
   for (let from = 0; from < count; from += UNIT) {
     await pause();
     const to = Math.min(count, from + UNIT);
-    await take(engine.score(from, to), engine);
-    onProgress?.(share + (1 - share) * (to / count), 'scoring');
+    const results = engine.score(from, to);
+    for (const { item } of results) if (FOUND.has(item.starlight)) matched++;
+    await take(results, engine);
+    onProgress?.(share + (scored - share) * (to / count), 'scoring');
   }
-  return { engine, notes: engine.notes, control: null };
+  let chance = 0;
+  for (let from = 0; from < shifted.length; from += UNIT) {
+    await pause();
+    chance += engine.chanceMatches(shifted.slice(from, from + UNIT));
+    onProgress?.(scored + (1 - scored) * Math.min(1, (from + UNIT) / shifted.length), 'matching shifted positions');
+  }
+  const { offsetsPerSource } = input.criteria.control;
+  const control = controlSummary(offsetsPerSource, shifted.length, chance, matched, count);
+  return { engine, notes: engine.notes, control };
 }

@@ -9,7 +9,7 @@ import { coveredCircle } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import { type GroupRow, type Membership, membershipOf } from './group-list.ts';
 import type { MissedTable } from './missed-table.ts';
-import { normalQuantile } from './normal-quantile.ts';
+import { normalQuantile } from '@eremite/shared/science/robustness/normal-quantile';
 import { isStar, type PreparedCatalogue } from './prepared-catalogue.ts';
 import { asR, reachAt, type RedshiftReach } from './redshift-reach.ts';
 

@@ -58,6 +58,8 @@ const HI_ERROR_KMS = 5;
 const OPTICAL_ERROR_KMS = 30;
 /** Share of HI-selected galaxies that continuum tables of ordinary depth show; from memory, our choice. */
 const CONTINUUM_SHARE = 0.05;
+/** Stars of the Galaxy are slower than about this, km/s: the escape speed here. Common practice. */
+const FASTEST_STAR_KMS = 600;
 
 /** Scatter of gas and star velocities of a detection, km/s. */
 export function velocityScatterOf({ width50Kms }: Detection, criteria: CriteriaSettings): number {
@@ -94,6 +96,7 @@ export function groupObjects(rows: readonly CandidateRow[]): WeighedObject[] {
       catalogue: row.catalogue.index,
       density: row.catalogue.density,
       czKms: row.usableCzKms,
+      isStar: row.isStar,
     })),
   );
   const members: CandidateRow[][] = [];
@@ -117,7 +120,8 @@ function makeObject(rows: CandidateRow[]): WeighedObject {
     czKms: moving ? moving.usableCzKms : NaN,
     velocityDifferenceKms: moving ? moving.velocityDifferenceKms : NaN,
     discordant: false,
-    isStar: rows.some((row) => row.isStar),
+    // A redshift no star of the Galaxy has outweighs a table's star/galaxy word.
+    isStar: rows.some((row) => row.isStar) && !(Math.abs(moving?.usableCzKms ?? 0) > FASTEST_STAR_KMS),
     override: rows.some((row) => row.override === 'accept')
       ? 'accept'
       : rows.some((row) => row.override === 'reject')

@@ -1,5 +1,5 @@
 import { DomainError } from '../domain-error.ts';
-import { logGamma } from './incomplete-gamma.ts';
+import { logGamma } from '../robustness/gamma-function.ts';
 import { BLANTON_2003, densityBrighterThan, type LuminosityFunction } from './schechter.ts';
 
 /** The cylinder in which neighbours are looked for. */

@@ -1,4 +1,4 @@
-import { upperIncompleteGamma } from './incomplete-gamma.ts';
+import { upperIncompleteGamma } from '../robustness/gamma-function.ts';
 
 /** Luminosity function of galaxies. */
 export interface LuminosityFunction {
@@ -19,14 +19,11 @@ export const BLANTON_2003: LuminosityFunction = { phiStarH3: 1.49e-2, mStarH: -2
  * @param h0 Hubble constant, km/s/Mpc
  * @param law luminosity function
  * @returns per cubic Mpc
- * @throws {DomainError} for alpha = -1, -2 ... (a pole)
  *
  * phi* Gamma(alpha + 1, 10^(-0.4 (M - M*))).
  */
 export function densityBrighterThan(absoluteMag: number, h0 = 70, law = BLANTON_2003): number {
   const h = h0 / 100;
   const mStar = law.mStarH + 5 * Math.log10(h);
-  // An integer alpha is a removable pole: step aside by a trifle.
-  const a = Number.isInteger(law.alpha) ? law.alpha + 1 + 1e-7 : law.alpha + 1;
-  return law.phiStarH3 * h ** 3 * upperIncompleteGamma(a, 10 ** (-0.4 * (absoluteMag - mStar)));
+  return law.phiStarH3 * h ** 3 * upperIncompleteGamma(law.alpha + 1, 10 ** (-0.4 * (absoluteMag - mStar)));
 }

@@ -11,7 +11,7 @@ import {
   tidalStrength,
 } from './density-measures.ts';
 import { criticalDensity, isMember, r200Kpc, v200Kms } from './group-membership.ts';
-import { upperIncompleteGamma } from './incomplete-gamma.ts';
+import { upperIncompleteGamma } from '../robustness/gamma-function.ts';
 import {
   clusteringBoost,
   coverageCorrected,

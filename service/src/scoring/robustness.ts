@@ -1,0 +1,203 @@
+import type { robustnessResult } from '@eremite/shared/contracts/verdict';
+import { exclusiveProbabilities } from '@eremite/shared/science/counterpart/exclusive';
+import { counterpartDensity } from '@eremite/shared/science/counterpart/magnitude-term';
+import { type Starlight, starlightVerdict } from '@eremite/shared/science/counterpart/starlight';
+import { expectedDetection } from '@eremite/shared/science/photometry/completeness';
+import { wilsonInterval } from '@eremite/shared/science/robustness/intervals';
+import { type Draw, drawPerturbation, NO_CHANGE, USUAL_ERRORS } from '@eremite/shared/science/robustness/perturbation';
+import { randomStream } from '@eremite/shared/science/robustness/random';
+import { flips, stability } from '@eremite/shared/science/robustness/stability';
+import { aloneProbability } from '@eremite/shared/science/surroundings/alone-probability';
+import { type Surroundings, surroundingsVerdict } from '@eremite/shared/science/surroundings/surroundings-verdict';
+import { extinction } from '@eremite/shared/science/photometry/extinction';
+import type { z } from 'zod';
+import { detectionSettings } from './detection-settings.ts';
+import { expectIn, type Perturbation } from './expectation.ts';
+import { nearestFlip } from './other-grounds.ts';
+import type { Assessment } from './scored-detection.ts';
+import { drawnDistances, isAccompaniedAt, type SurroundingsContext } from './surroundings.ts';
+import type { WeighingModel } from './weigh-objects.ts';
+
+export type RobustnessResult = z.output<typeof robustnessResult>;
+
+/** Below this P(none) + P(missed) a detection is clearly starlit and few draws will do. */
+const COULD_BE_DARK = 0.1;
+const FEW_DRAWS = 30;
+/** Objects and bands that cannot matter in any draw are left at their nominal values. */
+const LEAST_PROBABILITY = 1e-4;
+const BANDS_REDRAWN = 2;
+
+/**
+ * How often the verdicts of a detection stand when what the score holds fixed is drawn from its errors: distance, flux and
+ * its scale, depth, reddening, mass-to-light ratio, sizes. Positions are not drawn, for the score integrates over them.
+ */
+export function judgeStability(
+  assessment: Assessment,
+  model: WeighingModel,
+  context: SurroundingsContext,
+): RobustnessResult | null {
+  const { draws, seed } = model.criteria.robustness;
+  if (draws === 0 || assessment.accepted) return null;
+  const { detection, probabilities, starlight, surroundings } = assessment;
+  const open = probabilities.none + probabilities.missed >= COULD_BE_DARK;
+  const random = randomStream(seed, `${detection.name}/${detection.row}`);
+  const errors = {
+    ...USUAL_ERRORS,
+    distanceMpc: detection.angularMpc,
+    distanceErrorMpc: detection.distanceErrorMpc,
+    fluxFraction: detection.signalToNoise > 0 ? Math.min(0.5, 1 / detection.signalToNoise) : 0.1,
+  };
+  const starlightOf = starlightRedrawn(assessment, model);
+  const surroundingsOf = surroundingsRedrawn(assessment, context);
+  const start = open ? draws : Math.min(draws, FEW_DRAWS);
+  const claims = starlight === 'dark' || starlight === 'nearly dark';
+  let agreeing = 0;
+  const result = stability(
+    starlight,
+    () => {
+      const draw = drawPerturbation(random, errors);
+      if (surroundingsOf(draw) === surroundings.verdict) agreeing++;
+      return starlightOf(draw);
+    },
+    { draws: start, maximum: claims ? 5 * draws : start, cut: 0.8 },
+  );
+  const around = wilsonInterval(agreeing, result.draws);
+  return {
+    draws: result.draws,
+    seed,
+    starlightStability: result.agreement,
+    starlightInterval: [result.interval.low, result.interval.high],
+    surroundingsStability: agreeing / result.draws,
+    surroundingsInterval: [around.low, around.high],
+    flips: open ? flipSentences(assessment, starlightOf) : [],
+  };
+}
+
+/** The starlight verdict under a draw: expected magnitudes, sizes and depths move together. */
+function starlightRedrawn(assessment: Assessment, model: WeighingModel): (draw: Draw) => Starlight {
+  const { detection, objects, silence, prior, reliability, probabilities } = assessment;
+  const { criteria, relation } = model;
+  const settings = detectionSettings(criteria);
+  const r = reliability >= 0 && reliability <= 1 ? reliability : 1;
+  const bands = silence.bands
+    .filter(({ completeness, detected }) => completeness !== null && detected !== null && detected > 0)
+    .sort((a, b) => b.completeness! - a.completeness!)
+    .slice(0, BANDS_REDRAWN);
+  const moving = objects.flatMap((object, j) => {
+    const expected = object.band && assessment.expectations.in(object.band);
+    if (!expected || probabilities.objects[j]! < LEAST_PROBABILITY) return [];
+    return [{ j, object, nominal: counterpartDensity(expected, object.magnitude) }];
+  });
+  const weights = objects.map(({ weight }) => weight);
+  const discordant = objects.map((object) => object.discordant);
+  const thresholds = { ...criteria.absence, ...criteria.counterpart };
+  return (draw) => {
+    const perturbed: Perturbation = {
+      distanceFactor: draw.distanceFactor,
+      fluxFactor: draw.fluxFactor,
+      reddeningFactor: draw.reddeningFactor,
+      magnitudeShift: 2.5 * Math.log10(draw.massToLightFactor),
+    };
+    let power: number | null = silence.power === null ? null : 0;
+    for (const { band, insideShare, expected } of bands.map((b) => ({
+      band: b.band,
+      insideShare: b.completeness! / b.detected!,
+      expected: expectIn(detection, b.band, relation, perturbed),
+    }))) {
+      if (!expected) continue;
+      const sizes = expected.sizes.map((part) => ({ ...part, median: part.median * draw.sizeFactor }));
+      const depth = { limitMag: band.depth5Sigma! + draw.depthShiftMag, fwhmArcsec: band.seeing };
+      const detected = expectedDetection({ ...expected, magnitudeAb: expected.magnitude }, sizes, depth, settings);
+      power = Math.max(power ?? 0, insideShare * Math.min(1, detected));
+    }
+    for (const { j, object, nominal } of moving) {
+      const expected = expectIn(detection, object.band!, relation, perturbed);
+      weights[j] =
+        expected && nominal > 0
+          ? (object.weight * counterpartDensity(expected, object.magnitude)) / nominal
+          : object.weight;
+    }
+    return starlightVerdict(
+      {
+        probabilities: exclusiveProbabilities(weights, prior, power ?? 0, r),
+        power,
+        galaxiesInBeam: assessment.inBeam.length,
+        discordant,
+        gasToLight: assessment.gasToLightIsLimit ? NaN : assessment.gasToLight * draw.fluxFactor,
+      },
+      thresholds,
+    );
+  };
+}
+
+/** The surroundings verdict with the detection at the drawn distance; everything known about the neighbours stays. */
+function surroundingsRedrawn(
+  { detection, surroundings }: Assessment,
+  context: SurroundingsContext,
+): (draw: Draw) => Surroundings {
+  const { verdict, membership, pool, reach, covered, obstacles } = surroundings;
+  if (membership || !(detection.angularMpc > 0)) return () => verdict;
+  const dust = detection.ebvMag > 0 ? extinction('r', detection.ebvMag) : 0;
+  const nominal = drawnDistances(detection);
+  return ({ distanceFactor }) => {
+    const distance = detection.angularMpc * distanceFactor;
+    const missedAt = (d: number) => context.missed.at(reach!.limitR - dust - 5 * Math.log10(d) - 25);
+    const alone =
+      reach && obstacles.length === 0
+        ? aloneProbability(
+            nominal
+              .map((d) => d * distanceFactor)
+              .map((d) => ({ accompanied: isAccompaniedAt(pool, d), missed: missedAt(d) })),
+            covered ?? 0,
+          ).probability
+        : null;
+    return surroundingsVerdict(
+      {
+        inCluster: false,
+        inGroup: false,
+        hasNeighbour: isAccompaniedAt(pool, distance),
+        aloneProbability: alone,
+        covered,
+      },
+      context.criteria.surroundings,
+    );
+  };
+}
+
+/** What single change would flip a verdict, in sentences. */
+function flipSentences(
+  { detection, surroundings, starlight }: Assessment,
+  starlightOf: (draw: Draw) => Starlight,
+): string[] {
+  const sentences: string[] = [];
+  const neighbour = nearestFlip(detection.angularMpc, surroundings);
+  if (neighbour) sentences.push(neighbour);
+  const depth = flips(0, { low: -1, high: 1 }, (depthShiftMag) => starlightOf({ ...NO_CHANGE, depthShiftMag }), 20);
+  if (depth.below)
+    sentences.push(
+      `Starlight would be "${depth.below.verdict}" instead of "${starlight}" were the depth ${(-depth.below.value).toFixed(2)} mag shallower than stated.`,
+    );
+  if (depth.above)
+    sentences.push(
+      `Starlight would be "${depth.above.verdict}" instead of "${starlight}" were the depth ${depth.above.value.toFixed(2)} mag deeper than stated.`,
+    );
+  if (detection.angularMpc > 0 && detection.distanceErrorMpc > 0) {
+    const reach = Math.min(0.6, (3 * detection.distanceErrorMpc) / detection.angularMpc);
+    const far = flips(
+      1,
+      { low: 1 - reach, high: 1 + reach },
+      (distanceFactor) => starlightOf({ ...NO_CHANGE, distanceFactor }),
+      20,
+    );
+    for (const [side, flip] of [
+      ['nearer', far.below],
+      ['further', far.above],
+    ] as const) {
+      if (flip)
+        sentences.push(
+          `Starlight would be "${flip.verdict}" were it ${side} than ${(flip.value * detection.angularMpc).toFixed(1)} Mpc.`,
+        );
+    }
+  }
+  return sentences;
+}
