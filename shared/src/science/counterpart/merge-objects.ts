@@ -14,6 +14,8 @@ export interface RowPlace {
   density: number;
   /** Velocity, km/s; NaN where unknown. */
   czKms: number;
+  /** A star by its own table. */
+  isStar?: boolean;
 }
 
 /** Centres of one galaxy differ between bands by about this much, arcsec, 1-D. Our choice. */
@@ -71,6 +73,8 @@ export function mergeIntoObjects(rows: readonly RowPlace[]): Int32Array {
 function isSameObject(a: RowPlace, b: RowPlace, distance: number): boolean {
   if (Math.abs(a.czKms - b.czKms) > SAME_VELOCITY_KMS) return false;
   if (a.catalogue === b.catalogue) {
+    // A foreground star in front of a large galaxy is no piece of it.
+    if (Boolean(a.isStar) !== Boolean(b.isStar)) return false;
     const size = Math.max(a.effectiveRadiusArcsec || 0, b.effectiveRadiusArcsec || 0);
     return distance <= Math.max(size, a.sigmaArcsec + b.sigmaArcsec);
   }

@@ -110,6 +110,10 @@ describe('merging rows into objects', () => {
     expect([...mergeIntoObjects([row(0, 0), row(0.8, 1)])]).toEqual([0, 0]));
   it('keeps two galaxies of two catalogues apart', () =>
     expect([...mergeIntoObjects([row(0, 0), row(6, 1)])]).toEqual([0, 1]));
+  it('keeps a foreground star apart from the large galaxy behind it', () => {
+    const rows = [row(0, 0, { effectiveRadiusArcsec: 30 }), row(20, 0, { isStar: true }), row(12, 0)];
+    expect([...mergeIntoObjects(rows)]).toEqual([0, 1, 0]);
+  });
   it('joins pieces inside the half-light radius', () =>
     expect([...mergeIntoObjects([row(0, 0, { effectiveRadiusArcsec: 10 }), row(8, 0), row(12, 0)])]).toEqual([
       0, 0, 1,
