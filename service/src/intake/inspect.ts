@@ -128,10 +128,16 @@ function previewOf({ firstChunk }: OpenCatalogue): string[][] {
   );
 }
 
-/** Roles with their columns, guesses written out; roles that have none stay open to later guesses. */
+/**
+ * Roles with their columns, guesses written out. A guess that was not taken (too unsure, or of no use in a table of this
+ * kind) is written as null, so that what is shown is what is done; other roles stay open.
+ */
 function takenColumns({ resolution }: OpenCatalogue, settings: IntakeSettings): IntakeSettings['columns'] {
   const { magnitudes, ...roles } = resolution.resolved.columns;
-  const taken = Object.entries(roles).filter(([, column]) => column !== null) as [ColumnRole, string][];
+  const guessed = resolution.guesses.map(({ role }) => role);
   const { magnitude: _single, ...given } = settings.columns ?? {};
-  return { ...given, ...Object.fromEntries(taken), ...(magnitudes.length ? { magnitudes } : {}) };
+  const refused = guessed.filter((role) => role in roles && role !== 'magnitude').map((role) => [role, null]);
+  const taken = Object.entries(roles).filter(([, column]) => column !== null) as [ColumnRole, string][];
+  const bands = magnitudes.length > 0 || guessed.some((role) => role.startsWith('magnitude')) ? { magnitudes } : {};
+  return { ...Object.fromEntries(refused), ...given, ...Object.fromEntries(taken), ...bands };
 }

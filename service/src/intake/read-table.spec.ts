@@ -195,4 +195,14 @@ describe('reading a catalogue', () => {
     const faults = await faultsOf(read('ra,dec\n10,10\n', { footprint: { type: 'moc', value: '5/99999999' } }));
     expect(faults[0]!.pointer).toBe('/footprint/value');
   });
+
+  it('asks about velocities that must be m/s and does not use a distance without a unit', async () => {
+    const reading = await read('id,ra_deg,dec_deg,cz,dist\na,40,1,2400000,20\nb,41,1,2500000,21\n', { kind: 'hi' });
+    expect(levelAt(reading, '/units/velocity')).toEqual(['ask']);
+    expect(levelAt(reading, '/columns/distance')).toEqual(['warning']);
+    expect(reading.roles.columns['distanceMpc']).toBeUndefined();
+    const told = await read('id,ra_deg,dec_deg,dist\na,40,1,20\n', { kind: 'hi', columns: { distance: 'dist' } });
+    expect(column(told, 'distanceMpc')).toEqual([20]);
+    expect(levelAt(told, '/units/distance')).toEqual(['assumed']);
+  });
 });

@@ -44,6 +44,9 @@ const ONLY_IN: Partial<Record<ColumnRole, readonly CatalogueKind[]>> = {
   groupMass: ['groups'],
 };
 
+/** Roles that are not taken without a stated unit, and whose absence a person should know of. */
+const UNASKED_FOR: readonly ColumnRole[] = ['distance', 'effectiveRadius'];
+
 /** Finds the column a setting names; tells what is near when there is none. */
 export function findColumn(
   names: readonly string[],
@@ -197,6 +200,12 @@ function addGuesses(
     }
   }
   keepOneVelocity(columns, given, kind, taken);
+  for (const { role, column, confidence } of guesses) {
+    if (confidence >= SAFE_GUESS || !UNASKED_FOR.includes(role as ColumnRole) || !open(role as ColumnRole)) continue;
+    const says = ROLE_FACTS[role as ColumnRole].says;
+    const text = `"${names[column]}" may hold the ${says}, but its unit is not stated and it is not used: name the column and its unit to have it used.`;
+    remarks.questions.push({ level: 'warning', pointer: `/columns/${role}`, text });
+  }
   if (taken.length) {
     remarks.questions.push({
       level: 'assumed',

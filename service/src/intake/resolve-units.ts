@@ -7,6 +7,8 @@ import { ROLE_FACTS } from './role-facts.ts';
 import type { ColumnSample } from './sample.ts';
 import { CANONICAL_UNIT, conversionOf, type Quantity } from './units.ts';
 
+/** A typical velocity beyond this without a unit is more likely one in m/s than one of a galaxy at z > 1. */
+const FASTEST_KMS = 300_000;
 const UNITLESS: readonly Quantity[] = ['number'];
 
 /**
@@ -55,11 +57,12 @@ export function resolveUnits(
     if (UNITLESS.includes(quantity) || quantity === 'magnitude') return;
     // Sexagesimal text and plain degrees need no unit; whether decimals may be hours is asked when all are seen.
     if (quantity === 'angle') return;
-    const odd = sample.numbers > 0 && Math.abs(sample.median) > ROLE_FACTS.velocity.range[1] && quantity === 'velocity';
+    const inMetres = quantity === 'velocity' && sample.numbers > 0 && Math.abs(sample.median) > FASTEST_KMS;
+    const doubt = inMetres ? ' Its values are above the speed of light in km/s: are they m/s?' : '';
     remarks.questions.push({
-      level: odd ? 'ask' : 'assumed',
+      level: inMetres ? 'ask' : 'assumed',
       pointer,
-      text: `The unit of "${column}" (${says}) is not stated: ${CANONICAL_UNIT[quantity]} is assumed.`,
+      text: `The unit of "${column}" (${says}) is not stated: ${CANONICAL_UNIT[quantity]} is assumed.${doubt}`,
     });
   };
   for (const role of COLUMN_ROLES) {
