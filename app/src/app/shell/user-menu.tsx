@@ -39,7 +39,7 @@ export function UserMenu({ me }: { me: Me }) {
         </Menu>
       }
     >
-      <Button className="who" aria-label={`Menu of ${me.name}`} text={initials(me.name)} />
+      <Button className="who" aria-label={`${initials(me.name)}: menu of ${me.name}`} text={initials(me.name)} />
     </Popover>
   );
 }

@@ -17,7 +17,10 @@ interface QueueProps {
 /** The list one is working through, with the present one marked and always in sight. */
 export function Queue({ title, back, items, total, current, to }: QueueProps) {
   const here = useRef<HTMLLIElement>(null);
-  useEffect(() => here.current?.scrollIntoView({ block: 'nearest' }), [current, items]);
+  useEffect(() => {
+    // In braces: newer browsers answer with a promise, which must not be taken for the effect's clean-up.
+    void here.current?.scrollIntoView({ block: 'nearest' });
+  }, [current, items]);
   return (
     <nav className="queue" aria-label={title}>
       <p className="queue__head">
