@@ -6,6 +6,7 @@ import { joinDeclination, joinRightAscension } from '@eremite/shared/science/sky
 import type { RowChunk } from '../tables/table.ts';
 import type { CellTally } from './cell-tally.ts';
 import { lineOf, type MissingMarks, rowOf } from './number-cells.ts';
+import { plainSexagesimal } from './plain-sexagesimal.ts';
 import { cellAt } from './sample.ts';
 
 export interface AxisRecipe {
@@ -125,7 +126,14 @@ function readAxis(
       tally.refuse(axis.column, general(warning, plain), rowOf(chunk, i), lineOf(chunk, i), plain);
   };
   if (data.kind === 'text') {
-    for (let i = 0; i < chunk.rows; i++) text(i, cellAt(data, i));
+    const { bytes, offsets } = data;
+    const isMark = [...marks.texts].some((mark) => /\d[: ]\d/.test(mark));
+    for (let i = 0; i < chunk.rows; i++) {
+      const value = isMark ? NaN : plainSexagesimal(bytes, offsets[i]!, offsets[i + 1]!);
+      if (isRa && value >= 0 && value < 24 && !Object.is(value, -0)) out[i] = value * 15;
+      else if (!isRa && value >= -90 && value <= 90) out[i] = value;
+      else text(i, cellAt(data, i));
+    }
     return;
   }
   for (let i = 0; i < chunk.rows; i++) {
