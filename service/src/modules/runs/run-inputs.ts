@@ -49,6 +49,21 @@ export class RunInputs {
       tables,
     };
   }
+
+  /** People's words in force that concern some tables of a survey, and its cosmology. */
+  async decisionsNow(
+    survey: { id: string; h0: number; omegaM: number },
+    tables: readonly { id: string }[],
+  ): Promise<StoredDecisions> {
+    const ids = new Set(tables.map((table) => table.id));
+    const overrides = await this.runs.overridesInForce(survey.id);
+    const distances = await this.runs.distancesInForce(survey.id);
+    return {
+      cosmology: { h0: survey.h0, omegaM: survey.omegaM },
+      overrides: overrides.filter((entry) => ids.has(entry.detectionCatalogueId) && ids.has(entry.catalogueId)),
+      distances: distances.filter((entry) => ids.has(entry.detectionCatalogueId)),
+    };
+  }
 }
 
 /** What the engine is told of a published table besides its rows. */

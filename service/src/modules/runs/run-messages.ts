@@ -30,9 +30,10 @@ export type RunMessage =
   | { kind: 'done'; notes: string[]; control: ControlResult | null; totals: RunTotals; learnt: Learnt }
   | ({ kind: 'failed' } & ThreadFailure);
 
-/** Why a thread gave up; `told` where the message is made for people and says nothing of the inside. */
+/** Why a thread gave up. */
 export interface ThreadFailure {
   message: string;
   stack?: string;
-  told: boolean;
+  /** `told`: the message is made for people; `inside`: it is for the log; `too much`: the criteria select too much. */
+  cause: 'told' | 'inside' | 'too much';
 }

@@ -43,7 +43,7 @@ export async function scoreInThread(input: PackedInput, hooks: RunHooks): Promis
     };
     worker.on('message', (message: RunMessage) => void take(message).catch(reject));
     worker.once('error', ({ message, stack }) =>
-      reject(errorOf({ message, ...(stack !== undefined && { stack }), told: false })),
+      reject(errorOf({ message, ...(stack !== undefined && { stack }), cause: 'inside' })),
     );
     worker.once('exit', (code) =>
       reject(

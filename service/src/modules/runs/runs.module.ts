@@ -5,6 +5,10 @@ import { SurveysModule } from '../surveys/surveys.module.ts';
 import { DocketService } from './docket.service.ts';
 import { EvidenceService } from './evidence.service.ts';
 import { OverviewService } from './overview.service.ts';
+import { PreviewTables } from './preview-tables.ts';
+import { PreviewThread } from './preview-thread.ts';
+import { PreviewController } from './preview.controller.ts';
+import { PreviewService } from './preview.service.ts';
 import { RunInputs } from './run-inputs.ts';
 import { RunJob } from './run.job.ts';
 import { RunsController } from './runs.controller.ts';
@@ -15,13 +19,16 @@ import { VerdictsService } from './verdicts.service.ts';
 
 @Module({
   imports: [LedgerModule, CriteriaModule, SurveysModule],
-  controllers: [RunsController],
+  controllers: [RunsController, PreviewController],
   providers: [
     RunsService,
     VerdictsService,
     EvidenceService,
     DocketService,
     OverviewService,
+    PreviewService,
+    PreviewTables,
+    PreviewThread,
     RunJob,
     RunInputs,
     RunsRepository,

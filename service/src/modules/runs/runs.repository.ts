@@ -166,4 +166,13 @@ export class RunsRepository {
       .from(detections)
       .where(inArray(detections.catalogueId, [...catalogueIds]));
   }
+
+  /** Where some detections of a survey stand; those of other surveys are absent. */
+  detectionPlaces(surveyId: string, ids: readonly string[], db = this.db) {
+    const { id, catalogueId, row, raDeg, decDeg } = detections;
+    return db
+      .select({ id, catalogueId, row, raDeg, decDeg })
+      .from(detections)
+      .where(and(eq(detections.surveyId, surveyId), inArray(detections.id, [...ids])));
+  }
 }

@@ -13,6 +13,7 @@ import { SCORING_VERSION } from '../../scoring/version.ts';
 import { CriteriaService } from '../criteria/criteria.service.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { changedKeys, compareVerdicts, type VerdictSummary } from './difference.ts';
+import { RunInputs } from './run-inputs.ts';
 import { RunJob } from './run.job.ts';
 import { type RunRow, RunsRepository } from './runs.repository.ts';
 import { VerdictsRepository } from './verdicts.repository.ts';
@@ -26,6 +27,7 @@ export class RunsService implements OnModuleInit {
     private readonly criteria: CriteriaService,
     private readonly jobs: JobsService,
     private readonly work: RunJob,
+    private readonly inputs: RunInputs,
     private readonly access: AccessService,
     private readonly ledger: LedgerService,
   ) {}
@@ -92,14 +94,7 @@ export class RunsService implements OnModuleInit {
       rows,
       sha256: contentHash,
     }));
-    const ids = new Set(inputs.map((input) => input.catalogueId));
-    const decisions = {
-      cosmology: { h0: survey.h0, omegaM: survey.omegaM },
-      overrides: (await this.runs.overridesInForce(surveyId)).filter(
-        (entry) => ids.has(entry.detectionCatalogueId) && ids.has(entry.catalogueId),
-      ),
-      distances: (await this.runs.distancesInForce(surveyId)).filter((entry) => ids.has(entry.detectionCatalogueId)),
-    };
+    const decisions = await this.inputs.decisionsNow(survey, tables);
     const inputHash = hashOf({
       criteria: criteria.settings,
       inputs: inputs.map((input) => input.sha256),

@@ -1,0 +1,44 @@
+import { parentPort } from 'node:worker_threads';
+import { Engine, type Learnt } from '../../scoring/engine.ts';
+import { packCandidates, packNeighbours, readCandidates, readNeighbours } from '../../scoring/evidence.ts';
+import { unpackInput } from './packed-input.ts';
+import type { PreviewedDetection, PreviewMessage, PreviewTask } from './preview-messages.ts';
+import { failureOf } from './thread-failure.ts';
+
+const port = parentPort!;
+port.on('message', (task: PreviewTask) => {
+  let message: PreviewMessage;
+  try {
+    message = { kind: 'done', results: JSON.stringify(score(task)) };
+  } catch (error) {
+    message = { kind: 'failed', ...failureOf(error) };
+  }
+  port.postMessage(message);
+});
+
+/** Scores the wanted detections one by one, as a run would that had these rows. */
+function score({ input, learnt, wanted }: PreviewTask): PreviewedDetection[] {
+  const engine = new Engine(unpackInput(input));
+  if (learnt) engine.setLearnt(applicable(learnt, engine));
+  const tables = engine.input.catalogues.map(({ id, name, kind }) => ({ catalogueId: id, name, kind }));
+  const places = new Map(
+    engine.detections.map(({ catalogue, row, position }) => [`${tables[catalogue]!.catalogueId}/${row}`, position]),
+  );
+  return wanted.map(({ catalogueId, row }) => {
+    const position = places.get(`${catalogueId}/${row}`)!;
+    const [scored] = engine.score(position, position + 1);
+    const detection = engine.detections[position]!;
+    return {
+      item: scored!.item,
+      detail: scored!.detail(),
+      candidates: readCandidates(packCandidates(scored!.candidates, detection), tables),
+      neighbours: readNeighbours(packNeighbours(scored!.neighbours, detection), tables),
+    };
+  });
+}
+
+/** What an earlier run learnt, as far as the criteria want it learnt; what follows from the criteria stays theirs. */
+function applicable({ relation, priors }: Learnt, { learnt, input }: Engine): Learnt {
+  const { learnMagnitudes, learnPrior } = input.criteria.counterpart;
+  return { ...learnt, relation: learnMagnitudes ? relation : null, priors: learnPrior ? priors : [] };
+}
