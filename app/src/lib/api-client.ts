@@ -22,7 +22,8 @@ async function send(path: string, options: CallOptions): Promise<Response> {
   if (json !== undefined) headers['content-type'] = 'application/json';
   const body = form ?? (json === undefined ? undefined : JSON.stringify(json));
   try {
-    return await fetch(`${API_BASE}${path}`, { method, headers, body, signal, credentials: 'same-origin' });
+    // The query cache is the only cache: an ETag names the version to change, not the whole of the answer.
+    return await fetch(`${API_BASE}${path}`, { method, headers, body, signal, credentials: 'same-origin', cache: 'no-store' });
   } catch (error) {
     if (signal?.aborted) throw error;
     throw unreachable();

@@ -14,7 +14,7 @@ const seen = (limit: BandLimit) =>
       {probability(limit.completeness)}
     </span>
   ) : (
-    <span className="prose muted">{limit.reason || 'not testable here'}</span>
+    <span className="prose muted limit-reason">{limit.reason || 'not testable here'}</span>
   );
 
 const COLUMNS: Column<BandLimit>[] = [
