@@ -12,8 +12,9 @@ import { type Surroundings, surroundingsVerdict } from '@eremite/shared/science/
 import { extinction } from '@eremite/shared/science/photometry/extinction';
 import type { z } from 'zod';
 import { detectionSettings } from './detection-settings.ts';
-import { expectIn, type Perturbation } from './expectation.ts';
+import { type BandExpectation, expectIn, type Perturbation } from './expectation.ts';
 import { nearestFlip } from './other-grounds.ts';
+import type { PreparedBand } from './prepared-catalogue.ts';
 import type { Assessment } from './scored-detection.ts';
 import { drawnDistances, isAccompaniedAt, type SurroundingsContext } from './surroundings.ts';
 import type { WeighingModel } from './weigh-objects.ts';
@@ -22,7 +23,9 @@ export type RobustnessResult = z.output<typeof robustnessResult>;
 
 /** Below this P(none) + P(missed) a detection is clearly starlit and few draws will do. */
 const COULD_BE_DARK = 0.1;
-const FEW_DRAWS = 30;
+const FEW_DRAWS = 20;
+/** Draws of a detection that could be dark but of which nothing is claimed: the interval is then 7 per cent wide at most. */
+const SOME_DRAWS = 200;
 /** Objects and bands that cannot matter in any draw are left at their nominal values. */
 const LEAST_PROBABILITY = 1e-4;
 const BANDS_REDRAWN = 2;
@@ -49,8 +52,9 @@ export function judgeStability(
   };
   const starlightOf = starlightRedrawn(assessment, model);
   const surroundingsOf = surroundingsRedrawn(assessment, context);
-  const start = open ? draws : Math.min(draws, FEW_DRAWS);
+  // All draws for what is claimed; few for the clearly starlit, so that a large survey can have them on.
   const claims = starlight === 'dark' || starlight === 'nearly dark';
+  const start = claims ? draws : Math.min(draws, open ? SOME_DRAWS : FEW_DRAWS);
   let agreeing = 0;
   const result = stability(
     starlight,
@@ -59,7 +63,7 @@ export function judgeStability(
       if (surroundingsOf(draw) === surroundings.verdict) agreeing++;
       return starlightOf(draw);
     },
-    { draws: start, maximum: claims ? 5 * draws : start, cut: 0.8 },
+    { draws: start, maximum: start },
   );
   const around = wilsonInterval(agreeing, result.draws);
   return {
@@ -69,7 +73,7 @@ export function judgeStability(
     starlightInterval: [result.interval.low, result.interval.high],
     surroundingsStability: agreeing / result.draws,
     surroundingsInterval: [around.low, around.high],
-    flips: open ? flipSentences(assessment, starlightOf) : [],
+    flips: claims ? flipSentences(assessment, starlightOf) : [],
   };
 }
 
@@ -98,20 +102,22 @@ function starlightRedrawn(assessment: Assessment, model: WeighingModel): (draw: 
       reddeningFactor: draw.reddeningFactor,
       magnitudeShift: 2.5 * Math.log10(draw.massToLightFactor),
     };
+    const expectations = new Map<PreparedBand, BandExpectation | undefined>();
+    const expectedIn = (band: PreparedBand) => {
+      if (!expectations.has(band)) expectations.set(band, expectIn(detection, band, relation, perturbed));
+      return expectations.get(band);
+    };
     let power: number | null = silence.power === null ? null : 0;
-    for (const { band, insideShare, expected } of bands.map((b) => ({
-      band: b.band,
-      insideShare: b.completeness! / b.detected!,
-      expected: expectIn(detection, b.band, relation, perturbed),
-    }))) {
+    for (const { band, completeness, detected: nominally } of bands) {
+      const expected = expectedIn(band);
       if (!expected) continue;
       const sizes = expected.sizes.map((part) => ({ ...part, median: part.median * draw.sizeFactor }));
       const depth = { limitMag: band.depth5Sigma! + draw.depthShiftMag, fwhmArcsec: band.seeing };
       const detected = expectedDetection({ ...expected, magnitudeAb: expected.magnitude }, sizes, depth, settings);
-      power = Math.max(power ?? 0, insideShare * Math.min(1, detected));
+      power = Math.max(power ?? 0, (completeness! / nominally!) * Math.min(1, detected));
     }
     for (const { j, object, nominal } of moving) {
-      const expected = expectIn(detection, object.band!, relation, perturbed);
+      const expected = expectedIn(object.band!);
       weights[j] =
         expected && nominal > 0
           ? (object.weight * counterpartDensity(expected, object.magnitude)) / nominal
@@ -143,7 +149,7 @@ function surroundingsRedrawn(
     const distance = detection.angularMpc * distanceFactor;
     const missedAt = (d: number) => context.missed.at(reach!.limitR - dust - 5 * Math.log10(d) - 25);
     const alone =
-      reach && obstacles.length === 0
+      reach && obstacles.length === 0 && !isAccompaniedAt(pool, distance)
         ? aloneProbability(
             nominal
               .map((d) => d * distanceFactor)
