@@ -48,7 +48,7 @@ async function main() {
   mkdirSync(CACHE, { recursive: true });
   rmSync(RESULTS, { force: true });
   console.log('\n--- tests');
-  const env = { ...process.env, ...(LONG && { EREMITE_TEST_LONG: '1' }) };
+  const env = { ...process.env, ...(LONG && { EREMITE_LONG: '1' }) };
   const args = ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`, ...ARGUMENTS];
   const before = failed;
   const status = await run('vitest', args, { env });
