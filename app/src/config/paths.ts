@@ -18,8 +18,7 @@ export const paths = {
   intake: (surveyId: string, intakeId: string) => `${survey(surveyId)}/intake/${intakeId}`,
   criteria: (surveyId: string) => `${survey(surveyId)}/criteria`,
   criteriaNumber: (surveyId: string, criteriaId: string) => `${survey(surveyId)}/criteria/${criteriaId}`,
-  newCriteria: (surveyId: string, from?: string) =>
-    `${survey(surveyId)}/criteria/new${from ? `?from=${from}` : ''}`,
+  newCriteria: (surveyId: string, from?: string) => `${survey(surveyId)}/criteria/new${from ? `?from=${from}` : ''}`,
   runs: (surveyId: string) => `${survey(surveyId)}/runs`,
   run: (surveyId: string, runId: string) => `${survey(surveyId)}/runs/${runId}`,
   runDifference: (surveyId: string, runId: string, from: string) =>

@@ -23,7 +23,14 @@ async function send(path: string, options: CallOptions): Promise<Response> {
   const body = form ?? (json === undefined ? undefined : JSON.stringify(json));
   try {
     // The query cache is the only cache: an ETag names the version to change, not the whole of the answer.
-    return await fetch(`${API_BASE}${path}`, { method, headers, body, signal, credentials: 'same-origin', cache: 'no-store' });
+    return await fetch(`${API_BASE}${path}`, {
+      method,
+      headers,
+      body,
+      signal,
+      credentials: 'same-origin',
+      cache: 'no-store',
+    });
   } catch (error) {
     if (signal?.aborted) throw error;
     throw unreachable();

@@ -17,11 +17,32 @@ export const loader =
     client.ensureQueryData(cataloguesQuery(params['surveyId']!));
 
 const bandText = ({ bands }: Catalogue) =>
-  bands.map(({ name, depth5Sigma }) => (depth5Sigma == null ? name : `${name} to ${fixed(depth5Sigma, 1)}`)).join(', ') || NO_VALUE;
+  bands
+    .map(({ name, depth5Sigma }) => (depth5Sigma == null ? name : `${name} to ${fixed(depth5Sigma, 1)}`))
+    .join(', ') || NO_VALUE;
 
 const columns = (surveyId: string): Column<Catalogue>[] => [
-  { key: 'name', header: 'Table', align: 'left', cell: ({ id, name }) => <Link to={paths.catalogue(surveyId, id)}><span className="prose">{name}</span></Link> },
-  { key: 'kind', header: 'Kind', align: 'left', cell: ({ kind, state }) => <span className="prose">{kind === 'hi' ? 'HI detections' : kind}{state === 'published' ? '' : `, ${state}`}</span> },
+  {
+    key: 'name',
+    header: 'Table',
+    align: 'left',
+    cell: ({ id, name }) => (
+      <Link to={paths.catalogue(surveyId, id)}>
+        <span className="prose">{name}</span>
+      </Link>
+    ),
+  },
+  {
+    key: 'kind',
+    header: 'Kind',
+    align: 'left',
+    cell: ({ kind, state }) => (
+      <span className="prose">
+        {kind === 'hi' ? 'HI detections' : kind}
+        {state === 'published' ? '' : `, ${state}`}
+      </span>
+    ),
+  },
   { key: 'bands', header: 'Bands and depth', unit: 'mag, 5 sigma', align: 'left', cell: bandText },
   { key: 'rows', header: 'Rows', cell: ({ rows }) => count(rows) },
   { key: 'velocity', header: 'With velocity', cell: ({ withVelocity }) => count(withVelocity) },
@@ -41,12 +62,17 @@ export function Component() {
       <div className="page__head">
         <div>
           <h1>Catalogues</h1>
-          <p className="page__lede">The published tables: the HI list, and what is searched for its stars and neighbours.</p>
+          <p className="page__lede">
+            The published tables: the HI list, and what is searched for its stars and neighbours.
+          </p>
         </div>
         {mayLead(survey.role) && <Link to={paths.intakes(survey.id)}>Bring in a table</Link>}
       </div>
       {shown.length === 0 ? (
-        <EmptyState title="No table is published" action={mayLead(survey.role) && <Link to={paths.intakes(survey.id)}>To the intake</Link>}>
+        <EmptyState
+          title="No table is published"
+          action={mayLead(survey.role) && <Link to={paths.intakes(survey.id)}>To the intake</Link>}
+        >
           {mayLead(survey.role) ? 'Bring in the HI list first, then the catalogues.' : 'The lead brings tables in.'}
         </EmptyState>
       ) : (

@@ -29,7 +29,10 @@ export function Component() {
           </p>
         </div>
         {mayLead(survey.role) && (
-          <Button text="Edit as the next number" onClick={() => void navigate(paths.newCriteria(survey.id, criteria.id))} />
+          <Button
+            text="Edit as the next number"
+            onClick={() => void navigate(paths.newCriteria(survey.id, criteria.id))}
+          />
         )}
       </div>
       <CriteriaSheet settings={criteria.settings} />

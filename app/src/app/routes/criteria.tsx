@@ -21,13 +21,25 @@ export const loader =
 function differences({ settings }: Criteria): string {
   const changed = CRITERIA_FIELDS.filter((field) => !isStandard(field, valueOf(settings, field)));
   if (changed.length === 0) return 'the published defaults';
-  const first = changed.slice(0, 3).map((field) => `${field.title.toLowerCase()} ${valueText(field, valueOf(settings, field))} ${field.unit}`.trim());
+  const first = changed
+    .slice(0, 3)
+    .map((field) => `${field.title.toLowerCase()} ${valueText(field, valueOf(settings, field))} ${field.unit}`.trim());
   return first.join(', ') + (changed.length > 3 ? ` and ${changed.length - 3} more` : '');
 }
 
 const columns = (surveyId: string): Column<Criteria>[] => [
-  { key: 'number', header: 'Number', align: 'left', cell: ({ id, number }) => <Link to={paths.criteriaNumber(surveyId, id)}>Criteria {number}</Link> },
-  { key: 'what', header: 'What differs', align: 'left', cell: (item) => <span className="prose">{differences(item)}</span> },
+  {
+    key: 'number',
+    header: 'Number',
+    align: 'left',
+    cell: ({ id, number }) => <Link to={paths.criteriaNumber(surveyId, id)}>Criteria {number}</Link>,
+  },
+  {
+    key: 'what',
+    header: 'What differs',
+    align: 'left',
+    cell: (item) => <span className="prose">{differences(item)}</span>,
+  },
   { key: 'note', header: 'Note', align: 'left', cell: ({ note }) => <span className="prose">{note}</span> },
   { key: 'runs', header: 'Runs', cell: ({ usedByRuns }) => usedByRuns },
   { key: 'by', header: 'By', align: 'left', cell: ({ createdBy }) => <span className="prose">{createdBy}</span> },
@@ -40,14 +52,20 @@ export function Component() {
   const navigate = useNavigate();
   useTitle('Criteria', survey.name);
   const make = mayLead(survey.role) && (
-    <Button intent="primary" text="New criteria" onClick={() => void navigate(paths.newCriteria(survey.id, list.items[0]?.id))} />
+    <Button
+      intent="primary"
+      text="New criteria"
+      onClick={() => void navigate(paths.newCriteria(survey.id, list.items[0]?.id))}
+    />
   );
   return (
     <div className="page">
       <div className="page__head">
         <div>
           <h1>Criteria</h1>
-          <p className="page__lede">Radii, windows, thresholds and rules. Each number is kept for good; editing makes the next one.</p>
+          <p className="page__lede">
+            Radii, windows, thresholds and rules. Each number is kept for good; editing makes the next one.
+          </p>
         </div>
         {make}
       </div>
@@ -56,7 +74,12 @@ export function Component() {
           Begin with the published defaults; change what your survey needs.
         </EmptyState>
       ) : (
-        <DataTable caption="Criteria of the survey" columns={columns(survey.id)} rows={list.items} rowKey={({ id }) => id} />
+        <DataTable
+          caption="Criteria of the survey"
+          columns={columns(survey.id)}
+          rows={list.items}
+          rowKey={({ id }) => id}
+        />
       )}
     </div>
   );

@@ -31,7 +31,10 @@ function useQueue(surveyId: string, runId: string | undefined, search: URLSearch
   const shown = filters.toString();
   filters.set('limit', String(QUEUE));
   const docket = useQuery({ ...docketQuery(surveyId, `?${filters}`), enabled: fromDocket });
-  const verdicts = useQuery({ ...verdictsQuery(runId ?? '', `?${filters}`), enabled: !fromDocket && runId !== undefined });
+  const verdicts = useQuery({
+    ...verdictsQuery(runId ?? '', `?${filters}`),
+    enabled: !fromDocket && runId !== undefined,
+  });
   const query = shown ? `?${shown}` : '';
   return {
     title: fromDocket ? 'Docket' : 'Detections',

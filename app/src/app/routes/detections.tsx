@@ -11,7 +11,11 @@ import { useSearchFilters } from '#components/filters/use-search-filters.ts';
 import { RunPicker } from '#components/run-picker/run-picker.tsx';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { ColumnChooser } from '#features/detections/components/column-chooser.tsx';
-import { DEFAULT_COLUMNS, detectionColumns, FIXED_COLUMNS } from '#features/detections/components/detection-columns.tsx';
+import {
+  DEFAULT_COLUMNS,
+  detectionColumns,
+  FIXED_COLUMNS,
+} from '#features/detections/components/detection-columns.tsx';
 import { DetectionFilters } from '#features/detections/components/detection-filters.tsx';
 import { ExportMenu } from '#features/detections/components/export-menu.tsx';
 import { paths } from '#config/paths.ts';

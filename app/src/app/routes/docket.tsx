@@ -26,8 +26,13 @@ export function Component() {
   const assigned = search.get('assigned') ?? 'all';
   const state = search.get('state') ?? (mayReview(survey.role) ? 'open' : 'all');
   const filters = searchString({ assigned, state });
-  const query = useQuery(docketQuery(survey.id, searchString({ assigned, state, limit: 100, cursor: search.get('cursor') })));
-  const columns = useMemo(() => docketColumns((id) => paths.docketDetection(survey.id, id, filters)), [survey.id, filters]);
+  const query = useQuery(
+    docketQuery(survey.id, searchString({ assigned, state, limit: 100, cursor: search.get('cursor') })),
+  );
+  const columns = useMemo(
+    () => docketColumns((id) => paths.docketDetection(survey.id, id, filters)),
+    [survey.id, filters],
+  );
   const items = query.data?.items ?? [];
   const first = items[0];
   return (
@@ -71,7 +76,11 @@ export function Component() {
         )}
         <span className="grow" />
         {mayLead(survey.role) && items.length > 0 && (
-          <AssignBar surveyId={survey.id} teamId={survey.teamId} detectionIds={items.map(({ detectionId }) => detectionId)} />
+          <AssignBar
+            surveyId={survey.id}
+            teamId={survey.teamId}
+            detectionIds={items.map(({ detectionId }) => detectionId)}
+          />
         )}
       </div>
       <ProblemCallout error={query.error} />
@@ -83,7 +92,13 @@ export function Component() {
       )}
       {items.length > 0 && (
         <>
-          <DataTable caption="Docket" columns={columns} rows={items} rowKey={(item) => item.detectionId} isStale={query.isPlaceholderData} />
+          <DataTable
+            caption="Docket"
+            columns={columns}
+            rows={items}
+            rowKey={(item) => item.detectionId}
+            isStale={query.isPlaceholderData}
+          />
           <Pager shown={items.length} total={query.data!.total} nextCursor={query.data!.nextCursor} />
         </>
       )}

@@ -40,7 +40,8 @@ export function Component() {
         <div>
           <h1>{intake.fileName}</h1>
           <p className="page__lede num small">
-            {intake.format} · {fileSize(intake.bytes)} · {count(intake.rows)} rows · {count(intake.columns.length)} columns
+            {intake.format} · {fileSize(intake.bytes)} · {count(intake.rows)} rows · {count(intake.columns.length)}{' '}
+            columns
           </p>
         </div>
         <Link to={paths.intakes(survey.id)}>All tables</Link>

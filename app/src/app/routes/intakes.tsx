@@ -28,7 +28,12 @@ const columns = (surveyId: string): Column<Intake>[] => [
       <Link to={catalogueId ? paths.catalogue(surveyId, catalogueId) : paths.intake(surveyId, id)}>{fileName}</Link>
     ),
   },
-  { key: 'state', header: 'State', align: 'left', cell: ({ state }) => <span className="prose">{state === 'staged' ? 'not yet published' : state}</span> },
+  {
+    key: 'state',
+    header: 'State',
+    align: 'left',
+    cell: ({ state }) => <span className="prose">{state === 'staged' ? 'not yet published' : state}</span>,
+  },
   { key: 'format', header: 'Format', align: 'left', cell: ({ format }) => <span className="prose">{format}</span> },
   { key: 'rows', header: 'Rows', cell: ({ rows }) => count(rows) },
   { key: 'side', header: 'Sidelined', cell: ({ check }) => count(check.sidelined) },

@@ -19,8 +19,22 @@ const COLUMNS: Column<LedgerEntry>[] = [
   { key: 'actor', header: 'Who', align: 'left', cell: ({ actor }) => <span className="prose">{actor}</span> },
   { key: 'action', header: 'What', align: 'left', cell: ({ action }) => <span className="prose">{action}</span> },
   { key: 'subject', header: 'On', align: 'left', cell: ({ subject }) => subject },
-  { key: 'note', header: 'Why', align: 'left', cell: ({ note }) => <span className="prose shortlist__reason">{note}</span> },
-  { key: 'hash', header: 'Hash', align: 'left', cell: ({ hash, detail }) => <span className="muted" title={JSON.stringify(detail)}>{hash.slice(0, 10)}</span> },
+  {
+    key: 'note',
+    header: 'Why',
+    align: 'left',
+    cell: ({ note }) => <span className="prose shortlist__reason">{note}</span>,
+  },
+  {
+    key: 'hash',
+    header: 'Hash',
+    align: 'left',
+    cell: ({ hash, detail }) => (
+      <span className="muted" title={JSON.stringify(detail)}>
+        {hash.slice(0, 10)}
+      </span>
+    ),
+  },
 ];
 
 export function Component() {
@@ -34,20 +48,32 @@ export function Component() {
       <div className="page__head">
         <div>
           <h1>Ledger</h1>
-          <p className="page__lede">Every import, run, review and override: who, when, what, why. Nothing is ever taken out.</p>
+          <p className="page__lede">
+            Every import, run, review and override: who, when, what, why. Nothing is ever taken out.
+          </p>
         </div>
         {chain && (
           <p role="status" className={chain.intact ? 'muted' : 'facts__open'}>
-            {chain.intact ? `The chain of ${count(chain.entries)} entries is intact.` : `The chain is broken at entry ${chain.brokenAt}.`}
+            {chain.intact
+              ? `The chain of ${count(chain.entries)} entries is intact.`
+              : `The chain is broken at entry ${chain.brokenAt}.`}
           </p>
         )}
       </div>
       <ProblemCallout error={query.error} />
       {query.isLoading && <Loading what="Reading the ledger" />}
-      {query.data?.items.length === 0 && <EmptyState title="Nothing has happened yet">The first import will be the first entry.</EmptyState>}
+      {query.data?.items.length === 0 && (
+        <EmptyState title="Nothing has happened yet">The first import will be the first entry.</EmptyState>
+      )}
       {query.data && query.data.items.length > 0 && (
         <>
-          <DataTable caption="Ledger" columns={COLUMNS} rows={query.data.items} rowKey={({ number }) => String(number)} isStale={query.isPlaceholderData} />
+          <DataTable
+            caption="Ledger"
+            columns={COLUMNS}
+            rows={query.data.items}
+            rowKey={({ number }) => String(number)}
+            isStale={query.isPlaceholderData}
+          />
           <Pager shown={query.data.items.length} total={query.data.total} nextCursor={query.data.nextCursor} />
         </>
       )}

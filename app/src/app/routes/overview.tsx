@@ -55,8 +55,8 @@ export function Component() {
                     <b className="num overview__figure">{count(data.awaitingMe)}</b> to review
                   </p>
                   <p className="muted">
-                    <span className="num">{count(data.reviewed)}</span> of <span className="num">{count(data.marks.length)}</span>{' '}
-                    reviewed by someone
+                    <span className="num">{count(data.reviewed)}</span> of{' '}
+                    <span className="num">{count(data.marks.length)}</span> reviewed by someone
                   </p>
                 </div>
               </section>

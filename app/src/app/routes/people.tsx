@@ -17,7 +17,9 @@ export function Component() {
     <div className="page page--narrow stack">
       <div>
         <h1>People</h1>
-        <p className="page__lede">{survey.teamName}. Leads do everything, reviewers decide on detections, observers read.</p>
+        <p className="page__lede">
+          {survey.teamName}. Leads do everything, reviewers decide on detections, observers read.
+        </p>
       </div>
       <Panel title="Members">
         <Members teamId={survey.teamId} mayChange={isLead} me={me.id} />

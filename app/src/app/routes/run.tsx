@@ -37,9 +37,7 @@ export function Component() {
         <div>
           <h1>Run {run.number}</h1>
         </div>
-        {run.state === 'done' && (
-          <Link to={paths.detections(survey.id, `?run=${run.id}`)}>Its detections</Link>
-        )}
+        {run.state === 'done' && <Link to={paths.detections(survey.id, `?run=${run.id}`)}>Its detections</Link>}
         {run.state === 'done' && others.length > 0 && (
           <HTMLSelect
             aria-label="Compare with another run"
@@ -57,7 +55,9 @@ export function Component() {
           </HTMLSelect>
         )}
       </div>
-      {isOpen && jobId && <JobProgress jobId={jobId} title={`Run ${run.number}`} mayCancel={mayLead(survey.role)} onEnd={renew} />}
+      {isOpen && jobId && (
+        <JobProgress jobId={jobId} title={`Run ${run.number}`} mayCancel={mayLead(survey.role)} onEnd={renew} />
+      )}
       {run.state === 'failed' && (
         <Callout intent="danger" icon={null} role="alert" title="The run failed">
           {run.error}
@@ -71,7 +71,10 @@ export function Component() {
               <h2 id="counts">Verdicts</h2>
             </div>
             <div className="panel__body">
-              <VerdictCounts counts={run.counts} to={(filter) => paths.detections(survey.id, `${filter}&run=${run.id}`)} />
+              <VerdictCounts
+                counts={run.counts}
+                to={(filter) => paths.detections(survey.id, `${filter}&run=${run.id}`)}
+              />
             </div>
           </section>
         )}

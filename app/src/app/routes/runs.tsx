@@ -24,14 +24,27 @@ export const loader =
     client.ensureQueryData(runsQuery(params['surveyId']!));
 
 const columns = (surveyId: string): Column<Run>[] => [
-  { key: 'number', header: 'Run', align: 'left', cell: ({ id, number }) => <Link to={paths.run(surveyId, id)}>Run {number}</Link> },
+  {
+    key: 'number',
+    header: 'Run',
+    align: 'left',
+    cell: ({ id, number }) => <Link to={paths.run(surveyId, id)}>Run {number}</Link>,
+  },
   { key: 'state', header: 'State', align: 'left', cell: ({ state }) => <span className="prose">{state}</span> },
   { key: 'criteria', header: 'Criteria', cell: ({ criteriaNumber }) => criteriaNumber },
   { key: 'tables', header: 'Tables', cell: ({ inputs }) => inputs.length },
   { key: 'detections', header: 'Detections', cell: ({ counts }) => count(counts?.detections) },
   { key: 'dark', header: 'Dark', cell: ({ counts }) => (counts ? count(counts.starlight.dark ?? 0) : '–') },
-  { key: 'nearly', header: 'Nearly dark', cell: ({ counts }) => (counts ? count(counts.starlight['nearly dark'] ?? 0) : '–') },
-  { key: 'cannot', header: 'Cannot tell', cell: ({ counts }) => (counts ? count(counts.starlight['cannot tell'] ?? 0) : '–') },
+  {
+    key: 'nearly',
+    header: 'Nearly dark',
+    cell: ({ counts }) => (counts ? count(counts.starlight['nearly dark'] ?? 0) : '–'),
+  },
+  {
+    key: 'cannot',
+    header: 'Cannot tell',
+    cell: ({ counts }) => (counts ? count(counts.starlight['cannot tell'] ?? 0) : '–'),
+  },
   { key: 'took', header: 'Took', cell: ({ seconds }) => (seconds === null ? '–' : duration(seconds)) },
   { key: 'by', header: 'By', align: 'left', cell: ({ createdBy }) => <span className="prose">{createdBy}</span> },
   { key: 'at', header: 'Started', align: 'left', cell: ({ createdAt }) => moment(createdAt) },
@@ -48,13 +61,17 @@ export function Component() {
   useTitle('Runs', survey.name);
   const hasGas = catalogues?.items.some(({ kind, state }) => kind === 'hi' && state === 'published');
   const ready = (criteria?.items.length ?? 0) > 0 && hasGas;
-  const start = isLead && <Button intent="primary" text="Start a run" disabled={!ready} onClick={() => setOpen(true)} />;
+  const start = isLead && (
+    <Button intent="primary" text="Start a run" disabled={!ready} onClick={() => setOpen(true)} />
+  );
   return (
     <div className="page">
       <div className="page__head">
         <div>
           <h1>Runs</h1>
-          <p className="page__lede">Criteria applied to a stated set of tables. A run never changes and can be repeated.</p>
+          <p className="page__lede">
+            Criteria applied to a stated set of tables. A run never changes and can be repeated.
+          </p>
         </div>
         {start}
       </div>
@@ -70,7 +87,12 @@ export function Component() {
           A run matches every detection against the catalogues, and gives each its two verdicts with their grounds.
         </EmptyState>
       ) : (
-        <DataTable caption="Runs of the survey" columns={columns(survey.id)} rows={runs.items} rowKey={({ id }) => id} />
+        <DataTable
+          caption="Runs of the survey"
+          columns={columns(survey.id)}
+          rows={runs.items}
+          rowKey={({ id }) => id}
+        />
       )}
       <Caution />
       <StartRun

@@ -38,12 +38,20 @@ export function Component() {
   };
   const remove = (at: number) => {
     const before = entriesOf(list);
-    write(before.filter((_, i) => i !== at), list.version, (saved) => {
-      void say(`${list.entries[at]?.verdict?.name ?? 'It'} is off the shortlist.`, () => write(before, saved.version));
-    });
+    write(
+      before.filter((_, i) => i !== at),
+      list.version,
+      (saved) => {
+        void say(`${list.entries[at]?.verdict?.name ?? 'It'} is off the shortlist.`, () =>
+          write(before, saved.version),
+        );
+      },
+    );
   };
   const edit = (fields: { reason: string; nullResult: string }) => {
-    const entries = entriesOf(list).map((entry) => (entry.detectionId === editing?.detectionId ? { ...entry, ...fields } : entry));
+    const entries = entriesOf(list).map((entry) =>
+      entry.detectionId === editing?.detectionId ? { ...entry, ...fields } : entry,
+    );
     write(entries, list.version, () => setEditing(null));
   };
   return (
@@ -52,7 +60,8 @@ export function Component() {
         <div>
           <h1>Shortlist</h1>
           <p className="page__lede">
-            What the team would point a telescope at, in order{list.runNumber ? `; verdicts of run ${list.runNumber}` : ''}.
+            What the team would point a telescope at, in order
+            {list.runNumber ? `; verdicts of run ${list.runNumber}` : ''}.
           </p>
         </div>
         {list.entries.length > 0 &&
@@ -67,7 +76,12 @@ export function Component() {
       </div>
       <ProblemCallout error={save.error} />
       {list.entries.length === 0 ? (
-        <EmptyState title="The shortlist is empty" action={<Link to={paths.detections(survey.id, '?starlight=dark,nearly dark')}>Dark and nearly dark detections</Link>}>
+        <EmptyState
+          title="The shortlist is empty"
+          action={
+            <Link to={paths.detections(survey.id, '?starlight=dark,nearly dark')}>Dark and nearly dark detections</Link>
+          }
+        >
           {mayLead(survey.role)
             ? 'Open a detection and press L to put it on the list.'
             : 'The lead puts detections here once they are reviewed.'}

@@ -20,9 +20,7 @@ export function Component() {
   const navigate = useNavigate();
   useTitle('Surveys');
   const ledTeams = me.teams.filter(({ role }) => role === 'lead');
-  const create = ledTeams.length > 0 && (
-    <Button intent="primary" text="New survey" onClick={() => setOpen(true)} />
-  );
+  const create = ledTeams.length > 0 && <Button intent="primary" text="New survey" onClick={() => setOpen(true)} />;
   return (
     <main id="content" className="page">
       <div className="page__head">

@@ -35,7 +35,12 @@ interface DataTableProps<Row> {
 export function DataTable<Row>(props: DataTableProps<Row>) {
   const { caption, columns, rows, rowKey, sort, onSort, selected, hovered, onHover, onSelect, rowClass } = props;
   return (
-    <div className={`data-table__scroll${props.isStale ? ' data-table__scroll--stale' : ''}`} tabIndex={0} role="region" aria-label={caption}>
+    <div
+      className={`data-table__scroll${props.isStale ? ' data-table__scroll--stale' : ''}`}
+      tabIndex={0}
+      role="region"
+      aria-label={caption}
+    >
       <table className="data-table">
         <caption className="visually-hidden">{caption}</caption>
         <thead>

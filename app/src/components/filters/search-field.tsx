@@ -20,7 +20,5 @@ export function SearchField({ label, value, onChange }: SearchFieldProps) {
     const timer = setTimeout(() => onChange(text), 250);
     return () => clearTimeout(timer);
   }, [text, value, onChange]);
-  return (
-    <InputGroup type="search" aria-label={label} placeholder={label} value={text} onValueChange={setText} />
-  );
+  return <InputGroup type="search" aria-label={label} placeholder={label} value={text} onValueChange={setText} />;
 }

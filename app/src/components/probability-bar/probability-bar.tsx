@@ -21,7 +21,11 @@ export function ProbabilityBar({ pNone, pMissed, pSpurious }: ProbabilityBarProp
     <figure className="probability-bar" aria-label={`Probabilities: ${sentence}`}>
       <div className="probability-bar__track" aria-hidden="true">
         {parts.map(({ key, value }) => (
-          <span key={key} className={`probability-bar__part probability-bar__part--${key}`} style={{ flexGrow: value }} />
+          <span
+            key={key}
+            className={`probability-bar__part probability-bar__part--${key}`}
+            style={{ flexGrow: value }}
+          />
         ))}
       </div>
       <figcaption>

@@ -8,7 +8,15 @@ export interface ChartMark {
 }
 
 /** Order of drawing: the plain ones below, the rare ones on top. */
-const ORDER: (StarlightVerdict | null)[] = [null, 'starlit', 'cannot tell', 'confused', 'contested', 'nearly dark', 'dark'];
+const ORDER: (StarlightVerdict | null)[] = [
+  null,
+  'starlit',
+  'cannot tell',
+  'confused',
+  'contested',
+  'nearly dark',
+  'dark',
+];
 
 function ring(context: CanvasRenderingContext2D, { x, y }: ChartMark, radius: number) {
   context.beginPath();

@@ -14,11 +14,13 @@ export function graticule(projection: SkyProjection, spanDeg: number): SkyLine[]
   const lowest = Math.max(-90, Math.floor((centre.decDeg - reach) / step) * step);
   const highest = Math.min(90, Math.ceil((centre.decDeg + reach) / step) * step);
   const raReach = whole ? 180 : Math.min(180, reach / Math.max(0.1, Math.cos((centre.decDeg * Math.PI) / 180)));
-  const raStep = whole ? 60 : lineStep(2 * raReach) ;
+  const raStep = whole ? 60 : lineStep(2 * raReach);
   const firstRa = Math.floor((centre.raDeg - raReach) / raStep) * raStep;
   const lastRa = Math.ceil((centre.raDeg + raReach) / raStep) * raStep;
   const trace = (count: number, at: (i: number) => [number, number]) =>
-    Array.from({ length: count + 1 }, (_, i) => place(...at(i / count))).filter((p): p is [number, number] => p !== undefined);
+    Array.from({ length: count + 1 }, (_, i) => place(...at(i / count))).filter(
+      (p): p is [number, number] => p !== undefined,
+    );
   const lines: SkyLine[] = [];
   for (let dec = lowest; dec <= highest; dec += step) {
     // A hair inside the seam, where the whole-sky map is cut.

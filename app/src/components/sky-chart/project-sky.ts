@@ -19,7 +19,11 @@ export function meanDirection(positions: readonly { raDeg: number; decDeg: numbe
   }
   const length = Math.hypot(x, y, z);
   const raDeg = (Math.atan2(y, x) / RAD + 360) % 360;
-  return { raDeg, decDeg: Math.atan2(z, Math.hypot(x, y)) / RAD, spread: positions.length ? length / positions.length : 0 };
+  return {
+    raDeg,
+    decDeg: Math.atan2(z, Math.hypot(x, y)) / RAD,
+    spread: positions.length ? length / positions.length : 0,
+  };
 }
 
 /** Hammer-Aitoff, equal-area; east left. Source: Snyder (1987), USGS PP 1395, p. 182 (from memory). */
@@ -51,4 +55,5 @@ export function chooseProjection(positions: readonly { raDeg: number; decDeg: nu
 }
 
 /** Steps in degrees for the lines of a chart of a given width. */
-export const lineStep = (spanDeg: number): number => [0.25, 0.5, 1, 2, 5, 10, 15, 30].find((step) => spanDeg / step <= 7) ?? 30;
+export const lineStep = (spanDeg: number): number =>
+  [0.25, 0.5, 1, 2, 5, 10, 15, 30].find((step) => spanDeg / step <= 7) ?? 30;

@@ -32,7 +32,10 @@ function layOut(marks: readonly Mark[]) {
   const span = Math.max(right - left, high - low, 0.004);
   const ratio = Math.min(0.62, Math.max(0.32, (high - low) / Math.max(right - left, 1e-9)));
   const height = Math.round((WIDTH - 2 * MARGIN) * ratio + 2 * MARGIN);
-  const scale = Math.min((WIDTH - 2 * MARGIN) / Math.max(right - left, span * 0.02), (height - 2 * MARGIN) / Math.max(high - low, span * 0.02));
+  const scale = Math.min(
+    (WIDTH - 2 * MARGIN) / Math.max(right - left, span * 0.02),
+    (height - 2 * MARGIN) / Math.max(high - low, span * 0.02),
+  );
   const toPage = ([x, y]: readonly [number, number]): [number, number] => [
     WIDTH / 2 + (x - (left + right) / 2) * scale,
     height / 2 - (y - (low + high) / 2) * scale,
@@ -69,7 +72,15 @@ export function SkyChart({ marks, onOpen }: SkyChartProps) {
     });
     return best < 0 ? null : best;
   };
-  const path = (line: [number, number][]) => line.map((point, i) => `${i ? 'L' : 'M'}${toPage(point).map((v) => v.toFixed(1)).join(' ')}`).join('');
+  const path = (line: [number, number][]) =>
+    line
+      .map(
+        (point, i) =>
+          `${i ? 'L' : 'M'}${toPage(point)
+            .map((v) => v.toFixed(1))
+            .join(' ')}`,
+      )
+      .join('');
   const at = near === null ? undefined : points[near];
   return (
     <figure className="sky-chart">
@@ -101,7 +112,10 @@ export function SkyChart({ marks, onOpen }: SkyChartProps) {
           aria-label={`${projection.kind === 'field' ? 'Field' : 'Whole sky'}: ${marks.length} detections by verdict. The counts beside it lead to the same detections.`}
         />
         {at && near !== null && (
-          <p className="sky-chart__label" style={{ left: `${(at[0] / WIDTH) * 100}%`, top: `${(at[1] / height) * 100}%` }}>
+          <p
+            className="sky-chart__label"
+            style={{ left: `${(at[0] / WIDTH) * 100}%`, top: `${(at[1] / height) * 100}%` }}
+          >
             {marks[near]!.name}
             <span>
               {marks[near]!.starlight ?? 'no verdict'}, {marks[near]!.surroundings ?? 'no verdict'}

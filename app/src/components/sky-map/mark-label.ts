@@ -3,7 +3,11 @@ import type { SkyMark } from './sky-mark.ts';
 
 /** Distance from the centre in the unit that reads best: `26″` or `3.6′`. */
 export const arc = (arcsec: number): string =>
-  arcsec < 100 ? `${fixed(arcsec, arcsec < 10 ? 1 : 0)}″` : arcsec < 6000 ? `${fixed(arcsec / 60, 1)}′` : `${fixed(arcsec / 3600, 2)}°`;
+  arcsec < 100
+    ? `${fixed(arcsec, arcsec < 10 ? 1 : 0)}″`
+    : arcsec < 6000
+      ? `${fixed(arcsec / 60, 1)}′`
+      : `${fixed(arcsec / 3600, 2)}°`;
 
 /** Two lines beside a mark: its name; how far it is, in angle, in kpc and in velocity. */
 export function markLabel(mark: SkyMark): string {

@@ -48,7 +48,10 @@ export function markStyle(mark: SkyMark, palette: Palette): Style {
   const stroke = new Stroke({ color: tone, width: mark.agreement === 'other' ? 2.2 : 1.2 });
   const fill = new Fill({ color: agrees ? tone : 'rgba(0, 0, 0, 0)' });
   const radius = markRadius(mark.magnitude, mark.isStar);
-  return new Style({ image: shape(mark, radius, stroke, fill), zIndex: agrees ? 3 : mark.agreement === 'other' ? 2 : 1 });
+  return new Style({
+    image: shape(mark, radius, stroke, fill),
+    zIndex: agrees ? 3 : mark.agreement === 'other' ? 2 : 1,
+  });
 }
 
 /** A ring and a label about the mark that is pointed at or chosen. */
@@ -56,7 +59,10 @@ export function litStyle(mark: SkyMark, label: string, palette: Palette, chosen:
   const radius = markRadius(mark.magnitude, mark.isStar) + 5;
   return new Style({
     zIndex: 10,
-    image: new CircleStyle({ radius, stroke: new Stroke({ color: chosen ? palette.amber : palette.text, width: 1.6 }) }),
+    image: new CircleStyle({
+      radius,
+      stroke: new Stroke({ color: chosen ? palette.amber : palette.text, width: 1.6 }),
+    }),
     text: new Text({
       text: label,
       font: '500 11.5px "Roboto Mono", monospace',

@@ -53,10 +53,16 @@ export function hatchedFeatures({ masks, uncovered }: Outlines, palette: Palette
   const stroke = new Stroke({ color: palette.hatch, width: 1 });
   return [
     ...uncovered.map(({ cells, kind }) =>
-      styled(new MultiPolygon(cells.map((ring) => [ring])), new Style({ fill: new Fill({ color: hatchPattern(palette.hatch, kind) }) })),
+      styled(
+        new MultiPolygon(cells.map((ring) => [ring])),
+        new Style({ fill: new Fill({ color: hatchPattern(palette.hatch, kind) }) }),
+      ),
     ),
     ...masks.map(({ at, radiusArcsec, label: text }) =>
-      styled(new Circle(at, radiusArcsec), new Style({ fill: hatch, stroke, text: label(text, palette.muted, palette, [0, 0]) })),
+      styled(
+        new Circle(at, radiusArcsec),
+        new Style({ fill: hatch, stroke, text: label(text, palette.muted, palette, [0, 0]) }),
+      ),
     ),
   ];
 }
@@ -76,7 +82,10 @@ export function outlineFeatures(outlines: Outlines, palette: Palette): Feature[]
     rimLabel(searchRadiusArcsec, 'search', palette.amber, palette, 52),
     styled(
       new Point([0, 0]),
-      new Style({ image: new CircleStyle({ radius: 5, stroke: new Stroke({ color: palette.amber, width: 2 }) }), zIndex: 9 }),
+      new Style({
+        image: new CircleStyle({ radius: 5, stroke: new Stroke({ color: palette.amber, width: 2 }) }),
+        zIndex: 9,
+      }),
     ),
   ];
   if (beam) {
@@ -94,4 +103,3 @@ export function outlineFeatures(outlines: Outlines, palette: Palette): Feature[]
   }
   return features;
 }
-

@@ -25,8 +25,18 @@ describe('the sky panel', () => {
   });
 
   it('knows whether the detection itself lies in a cell', () => {
-    const square = (x: number): [number, number][] => [[x - 1, -1], [x + 1, -1], [x + 1, 1], [x - 1, 1], [x - 1, -1]];
-    expect([containsOrigin(square(0)), containsOrigin(square(3)), containsOrigin(square(-3))]).toEqual([true, false, false]);
+    const square = (x: number): [number, number][] => [
+      [x - 1, -1],
+      [x + 1, -1],
+      [x + 1, 1],
+      [x - 1, 1],
+      [x - 1, -1],
+    ];
+    expect([containsOrigin(square(0)), containsOrigin(square(3)), containsOrigin(square(-3))]).toEqual([
+      true,
+      false,
+      false,
+    ]);
   });
 
   it('draws error circles at the radii of a circular Gaussian', () => {

@@ -9,7 +9,11 @@ export type PanelPoint = [x: number, y: number];
  * Place of a direction on the panel: arcsec on the tangent plane at the centre, north up and east LEFT, so x = -xi.
  * @returns undefined for a direction 90 degrees or more away
  */
-export function toPanel(raDeg: number, decDeg: number, centre: { raDeg: number; decDeg: number }): PanelPoint | undefined {
+export function toPanel(
+  raDeg: number,
+  decDeg: number,
+  centre: { raDeg: number; decDeg: number },
+): PanelPoint | undefined {
   const plane = toTangentPlane(raDeg * RAD, decDeg * RAD, centre.raDeg * RAD, centre.decDeg * RAD);
   return plane && [-plane.xi * ARCSEC_PER_RAD, plane.eta * ARCSEC_PER_RAD];
 }

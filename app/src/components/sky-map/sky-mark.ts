@@ -46,8 +46,19 @@ export function toSkyMarks(
     const { name, kind, raDeg, decDeg, separationArcsec, separationKpc, velocityDifferenceKms, magnitude, band } = row;
     const agreement = agreementOf(velocityDifferenceKms, windowKms);
     marks.set(key, {
-      key, role, name, kind, raDeg, decDeg, separationArcsec, separationKpc, velocityDifferenceKms, magnitude, band,
-      isStar, agreement,
+      key,
+      role,
+      name,
+      kind,
+      raDeg,
+      decDeg,
+      separationArcsec,
+      separationKpc,
+      velocityDifferenceKms,
+      magnitude,
+      band,
+      isStar,
+      agreement,
     });
   };
   candidates.forEach((row) => add(row, 'candidate', row.isStar));

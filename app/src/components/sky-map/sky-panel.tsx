@@ -1,7 +1,7 @@
 import { Button, ButtonGroup } from '@blueprintjs/core';
 import VectorLayer from 'ol/layer/Vector.js';
 import VectorSource from 'ol/source/Vector.js';
-import { useEffect, useId, useMemo, useState } from 'react';
+import { useEffect, useId, useMemo } from 'react';
 import { usePreferences } from '#lib/preferences.ts';
 import { Frame } from './frame.tsx';
 import { hatchedFeatures, outlineFeatures, type Outlines } from './outline-layers.ts';
@@ -33,12 +33,11 @@ export function SkyPanel(props: SkyPanelProps) {
   const { target, map } = useSkyMap();
   const view = usePanelView(map);
   const { theme } = usePreferences();
-  const [palette, setPalette] = useState<Palette>();
   const legend = useId();
-  useEffect(() => setPalette(readPalette(document.documentElement)), [theme]);
+  const palette = usePalette(theme);
 
   useEffect(() => {
-    if (!map || !palette) return;
+    if (!map) return;
     const layers = [
       new VectorLayer({ source: new VectorSource({ features: hatchedFeatures(outlines, palette) }), zIndex: 1 }),
       new VectorLayer({ source: new VectorSource({ features: outlineFeatures(outlines, palette) }), zIndex: 2 }),
@@ -98,6 +97,13 @@ export function SkyPanel(props: SkyPanelProps) {
 /** Catalogues whose hatching covers the detection itself. */
 const unseenAtCentre = ({ uncovered }: Outlines) =>
   uncovered.filter(({ cells }) => cells.some((ring) => containsOrigin(ring))).map(({ name }) => name);
+
+/** Colours of the theme; the document carries the theme before anyone is told that it changed. */
+function usePalette(theme: string): Palette {
+  // The theme is the key of what is read from the document.
+  // eslint-disable-next-line react-hooks/exhaustive-deps
+  return useMemo(() => readPalette(document.documentElement), [theme]);
+}
 
 function reaches({ beam, positionError, searchRadiusArcsec, neighbourRadiusArcsec }: Outlines) {
   const search = Math.max(searchRadiusArcsec, (beam?.major ?? 0) / 2);

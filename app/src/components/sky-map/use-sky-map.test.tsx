@@ -3,7 +3,14 @@ import { StrictMode } from 'react';
 import { expect, it, vi } from 'vitest';
 import { useSkyMap } from './use-sky-map.ts';
 
-vi.stubGlobal('ResizeObserver', class { observe() {} unobserve() {} disconnect() {} });
+vi.stubGlobal(
+  'ResizeObserver',
+  class {
+    observe() {}
+    unobserve() {}
+    disconnect() {}
+  },
+);
 
 function Panel() {
   const { target } = useSkyMap();

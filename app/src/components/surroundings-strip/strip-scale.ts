@@ -16,7 +16,13 @@ export const STRIP_MARGIN = { left: 52, right: 14, top: 10, bottom: 42 };
  * @param toKpc largest separation shown, kpc
  * @param reachKms largest velocity difference shown, km/s
  */
-export function stripScale(width: number, height: number, fromKpc: number, toKpc: number, reachKms: number): StripScale {
+export function stripScale(
+  width: number,
+  height: number,
+  fromKpc: number,
+  toKpc: number,
+  reachKms: number,
+): StripScale {
   const { left, right, top, bottom } = STRIP_MARGIN;
   const low = Math.log10(fromKpc);
   const span = Math.log10(toKpc) - low;

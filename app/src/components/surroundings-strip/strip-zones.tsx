@@ -16,7 +16,12 @@ export function StripZones({ scale, zones }: { scale: StripScale; zones: Zones }
   const { x, y, width, height } = scale;
   const left = STRIP_MARGIN.left;
   const floor = height - STRIP_MARGIN.bottom;
-  const box = (toKpc: number, kms: number) => ({ x: left, y: y(kms), width: x(toKpc) - left, height: y(-kms) - y(kms) });
+  const box = (toKpc: number, kms: number) => ({
+    x: left,
+    y: y(kms),
+    width: x(toKpc) - left,
+    height: y(-kms) - y(kms),
+  });
   const ticks = DECADES.filter((kpc) => x(kpc) < width - STRIP_MARGIN.right - 1 || kpc === 1);
   return (
     <g>

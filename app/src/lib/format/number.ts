@@ -45,7 +45,11 @@ export function errorDecimals(error: number): number {
 }
 
 /** A value with its error, both to the digits the error justifies: `33.5 ± 3.0` is `34 ± 3`, `12.34 ± 0.41` is `12.3 ± 0.4`. */
-export function withError(value: number | null | undefined, error: number | null | undefined, decimals: number): string {
+export function withError(
+  value: number | null | undefined,
+  error: number | null | undefined,
+  decimals: number,
+): string {
   if (!error || !Number.isFinite(error) || error <= 0) return fixed(value, decimals);
   const places = errorDecimals(error);
   return `${fixed(value, places)} ± ${fixed(error, places)}`;

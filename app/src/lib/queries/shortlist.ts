@@ -14,7 +14,11 @@ export function useSaveShortlist(surveyId: string) {
   const { queryKey } = shortlistQuery(surveyId);
   return useMutation({
     mutationFn: ({ version, ...json }: PutShortlistRequest & { version: number }) =>
-      call(shortlist, `/surveys/${surveyId}/shortlist`, { method: 'PUT', json, headers: { 'if-match': `"${version}"` } }),
+      call(shortlist, `/surveys/${surveyId}/shortlist`, {
+        method: 'PUT',
+        json,
+        headers: { 'if-match': `"${version}"` },
+      }),
     onSuccess: (saved: Shortlist) => client.setQueryData(queryKey, saved),
     onError: () => client.invalidateQueries({ queryKey }),
   });

@@ -1,4 +1,9 @@
-import { createdToken, personalToken, type ChangePasswordRequest, type createTokenRequest } from '@eremite/shared/contracts/auth';
+import {
+  createdToken,
+  personalToken,
+  type ChangePasswordRequest,
+  type createTokenRequest,
+} from '@eremite/shared/contracts/auth';
 import { listOf } from '@eremite/shared/contracts/list';
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { z } from 'zod';

@@ -24,10 +24,25 @@ export function PasswordForm() {
   return (
     <form onSubmit={submit} style={{ maxWidth: 360 }}>
       <FormGroup label="Present password" labelFor="password-now">
-        <InputGroup id="password-now" type="password" autoComplete="current-password" required value={current} onValueChange={setCurrent} />
+        <InputGroup
+          id="password-now"
+          type="password"
+          autoComplete="current-password"
+          required
+          value={current}
+          onValueChange={setCurrent}
+        />
       </FormGroup>
       <FormGroup label="New password" labelFor="password-next" helperText="At least 10 characters.">
-        <InputGroup id="password-next" type="password" autoComplete="new-password" minLength={10} required value={next} onValueChange={setNext} />
+        <InputGroup
+          id="password-next"
+          type="password"
+          autoComplete="new-password"
+          minLength={10}
+          required
+          value={next}
+          onValueChange={setNext}
+        />
       </FormGroup>
       <div className="stack">
         <ProblemCallout error={change.error} />

@@ -22,10 +22,22 @@ export function Tokens() {
     <div className="stack">
       <form onSubmit={submit} className="row" style={{ alignItems: 'flex-end' }}>
         <FormGroup label="For" labelFor="token-name" style={{ margin: 0, flex: 1, minWidth: 180 }}>
-          <InputGroup id="token-name" required maxLength={100} placeholder="what will use it" value={name} onValueChange={setName} />
+          <InputGroup
+            id="token-name"
+            required
+            maxLength={100}
+            placeholder="what will use it"
+            value={name}
+            onValueChange={setName}
+          />
         </FormGroup>
         <FormGroup label="May" labelFor="token-scope" style={{ margin: 0 }}>
-          <HTMLSelect id="token-scope" value={scope} onChange={(event) => setScope(event.target.value as 'read' | 'write')} options={['read', 'write']} />
+          <HTMLSelect
+            id="token-scope"
+            value={scope}
+            onChange={(event) => setScope(event.target.value as 'read' | 'write')}
+            options={['read', 'write']}
+          />
         </FormGroup>
         <FormGroup label="Days" labelFor="token-days" style={{ margin: 0, width: 90 }}>
           <InputGroup id="token-days" type="number" min={1} max={366} required value={days} onValueChange={setDays} />
@@ -35,7 +47,9 @@ export function Tokens() {
       <ProblemCallout error={create.error} />
       {create.data && (
         <Callout intent="primary" icon={null} title="Copy it now: it is not shown again">
-          <code className="mono" style={{ overflowWrap: 'anywhere', userSelect: 'all' }}>{create.data.token}</code>
+          <code className="mono" style={{ overflowWrap: 'anywhere', userSelect: 'all' }}>
+            {create.data.token}
+          </code>
         </Callout>
       )}
       {data?.items.length === 0 && <p className="muted">You have no token.</p>}
@@ -43,14 +57,23 @@ export function Tokens() {
         {data?.items.map((token) => (
           <li key={token.id} className="row">
             <span className="grow">
-              {token.name} <span className="muted small">{token.scope}, until {day(token.expiresAt)}, {token.lastUsedAt ? `last used ${day(token.lastUsedAt)}` : 'never used'}</span>
+              {token.name}{' '}
+              <span className="muted small">
+                {token.scope}, until {day(token.expiresAt)},{' '}
+                {token.lastUsedAt ? `last used ${day(token.lastUsedAt)}` : 'never used'}
+              </span>
             </span>
             <Button
               size="small"
               variant="minimal"
               text="Revoke"
               aria-label={`Revoke ${token.name}`}
-              onClick={() => revoke.mutate(token.id, { onSuccess: () => void say('The token is revoked.'), onError: (error) => void complain(error) })}
+              onClick={() =>
+                revoke.mutate(token.id, {
+                  onSuccess: () => void say('The token is revoked.'),
+                  onError: (error) => void complain(error),
+                })
+              }
             />
           </li>
         ))}

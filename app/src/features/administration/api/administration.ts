@@ -5,7 +5,10 @@ import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query
 import { call } from '#lib/api-client.ts';
 
 export const accountsQuery = () =>
-  queryOptions({ queryKey: ['admin', 'accounts'], queryFn: ({ signal }) => call(listOf(account), '/admin/accounts?limit=500', { signal }) });
+  queryOptions({
+    queryKey: ['admin', 'accounts'],
+    queryFn: ({ signal }) => call(listOf(account), '/admin/accounts?limit=500', { signal }),
+  });
 export const jobsQuery = () =>
   queryOptions({
     queryKey: ['admin', 'jobs'],
@@ -13,7 +16,10 @@ export const jobsQuery = () =>
     refetchInterval: 5000,
   });
 export const storageQuery = () =>
-  queryOptions({ queryKey: ['admin', 'storage'], queryFn: ({ signal }) => call(storage, '/admin/storage', { signal }) });
+  queryOptions({
+    queryKey: ['admin', 'storage'],
+    queryFn: ({ signal }) => call(storage, '/admin/storage', { signal }),
+  });
 export const allTeamsQuery = () =>
   queryOptions({ queryKey: ['teams'], queryFn: ({ signal }) => call(listOf(team), '/teams?limit=500', { signal }) });
 
@@ -30,6 +36,7 @@ export function useCreateTeam() {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (name: string) => call(team, '/teams', { method: 'POST', json: { name } }),
-    onSuccess: () => Promise.all([client.invalidateQueries({ queryKey: ['teams'] }), client.invalidateQueries({ queryKey: ['me'] })]),
+    onSuccess: () =>
+      Promise.all([client.invalidateQueries({ queryKey: ['teams'] }), client.invalidateQueries({ queryKey: ['me'] })]),
   });
 }

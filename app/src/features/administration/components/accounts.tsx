@@ -21,7 +21,12 @@ export function Accounts({ me }: { me: string }) {
   const columns: Column<Account>[] = [
     { key: 'name', header: 'Name', align: 'left', cell: ({ name }) => <span className="prose">{name}</span> },
     { key: 'email', header: 'E-mail', align: 'left', cell: ({ email }) => email },
-    { key: 'admin', header: 'Administrator', align: 'left', cell: ({ isAdministrator }) => <span className="prose">{isAdministrator ? 'yes' : ''}</span> },
+    {
+      key: 'admin',
+      header: 'Administrator',
+      align: 'left',
+      cell: ({ isAdministrator }) => <span className="prose">{isAdministrator ? 'yes' : ''}</span>,
+    },
     { key: 'teams', header: 'Teams', cell: ({ teams }) => teams },
     { key: 'since', header: 'Since', align: 'left', cell: ({ createdAt }) => day(createdAt) },
     {
@@ -29,9 +34,22 @@ export function Accounts({ me }: { me: string }) {
       header: <span className="visually-hidden">Change</span>,
       cell: (account) =>
         account.id !== me && (
-          <Button size="small" text={account.disabled ? 'Enable' : 'Disable'} aria-label={`${account.disabled ? 'Enable' : 'Disable'} ${account.name}`} onClick={() => toggle(account)} />
+          <Button
+            size="small"
+            text={account.disabled ? 'Enable' : 'Disable'}
+            aria-label={`${account.disabled ? 'Enable' : 'Disable'} ${account.name}`}
+            onClick={() => toggle(account)}
+          />
         ),
     },
   ];
-  return <DataTable caption="Accounts" columns={columns} rows={data?.items ?? []} rowKey={({ id }) => id} rowClass={({ disabled }) => (disabled ? 'is-quiet' : undefined)} />;
+  return (
+    <DataTable
+      caption="Accounts"
+      columns={columns}
+      rows={data?.items ?? []}
+      rowKey={({ id }) => id}
+      rowClass={({ disabled }) => (disabled ? 'is-quiet' : undefined)}
+    />
+  );
 }

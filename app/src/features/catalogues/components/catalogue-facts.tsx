@@ -18,14 +18,21 @@ export function CatalogueFacts({ catalogue: c }: { catalogue: Catalogue }) {
         <div key={band.name} style={{ display: 'contents' }}>
           <dt>Band {band.name}</dt>
           <dd className="num">
-            {band.system ?? 'system not stated'}, {band.depth5Sigma == null ? <span className="facts__open">no depth stated: its silence proves nothing</span> : `5σ depth ${fixed(band.depth5Sigma, 1)}`}
+            {band.system ?? 'system not stated'},{' '}
+            {band.depth5Sigma == null ? (
+              <span className="facts__open">no depth stated: its silence proves nothing</span>
+            ) : (
+              `5σ depth ${fixed(band.depth5Sigma, 1)}`
+            )}
           </dd>
         </div>
       ))}
       <dt>Coverage</dt>
       <dd>
         {c.coverage.type}
-        {c.coverage.areaSqDeg !== null && <span className="num">, {fixed(c.coverage.areaSqDeg, 1)} square degrees</span>}
+        {c.coverage.areaSqDeg !== null && (
+          <span className="num">, {fixed(c.coverage.areaSqDeg, 1)} square degrees</span>
+        )}
         {c.coverage.note && <span className="muted"> {c.coverage.note}</span>}
       </dd>
       <dt>Assumed</dt>
@@ -48,7 +55,10 @@ export function CatalogueFacts({ catalogue: c }: { catalogue: Catalogue }) {
       )}
       <dt>File</dt>
       <dd>
-        {c.fileName} <span className="mono small muted" title={c.sha256}>sha256 {c.sha256.slice(0, 16)}</span>
+        {c.fileName}{' '}
+        <span className="mono small muted" title={c.sha256}>
+          sha256 {c.sha256.slice(0, 16)}
+        </span>
       </dd>
       <dt>Published</dt>
       <dd>{moment(c.publishedAt)}</dd>

@@ -28,8 +28,18 @@ export function CatalogueRows({ catalogue }: { catalogue: Catalogue }) {
           {rows.length > 0 && `rows ${count(rows[0]!.row)} to ${count(rows.at(-1)!.row)} of ${count(data.total)}`}
         </span>
         <span className="grow" />
-        <Button size="small" text="Previous" disabled={cursors.length === 1} onClick={() => setCursors(cursors.slice(0, -1))} />
-        <Button size="small" text="Next" disabled={!data.nextCursor} onClick={() => setCursors([...cursors, data.nextCursor])} />
+        <Button
+          size="small"
+          text="Previous"
+          disabled={cursors.length === 1}
+          onClick={() => setCursors(cursors.slice(0, -1))}
+        />
+        <Button
+          size="small"
+          text="Next"
+          disabled={!data.nextCursor}
+          onClick={() => setCursors([...cursors, data.nextCursor])}
+        />
       </div>
     </>
   );

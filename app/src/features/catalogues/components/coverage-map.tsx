@@ -27,7 +27,9 @@ function outlines(text: string): Outline[] {
     for (let cell = Math.floor(region.ranges[i]! / width); cell < last && seen.size < 4 * MOST_CELLS; cell++) {
       if (seen.has(cell)) continue;
       seen.add(cell);
-      cells.push({ corners: cellBoundary(order, cell, 1).map(({ lon, lat }) => ({ raDeg: lon / RAD, decDeg: lat / RAD })) });
+      cells.push({
+        corners: cellBoundary(order, cell, 1).map(({ lon, lat }) => ({ raDeg: lon / RAD, decDeg: lat / RAD })),
+      });
     }
   }
   return cells;
@@ -51,13 +53,24 @@ export function CoverageMap({ moc }: { moc: string }) {
     const low = (values: number[]) => values.reduce((a, b) => Math.min(a, b), Infinity);
     const high = (values: number[]) => values.reduce((a, b) => Math.max(a, b), -Infinity);
     const span = Math.max(high(xs) - low(xs), high(ys) - low(ys));
-    const box = { x: low(xs) - span * 0.06, y: -high(ys) - span * 0.06, width: high(xs) - low(xs) + span * 0.12, height: high(ys) - low(ys) + span * 0.12 };
+    const box = {
+      x: low(xs) - span * 0.06,
+      y: -high(ys) - span * 0.06,
+      width: high(xs) - low(xs) + span * 0.12,
+      height: high(ys) - low(ys) + span * 0.12,
+    };
     return { kept, box, lines: graticule(projection, span / RAD) };
   }, [moc]);
   const { box, kept, lines } = drawn;
-  const path = (points: readonly (readonly [number, number])[]) => points.map(([x, y], i) => `${i ? 'L' : 'M'}${x.toFixed(5)} ${(-y).toFixed(5)}`).join('');
+  const path = (points: readonly (readonly [number, number])[]) =>
+    points.map(([x, y], i) => `${i ? 'L' : 'M'}${x.toFixed(5)} ${(-y).toFixed(5)}`).join('');
   return (
-    <svg className="coverage-map" viewBox={`${box.x} ${box.y} ${box.width} ${box.height}`} role="img" aria-label={`Coverage: ${kept.length} cells, north up, east left`}>
+    <svg
+      className="coverage-map"
+      viewBox={`${box.x} ${box.y} ${box.width} ${box.height}`}
+      role="img"
+      aria-label={`Coverage: ${kept.length} cells, north up, east left`}
+    >
       {lines.map(({ points, label }) => (
         <path key={label + String(points.length)} className="coverage-map__line" d={path(points)} />
       ))}

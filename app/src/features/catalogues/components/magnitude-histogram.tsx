@@ -7,21 +7,40 @@ import { count, fixed } from '#lib/format/number.ts';
 export function MagnitudeHistogram({ band }: { band: CatalogueMagnitudes['bands'][number] }) {
   const host = useRef<HTMLDivElement>(null);
   useEffect(() => {
-    const bins = band.counts.map((rows, i) => ({ from: band.start + i * band.step, to: band.start + (i + 1) * band.step, rows }));
+    const bins = band.counts.map((rows, i) => ({
+      from: band.start + i * band.step,
+      to: band.start + (i + 1) * band.step,
+      rows,
+    }));
     const chart = Plot.plot({
       width: 420,
       height: 180,
       marginLeft: 46,
-      style: { background: 'transparent', fontFamily: 'var(--mono)', fontSize: '11px', color: 'var(--muted)', overflow: 'visible' },
+      style: {
+        background: 'transparent',
+        fontFamily: 'var(--mono)',
+        fontSize: '11px',
+        color: 'var(--muted)',
+        overflow: 'visible',
+      },
       x: { label: `${band.band} (${band.system}), mag` },
       y: { type: 'log', label: 'rows', grid: true, ticks: 4, tickFormat: '~s' },
       marks: [
-        Plot.rectY(bins.filter(({ rows }) => rows > 0), { x1: 'from', x2: 'to', y1: 0.8, y2: 'rows', fill: 'var(--lit)', insetLeft: 0.5, insetRight: 0.5 }),
+        Plot.rectY(
+          bins.filter(({ rows }) => rows > 0),
+          { x1: 'from', x2: 'to', y1: 0.8, y2: 'rows', fill: 'var(--lit)', insetLeft: 0.5, insetRight: 0.5 },
+        ),
         ...(band.depth5Sigma === null
           ? []
           : [
               Plot.ruleX([band.depth5Sigma], { stroke: 'var(--amber)', strokeWidth: 1.6, strokeDasharray: '5 3' }),
-              Plot.text([band.depth5Sigma], { x: (depth: number) => depth, frameAnchor: 'top', dy: -6, text: () => 'depth', fill: 'var(--amber)' }),
+              Plot.text([band.depth5Sigma], {
+                x: (depth: number) => depth,
+                frameAnchor: 'top',
+                dy: -6,
+                text: () => 'depth',
+                fill: 'var(--amber)',
+              }),
             ]),
       ],
     });
@@ -37,7 +56,8 @@ export function MagnitudeHistogram({ band }: { band: CatalogueMagnitudes['bands'
         aria-label={`${band.band}: ${count(band.count)} magnitudes from ${fixed(band.brightest, 1)} to ${fixed(band.faintest, 1)}, ${depth}`}
       />
       <figcaption className="muted small">
-        <span className="num">{count(band.count)}</span> magnitudes, {fixed(band.brightest, 1)} to {fixed(band.faintest, 1)}
+        <span className="num">{count(band.count)}</span> magnitudes, {fixed(band.brightest, 1)} to{' '}
+        {fixed(band.faintest, 1)}
         {band.limits > 0 && `, ${count(band.limits)} upper limits`}; {depth}.
       </figcaption>
     </figure>

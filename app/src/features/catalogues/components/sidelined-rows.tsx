@@ -23,11 +23,23 @@ export function SidelinedRows({ catalogueId }: { catalogueId: string }) {
     <div className="stack">
       <div className="row">
         <span className="grow muted">
-          {data.total > data.items.length ? `The first ${count(data.items.length)} of ${count(data.total)}.` : `${count(data.total)} rows.`}
+          {data.total > data.items.length
+            ? `The first ${count(data.items.length)} of ${count(data.total)}.`
+            : `${count(data.total)} rows.`}
         </span>
-        <AnchorButton size="small" text="Download with reasons, CSV" href={`${API_BASE}/catalogues/${catalogueId}/sidelined?format=csv`} download />
+        <AnchorButton
+          size="small"
+          text="Download with reasons, CSV"
+          href={`${API_BASE}/catalogues/${catalogueId}/sidelined?format=csv`}
+          download
+        />
       </div>
-      <DataTable caption="Sidelined rows" columns={COLUMNS} rows={data.items} rowKey={({ row, column }) => `${row}:${column}`} />
+      <DataTable
+        caption="Sidelined rows"
+        columns={COLUMNS}
+        rows={data.items}
+        rowKey={({ row, column }) => `${row}:${column}`}
+      />
     </div>
   );
 }

@@ -1,5 +1,10 @@
 import { Button, FormGroup, Switch, TextArea } from '@blueprintjs/core';
-import { CRITERIA_SECTIONS, criteriaSettings, type Criteria, type CriteriaSettings } from '@eremite/shared/contracts/criteria';
+import {
+  CRITERIA_SECTIONS,
+  criteriaSettings,
+  type Criteria,
+  type CriteriaSettings,
+} from '@eremite/shared/contracts/criteria';
 import { useMemo, useState } from 'react';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { useSaveCriteria } from '../api/criteria.ts';
@@ -21,7 +26,9 @@ export function CriteriaForm({ surveyId, start, onSaved }: CriteriaFormProps) {
   const [onlyChanged, setOnlyChanged] = useState(false);
   const save = useSaveCriteria(surveyId);
   const read = useMemo(() => criteriaSettings.safeParse(settings), [settings]);
-  const faults = new Map(read.success ? [] : read.error.issues.map(({ path, message }) => [path.slice(0, 2).join('.'), message]));
+  const faults = new Map(
+    read.success ? [] : read.error.issues.map(({ path, message }) => [path.slice(0, 2).join('.'), message]),
+  );
   const changed = CRITERIA_FIELDS.filter((field) => !isStandard(field, valueOf(settings, field)));
   const shown = onlyChanged ? changed : CRITERIA_FIELDS;
   const set = (section: keyof CriteriaSettings, key: string, value: unknown) =>
@@ -29,7 +36,11 @@ export function CriteriaForm({ surveyId, start, onSaved }: CriteriaFormProps) {
   return (
     <div className="criteria">
       <SectionNav changed={changed}>
-        <Switch checked={onlyChanged} label="only what differs" onChange={(event) => setOnlyChanged(event.target.checked)} />
+        <Switch
+          checked={onlyChanged}
+          label="only what differs"
+          onChange={(event) => setOnlyChanged(event.target.checked)}
+        />
       </SectionNav>
       <div className="stack">
         {CRITERIA_SECTIONS.map((section) => {
@@ -53,8 +64,20 @@ export function CriteriaForm({ surveyId, start, onSaved }: CriteriaFormProps) {
           );
         })}
         {shown.length === 0 && <p className="muted">Nothing differs from the published defaults.</p>}
-        <FormGroup label="Note" labelFor="criteria-note" labelInfo="(optional)" helperText="Why this number exists; kept with it.">
-          <TextArea id="criteria-note" fill rows={3} maxLength={2000} value={note} onChange={(event) => setNote(event.target.value)} />
+        <FormGroup
+          label="Note"
+          labelFor="criteria-note"
+          labelInfo="(optional)"
+          helperText="Why this number exists; kept with it."
+        >
+          <TextArea
+            id="criteria-note"
+            fill
+            rows={3}
+            maxLength={2000}
+            value={note}
+            onChange={(event) => setNote(event.target.value)}
+          />
         </FormGroup>
         <ProblemCallout error={save.error} />
         <div className="row">
@@ -65,7 +88,11 @@ export function CriteriaForm({ surveyId, start, onSaved }: CriteriaFormProps) {
             loading={save.isPending}
             onClick={() => read.success && save.mutate({ settings: read.data, note }, { onSuccess: onSaved })}
           />
-          {!read.success && <span role="alert">{faults.size} {faults.size === 1 ? 'value is' : 'values are'} out of range.</span>}
+          {!read.success && (
+            <span role="alert">
+              {faults.size} {faults.size === 1 ? 'value is' : 'values are'} out of range.
+            </span>
+          )}
         </div>
       </div>
     </div>

@@ -28,7 +28,14 @@ export function CriteriaRow({ field, value, fault, onChange }: CriteriaRowProps)
       </div>
       <div>
         {onChange ? (
-          <FieldInput key={resets} id={id} field={field} value={value} invalid={fault !== undefined} onChange={onChange} />
+          <FieldInput
+            key={resets}
+            id={id}
+            field={field}
+            value={value}
+            invalid={fault !== undefined}
+            onChange={onChange}
+          />
         ) : (
           <span className="mono">{valueText(field, value)}</span>
         )}

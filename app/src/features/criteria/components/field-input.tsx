@@ -10,7 +10,11 @@ interface FieldInputProps {
   onChange: (value: unknown) => void;
 }
 
-const listOf = (text: string) => text.split(',').map((part) => part.trim()).filter(Boolean);
+const listOf = (text: string) =>
+  text
+    .split(',')
+    .map((part) => part.trim())
+    .filter(Boolean);
 
 /** Lines such as `1400-1401 radar` become bands. */
 const bandsOf = (text: string) =>
@@ -30,12 +34,29 @@ function read(field: CriteriaField, text: string): unknown {
 
 /** The control that fits the kind of the value. */
 export function FieldInput({ id, field, value, invalid, onChange }: FieldInputProps) {
-  const [text, setText] = useState(() => (value === null || (Array.isArray(value) && value.length === 0) ? '' : valueText(field, value)));
+  const [text, setText] = useState(() =>
+    value === null || (Array.isArray(value) && value.length === 0) ? '' : valueText(field, value),
+  );
   if (field.kind === 'switch') {
-    return <Switch id={id} checked={value === true} label={value === true ? 'on' : 'off'} onChange={(event) => onChange(event.target.checked)} />;
+    return (
+      <Switch
+        id={id}
+        checked={value === true}
+        label={value === true ? 'on' : 'off'}
+        onChange={(event) => onChange(event.target.checked)}
+      />
+    );
   }
   if (field.kind === 'choice') {
-    return <HTMLSelect id={id} fill value={String(value)} options={field.choices} onChange={(event) => onChange(event.target.value)} />;
+    return (
+      <HTMLSelect
+        id={id}
+        fill
+        value={String(value)}
+        options={field.choices}
+        onChange={(event) => onChange(event.target.value)}
+      />
+    );
   }
   return (
     <InputGroup

@@ -41,7 +41,9 @@ function kindOf(schema: KeySchema): CriteriaField['kind'] {
 
 /** The form is made from the contract itself, so that a new key needs no work here. */
 function readFields(): CriteriaField[] {
-  const root = z.toJSONSchema(criteriaSettings, { io: 'input' }) as { properties: Record<string, { properties: Record<string, KeySchema> }> };
+  const root = z.toJSONSchema(criteriaSettings, { io: 'input' }) as {
+    properties: Record<string, { properties: Record<string, KeySchema> }>;
+  };
   const standard = criteriaSettings.parse({}) as unknown as Record<string, Record<string, unknown>>;
   return CRITERIA_SECTIONS.flatMap((section) =>
     Object.entries(root.properties[section]!.properties).map(([key, outer]): CriteriaField => {

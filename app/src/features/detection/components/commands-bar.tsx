@@ -1,5 +1,5 @@
-import { useHotkeys } from '@blueprintjs/core';
-import { useMemo } from 'react';
+import { HotkeysContext, useHotkeys } from '@blueprintjs/core';
+import { useContext, useMemo } from 'react';
 import { Caution } from '#components/caution/caution.tsx';
 import { usePreferences } from '#lib/preferences.ts';
 
@@ -23,6 +23,7 @@ const ownsEnter = (combo: string) => combo === 'enter' && KEYED.has(document.act
 
 export function CommandsBar({ commands }: { commands: readonly Command[] }) {
   const { shortcuts } = usePreferences();
+  const [, dispatch] = useContext(HotkeysContext);
   const hotkeys = useMemo(
     () =>
       shortcuts
@@ -46,7 +47,13 @@ export function CommandsBar({ commands }: { commands: readonly Command[] }) {
       {commands
         .filter(({ hidden }) => !hidden)
         .map(({ combo, keyName, label, disabled, run }) => (
-          <button key={combo} type="button" disabled={disabled} onClick={run} aria-keyshortcuts={shortcuts ? combo : undefined}>
+          <button
+            key={combo}
+            type="button"
+            disabled={disabled}
+            onClick={run}
+            aria-keyshortcuts={shortcuts ? combo : undefined}
+          >
             {shortcuts && <kbd>{keyName}</kbd>}
             {label}
           </button>
@@ -54,9 +61,9 @@ export function CommandsBar({ commands }: { commands: readonly Command[] }) {
       <span className="grow" />
       <Caution />
       {shortcuts && (
-        <span className="muted keys-footer__help">
+        <button type="button" className="keys-footer__help" onClick={() => dispatch({ type: 'OPEN_DIALOG' })}>
           <kbd>?</kbd> keys
-        </span>
+        </button>
       )}
     </footer>
   );

@@ -29,7 +29,13 @@ export function DecisionDialogs({ detail, decisions }: { detail: VerdictDetail; 
       );
     case 'withdraw':
       return (
-        <NoteDialog {...common} title="Withdraw the override" doIt="Withdraw" danger onConfirm={(note) => decisions.withdraw(asking.override, note)}>
+        <NoteDialog
+          {...common}
+          title="Withdraw the override"
+          doIt="Withdraw"
+          danger
+          onConfirm={(note) => decisions.withdraw(asking.override, note)}
+        >
           <p>{asking.override.objectName} goes back to its computed probability in the next run.</p>
         </NoteDialog>
       );

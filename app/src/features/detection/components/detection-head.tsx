@@ -37,7 +37,15 @@ export function DetectionHead({ detail, onDistance }: DetectionHeadProps) {
             {onDistance && <Button size="small" variant="minimal" text="change" onClick={onDistance} />}
           </dd>
         </div>
-        <Fact term={<>log M<sub>HI</sub></>} value={fixed(v.logHiMass, 2)} unit="M☉" />
+        <Fact
+          term={
+            <>
+              log M<sub>HI</sub>
+            </>
+          }
+          value={fixed(v.logHiMass, 2)}
+          unit="M☉"
+        />
       </dl>
     </header>
   );

@@ -50,26 +50,84 @@ export function DetectionView(props: DetectionViewProps) {
     const { mayDecide, maySettle, isPending, agree, ask, asking } = decisions;
     const off = isPending || asking !== null;
     const all: (Command | false)[] = [
-      mayDecide && { combo: 'enter', keyName: 'Enter', label: 'agree', group: 'Decide', disabled: off, run: () => agree() },
-      mayDecide && { combo: 'o', keyName: 'O', label: 'override…', group: 'Decide', disabled: off, run: () => ask({ what: 'review' }) },
-      mayDecide && { combo: 'n', keyName: 'N', label: 'agree with a note…', group: 'Decide', disabled: off, run: () => ask({ what: 'note' }) },
-      maySettle && { combo: 's', keyName: 'S', label: 'settle…', group: 'Decide', disabled: off, run: () => ask({ what: 'settle' }) },
+      mayDecide && {
+        combo: 'enter',
+        keyName: 'Enter',
+        label: 'agree',
+        group: 'Decide',
+        disabled: off,
+        run: () => agree(),
+      },
+      mayDecide && {
+        combo: 'o',
+        keyName: 'O',
+        label: 'override…',
+        group: 'Decide',
+        disabled: off,
+        run: () => ask({ what: 'review' }),
+      },
+      mayDecide && {
+        combo: 'n',
+        keyName: 'N',
+        label: 'agree with a note…',
+        group: 'Decide',
+        disabled: off,
+        run: () => ask({ what: 'note' }),
+      },
       maySettle && {
-        combo: 'l', keyName: 'L', label: shortlisting.isOn ? 'off the shortlist' : 'shortlist', group: 'Decide',
-        disabled: off || shortlisting.isPending, run: shortlisting.toggle,
+        combo: 's',
+        keyName: 'S',
+        label: 'settle…',
+        group: 'Decide',
+        disabled: off,
+        run: () => ask({ what: 'settle' }),
+      },
+      maySettle && {
+        combo: 'l',
+        keyName: 'L',
+        label: shortlisting.isOn ? 'off the shortlist' : 'shortlist',
+        group: 'Decide',
+        disabled: off || shortlisting.isPending,
+        run: shortlisting.toggle,
       },
       mayDecide && {
-        combo: 'c', keyName: 'C', label: 'make the chosen object the counterpart…', group: 'Decide', hidden: true,
-        disabled: off || !chosen, run: () => chosen && ask({ what: 'accept', candidate: chosen }),
+        combo: 'c',
+        keyName: 'C',
+        label: 'make the chosen object the counterpart…',
+        group: 'Decide',
+        hidden: true,
+        disabled: off || !chosen,
+        run: () => chosen && ask({ what: 'accept', candidate: chosen }),
       },
       mayDecide && {
-        combo: 'x', keyName: 'X', label: 'reject the chosen object…', group: 'Decide', hidden: true,
-        disabled: off || !chosen, run: () => chosen && ask({ what: 'reject', candidate: chosen }),
+        combo: 'x',
+        keyName: 'X',
+        label: 'reject the chosen object…',
+        group: 'Decide',
+        hidden: true,
+        disabled: off || !chosen,
+        run: () => chosen && ask({ what: 'reject', candidate: chosen }),
       },
       { combo: 'k', keyName: 'K', label: 'previous', group: 'Move', disabled: off, run: onPrevious },
       { combo: 'j', keyName: 'J', label: 'next', group: 'Move', disabled: off, run: onNext },
-      { combo: 'arrowleft', keyName: '←', label: 'previous detection', group: 'Move', hidden: true, disabled: off, run: onPrevious },
-      { combo: 'arrowright', keyName: '→', label: 'next detection', group: 'Move', hidden: true, disabled: off, run: onNext },
+      {
+        combo: 'arrowleft',
+        keyName: '←',
+        label: 'previous detection',
+        group: 'Move',
+        hidden: true,
+        disabled: off,
+        run: onPrevious,
+      },
+      {
+        combo: 'arrowright',
+        keyName: '→',
+        label: 'next detection',
+        group: 'Move',
+        hidden: true,
+        disabled: off,
+        run: onNext,
+      },
       { combo: 'u', keyName: 'U', label: 'up to the list', group: 'Move', hidden: true, disabled: off, run: onBack },
     ];
     return all.filter((command): command is Command => command !== false);
@@ -79,9 +137,21 @@ export function DetectionView(props: DetectionViewProps) {
     <>
       <div className="det">
         <div className="det__sky">
-          <DetectionHead detail={detail} onDistance={decisions.mayDecide ? () => decisions.ask({ what: 'distance' }) : undefined} />
-          <SkyPanel name={detail.verdict.name} centre={panel.centre} distanceMpc={detail.distance.angularMpc} outlines={panel.outlines} marks={panel.marks} {...link} />
-          {detail.distance.angularMpc !== null && <SurroundingsStrip marks={panel.marks} zones={panel.zones} {...link} />}
+          <DetectionHead
+            detail={detail}
+            onDistance={decisions.mayDecide ? () => decisions.ask({ what: 'distance' }) : undefined}
+          />
+          <SkyPanel
+            name={detail.verdict.name}
+            centre={panel.centre}
+            distanceMpc={detail.distance.angularMpc}
+            outlines={panel.outlines}
+            marks={panel.marks}
+            {...link}
+          />
+          {detail.distance.angularMpc !== null && (
+            <SurroundingsStrip marks={panel.marks} zones={panel.zones} {...link} />
+          )}
         </div>
         <div className="det__evidence">
           <VerdictSummary detail={detail} />
@@ -89,7 +159,11 @@ export function DetectionView(props: DetectionViewProps) {
           <div className="det__twin">
             <section aria-labelledby="silence">
               <h3 id="silence">What silence is worth here</h3>
-              {detail.limits.length > 0 ? <DepthTable limits={detail.limits} /> : <p className="muted">No catalogue with a band was searched.</p>}
+              {detail.limits.length > 0 ? (
+                <DepthTable limits={detail.limits} />
+              ) : (
+                <p className="muted">No catalogue with a band was searched.</p>
+              )}
             </section>
             <DoubtList doubts={detail.doubts} />
           </div>

@@ -29,13 +29,29 @@ export function DistanceDialog({ detectionId, isOpen, onClose }: DistanceDialogP
       onClose={onClose}
       onConfirm={confirm}
     >
-      <p className="muted">Used from the next run on; this run keeps its own. Leave the distance empty to return to the table’s.</p>
+      <p className="muted">
+        Used from the next run on; this run keeps its own. Leave the distance empty to return to the table’s.
+      </p>
       <div className="columns" style={{ gridTemplateColumns: '1fr 1fr' }}>
         <FormGroup label="Distance" labelInfo="Mpc" labelFor="new-distance">
-          <InputGroup id="new-distance" type="number" min={0} step="any" value={fields.distance} onValueChange={set('distance')} />
+          <InputGroup
+            id="new-distance"
+            type="number"
+            min={0}
+            step="any"
+            value={fields.distance}
+            onValueChange={set('distance')}
+          />
         </FormGroup>
         <FormGroup label="Error" labelInfo="Mpc, 1 sigma" labelFor="new-distance-error">
-          <InputGroup id="new-distance-error" type="number" min={0} step="any" value={fields.error} onValueChange={set('error')} />
+          <InputGroup
+            id="new-distance-error"
+            type="number"
+            min={0}
+            step="any"
+            value={fields.error}
+            onValueChange={set('error')}
+          />
         </FormGroup>
       </div>
       <FormGroup label="Source" labelFor="new-distance-source" helperText="Paper, method or measurement it comes from.">

@@ -42,8 +42,16 @@ export function EvidenceTabs(props: EvidenceTabsProps) {
           {chosen && decisions.mayDecide && (
             <div className="row chosen-bar">
               <span className="mono">{chosen.name}</span>
-              <Button size="small" text="Make it the counterpart" onClick={() => decisions.ask({ what: 'accept', candidate: chosen })} />
-              <Button size="small" text="Reject it" onClick={() => decisions.ask({ what: 'reject', candidate: chosen })} />
+              <Button
+                size="small"
+                text="Make it the counterpart"
+                onClick={() => decisions.ask({ what: 'accept', candidate: chosen })}
+              />
+              <Button
+                size="small"
+                text="Reject it"
+                onClick={() => decisions.ask({ what: 'reject', candidate: chosen })}
+              />
             </div>
           )}
           <DataTable

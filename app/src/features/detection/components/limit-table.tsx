@@ -18,8 +18,23 @@ const seen = (limit: BandLimit) =>
   );
 
 const COLUMNS: Column<BandLimit>[] = [
-  { key: 'band', header: 'Band', align: 'left', cell: (l) => <span title={l.catalogueName}>{l.band} <span className="muted">{l.system}</span></span> },
-  { key: 'depth', header: 'Point', unit: 'mag', hint: '5-sigma depth for point sources.', cell: (l) => fixed(l.depthPoint, 1) },
+  {
+    key: 'band',
+    header: 'Band',
+    align: 'left',
+    cell: (l) => (
+      <span title={l.catalogueName}>
+        {l.band} <span className="muted">{l.system}</span>
+      </span>
+    ),
+  },
+  {
+    key: 'depth',
+    header: 'Point',
+    unit: 'mag',
+    hint: '5-sigma depth for point sources.',
+    cell: (l) => fixed(l.depthPoint, 1),
+  },
   {
     key: 'extended',
     header: 'Extended',
@@ -35,24 +50,62 @@ const COLUMNS: Column<BandLimit>[] = [
     header: 'Expected',
     unit: 'mag',
     hint: 'Magnitude of an ordinary galaxy with this much gas at this distance.',
-    cell: (l) => (l.expectedMagnitude === null ? NO_VALUE : `${fixed(l.expectedMagnitude, 1)} ± ${fixed(l.expectedScatterMag, 1)}`),
+    cell: (l) =>
+      l.expectedMagnitude === null ? NO_VALUE : `${fixed(l.expectedMagnitude, 1)} ± ${fixed(l.expectedScatterMag, 1)}`,
   },
-  { key: 'seen', header: 'Would be seen', align: 'left', hint: 'Chance that the ordinary galaxy would be in the catalogue.', cell: seen },
+  {
+    key: 'seen',
+    header: 'Would be seen',
+    align: 'left',
+    hint: 'Chance that the ordinary galaxy would be in the catalogue.',
+    cell: seen,
+  },
 ];
 
 const PHYSICAL: Column<BandLimit>[] = [
   COLUMNS[0]!,
-  { key: 'covered', header: 'Covered', hint: 'Share of the search area observed.', cell: (l) => probability(l.covered) },
-  { key: 'unmasked', header: 'Unmasked', hint: 'Share of the search area not under a mask.', cell: (l) => probability(l.unmasked) },
-  { key: 'extinction', header: 'A', unit: 'mag', hint: 'Extinction in the band.', cell: (l) => fixed(l.extinctionMag, 2) },
+  {
+    key: 'covered',
+    header: 'Covered',
+    hint: 'Share of the search area observed.',
+    cell: (l) => probability(l.covered),
+  },
+  {
+    key: 'unmasked',
+    header: 'Unmasked',
+    hint: 'Share of the search area not under a mask.',
+    cell: (l) => probability(l.unmasked),
+  },
+  {
+    key: 'extinction',
+    header: 'A',
+    unit: 'mag',
+    hint: 'Extinction in the band.',
+    cell: (l) => fixed(l.extinctionMag, 2),
+  },
   { key: 'absolute', header: 'M limit', unit: 'mag', cell: (l) => fixed(l.absoluteMagnitudeLimit, 1) },
   { key: 'light', header: 'L limit', unit: 'L☉', cell: (l) => significant(l.luminosityLimitSolar, 2) },
-  { key: 'ratio', header: <>M<sub>HI</sub>/L above</>, unit: 'solar', cell: (l) => significant(l.gasToLightLowerLimit, 2) },
+  {
+    key: 'ratio',
+    header: (
+      <>
+        M<sub>HI</sub>/L above
+      </>
+    ),
+    unit: 'solar',
+    cell: (l) => significant(l.gasToLightLowerLimit, 2),
+  },
   {
     key: 'stars',
-    header: <>log M<sub>*</sub> below</>,
+    header: (
+      <>
+        log M<sub>*</sub> below
+      </>
+    ),
     unit: 'M☉ at M/L',
-    cell: (l) => l.stellarMassLimits.map(({ logMass, massToLight }) => `${fixed(logMass, 1)} (${massToLight})`).join('  ') || NO_VALUE,
+    cell: (l) =>
+      l.stellarMassLimits.map(({ logMass, massToLight }) => `${fixed(logMass, 1)} (${massToLight})`).join('  ') ||
+      NO_VALUE,
   },
   { key: 'sfr', header: 'SFR below', unit: 'M☉/yr', cell: (l) => significant(l.starFormationLimit, 2) },
 ];

@@ -20,16 +20,45 @@ export const candidateColumns = (onPick: Pick): Column<Candidate>[] => [
     header: '',
     align: 'left',
     cell: (c) => (
-      <span className="prose muted">{[c.kind, c.isStar && 'star', c.override && `${c.override}ed`].filter(Boolean).join(', ')}</span>
+      <span className="prose muted">
+        {[c.kind, c.isStar && 'star', c.override && `${c.override}ed`].filter(Boolean).join(', ')}
+      </span>
     ),
   },
   { key: 'sep', header: 'Sep', unit: '″', cell: (c) => fixed(c.separationArcsec, 1) },
-  { key: 'kpc', header: 'Proj', unit: 'kpc', hint: 'At the distance of the gas.', cell: (c) => fixed(c.separationKpc, 1) },
-  { key: 'dv', header: 'Δv', unit: 'km/s', hint: 'Difference of cz over (1 + z) of the detection.', cell: (c) => signed(c.velocityDifferenceKms, 0) },
+  {
+    key: 'kpc',
+    header: 'Proj',
+    unit: 'kpc',
+    hint: 'At the distance of the gas.',
+    cell: (c) => fixed(c.separationKpc, 1),
+  },
+  {
+    key: 'dv',
+    header: 'Δv',
+    unit: 'km/s',
+    hint: 'Difference of cz over (1 + z) of the detection.',
+    cell: (c) => signed(c.velocityDifferenceKms, 0),
+  },
   { key: 'mag', header: 'Mag', cell: magnitude },
-  { key: 'chance', header: 'By chance', hint: 'Probability that an unrelated object as bright lies this near.', cell: (c) => probabilityCell(c.chanceProbability) },
-  { key: 'lr', header: 'LR', hint: 'Likelihood ratio, for those who want it; the verdict uses P.', cell: (c) => significant(c.likelihoodRatio, 2) },
-  { key: 'p', header: 'P', hint: 'Exclusive probability of the physical object this row belongs to.', cell: (c) => <b>{probabilityCell(c.probability)}</b> },
+  {
+    key: 'chance',
+    header: 'By chance',
+    hint: 'Probability that an unrelated object as bright lies this near.',
+    cell: (c) => probabilityCell(c.chanceProbability),
+  },
+  {
+    key: 'lr',
+    header: 'LR',
+    hint: 'Likelihood ratio, for those who want it; the verdict uses P.',
+    cell: (c) => significant(c.likelihoodRatio, 2),
+  },
+  {
+    key: 'p',
+    header: 'P',
+    hint: 'Exclusive probability of the physical object this row belongs to.',
+    cell: (c) => <b>{probabilityCell(c.probability)}</b>,
+  },
 ];
 
 export const neighbourColumns = (onPick: Pick): Column<Neighbour>[] => [
@@ -46,5 +75,14 @@ export const neighbourColumns = (onPick: Pick): Column<Neighbour>[] => [
   { key: 'dv', header: 'Δv', unit: 'km/s', cell: (n) => signed(n.velocityDifferenceKms, 0) },
   { key: 'mag', header: 'Mag', cell: magnitude },
   { key: 'abs', header: 'M', unit: 'mag', cell: (n) => fixed(n.absoluteMagnitude, 1) },
-  { key: 'gas', header: <>log M<sub>HI</sub></>, unit: 'M☉', cell: (n) => fixed(n.logHiMass, 1) },
+  {
+    key: 'gas',
+    header: (
+      <>
+        log M<sub>HI</sub>
+      </>
+    ),
+    unit: 'M☉',
+    cell: (n) => fixed(n.logHiMass, 1),
+  },
 ];

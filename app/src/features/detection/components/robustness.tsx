@@ -13,10 +13,18 @@ export function Robustness({ detail }: { detail: VerdictDetail }) {
         <>
           <dl className="facts">
             {robustness.starlightStability !== null && (
-              <Stability term="Starlight verdict stands" value={robustness.starlightStability} interval={robustness.starlightInterval} />
+              <Stability
+                term="Starlight verdict stands"
+                value={robustness.starlightStability}
+                interval={robustness.starlightInterval}
+              />
             )}
             {robustness.surroundingsStability !== null && (
-              <Stability term="Surroundings verdict stands" value={robustness.surroundingsStability} interval={robustness.surroundingsInterval} />
+              <Stability
+                term="Surroundings verdict stands"
+                value={robustness.surroundingsStability}
+                interval={robustness.surroundingsInterval}
+              />
             )}
             <dt>Draws</dt>
             <dd className="num">
@@ -25,7 +33,9 @@ export function Robustness({ detail }: { detail: VerdictDetail }) {
           </dl>
           <ul>
             {robustness.flips.map((flip) => (
-              <li key={flip}><Prose text={flip} /></li>
+              <li key={flip}>
+                <Prose text={flip} />
+              </li>
             ))}
           </ul>
         </>
@@ -48,7 +58,12 @@ const Stability = ({ term, value, interval }: { term: string; value: number; int
     <dt>{term}</dt>
     <dd className="num">
       in {percent(value)} of the draws
-      {interval && <span className="muted"> ({percent(interval[0])} to {percent(interval[1])}, 95 %)</span>}
+      {interval && (
+        <span className="muted">
+          {' '}
+          ({percent(interval[0])} to {percent(interval[1])}, 95 %)
+        </span>
+      )}
     </dd>
   </>
 );

@@ -1,5 +1,10 @@
 import { FormGroup, HTMLSelect } from '@blueprintjs/core';
-import { STARLIGHT_VERDICTS, SURROUNDINGS_VERDICTS, type StarlightVerdict, type SurroundingsVerdict } from '@eremite/shared/contracts/words';
+import {
+  STARLIGHT_VERDICTS,
+  SURROUNDINGS_VERDICTS,
+  type StarlightVerdict,
+  type SurroundingsVerdict,
+} from '@eremite/shared/contracts/words';
 import { useState } from 'react';
 import { NoteDialog } from '#components/dialogs/note-dialog.tsx';
 

@@ -13,7 +13,8 @@ export function VerdictSummary({ detail }: { detail: VerdictDetail }) {
     <section className="verdict-summary" aria-label="Verdict">
       {v.settled && (
         <p className="verdict-summary__settled">
-          Settled by {v.settled.by} as <b>{v.settled.starlight}</b> and <b>{v.settled.surroundings}</b>: {v.settled.note}
+          Settled by {v.settled.by} as <b>{v.settled.starlight}</b> and <b>{v.settled.surroundings}</b>:{' '}
+          {v.settled.note}
         </p>
       )}
       <div>
@@ -23,7 +24,11 @@ export function VerdictSummary({ detail }: { detail: VerdictDetail }) {
             power <b>{probability(v.power)}</b>
           </span>
         </h2>
-        {v.headline && v.headline !== v.starlight && <p className="verdict-summary__headline"><Prose text={v.headline} /></p>}
+        {v.headline && v.headline !== v.starlight && (
+          <p className="verdict-summary__headline">
+            <Prose text={v.headline} />
+          </p>
+        )}
         <ProbabilityBar pNone={v.pNone} pMissed={v.pMissed} pSpurious={v.pSpurious} />
       </div>
       <div>

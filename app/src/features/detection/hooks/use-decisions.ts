@@ -30,7 +30,11 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
     close();
     void say(words);
   };
-  const computed = { runId: detail.runId, starlight: detail.verdict.starlight, surroundings: detail.verdict.surroundings };
+  const computed = {
+    runId: detail.runId,
+    starlight: detail.verdict.starlight,
+    surroundings: detail.verdict.surroundings,
+  };
   return {
     asking,
     ask: setAsking,

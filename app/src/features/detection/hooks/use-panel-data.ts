@@ -20,7 +20,9 @@ export function usePanelData(
   const marks = useMemo(() => toSkyMarks(detail.candidates, detail.neighbours, windowKms), [detail, windowKms]);
   const outlines = useMemo((): Outlines => {
     const { beamArcsec, positionError, searchRadiusArcsec, neighbourRadiusArcsec, masks } = detail;
-    const searched = catalogues?.filter(({ kind, state }) => kind !== 'hi' && kind !== 'groups' && state === 'published');
+    const searched = catalogues?.filter(
+      ({ kind, state }) => kind !== 'hi' && kind !== 'groups' && state === 'published',
+    );
     const coverages = searched?.map(({ name, kind, coverage }) => ({ name, kind, moc: coverage.moc })) ?? [];
     return {
       beam: beamArcsec,
@@ -35,7 +37,8 @@ export function usePanelData(
     };
   }, [detail, catalogues, centre]);
   const zones = useMemo((): Zones => {
-    const kpcPerArcsec = detail.distance.angularMpc === null ? null : (detail.distance.angularMpc * 1000 * Math.PI) / 648_000;
+    const kpcPerArcsec =
+      detail.distance.angularMpc === null ? null : (detail.distance.angularMpc * 1000 * Math.PI) / 648_000;
     return {
       counterpartKpc: kpcPerArcsec === null ? null : detail.searchRadiusArcsec * kpcPerArcsec,
       debrisKpc: settings?.doubts.strongDebrisKpc ?? 250,

@@ -36,7 +36,12 @@ export function AssignBar({ surveyId, teamId, detectionIds }: AssignBarProps) {
         onChange={(event) => setChosen(event.target.value)}
         options={able.map((member) => ({ value: member.userId, label: member.name }))}
       />
-      <Button text={`Assign these ${count(detectionIds.length)}`} disabled={!userId} loading={assign.isPending} onClick={give} />
+      <Button
+        text={`Assign these ${count(detectionIds.length)}`}
+        disabled={!userId}
+        loading={assign.isPending}
+        onClick={give}
+      />
     </div>
   );
 }

@@ -38,7 +38,8 @@ export function useSaveSettings(intakeId: string) {
   return useMutation({
     mutationKey: ['intake', intakeId, 'settings'],
     scope: { id: `intake-${intakeId}` },
-    mutationFn: (settings: IntakeSettings) => call(intake, `/intakes/${intakeId}`, { method: 'PATCH', json: { settings } }),
+    mutationFn: (settings: IntakeSettings) =>
+      call(intake, `/intakes/${intakeId}`, { method: 'PATCH', json: { settings } }),
     onSuccess: (answer: Intake) => client.setQueryData(intakeQuery(intakeId).queryKey, answer),
   });
 }

@@ -4,7 +4,11 @@ import { readAssignment } from '../hooks/column-assignment.ts';
 import type { Change } from '../hooks/use-intake-draft.ts';
 import { ChoiceField, NumberField } from './field.tsx';
 
-const EXTINCTION = { none: 'not corrected', column: 'by the reddening column', 'already-corrected': 'already corrected' } as const;
+const EXTINCTION = {
+  none: 'not corrected',
+  column: 'by the reddening column',
+  'already-corrected': 'already corrected',
+} as const;
 
 /** Per band: the system, how deep it reaches, the seeing. Without a depth its silence proves nothing. */
 export function BandFields({ intake, draft, change }: { intake: Intake; draft: IntakeSettings; change: Change }) {
@@ -25,10 +29,31 @@ export function BandFields({ intake, draft, change }: { intake: Intake; draft: I
         return (
           <fieldset key={name} className="band-fields">
             <legend className="mono">{name}</legend>
-            <ChoiceField label="System" value={band?.system} choices={{ AB: 'AB', Vega: 'Vega' }} onChange={(system) => set(name, { system })} />
-            <NumberField label="Depth, 5 sigma" unit="mag, point source" value={band?.depth5Sigma} onChange={(depth5Sigma) => set(name, { depth5Sigma })} />
-            <NumberField label="Seeing" unit="arcsec FWHM" value={band?.seeingFwhmArcsec} min={0} onChange={(seeingFwhmArcsec) => set(name, { seeingFwhmArcsec })} />
-            <ChoiceField label="Extinction" value={band?.extinction} choices={EXTINCTION} onChange={(extinction) => set(name, { extinction })} />
+            <ChoiceField
+              label="System"
+              value={band?.system}
+              choices={{ AB: 'AB', Vega: 'Vega' }}
+              onChange={(system) => set(name, { system })}
+            />
+            <NumberField
+              label="Depth, 5 sigma"
+              unit="mag, point source"
+              value={band?.depth5Sigma}
+              onChange={(depth5Sigma) => set(name, { depth5Sigma })}
+            />
+            <NumberField
+              label="Seeing"
+              unit="arcsec FWHM"
+              value={band?.seeingFwhmArcsec}
+              min={0}
+              onChange={(seeingFwhmArcsec) => set(name, { seeingFwhmArcsec })}
+            />
+            <ChoiceField
+              label="Extinction"
+              value={band?.extinction}
+              choices={EXTINCTION}
+              onChange={(extinction) => set(name, { extinction })}
+            />
           </fieldset>
         );
       })}

@@ -17,17 +17,28 @@ interface ColumnRolesProps {
 /** Every column with its first values and what it is taken for. */
 export function ColumnRoles({ intake, draft, change }: ColumnRolesProps) {
   const assignment = useMemo(() => readAssignment(intake.columns, draft), [intake.columns, draft]);
-  const set = (column: string, role: string | null) => change({ columns: writeAssignment(assign(assignment, column, role)) });
+  const set = (column: string, role: string | null) =>
+    change({ columns: writeAssignment(assign(assignment, column, role)) });
   return (
     <div className="data-table__scroll column-roles" tabIndex={0} role="region" aria-label="Columns and their roles">
       <table className="data-table">
         <thead>
           <tr>
-            <th scope="col" className="is-left">Column</th>
-            <th scope="col" className="is-left">Unit</th>
-            <th scope="col" className="is-left">First values</th>
-            <th scope="col" className="is-left">Taken for</th>
-            <th scope="col" className="is-left">Guess</th>
+            <th scope="col" className="is-left">
+              Column
+            </th>
+            <th scope="col" className="is-left">
+              Unit
+            </th>
+            <th scope="col" className="is-left">
+              First values
+            </th>
+            <th scope="col" className="is-left">
+              Taken for
+            </th>
+            <th scope="col" className="is-left">
+              Guess
+            </th>
           </tr>
         </thead>
         <tbody>
@@ -44,7 +55,13 @@ export function ColumnRoles({ intake, draft, change }: ColumnRolesProps) {
                   <RoleSelect column={column.name} role={role} onChange={(next) => set(column.name, next)} />
                 </td>
                 <td className="is-left">
-                  {column.guess && role === column.guess ? <Confidence value={column.confidence} /> : role ? <span className="prose">yours</span> : ''}
+                  {column.guess && role === column.guess ? (
+                    <Confidence value={column.confidence} />
+                  ) : role ? (
+                    <span className="prose">yours</span>
+                  ) : (
+                    ''
+                  )}
                 </td>
               </tr>
             );
@@ -61,7 +78,15 @@ const firstValues = (preview: readonly (readonly string[])[], at: number) =>
     .map((row) => row[at] || '–')
     .join('  ');
 
-function RoleSelect({ column, role, onChange }: { column: string; role: string | null; onChange: (role: string | null) => void }) {
+function RoleSelect({
+  column,
+  role,
+  onChange,
+}: {
+  column: string;
+  role: string | null;
+  onChange: (role: string | null) => void;
+}) {
   const [base = '', band] = role?.split(':') ?? [];
   const ofBand = base in MAGNITUDE_ROLES;
   return (
@@ -87,7 +112,11 @@ function RoleSelect({ column, role, onChange }: { column: string; role: string |
           style={{ width: 62 }}
           maxLength={20}
           defaultValue={band}
-          onBlur={(event) => event.target.value.trim() && event.target.value.trim() !== band && onChange(`${base}:${event.target.value.trim()}`)}
+          onBlur={(event) =>
+            event.target.value.trim() &&
+            event.target.value.trim() !== band &&
+            onChange(`${base}:${event.target.value.trim()}`)
+          }
         />
       )}
     </span>

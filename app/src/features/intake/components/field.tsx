@@ -12,11 +12,23 @@ interface ChoiceFieldProps<T extends string> {
 }
 
 /** One of a few; may be left unsaid, which is then stated as an assumption. */
-export function ChoiceField<T extends string>({ label, help, value, choices, unsaid = 'not stated', onChange }: ChoiceFieldProps<T>) {
+export function ChoiceField<T extends string>({
+  label,
+  help,
+  value,
+  choices,
+  unsaid = 'not stated',
+  onChange,
+}: ChoiceFieldProps<T>) {
   const id = useId();
   return (
     <FormGroup label={label} labelFor={id} helperText={help}>
-      <HTMLSelect id={id} fill value={value ?? ''} onChange={(event) => onChange((event.target.value || undefined) as T | undefined)}>
+      <HTMLSelect
+        id={id}
+        fill
+        value={value ?? ''}
+        onChange={(event) => onChange((event.target.value || undefined) as T | undefined)}
+      >
         <option value="">{unsaid}</option>
         {(Object.entries(choices) as [T, string][]).map(([key, words]) => (
           <option key={key} value={key}>

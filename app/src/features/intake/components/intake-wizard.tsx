@@ -26,7 +26,10 @@ export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardP
   const { draft, change, isChecking, error } = useIntakeDraft(intake);
   const several = intake.tables.length > 1;
   const tables = Object.fromEntries(
-    intake.tables.map(({ index, name, rows, columns }) => [String(index), `${name} (${rows ?? '?'} rows, ${columns} columns)`]),
+    intake.tables.map(({ index, name, rows, columns }) => [
+      String(index),
+      `${name} (${rows ?? '?'} rows, ${columns} columns)`,
+    ]),
   ) as Record<string, string>;
   return (
     <div className="intake">
@@ -46,10 +49,24 @@ export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardP
                 onChange={(table) => change({ table: Number(table ?? 0), columns: undefined })}
               />
             )}
-            <ChoiceField label="What it lists" value={draft.kind} choices={KIND_WORDS} onChange={(kind) => change({ kind })} />
-            <TextField label="Name" help="As it is called from now on." value={draft.name} onChange={(name) => change({ name })} />
+            <ChoiceField
+              label="What it lists"
+              value={draft.kind}
+              choices={KIND_WORDS}
+              onChange={(kind) => change({ kind })}
+            />
+            <TextField
+              label="Name"
+              help="As it is called from now on."
+              value={draft.name}
+              onChange={(name) => change({ name })}
+            />
           </div>
-          <WideTable label="First rows of the table" columns={intake.columns.map(({ name, unit }) => ({ name, note: unit }))} rows={intake.preview} />
+          <WideTable
+            label="First rows of the table"
+            columns={intake.columns.map(({ name, unit }) => ({ name, note: unit }))}
+            rows={intake.preview}
+          />
         </Step>
         <Step number={2} title="What each column is">
           <ColumnRoles intake={intake} draft={draft} change={change} />
@@ -62,7 +79,10 @@ export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardP
             <BandFields intake={intake} draft={draft} change={change} />
           </Step>
         )}
-        <Step number={draft.kind !== 'hi' && draft.kind !== 'groups' ? 5 : 4} title="Where it looked, and what to leave out">
+        <Step
+          number={draft.kind !== 'hi' && draft.kind !== 'groups' ? 5 : 4}
+          title="Where it looked, and what to leave out"
+        >
           <RestFields intake={intake} draft={draft} change={change} />
         </Step>
       </div>

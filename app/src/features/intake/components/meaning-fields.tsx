@@ -21,11 +21,22 @@ export function MeaningFields({ draft, change }: { draft: IntakeSettings; change
     const next = { major: beam?.major, minor: beam?.minor, angleDeg: beam?.angleDeg, ...part };
     const major = next.major ?? next.minor;
     if (!major) return change({ beamArcsec: undefined });
-    return change({ beamArcsec: { major, minor: next.minor ?? major, ...(next.angleDeg === undefined ? {} : { angleDeg: next.angleDeg }) } });
+    return change({
+      beamArcsec: {
+        major,
+        minor: next.minor ?? major,
+        ...(next.angleDeg === undefined ? {} : { angleDeg: next.angleDeg }),
+      },
+    });
   };
   return (
     <div className="columns field-grid">
-      <ChoiceField label="Frame of the positions" value={draft.frame} choices={FRAMES} onChange={(frame) => change({ frame })} />
+      <ChoiceField
+        label="Frame of the positions"
+        value={draft.frame}
+        choices={FRAMES}
+        onChange={(frame) => change({ frame })}
+      />
       <ChoiceField
         label="Velocity convention"
         value={velocity?.convention}
@@ -54,9 +65,26 @@ export function MeaningFields({ draft, change }: { draft: IntakeSettings; change
       />
       {isGas && (
         <>
-          <NumberField label="Beam, major axis" unit="arcsec FWHM" value={beam?.major} min={0} onChange={(major) => setBeam({ major })} />
-          <NumberField label="Beam, minor axis" unit="arcsec FWHM" value={beam?.minor} min={0} onChange={(minor) => setBeam({ minor })} />
-          <NumberField label="Beam angle" unit="deg, N through E" value={beam?.angleDeg} onChange={(angleDeg) => setBeam({ angleDeg })} />
+          <NumberField
+            label="Beam, major axis"
+            unit="arcsec FWHM"
+            value={beam?.major}
+            min={0}
+            onChange={(major) => setBeam({ major })}
+          />
+          <NumberField
+            label="Beam, minor axis"
+            unit="arcsec FWHM"
+            value={beam?.minor}
+            min={0}
+            onChange={(minor) => setBeam({ minor })}
+          />
+          <NumberField
+            label="Beam angle"
+            unit="deg, N through E"
+            value={beam?.angleDeg}
+            onChange={(angleDeg) => setBeam({ angleDeg })}
+          />
         </>
       )}
       <ChoiceField

@@ -1,6 +1,10 @@
 type Result = { value: unknown } | { fault: string };
 
-const numbers = (line: string) => line.trim().split(/[\s,;]+/).map(Number);
+const numbers = (line: string) =>
+  line
+    .trim()
+    .split(/[\s,;]+/)
+    .map(Number);
 
 /** Reads circles or polygons from lines of numbers in degrees; a MOC goes on as it is. Names the line at fault. */
 export function parseFootprint(type: 'moc' | 'circles' | 'polygons', text: string): Result {

@@ -1,6 +1,7 @@
 import { FormGroup, TextArea } from '@blueprintjs/core';
 import type { Intake } from '@eremite/shared/contracts/intake';
-import { FOOTPRINT_TYPES, type IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { FOOTPRINT_TYPES} from '@eremite/shared/contracts/intake-settings';
+import { type IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { useId, useState } from 'react';
 import type { Change } from '../hooks/use-intake-draft.ts';
 import { ChoiceField, NumberField, TextField } from './field.tsx';
@@ -26,7 +27,9 @@ export function RestFields({ intake, draft, change }: { intake: Intake; draft: I
   const keep = draft.keep?.[0];
   const setKeep = (patch: Partial<{ column: string; values: string[] }>) => {
     const next = { column: keep?.column ?? '', values: keep?.values ?? [], ...patch };
-    change({ keep: next.column && next.values.length > 0 ? [next] : next.column ? [{ ...next, values: [''] }] : undefined });
+    change({
+      keep: next.column && next.values.length > 0 ? [next] : next.column ? [{ ...next, values: [''] }] : undefined,
+    });
   };
   return (
     <div className="stack">
@@ -42,7 +45,17 @@ export function RestFields({ intake, draft, change }: { intake: Intake; draft: I
           label="Marks of missing values"
           help="Separated by commas; an empty cell is always missing."
           value={draft.missing?.filter(Boolean).join(', ')}
-          onChange={(text) => change({ missing: ['', ...text.split(',').map((mark) => mark.trim()).filter(Boolean)] })}
+          onChange={(text) =>
+            change({
+              missing: [
+                '',
+                ...text
+                  .split(',')
+                  .map((mark) => mark.trim())
+                  .filter(Boolean),
+              ],
+            })
+          }
         />
         <ChoiceField
           label="Keep only rows where"
@@ -64,13 +77,25 @@ export function RestFields({ intake, draft, change }: { intake: Intake; draft: I
           help="In the first band; measured from the rows where left empty."
           value={draft.redshiftDepth?.magnitude}
           onChange={(magnitude) =>
-            change({ redshiftDepth: magnitude === undefined ? undefined : { band: draft.bands?.[0]?.name ?? 'r', magnitude } })
+            change({
+              redshiftDepth: magnitude === undefined ? undefined : { band: draft.bands?.[0]?.name ?? 'r', magnitude },
+            })
           }
         />
-        <TextField label="Reference" help="Where the table comes from." value={draft.reference} onChange={(reference) => change({ reference })} />
+        <TextField
+          label="Reference"
+          help="Where the table comes from."
+          value={draft.reference}
+          onChange={(reference) => change({ reference })}
+        />
       </div>
       {(type === 'moc' || type === 'circles' || type === 'polygons') && (
-        <FootprintText key={type} type={type} value={draft.footprint?.value} onChange={(value) => change({ footprint: { type, value } })} />
+        <FootprintText
+          key={type}
+          type={type}
+          value={draft.footprint?.value}
+          onChange={(value) => change({ footprint: { type, value } })}
+        />
       )}
     </div>
   );
@@ -92,8 +117,21 @@ function FootprintText({ type, value, onChange }: FootprintTextProps) {
     if ('value' in result) onChange(result.value);
   };
   return (
-    <FormGroup label={FOOTPRINTS[type]} labelFor={id} helperText={fault || HELP[type]} intent={fault ? 'danger' : 'none'}>
-      <TextArea id={id} fill rows={5} className="mono" value={text} onChange={(event) => setText(event.target.value)} onBlur={read} />
+    <FormGroup
+      label={FOOTPRINTS[type]}
+      labelFor={id}
+      helperText={fault || HELP[type]}
+      intent={fault ? 'danger' : 'none'}
+    >
+      <TextArea
+        id={id}
+        fill
+        rows={5}
+        className="mono"
+        value={text}
+        onChange={(event) => setText(event.target.value)}
+        onBlur={read}
+      />
     </FormGroup>
   );
 }

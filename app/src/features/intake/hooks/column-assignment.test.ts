@@ -11,7 +11,13 @@ const column = (name: string, guess: string | null): IntakeColumn => ({
   type: 'number',
   confidence: guess ? 0.9 : 0,
 });
-const COLUMNS = [column('id', 'name'), column('ra', 'ra'), column('rmag', 'magnitude:r'), column('e_rmag', 'magnitudeError:r'), column('x', null)];
+const COLUMNS = [
+  column('id', 'name'),
+  column('ra', 'ra'),
+  column('rmag', 'magnitude:r'),
+  column('e_rmag', 'magnitudeError:r'),
+  column('x', null),
+];
 
 describe('the roles of columns', () => {
   it('are the guesses where the settings are silent', () => {

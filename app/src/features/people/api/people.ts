@@ -1,4 +1,5 @@
-import { invitation, invitationRequest, outboxMail, teamMember } from '@eremite/shared/contracts/auth';
+import type { invitationRequest} from '@eremite/shared/contracts/auth';
+import { invitation, outboxMail, teamMember } from '@eremite/shared/contracts/auth';
 import { listOf } from '@eremite/shared/contracts/list';
 import type { TeamRole } from '@eremite/shared/contracts/words';
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
@@ -22,7 +23,10 @@ function useTeamChange<T, R>(teamId: string, change: (value: T) => Promise<R>) {
   return useMutation({
     mutationFn: change,
     onSuccess: () =>
-      Promise.all([client.invalidateQueries({ queryKey: ['team', teamId] }), client.invalidateQueries({ queryKey: ['outbox'] })]),
+      Promise.all([
+        client.invalidateQueries({ queryKey: ['team', teamId] }),
+        client.invalidateQueries({ queryKey: ['outbox'] }),
+      ]),
   });
 }
 

@@ -34,7 +34,12 @@ export function Invitations({ teamId }: { teamId: string }) {
           <InputGroup id="invite-email" type="email" required value={email} onValueChange={setEmail} />
         </FormGroup>
         <FormGroup label="Role" labelFor="invite-role" style={{ margin: 0 }}>
-          <HTMLSelect id="invite-role" value={role} options={[...TEAM_ROLES]} onChange={(event) => setRole(event.target.value as TeamRole)} />
+          <HTMLSelect
+            id="invite-role"
+            value={role}
+            options={[...TEAM_ROLES]}
+            onChange={(event) => setRole(event.target.value as TeamRole)}
+          />
         </FormGroup>
         <Button type="submit" text="Invite" intent="primary" loading={invite.isPending} />
       </form>
@@ -46,9 +51,16 @@ export function Invitations({ teamId }: { teamId: string }) {
           {open.map(({ id, email: to, role: as, expiresAt }) => (
             <li key={id} className="row">
               <span className="grow">
-                <span className="mono small">{to}</span> as {as} <span className="muted small">until {moment(expiresAt)}</span>
+                <span className="mono small">{to}</span> as {as}{' '}
+                <span className="muted small">until {moment(expiresAt)}</span>
               </span>
-              <Button size="small" variant="minimal" text="Revoke" aria-label={`Revoke the invitation of ${to}`} onClick={() => revoke.mutate(id)} />
+              <Button
+                size="small"
+                variant="minimal"
+                text="Revoke"
+                aria-label={`Revoke the invitation of ${to}`}
+                onClick={() => revoke.mutate(id)}
+              />
             </li>
           ))}
         </ul>

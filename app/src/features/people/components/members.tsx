@@ -34,7 +34,10 @@ export function Members({ teamId, mayChange, me }: { teamId: string; mayChange: 
             value={role}
             options={[...TEAM_ROLES]}
             onChange={(event) =>
-              setRole.mutate({ userId, role: event.target.value as TeamRole }, { onSuccess: (m) => void say(`${name} is now ${m.role}.`), onError: (error) => void complain(error) })
+              setRole.mutate(
+                { userId, role: event.target.value as TeamRole },
+                { onSuccess: (m) => void say(`${name} is now ${m.role}.`), onError: (error) => void complain(error) },
+              )
             }
           />
         ) : (
@@ -46,12 +49,26 @@ export function Members({ teamId, mayChange, me }: { teamId: string; mayChange: 
     columns.push({
       key: 'remove',
       header: <span className="visually-hidden">Remove</span>,
-      cell: (member) => member.userId !== me && <Button size="small" variant="minimal" text="Remove" aria-label={`Remove ${member.name}`} onClick={() => setLeaving(member)} />,
+      cell: (member) =>
+        member.userId !== me && (
+          <Button
+            size="small"
+            variant="minimal"
+            text="Remove"
+            aria-label={`Remove ${member.name}`}
+            onClick={() => setLeaving(member)}
+          />
+        ),
     });
   }
   return (
     <>
-      <DataTable caption="Members of the team" columns={columns} rows={data?.items ?? []} rowKey={({ userId }) => userId} />
+      <DataTable
+        caption="Members of the team"
+        columns={columns}
+        rows={data?.items ?? []}
+        rowKey={({ userId }) => userId}
+      />
       <NoteDialog
         isOpen={leaving !== null}
         title={`Remove ${leaving?.name ?? ''} from the team?`}

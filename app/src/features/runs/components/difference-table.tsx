@@ -7,7 +7,11 @@ import type { RunDifference } from '../api/runs.ts';
 type Change = RunDifference['changed'][number];
 
 const moved = <T,>(pair: readonly [T, T], text: (value: T) => string) =>
-  text(pair[0]) === text(pair[1]) ? <span className="muted">{text(pair[1])}</span> : `${text(pair[0])} → ${text(pair[1])}`;
+  text(pair[0]) === text(pair[1]) ? (
+    <span className="muted">{text(pair[1])}</span>
+  ) : (
+    `${text(pair[0])} → ${text(pair[1])}`
+  );
 
 const columns = (surveyId: string, runId: string): Column<Change>[] => [
   {
@@ -16,8 +20,18 @@ const columns = (surveyId: string, runId: string): Column<Change>[] => [
     align: 'left',
     cell: ({ detectionId, name }) => <Link to={paths.detection(surveyId, detectionId, `?run=${runId}`)}>{name}</Link>,
   },
-  { key: 'starlight', header: 'Starlight', align: 'left', cell: ({ starlight }) => <span className="prose">{moved(starlight, (v) => v ?? 'absent')}</span> },
-  { key: 'surroundings', header: 'Surroundings', align: 'left', cell: ({ surroundings }) => <span className="prose">{moved(surroundings, (v) => v ?? 'absent')}</span> },
+  {
+    key: 'starlight',
+    header: 'Starlight',
+    align: 'left',
+    cell: ({ starlight }) => <span className="prose">{moved(starlight, (v) => v ?? 'absent')}</span>,
+  },
+  {
+    key: 'surroundings',
+    header: 'Surroundings',
+    align: 'left',
+    cell: ({ surroundings }) => <span className="prose">{moved(surroundings, (v) => v ?? 'absent')}</span>,
+  },
   { key: 'pNone', header: 'P(none)', align: 'left', cell: ({ pNone }) => moved(pNone, probability) },
   { key: 'why', header: 'Why', align: 'left', cell: ({ why }) => <span className="prose">{why.join('; ')}</span> },
 ];

@@ -41,7 +41,10 @@ export function RunFacts({ surveyId, run }: { surveyId: string; run: Run }) {
             <li key={catalogueId}>
               <Link to={paths.catalogue(surveyId, catalogueId)}>{name}</Link>{' '}
               <span className="muted small">
-                {kind}, <span className="num">{count(rows)}</span> rows, <span className="mono" title={sha256}>{sha256.slice(0, 10)}</span>
+                {kind}, <span className="num">{count(rows)}</span> rows,{' '}
+                <span className="mono" title={sha256}>
+                  {sha256.slice(0, 10)}
+                </span>
               </span>
             </li>
           ))}

@@ -36,7 +36,10 @@ export function StartRun({ surveyId, criteria, catalogues, isOpen, onClose, onSt
             fill
             value={chosen ?? ''}
             onChange={(event) => setCriteriaId(event.target.value)}
-            options={criteria.map(({ id, number, note }) => ({ value: id, label: `Criteria ${number}${note ? `: ${note}` : ''}` }))}
+            options={criteria.map(({ id, number, note }) => ({
+              value: id,
+              label: `Criteria ${number}${note ? `: ${note}` : ''}`,
+            }))}
           />
         </FormGroup>
         <fieldset className="start-run">
@@ -47,7 +50,10 @@ export function StartRun({ surveyId, criteria, catalogues, isOpen, onClose, onSt
               checked={!left.includes(id)}
               onChange={() => setLeft(left.includes(id) ? left.filter((other) => other !== id) : [...left, id])}
             >
-              {name} <span className="muted small">{kind}, <span className="num">{count(rows)}</span> rows</span>
+              {name}{' '}
+              <span className="muted small">
+                {kind}, <span className="num">{count(rows)}</span> rows
+              </span>
             </Checkbox>
           ))}
         </fieldset>

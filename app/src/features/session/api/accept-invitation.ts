@@ -7,7 +7,8 @@ import { meQuery } from '#lib/queries/me.ts';
 export const invitationPreviewQuery = (token: string) =>
   queryOptions({
     queryKey: ['invitation', token],
-    queryFn: ({ signal }) => call(invitationPreview, `/invitations/preview?token=${encodeURIComponent(token)}`, { signal }),
+    queryFn: ({ signal }) =>
+      call(invitationPreview, `/invitations/preview?token=${encodeURIComponent(token)}`, { signal }),
     retry: false,
   });
 

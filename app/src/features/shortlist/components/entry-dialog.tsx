@@ -18,10 +18,29 @@ export function EntryDialog({ name, isPending, onClose, onSave, ...start }: Entr
     <Dialog isOpen title={`${name} on the shortlist`} onClose={onClose} style={{ width: 'min(560px, 92vw)' }}>
       <DialogBody>
         <FormGroup label="Reason" labelFor="entry-reason" helperText="Why this one, in a sentence an observer can use.">
-          <TextArea id="entry-reason" fill autoFocus rows={3} maxLength={2000} value={reason} onChange={(event) => setReason(event.target.value)} />
+          <TextArea
+            id="entry-reason"
+            fill
+            autoFocus
+            rows={3}
+            maxLength={2000}
+            value={reason}
+            onChange={(event) => setReason(event.target.value)}
+          />
         </FormGroup>
-        <FormGroup label="If nothing is found" labelFor="entry-null" helperText="What the follow-up would prove by finding no stars.">
-          <TextArea id="entry-null" fill rows={3} maxLength={2000} value={nullResult} onChange={(event) => setNullResult(event.target.value)} />
+        <FormGroup
+          label="If nothing is found"
+          labelFor="entry-null"
+          helperText="What the follow-up would prove by finding no stars."
+        >
+          <TextArea
+            id="entry-null"
+            fill
+            rows={3}
+            maxLength={2000}
+            value={nullResult}
+            onChange={(event) => setNullResult(event.target.value)}
+          />
         </FormGroup>
       </DialogBody>
       <DialogFooter

@@ -12,7 +12,8 @@ interface ShortlistTableProps {
   entries: readonly Entry[];
   to: (detectionId: string) => string;
   /** Absent for those who may only read. */
-  actions?: { move: (at: number, by: -1 | 1) => void; remove: (at: number) => void; edit: (entry: Entry) => void } | undefined;
+  actions?:
+    { move: (at: number, by: -1 | 1) => void; remove: (at: number) => void; edit: (entry: Entry) => void } | undefined;
   isPending: boolean;
 }
 
@@ -21,12 +22,46 @@ export function ShortlistTable({ entries, to, actions, isPending }: ShortlistTab
   const nameOf = (entry: Entry) => entry.verdict?.name ?? 'a detection without verdict';
   const columns: Column<Entry>[] = [
     { key: 'rank', header: 'Rank', cell: ({ rank }) => rank },
-    { key: 'name', header: 'Detection', align: 'left', cell: (entry) => <Link to={to(entry.detectionId)}>{nameOf(entry)}</Link> },
-    { key: 'starlight', header: 'Starlight', align: 'left', cell: ({ verdict }) => (verdict ? <span className="prose"><StarlightWord verdict={verdict.settled?.starlight ?? verdict.starlight} /></span> : NO_VALUE) },
-    { key: 'surroundings', header: 'Surroundings', align: 'left', cell: ({ verdict }) => (verdict ? <span className="prose"><SurroundingsWord verdict={verdict.settled?.surroundings ?? verdict.surroundings} /></span> : NO_VALUE) },
+    {
+      key: 'name',
+      header: 'Detection',
+      align: 'left',
+      cell: (entry) => <Link to={to(entry.detectionId)}>{nameOf(entry)}</Link>,
+    },
+    {
+      key: 'starlight',
+      header: 'Starlight',
+      align: 'left',
+      cell: ({ verdict }) =>
+        verdict ? (
+          <span className="prose">
+            <StarlightWord verdict={verdict.settled?.starlight ?? verdict.starlight} />
+          </span>
+        ) : (
+          NO_VALUE
+        ),
+    },
+    {
+      key: 'surroundings',
+      header: 'Surroundings',
+      align: 'left',
+      cell: ({ verdict }) =>
+        verdict ? (
+          <span className="prose">
+            <SurroundingsWord verdict={verdict.settled?.surroundings ?? verdict.surroundings} />
+          </span>
+        ) : (
+          NO_VALUE
+        ),
+    },
     { key: 'pNone', header: 'P(none)', cell: ({ verdict }) => probabilityCell(verdict?.pNone) },
     { key: 'pAlone', header: 'P(alone)', cell: ({ verdict }) => probabilityCell(verdict?.pAlone) },
-    { key: 'doubts', header: 'Doubts', align: 'left', cell: ({ verdict }) => <DoubtFlags doubts={verdict?.doubts ?? []} /> },
+    {
+      key: 'doubts',
+      header: 'Doubts',
+      align: 'left',
+      cell: ({ verdict }) => <DoubtFlags doubts={verdict?.doubts ?? []} />,
+    },
     {
       key: 'reason',
       header: 'Reason',
@@ -47,10 +82,28 @@ export function ShortlistTable({ entries, to, actions, isPending }: ShortlistTab
         const at = entries.indexOf(entry);
         return (
           <ButtonGroup>
-            <Button size="small" text="↑" aria-label={`Move ${nameOf(entry)} up`} disabled={isPending || at === 0} onClick={() => actions.move(at, -1)} />
-            <Button size="small" text="↓" aria-label={`Move ${nameOf(entry)} down`} disabled={isPending || at === entries.length - 1} onClick={() => actions.move(at, 1)} />
+            <Button
+              size="small"
+              text="↑"
+              aria-label={`Move ${nameOf(entry)} up`}
+              disabled={isPending || at === 0}
+              onClick={() => actions.move(at, -1)}
+            />
+            <Button
+              size="small"
+              text="↓"
+              aria-label={`Move ${nameOf(entry)} down`}
+              disabled={isPending || at === entries.length - 1}
+              onClick={() => actions.move(at, 1)}
+            />
             <Button size="small" text="Edit" aria-label={`Edit ${nameOf(entry)}`} onClick={() => actions.edit(entry)} />
-            <Button size="small" text="Remove" aria-label={`Remove ${nameOf(entry)}`} disabled={isPending} onClick={() => actions.remove(at)} />
+            <Button
+              size="small"
+              text="Remove"
+              aria-label={`Remove ${nameOf(entry)}`}
+              disabled={isPending}
+              onClick={() => actions.remove(at)}
+            />
           </ButtonGroup>
         );
       },

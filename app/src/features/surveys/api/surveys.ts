@@ -1,6 +1,7 @@
 import { team } from '@eremite/shared/contracts/auth';
 import { listOf } from '@eremite/shared/contracts/list';
-import { createSurveyRequest, survey } from '@eremite/shared/contracts/survey';
+import type { createSurveyRequest} from '@eremite/shared/contracts/survey';
+import { survey } from '@eremite/shared/contracts/survey';
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { z } from 'zod';
 import { call } from '#lib/api-client.ts';

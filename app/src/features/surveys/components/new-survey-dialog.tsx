@@ -1,4 +1,13 @@
-import { Button, Dialog, DialogBody, DialogFooter, FormGroup, HTMLSelect, InputGroup, TextArea } from '@blueprintjs/core';
+import {
+  Button,
+  Dialog,
+  DialogBody,
+  DialogFooter,
+  FormGroup,
+  HTMLSelect,
+  InputGroup,
+  TextArea,
+} from '@blueprintjs/core';
 import type { Survey } from '@eremite/shared/contracts/survey';
 import { useState, type FormEvent } from 'react';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
@@ -35,7 +44,14 @@ export function NewSurveyDialog({ isOpen, teams, onClose, onCreated }: NewSurvey
             />
           </FormGroup>
           <FormGroup label="Name" labelFor="survey-name">
-            <InputGroup id="survey-name" required maxLength={120} value={fields.name} onValueChange={set('name')} autoFocus />
+            <InputGroup
+              id="survey-name"
+              required
+              maxLength={120}
+              value={fields.name}
+              onValueChange={set('name')}
+              autoFocus
+            />
           </FormGroup>
           <FormGroup label="Description" labelFor="survey-text" labelInfo="(optional)">
             <TextArea
@@ -49,10 +65,28 @@ export function NewSurveyDialog({ isOpen, teams, onClose, onCreated }: NewSurvey
           </FormGroup>
           <div className="columns" style={{ gridTemplateColumns: '1fr 1fr' }}>
             <FormGroup label="Hubble constant" labelInfo="km/s/Mpc" labelFor="survey-h0">
-              <InputGroup id="survey-h0" type="number" min={20} max={200} step="any" required value={fields.h0} onValueChange={set('h0')} />
+              <InputGroup
+                id="survey-h0"
+                type="number"
+                min={20}
+                max={200}
+                step="any"
+                required
+                value={fields.h0}
+                onValueChange={set('h0')}
+              />
             </FormGroup>
             <FormGroup label="Matter density" labelInfo="flat universe" labelFor="survey-om">
-              <InputGroup id="survey-om" type="number" min={0} max={1} step="any" required value={fields.omegaM} onValueChange={set('omegaM')} />
+              <InputGroup
+                id="survey-om"
+                type="number"
+                min={0}
+                max={1}
+                step="any"
+                required
+                value={fields.omegaM}
+                onValueChange={set('omegaM')}
+              />
             </FormGroup>
           </div>
           <ProblemCallout error={create.error} />
