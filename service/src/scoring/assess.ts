@@ -9,7 +9,8 @@ import { galaxiesInBeam, gasToLightLimit, gasToLightOf } from './gas-and-light.t
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
 import type { Assessment, StarMask } from './scored-detection.ts';
 import { weighSilence } from './silence.ts';
-import { ExpectationCache, groupObjects, weighObjects, type WeighingModel } from './weigh-objects.ts';
+import { groupObjects, weighObjects, type WeighingModel } from './weigh-objects.ts';
+import { ExpectationCache } from './expectation-cache.ts';
 
 export interface AssessmentContext {
   model: WeighingModel;

@@ -99,6 +99,6 @@ export function controlSummary(
     chanceInterval: [interval.low, interval.high],
     observedFraction: matched / sources,
     trueFraction: corrected ? corrected.trueFraction : 0,
-    correctedDark: corrected ? corrected.withoutCounterpart : 0,
+    correctedUnmatched: corrected ? corrected.withoutCounterpart : 0,
   };
 }

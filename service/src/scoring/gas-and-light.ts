@@ -9,7 +9,7 @@ import type { Detection } from './detection-table.ts';
 import type { PreparedBand } from './prepared-catalogue.ts';
 import { asR } from './redshift-reach.ts';
 import type { BandSilence } from './silence.ts';
-import type { WeighedObject } from './weigh-objects.ts';
+import type { WeighedObject } from './weighed-object.ts';
 
 /** r magnitude (AB), freed of extinction, of a magnitude in a band; NaN where it cannot be told. */
 export function clearR(detection: Detection, band: PreparedBand | null, magnitude: number): number {

@@ -6,7 +6,8 @@ import type { Detection } from './detection-table.ts';
 import type { BeamGalaxy } from './gas-and-light.ts';
 import type { Silence } from './silence.ts';
 import type { NeighbourRow, SurroundingsResult } from './surroundings.ts';
-import type { ExpectationCache, WeighedObject } from './weigh-objects.ts';
+import type { ExpectationCache } from './expectation-cache.ts';
+import type { WeighedObject } from './weighed-object.ts';
 
 /** A bright star whose mask touches the search circle. */
 export interface StarMask {

@@ -10,7 +10,7 @@ import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import type { BandExpectation } from './expectation.ts';
 import type { PreparedBand, PreparedCatalogue } from './prepared-catalogue.ts';
-import type { ExpectationCache } from './weigh-objects.ts';
+import type { ExpectationCache } from './expectation-cache.ts';
 
 /** What the silence of one band is worth about one detection. */
 export interface BandSilence {

@@ -5,7 +5,7 @@ import { numberRole } from '../tiles/role-table.ts';
 import type { StarlightAssessment } from './assess.ts';
 import { arcsec, kms, mag, percent, probability, ratio, signedKms } from './figures.ts';
 import { rowName } from './prepared-catalogue.ts';
-import type { WeighedObject } from './weigh-objects.ts';
+import type { WeighedObject } from './weighed-object.ts';
 
 type Weight = Ground['weight'];
 /** Objects less probable than this are not spoken of. */

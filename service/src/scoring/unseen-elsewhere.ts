@@ -9,7 +9,8 @@ import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import type { PreparedBand, PreparedCatalogue } from './prepared-catalogue.ts';
 import { detectionSettings } from './detection-settings.ts';
-import type { ExpectationCache, WeighedObject } from './weigh-objects.ts';
+import type { ExpectationCache } from './expectation-cache.ts';
+import type { WeighedObject } from './weighed-object.ts';
 
 /** Share of galaxies whose rows in two tables are not recognised as one object. Our choice. */
 const UNRECOGNISED = 0.02;

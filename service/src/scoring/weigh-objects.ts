@@ -17,34 +17,12 @@ import {
 import type { CandidateRow } from './candidate-row.ts';
 import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
-import { expectIn, type BandExpectation } from './expectation.ts';
+import type { BandExpectation } from './expectation.ts';
+import type { ExpectationCache } from './expectation-cache.ts';
+import type { WeighedObject } from './weighed-object.ts';
 import type { PreparedBand, PreparedCatalogue } from './prepared-catalogue.ts';
 import { detectionSettings } from './detection-settings.ts';
 import { unseenElsewhere } from './unseen-elsewhere.ts';
-
-/** A physical object: rows of one or more catalogues. */
-export interface WeighedObject {
-  rows: CandidateRow[];
-  /** Best-measured row: the object's place. */
-  head: CandidateRow;
-  /** Row that stands for the object: that of its magnitude, else the best-measured one. */
-  face: CandidateRow;
-  band: PreparedBand | null;
-  /** Total over the pieces in one catalogue, in the system of the band; NaN where none. */
-  magnitude: number;
-  /** NaN where unknown. */
-  czKms: number;
-  velocityDifferenceKms: number;
-  discordant: boolean;
-  isStar: boolean;
-  override: 'accept' | 'reject' | null;
-  /** Factors of X for prior one. */
-  positionFactor: number;
-  magnitudeFactor: number;
-  velocityFactor: number;
-  /** X for prior one. */
-  weight: number;
-}
 
 /** What is fixed for a run once everything that is learnt has been learnt. */
 export interface WeighingModel {
@@ -69,20 +47,6 @@ export function velocityScatterOf({ width50Kms }: Detection, criteria: CriteriaS
     OPTICAL_ERROR_KMS,
     Math.max(criteria.counterpart.intrinsicVelocityKms, rotation),
   );
-}
-
-/** Expectations of a detection by band, each made once. */
-export class ExpectationCache {
-  private readonly byBand = new Map<PreparedBand, BandExpectation | undefined>();
-  constructor(
-    private readonly detection: Detection,
-    private readonly relation: GasStarRelation,
-  ) {}
-
-  in(band: PreparedBand): BandExpectation | undefined {
-    if (!this.byBand.has(band)) this.byBand.set(band, expectIn(this.detection, band, this.relation));
-    return this.byBand.get(band);
-  }
 }
 
 /** Groups candidate rows into objects, in the order in which they first appear. Sets `object` of each row. */
