@@ -19,7 +19,8 @@ export const controlResult = z.object({
   chanceInterval: z.tuple([z.number(), z.number()]),
   observedFraction: z.number(),
   trueFraction: z.number(),
-  correctedDark: z.number(),
+  /** Detections without an accepted object (dark, missed or spurious), corrected for those hidden by chance objects. */
+  correctedUnmatched: z.number(),
 });
 
 export const run = z.object({

@@ -75,8 +75,8 @@ export function ControlFacts({ control }: { control: NonNullable<Run['control']>
       <dd className="num">
         {percent(control.observedFraction)} observed, {percent(control.trueFraction)} true
       </dd>
-      <dt>Dark, corrected</dt>
-      <dd className="num">{fixed(control.correctedDark, 1)}</dd>
+      <dt>Without an accepted object, corrected for chance</dt>
+      <dd className="num">{fixed(control.correctedUnmatched, 1)}</dd>
     </dl>
   );
 }
