@@ -50,7 +50,7 @@ export function surroundingsGrounds(
     if (nearest) {
       say(
         'note',
-        `The nearest row with a velocity in the window is ${neighbourName(nearest)}, ${kpc(projectedKpc(nearest.separationArcsec, detection.angularMpc))} and ${signedKms(nearest.velocityDifferenceKms)} away.`,
+        `The nearest row within ${velocityWindowKms} km/s is ${neighbourName(nearest)}, ${kpc(projectedKpc(nearest.separationArcsec, detection.angularMpc))} and ${signedKms(nearest.velocityDifferenceKms)} away.`,
       );
     }
   }
@@ -152,7 +152,9 @@ export function headlineOf(assessment: StarlightAssessment, doubts: readonly Dou
     dark: 'no starlight found',
     'nearly dark': `very little starlight for so much gas: ${name}`,
     starlit: `starlight found: ${name}`,
-    contested: 'several possible hosts, none dominating',
+    contested: assessment.best?.discordant
+      ? 'the likeliest host has another velocity'
+      : 'several possible hosts, none dominating',
     confused: `${assessment.inBeam.length} galaxies at this velocity in the beam`,
     'cannot tell': 'starlight cannot be told here',
   }[assessment.starlight];
