@@ -23,7 +23,7 @@ export default defineConfig({
         test: {
           name: 'browser',
           include: ['tests/browser/**/*.test.ts'],
-          globalSetup: 'tests/support/global-setup.ts',
+          globalSetup: ['tests/support/global-setup.ts', 'tests/browser/support/global-setup.ts'],
           testTimeout: 180_000,
           hookTimeout: 180_000,
           fileParallelism: false,
