@@ -1,4 +1,4 @@
-// Bundles the benchmark and its worker for Node 20, which loads no TypeScript, and starts it.
+// Bundles the benchmarks and their worker for Node 20, which loads no TypeScript, and starts them.
 import { spawnSync } from 'node:child_process';
 import { join } from 'node:path';
 import { build } from 'vite';
@@ -15,13 +15,24 @@ await build({
     emptyOutDir: true,
     target: 'node20',
     rollupOptions: {
-      input: { run: join(here, 'run.ts'), worker: join(service, 'matching.worker.ts') },
+      input: {
+        run: join(here, 'run.ts'),
+        intake: join(here, 'intake-run.ts'),
+        worker: join(service, 'matching.worker.ts'),
+      },
       output: { entryFileNames: '[name].mjs', chunkFileNames: '[name]-[hash].mjs' },
     },
   },
   ssr: { noExternal: [/^@eremite\//] },
 });
-const { status } = spawnSync(process.execPath, [join(here, 'dist/run.mjs'), ...process.argv.slice(2)], {
-  stdio: 'inherit',
-});
-process.exitCode = status ?? 1;
+const asked = process.argv.slice(2);
+const start = (script, args) =>
+  spawnSync(process.execPath, [join(here, 'dist', script), ...args], { stdio: 'inherit' });
+const runs = [];
+if (asked[0] !== 'intake') runs.push(['run.mjs', asked]);
+if (asked[0] === 'intake' || asked.length === 0) runs.push(['intake.mjs', asked.slice(1)]);
+if (asked[0] === '--list') console.log('intake');
+for (const [script, args] of runs) {
+  const { status } = start(script, args);
+  if (status !== 0) process.exitCode = status ?? 1;
+}

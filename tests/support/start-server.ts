@@ -24,13 +24,14 @@ export interface TestServer {
  * The built server as a process of its own, on a port of its own, without the demo unless asked for.
  *
  * @param options.dataDir an existing data folder, kept at the end
+ * @param options.main its script, where that is not the build's
  */
 export async function startServer(
-  options: { dataDir?: string; env?: Record<string, string>; timeoutMs?: number } = {},
+  options: { dataDir?: string; env?: Record<string, string>; timeoutMs?: number; main?: string } = {},
 ): Promise<TestServer> {
   const dataDir = options.dataDir ?? mkdtempSync(join(tmpdir(), 'eremite-server-'));
   const { DATABASE_URL: _, ...inherited } = process.env;
-  const child = spawn(process.execPath, [MAIN], {
+  const child = spawn(process.execPath, [options.main ?? MAIN], {
     env: {
       ...inherited,
       PORT: '0',
