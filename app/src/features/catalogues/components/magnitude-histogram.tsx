@@ -44,6 +44,8 @@ export function MagnitudeHistogram({ band }: { band: CatalogueMagnitudes['bands'
             ]),
       ],
     });
+    // Its groups carry labels without a role; what it shows is said by the element around it.
+    chart.setAttribute('aria-hidden', 'true');
     host.current?.replaceChildren(chart);
     return () => chart.remove();
   }, [band]);

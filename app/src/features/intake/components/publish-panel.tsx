@@ -10,13 +10,14 @@ import { useDiscard, usePublish } from '../api/intakes.ts';
 
 interface PublishPanelProps {
   intake: Intake;
-  isChecking: boolean;
+  /** What is shown is not what the service has: a check is under way, or the settings were refused. */
+  isUnsettled: boolean;
   onPublished: (job: Job) => void;
   onDiscarded: () => void;
 }
 
 /** The last step: publish with progress and cancel, or put the file away. */
-export function PublishPanel({ intake, isChecking, onPublished, onDiscarded }: PublishPanelProps) {
+export function PublishPanel({ intake, isUnsettled, onPublished, onDiscarded }: PublishPanelProps) {
   const publish = usePublish(intake.id);
   const discard = useDiscard(intake.surveyId);
   const [asking, setAsking] = useState(false);
@@ -26,7 +27,7 @@ export function PublishPanel({ intake, isChecking, onPublished, onDiscarded }: P
     if (job.state === 'done') onPublished(job);
   };
   const isRunning = publish.data !== undefined && !over;
-  const blocked = isChecking || !intake.check.ready || isRunning || intake.state !== 'staged';
+  const blocked = isUnsettled || !intake.check.ready || isRunning || intake.state !== 'staged';
   return (
     <div className="stack">
       {publish.data && <JobProgress jobId={publish.data.jobId} title="Publishing" mayCancel onEnd={end} />}

@@ -5,26 +5,43 @@ import { useSaveSettings } from '../api/intakes.ts';
 
 const PAUSE_MS = 500;
 
-/** The settings as they are being edited; each change is checked on the whole table a moment after it is made. */
+/**
+ * The settings as they are being edited; each change is checked on the whole table a moment after it is made.
+ * `isChecking` holds from the change on, so that nothing is published under settings that are no longer shown.
+ */
 export function useIntakeDraft(intake: Intake) {
   const [draft, setDraft] = useState<IntakeSettings>(intake.settings);
+  const [isWaiting, setWaiting] = useState(false);
   const save = useSaveSettings(intake.id);
-  const waiting = useRef<ReturnType<typeof setTimeout> | undefined>(undefined);
+  const latest = useRef(draft);
+  const timer = useRef<ReturnType<typeof setTimeout> | undefined>(undefined);
   const { mutate } = save;
+  const send = useCallback(() => {
+    clearTimeout(timer.current);
+    timer.current = undefined;
+    setWaiting(false);
+    mutate(latest.current);
+  }, [mutate]);
   const change = useCallback(
     (patch: Partial<IntakeSettings>) => {
-      setDraft((old) => {
-        const next = { ...old, ...patch };
-        for (const key of Object.keys(next) as (keyof IntakeSettings)[]) if (next[key] === undefined) delete next[key];
-        clearTimeout(waiting.current);
-        waiting.current = setTimeout(() => mutate(next), PAUSE_MS);
-        return next;
-      });
+      const next = { ...latest.current, ...patch };
+      for (const key of Object.keys(next) as (keyof IntakeSettings)[]) if (next[key] === undefined) delete next[key];
+      latest.current = next;
+      setDraft(next);
+      setWaiting(true);
+      clearTimeout(timer.current);
+      timer.current = setTimeout(send, PAUSE_MS);
     },
-    [mutate],
+    [send],
   );
-  useEffect(() => () => clearTimeout(waiting.current), []);
-  return { draft, change, isChecking: save.isPending, error: save.error };
+  // Leaving the page a moment after a change must not lose it.
+  useEffect(
+    () => () => {
+      if (timer.current !== undefined) send();
+    },
+    [send],
+  );
+  return { draft, change, isChecking: isWaiting || save.isPending, error: save.error };
 }
 
 export type Change = ReturnType<typeof useIntakeDraft>['change'];
