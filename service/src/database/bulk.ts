@@ -11,7 +11,7 @@ export abstract class BulkStore {
    * Appends rows. Each piece of about 6 MB is committed by itself, so that other requests are served in between;
    * staged rows must be invisible until a later transaction says otherwise.
    *
-   * @param rows batches of rows in column order; null is a missing value; int8 as number or bigint, jsonb as any value
+   * @param rows batches of rows in column order; null is a missing value; int8 as number or bigint, jsonb as any value or as JsonText
    * @returns count of rows written
    */
   abstract copyInto(

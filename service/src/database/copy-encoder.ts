@@ -1,4 +1,5 @@
 import type { BulkColumn, BulkType } from './bulk.ts';
+import { JsonText } from './json-text.ts';
 
 // Source: PostgreSQL documentation, COPY, binary format: signature, flags, length of the header extension.
 const HEADER = Uint8Array.of(0x50, 0x47, 0x43, 0x4f, 0x50, 0x59, 0x0a, 0xff, 0x0d, 0x0a, 0, 0, 0, 0, 0, 0, 0, 0, 0);
@@ -67,7 +68,7 @@ export class CopyEncoder {
         // PostgreSQL has no place for the character NUL.
         return this.#sized(Buffer.from((value as string).replaceAll(NUL, '')));
       case 'jsonb':
-        return this.#sized(Buffer.from(`\u0001${JSON.stringify(value).replaceAll('\\u0000', '')}`));
+        return this.#sized(Buffer.from(`\u0001${jsonOf(value).replaceAll('\\u0000', '')}`));
     }
   }
 
@@ -95,4 +96,8 @@ export class CopyEncoder {
     this.#bytes = larger;
     this.#view = new DataView(larger.buffer);
   }
+}
+
+function jsonOf(value: unknown): string {
+  return value instanceof JsonText ? value.text : JSON.stringify(value);
 }

@@ -1,5 +1,6 @@
 import type { Learnt } from '../../scoring/engine.ts';
 import type { ControlResult } from '../../scoring/run-engine.ts';
+import type { ScoredItem } from '../../scoring/scored-detection.ts';
 import type { PackedInput } from './packed-input.ts';
 
 /** What the worker thread is started with. */
@@ -7,11 +8,28 @@ export interface RunTask {
   input: PackedInput;
 }
 
-/** A scored detection as it is stored: JSON as text, evidence packed. */
+/** A scored detection as it is stored: JSON as text, so that the main thread need not parse it; evidence packed. */
 export interface StoredVerdict {
   position: number;
   catalogueId: string;
   row: number;
+  /** What lists sort and filter by. */
+  facts: Pick<
+    ScoredItem,
+    | 'name'
+    | 'raDeg'
+    | 'decDeg'
+    | 'velocityKms'
+    | 'distanceMpc'
+    | 'logHiMass'
+    | 'starlight'
+    | 'pNone'
+    | 'pMissed'
+    | 'pSpurious'
+    | 'power'
+    | 'surroundings'
+    | 'pAlone'
+  >;
   item: string;
   detail: string;
   candidates: Uint8Array;

@@ -1,6 +1,6 @@
-import type { VerdictItem } from '@eremite/shared/contracts/verdict';
 import { Injectable } from '@nestjs/common';
-import { BulkStore } from '../../database/bulk.ts';
+import { type BulkColumn, BulkStore, type BulkType } from '../../database/bulk.ts';
+import { JsonText } from '../../database/json-text.ts';
 import type { JobContext, JobHandler } from '../../jobs/job-handler.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { RunInputs } from './run-inputs.ts';
@@ -15,7 +15,9 @@ type Counts = { detections: number; starlight: Record<string, number>; surroundi
 
 /** Share of a run's time that goes into reading its tables. */
 const READING = 0.15;
-const VERDICT_COLUMNS = [
+/** Verdicts written in one go: other requests are served in between. */
+const STORED_AT_ONCE = 100;
+const VERDICT_COLUMNS = columns([
   ['run_id', 'uuid'],
   ['detection_id', 'uuid'],
   ['position', 'int4'],
@@ -34,13 +36,13 @@ const VERDICT_COLUMNS = [
   ['p_alone', 'float8'],
   ['item', 'jsonb'],
   ['detail', 'jsonb'],
-] as const;
-const EVIDENCE_COLUMNS = [
+]);
+const EVIDENCE_COLUMNS = columns([
   ['run_id', 'uuid'],
   ['detection_id', 'uuid'],
   ['candidates', 'bytea'],
   ['neighbours', 'bytea'],
-] as const;
+]);
 
 /**
  * Does a run: reads its tables, scores in a thread, stages verdicts and evidence, and makes them visible together with
@@ -80,52 +82,26 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
   }
 
   async #store(runId: string, verdicts: StoredVerdict[], ids: Map<string, string>, counts: Counts): Promise<void> {
-    const rows: unknown[][] = [];
-    const evidence: unknown[][] = [];
-    for (const verdict of verdicts) {
-      const detectionId = ids.get(`${verdict.catalogueId}/${verdict.row}`)!;
-      const stored = {
-        ...(JSON.parse(verdict.item) as VerdictItem),
-        detectionId,
-        settled: null,
-        reviews: 0,
-        overrides: 0,
-      };
-      counts.detections += 1;
-      counts.starlight[stored.starlight] = (counts.starlight[stored.starlight] ?? 0) + 1;
-      counts.surroundings[stored.surroundings] = (counts.surroundings[stored.surroundings] ?? 0) + 1;
-      rows.push([
-        runId,
-        detectionId,
-        verdict.position,
-        stored.name,
-        stored.raDeg,
-        stored.decDeg,
-        stored.velocityKms,
-        stored.distanceMpc,
-        stored.logHiMass,
-        stored.starlight,
-        stored.pNone,
-        stored.pMissed,
-        stored.pSpurious,
-        stored.power,
-        stored.surroundings,
-        stored.pAlone,
-        stored,
-        JSON.parse(verdict.detail),
-      ]);
-      evidence.push([runId, detectionId, verdict.candidates, verdict.neighbours]);
+    for (let from = 0; from < verdicts.length; from += STORED_AT_ONCE) {
+      const rows: unknown[][] = [];
+      const evidence: unknown[][] = [];
+      for (const verdict of verdicts.slice(from, from + STORED_AT_ONCE)) {
+        const { facts, position, item, detail, candidates, neighbours } = verdict;
+        const { starlight, surroundings } = facts;
+        const detectionId = ids.get(`${verdict.catalogueId}/${verdict.row}`)!;
+        counts.detections += 1;
+        counts.starlight[starlight] = (counts.starlight[starlight] ?? 0) + 1;
+        counts.surroundings[surroundings] = (counts.surroundings[surroundings] ?? 0) + 1;
+        const head = `{"detectionId":"${detectionId}","settled":null,"reviews":0,"overrides":0,`;
+        const place = [facts.name, facts.raDeg, facts.decDeg, facts.velocityKms, facts.distanceMpc, facts.logHiMass];
+        const found = [starlight, facts.pNone, facts.pMissed, facts.pSpurious, facts.power, surroundings, facts.pAlone];
+        const texts = [new JsonText(head + item.slice(1)), new JsonText(detail)];
+        rows.push([runId, detectionId, position, ...place, ...found, ...texts]);
+        evidence.push([runId, detectionId, candidates, neighbours]);
+      }
+      await this.bulk.copyInto('verdicts', VERDICT_COLUMNS, [rows]);
+      await this.bulk.copyInto('evidence', EVIDENCE_COLUMNS, [evidence]);
     }
-    await this.bulk.copyInto(
-      'verdicts',
-      VERDICT_COLUMNS.map(([name, type]) => ({ name, type })),
-      [rows],
-    );
-    await this.bulk.copyInto(
-      'evidence',
-      EVIDENCE_COLUMNS.map(([name, type]) => ({ name, type })),
-      [evidence],
-    );
   }
 
   async #finish(run: RunRow, counts: object, { notes, control, learnt }: RunOutcome): Promise<void> {
@@ -152,6 +128,10 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
   async ended({ runId }: Payload, { state, error }: { state: 'failed' | 'cancelled'; error: string }): Promise<void> {
     await this.runs.reopen(runId, { state, error, finishedAt: new Date() });
   }
+}
+
+function columns(list: readonly [name: string, type: BulkType][]): BulkColumn[] {
+  return list.map(([name, type]) => ({ name, type }));
 }
 
 /** Does not wait for work that nobody wants any more; it ends by itself and its result is dropped. */

@@ -2,6 +2,7 @@ import { once } from 'node:events';
 import { parentPort, workerData } from 'node:worker_threads';
 import { packCandidates, packNeighbours } from '../../scoring/evidence.ts';
 import { runEngine } from '../../scoring/run-engine.ts';
+import type { ScoredItem } from '../../scoring/scored-detection.ts';
 import { unpackInput } from './packed-input.ts';
 import type { RunMessage, RunTask, StoredVerdict } from './run-messages.ts';
 import { failureOf } from './thread-failure.ts';
@@ -24,6 +25,7 @@ async function run(): Promise<void> {
           position: one.position,
           catalogueId: one.catalogueId,
           row: one.row,
+          facts: factsOf(one.item),
           item: JSON.stringify(one.item),
           detail: JSON.stringify(one.detail()),
           candidates: packCandidates(one.candidates, detection),
@@ -40,6 +42,13 @@ async function run(): Promise<void> {
     { onProgress: (fraction, message) => send({ kind: 'progress', fraction, message }) },
   );
   send({ kind: 'done', notes, control, totals, learnt: engine.learnt });
+}
+
+function factsOf(item: ScoredItem): StoredVerdict['facts'] {
+  const { name, raDeg, decDeg, velocityKms, distanceMpc, logHiMass, starlight, surroundings } = item;
+  const { pNone, pMissed, pSpurious, power, pAlone } = item;
+  const place = { name, raDeg, decDeg, velocityKms, distanceMpc, logHiMass };
+  return { ...place, starlight, pNone, pMissed, pSpurious, power, surroundings, pAlone };
 }
 
 run()
