@@ -3,6 +3,7 @@ import { useQuery, useQueryClient, useSuspenseQuery, type QueryClient } from '@t
 import { Link, useNavigate, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router-dom';
 import { Caution } from '#components/caution/caution.tsx';
 import { JobProgress } from '#components/job-progress/job-progress.tsx';
+import { Prose } from '#components/prose/prose.tsx';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { VerdictCounts } from '#components/verdict-counts/verdict-counts.tsx';
 import { ControlFacts, RunFacts } from '#features/runs/components/run-facts.tsx';
@@ -98,7 +99,9 @@ export function Component() {
           {run.notes.length > 0 && (
             <ul>
               {run.notes.map((note) => (
-                <li key={note}>{note}</li>
+                <li key={note}>
+                  <Prose text={note} />
+                </li>
               ))}
             </ul>
           )}

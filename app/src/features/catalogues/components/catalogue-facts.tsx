@@ -40,7 +40,7 @@ export function CatalogueFacts({ catalogue: c }: { catalogue: Catalogue }) {
         {c.assumed.length === 0 ? (
           'nothing'
         ) : (
-          <ul className="run-inputs" style={{ padding: 0, listStyle: 'none' }}>
+          <ul className="plain-list">
             {c.assumed.map((sentence) => (
               <li key={sentence}>{sentence}</li>
             ))}

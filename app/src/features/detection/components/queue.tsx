@@ -23,12 +23,14 @@ export function Queue({ title, back, items, total, current, to }: QueueProps) {
   }, [current, items]);
   return (
     <nav className="queue" aria-label={title}>
-      <p className="queue__head">
-        <Link to={back}>{title}</Link> <span className="muted num">{count(total)}</span>
-      </p>
-      <div className="queue__legend muted">
-        <span>P(none)</span>
-        <span>P(alone)</span>
+      <div className="queue__head">
+        <p>
+          <Link to={back}>{title}</Link> <span className="muted num">{count(total)}</span>
+        </p>
+        <div className="queue__legend muted">
+          <span>P(none)</span>
+          <span>P(alone)</span>
+        </div>
       </div>
       <ol>
         {items.map((item) => (

@@ -36,7 +36,7 @@ export function RunFacts({ surveyId, run }: { surveyId: string; run: Run }) {
       )}
       <dt>Tables</dt>
       <dd>
-        <ul className="run-inputs">
+        <ul className="plain-list">
           {run.inputs.map(({ catalogueId, name, kind, rows, sha256 }) => (
             <li key={catalogueId}>
               <Link to={paths.catalogue(surveyId, catalogueId)}>{name}</Link>{' '}
