@@ -43,6 +43,9 @@ describe('a review', () => {
   it('of another is hidden from a reviewer until she has given her own on that run', async () => {
     await review(screened.reviewer, 'S03', AGREE);
     expect(await reviewsOf(second.client, 'S03')).toMatchObject({ items: [], total: 0 });
+    // The ledger tells her that someone spoke, not what was said.
+    const [line] = await ledgerOf(second.client, screened.surveyId);
+    expect(line).toMatchObject({ action: 'reviewed a verdict', subject: 'S03', note: '', detail: {} });
     expect((await reviewsOf(screened.lead, 'S03')).total).toBe(1);
     const word = { starlight: 'contested', surroundings: 'alone', note: 'two blobs in one' };
     const given = await review(second.client, 'S03', word);

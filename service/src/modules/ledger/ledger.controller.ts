@@ -22,8 +22,8 @@ export class LedgerController {
     @Param('surveyId', { schema: z.uuid() }) surveyId: string,
     @Query({ schema: listQuery }) query: ListQuery,
   ) {
-    await this.access.survey(user, surveyId, 'read');
-    return this.ledger.list(surveyId, query);
+    const { role } = await this.access.survey(user, surveyId, 'read');
+    return this.ledger.list(surveyId, query, role === 'reviewer' ? user.id : undefined);
   }
 
   @Get('verification')

@@ -24,6 +24,9 @@ export interface LedgerVerification {
   readonly brokenAt: number | null;
 }
 
+/** What a reviewer does: blind reviewers are not told what it came to. */
+export const REVIEW_ACTIONS: ReadonlySet<string> = new Set(['agreed with a verdict', 'departed from a verdict']);
+
 @Injectable()
 export class LedgerService {
   constructor(private readonly lines: LedgerRepository) {}
@@ -53,23 +56,31 @@ export class LedgerService {
     await this.lines.insert({ ...line, hash: ledgerHash(line) }, db);
   }
 
-  async list(surveyId: string, query: ListQuery): Promise<List<LedgerEntry>> {
+  /**
+   * A page of lines.
+   *
+   * @param blindTo a reviewer, who is told that others reviewed but not what they said: reviewers stay blind to each other
+   */
+  async list(surveyId: string, query: ListQuery, blindTo?: string): Promise<List<LedgerEntry>> {
     const offset = offsetOf(query.cursor);
     const order = query.sort === 'number' ? 'oldest' : 'newest';
     const [rows, total] = await Promise.all([
       this.lines.page(surveyId, order, query.limit, offset),
       this.lines.count(surveyId),
     ]);
-    const items = rows.map(({ number, at, actor, action, subject, note, detail, hash }) => ({
-      number,
-      at: at.toISOString(),
-      actor,
-      action,
-      subject,
-      note,
-      detail: detail as Record<string, unknown>,
-      hash,
-    }));
+    const items = rows.map(({ number, at, actor, actorId, action, subject, note, detail, hash }) => {
+      const hidden = blindTo !== undefined && actorId !== blindTo && REVIEW_ACTIONS.has(action);
+      return {
+        number,
+        at: at.toISOString(),
+        actor,
+        action: hidden ? 'reviewed a verdict' : action,
+        subject,
+        note: hidden ? '' : note,
+        detail: hidden ? {} : (detail as Record<string, unknown>),
+        hash,
+      };
+    });
     return pageByOffset(items, total, offset);
   }
 
