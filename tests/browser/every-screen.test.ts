@@ -78,7 +78,7 @@ async function open(on: Page, path: string): Promise<void> {
 
 /** The other theme, by the menu, as people do it. */
 async function switchTheme(on: Page): Promise<void> {
-  await on.getByRole('button', { name: /^Menu of/ }).click();
+  await on.getByRole('button', { name: /menu of/i }).click();
   const item = on.getByRole('menuitem', { name: /^Use the (dark|light) theme/ });
   await item.click();
   await item.waitFor({ state: 'detached' });

@@ -1,6 +1,6 @@
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, expect, it } from 'vitest';
-import { drawnPixels, leftmostChange, mapPicture, type Picture } from './support/canvas.ts';
+import { keepPicture, leftmostChange } from './support/canvas.ts';
 import { type DemoSurvey, demoSurvey, detections, json } from './support/demo-survey.ts';
 import { openBrowser, type TestBrowser } from './support/open-browser.ts';
 
@@ -22,15 +22,15 @@ const panel = () => page.getByRole('group', { name: /^Sky about/ });
 const table = () => page.getByRole('region', { name: 'Candidates within the search radius' });
 const row = (key: string) => table().locator(`tr[data-key="${key}"]`);
 
-/** The picture once it has stopped changing. */
-async function settledPicture(): Promise<Picture> {
-  let last = await mapPicture(page);
-  for (;;) {
-    await page.evaluate(() => new Promise((done) => requestAnimationFrame(() => requestAnimationFrame(done))));
-    const next = await mapPicture(page);
-    if (drawnPixels(next) > 0 && leftmostChange(last, next) === undefined) return next;
-    last = next;
-  }
+/** Where the ring about the mark of a row begins: the leftmost pixel that changes when the row is pointed at. */
+async function ringOf(key: string): Promise<{ x: number; y: number }> {
+  await page.getByRole('heading', { level: 1 }).hover();
+  await keepPicture(page, 'plain');
+  await row(key).hover();
+  await keepPicture(page, 'lit');
+  const ring = await leftmostChange(page, 'plain', 'lit');
+  await page.getByRole('heading', { level: 1 }).hover();
+  return ring!;
 }
 
 beforeAll(async () => {
@@ -62,39 +62,27 @@ beforeAll(async () => {
 afterAll(() => browser?.close());
 
 it('draws the sky: rings, beam and marks', async () => {
-  const picture = await settledPicture();
-  expect(drawnPixels(picture)).toBeGreaterThan(1500);
+  expect((await keepPicture(page, 'plain')).drawn).toBeGreaterThan(1500);
 });
 
 it('draws an object with a greater right ascension left of the centre, one with a smaller right of it', async () => {
-  const plain = await settledPicture();
-  const middle = plain.width / 2;
-  const ringOf = async (key: string) => {
-    await row(key).hover();
-    const ring = leftmostChange(plain, await settledPicture());
-    await page.getByRole('heading', { level: 1 }).hover();
-    return ring!;
-  };
-  // The leftmost changed pixel is that of the ring about the mark: its label stands to the right.
+  const middle = (await keepPicture(page, 'plain')).width / 2;
+  // The label stands right of the mark, so that the leftmost change is the ring's.
   expect((await ringOf(candidates[0]!.key)).x).toBeLessThan(middle - 20);
   expect((await ringOf(candidates.at(-1)!.key)).x).toBeGreaterThan(middle);
 });
 
-it('lights the row of the mark that is pointed at, and chooses it with a click; the row lights the mark', async () => {
-  const { key } = candidates[0]!;
-  const plain = await settledPicture();
-  await row(key).hover();
-  const ring = leftmostChange(plain, await settledPicture())!;
+it('lights the row of the mark that is pointed at, and chooses it with a click', async () => {
+  const ring = await ringOf(candidates[0]!.key);
   const box = (await panel().boundingBox())!;
-  await page.getByRole('heading', { level: 1 }).hover();
   const within = 9;
   await page.mouse.move(box.x + ring.x + within, box.y + ring.y);
-  await page.locator('tr.is-hovered').first().waitFor();
-  const lit = await page.locator('tr.is-hovered').first().getAttribute('data-key');
+  const lit = page.locator('tr.is-hovered');
+  await lit.waitFor();
+  const key = await lit.getAttribute('data-key');
+  expect(candidates.filter(({ eastArcsec }) => eastArcsec > 0).map((one) => one.key)).toContain(key);
   await page.mouse.click(box.x + ring.x + within, box.y + ring.y);
-  await page.locator('tr.is-selected').first().waitFor();
-  expect(await page.locator('tr.is-selected').first().getAttribute('data-key')).toBe(lit);
-  expect(candidates.filter(({ eastArcsec }) => eastArcsec > 0).map((one) => one.key)).toContain(lit);
+  await page.locator(`tr.is-selected[data-key="${key}"]`).waitFor();
 });
 
 it('chooses by the keyboard too: the name of each object in the table is a button', async () => {
@@ -107,12 +95,13 @@ it('chooses by the keyboard too: the name of each object in the table is a butto
 it('reaches from the error circle to the neighbours, with a ruler in both measures', async () => {
   const ruler = () => page.locator('.sky-frame').innerHTML();
   await page.getByRole('button', { name: 'error', exact: true }).click();
-  await settledPicture();
+  await keepPicture(page, 'near');
   const near = await ruler();
   const neighbours = page.getByRole('button', { name: 'neighbours', exact: true });
   if ((await neighbours.count()) > 0) {
     await neighbours.click();
-    await settledPicture();
+    await keepPicture(page, 'far');
+    expect(await leftmostChange(page, 'near', 'far')).not.toBeNull();
     expect(await ruler()).not.toBe(near);
     expect(await ruler()).toMatch(/[kM]pc/);
   }
@@ -128,8 +117,8 @@ it('leaves nothing behind on the way through ten detections', async () => {
     await page.waitForURL(new RegExp(items[i]!.detectionId));
     await page.getByRole('heading', { level: 1, name: items[i]!.name }).waitFor();
   }
-  await settledPicture();
+  const { canvases } = await keepPicture(page, 'last');
+  expect(canvases).toBeLessThanOrEqual(3);
   expect(await page.locator('.ol-viewport').count()).toBe(1);
-  expect(await page.locator('canvas').count()).toBeLessThanOrEqual(3);
   expect(browser.complaints()).toEqual([]);
 });

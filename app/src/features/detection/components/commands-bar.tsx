@@ -54,7 +54,7 @@ export function CommandsBar({ commands }: { commands: readonly Command[] }) {
             onClick={run}
             aria-keyshortcuts={shortcuts ? combo : undefined}
           >
-            {shortcuts && <kbd>{keyName}</kbd>}
+            {shortcuts && <kbd aria-hidden="true">{keyName}</kbd>}
             {label}
           </button>
         ))}
