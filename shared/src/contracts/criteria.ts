@@ -7,6 +7,8 @@ interface KeyFacts {
   description: string;
   /** Where the default comes from. */
   source: string;
+  /** Words of the values of an enum, for people; the values themselves are what is kept and sent. */
+  choices?: Record<string, string>;
 }
 const key = <T extends z.ZodType>(schema: T, facts: KeyFacts): T => schema.meta({ ...facts }) as T;
 const PRACTICE = 'common practice';
@@ -18,12 +20,21 @@ const distance = z.strictObject({
     unit: '',
     description: 'Corrects redshift distances for infall before the Hubble law is used.',
     source: 'Mould et al. (2000), ApJ 529, 786, appendix',
+    choices: {
+      none: 'No correction for infall',
+      mould2000: 'Infall to Virgo, the Great Attractor and Shapley (Mould 2000)',
+    },
   }),
   hubbleFrame: key(z.enum(['km96', 'yts77', 'cmb']).default('km96'), {
     title: 'Frame of the Hubble law',
     unit: '',
     description: 'Local Group vector (two published ones) or the microwave background.',
     source: 'Karachentsev & Makarov (1996), AJ 111, 794',
+    choices: {
+      km96: 'Local Group (Karachentsev & Makarov 1996)',
+      yts77: 'Local Group (Yahil, Tammann & Sandage 1977)',
+      cmb: 'Microwave background',
+    },
   }),
   minimumVelocityKms: key(z.number().min(0).max(5000).default(500), {
     title: 'Slowest usable velocity',

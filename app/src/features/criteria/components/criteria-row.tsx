@@ -37,7 +37,7 @@ export function CriteriaRow({ field, value, fault, onChange }: CriteriaRowProps)
             onChange={onChange}
           />
         ) : (
-          <span className="mono">{valueText(field, value)}</span>
+          <span className={field.kind === 'choice' ? undefined : 'mono'}>{valueText(field, value)}</span>
         )}
         {fault && <p className="criteria-row__fault">{fault}</p>}
         <p className="criteria-row__standard">

@@ -1,6 +1,6 @@
 import { criteriaSettings } from '@eremite/shared/contracts/criteria';
 import { describe, expect, it } from 'vitest';
-import { CRITERIA_FIELDS, isStandard, valueOf } from './criteria-fields.ts';
+import { CRITERIA_FIELDS, isStandard, valueOf, valueText } from './criteria-fields.ts';
 
 describe('the form of the criteria', () => {
   it('has every key of the contract, each with a title, a sentence and a source', () => {
@@ -15,5 +15,13 @@ describe('the form of the criteria', () => {
     const settings = criteriaSettings.parse({ surroundings: { radiusMpc: 1.5 } });
     const changed = CRITERIA_FIELDS.filter((field) => !isStandard(field, valueOf(settings, field)));
     expect(changed.map(({ key }) => key)).toEqual(['radiusMpc']);
+  });
+
+  it('has words for every value of every choice', () => {
+    const choices = CRITERIA_FIELDS.filter(({ kind }) => kind === 'choice');
+    expect(choices.length).toBeGreaterThan(0);
+    expect(choices.flatMap((field) => field.choices.filter(({ value, label }) => value === label))).toEqual([]);
+    const frame = choices.find(({ key }) => key === 'hubbleFrame')!;
+    expect(valueText(frame, 'cmb')).toBe('Microwave background');
   });
 });

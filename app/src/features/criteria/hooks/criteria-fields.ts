@@ -11,7 +11,8 @@ export interface CriteriaField {
   source: string;
   standard: unknown;
   kind: 'choice' | 'switch' | 'number' | 'numbers' | 'words' | 'bands';
-  choices: string[];
+  /** Values of an enum with their words. */
+  choices: { value: string; label: string }[];
   /** Whether it may be left empty. */
   optional: boolean;
   minimum?: number;
@@ -23,6 +24,7 @@ interface KeySchema {
   unit?: string;
   description?: string;
   source?: string;
+  choices?: Record<string, string>;
   type?: string;
   enum?: string[];
   minimum?: number;
@@ -57,7 +59,7 @@ function readFields(): CriteriaField[] {
         source: outer.source ?? '',
         standard: standard[section]![key],
         kind: kindOf(inner),
-        choices: inner.enum ?? [],
+        choices: (inner.enum ?? []).map((value) => ({ value, label: outer.choices?.[value] ?? value })),
         optional: outer.anyOf !== undefined,
         ...(inner.minimum === undefined ? {} : { minimum: inner.minimum }),
         ...(inner.maximum === undefined ? {} : { maximum: inner.maximum }),
@@ -83,5 +85,6 @@ export function valueText(field: CriteriaField, value: unknown): string {
     return bands.length === 0 ? 'none' : bands.map((b) => `${b.lowMhz}–${b.highMhz} ${b.name}`.trim()).join(', ');
   }
   if (Array.isArray(value)) return value.join(', ');
+  if (field.kind === 'choice') return field.choices.find((choice) => choice.value === value)?.label ?? String(value);
   return String(value);
 }
