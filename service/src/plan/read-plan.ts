@@ -1,6 +1,7 @@
 import { existsSync, readFileSync, statSync } from 'node:fs';
 import { dirname, resolve } from 'node:path';
 import { plan, type Plan } from '@eremite/shared/contracts/plan';
+import { CATALOGUE_KINDS } from '@eremite/shared/contracts/words';
 
 /** A plan that cannot be carried out: one clear message a fault. */
 export class PlanError extends Error {
@@ -42,7 +43,10 @@ export function readPlan(path: string): ReadPlan {
     );
   }
   const faults: string[] = [];
-  const files = parsed.data.tables.map(({ file }, i) => {
+  const files = parsed.data.tables.map(({ file, settings }, i) => {
+    // A guessed kind would decide silently whether a table is searched for counterparts or holds the detections.
+    if (!settings.kind)
+      faults.push(`${path}: /tables/${i}/settings/kind: say what ${file} is: ${CATALOGUE_KINDS.join(', ')}.`);
     const full = resolve(dirname(path), file);
     if (!existsSync(full)) faults.push(`${path}: /tables/${i}/file: there is no file ${full}.`);
     else if (!statSync(full).isFile()) faults.push(`${path}: /tables/${i}/file: ${full} is not a file.`);

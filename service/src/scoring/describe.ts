@@ -4,6 +4,7 @@ import { DEGREE } from '@eremite/shared/science/constants';
 import { exclusiveProbabilities } from '@eremite/shared/science/counterpart/exclusive';
 import { projectedKpc } from '@eremite/shared/science/surroundings/projected-separation';
 import { bandLimit } from './band-limits.ts';
+import { beyondSearch } from './beyond-search.ts';
 import { dataGrounds, headlineOf, surroundingsGrounds } from './other-grounds.ts';
 import { rowName } from './prepared-catalogue.ts';
 import type { Assessment, ScoredDetail, ScoredItem } from './scored-detection.ts';
@@ -55,6 +56,7 @@ export function describeItem(assessment: Assessment, doubts: Doubt[], criteria: 
       .filter(({ grade }) => grade === 'watch' || grade === 'serious')
       .map(({ name, grade }) => ({ name, grade })),
     grounds: [
+      ...beyondSearch(assessment, criteria),
       ...starlightGrounds(assessment, criteria),
       ...surroundingsGrounds(assessment, surroundings, criteria),
       ...dataGrounds(assessment),

@@ -75,6 +75,7 @@ export class Engine {
     this.masks = new StarMasks(criteria.absence.starMask ? this.catalogues : []);
     this.surroundings = {
       criteria,
+      h0: survey.h0,
       reaches: redshiftReaches(this.catalogues),
       groups: readGroups(this.catalogues, input),
       missed: new MissedTable(criteria, survey.h0),

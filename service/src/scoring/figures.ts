@@ -9,7 +9,16 @@ export const arcsec = (x: number): string => `${x >= 100 ? x.toFixed(0) : x.toFi
 export const kms = (x: number): string => `${x.toFixed(0)} km/s`;
 export const signedKms = (x: number): string => `${x < 0 ? '-' : '+'}${Math.abs(x).toFixed(0)} km/s`;
 export const kpc = (x: number): string => (x >= 1000 ? `${(x / 1000).toFixed(2)} Mpc` : `${x.toFixed(0)} kpc`);
-export const mpc = (x: number): string => `${x >= 100 ? x.toFixed(0) : x.toFixed(1)} Mpc`;
+/** In kpc below 1 Mpc, so that a near galaxy keeps its digits. */
+export const mpc = (x: number): string =>
+  x < 1 ? `${Number((1000 * x).toPrecision(3))} kpc` : `${x >= 100 ? x.toFixed(0) : x.toFixed(1)} Mpc`;
+/** A distance and its error in one unit, to the digit the error bears (two where its first digits are under 3.5). */
+export function mpcWithError(x: number, error: number): string {
+  const [value, spread, unit] = x < 1 ? [1000 * x, 1000 * error, 'kpc'] : [x, error, 'Mpc'];
+  const place = spread > 0 ? Math.floor(Math.log10(spread)) : -1;
+  const decimals = Math.min(4, Math.max(0, (spread / 10 ** place < 3.5 ? 1 : 0) - place));
+  return `${value.toFixed(decimals)} +/- ${spread.toFixed(decimals)} ${unit}`;
+}
 export const mag = (x: number): string => x.toFixed(1);
 export const ratio = (x: number): string => (x >= 100 ? x.toFixed(0) : Number(x.toPrecision(2)).toString());
 export const probability = (p: number): string => {

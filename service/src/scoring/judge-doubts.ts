@@ -3,13 +3,13 @@ import type { Doubt as ContractDoubt } from '@eremite/shared/contracts/verdict';
 import { ARCSECOND, DEGREE } from '@eremite/shared/science/constants';
 import { rayleighRadius } from '@eremite/shared/science/counterpart/position-error';
 import { blend } from '@eremite/shared/science/doubts/blend';
-import { cloud } from '@eremite/shared/science/doubts/cloud';
+import { cloud, CLOUD_SETTINGS } from '@eremite/shared/science/doubts/cloud';
 import { continuum } from '@eremite/shared/science/doubts/continuum';
 import { debris } from '@eremite/shared/science/doubts/debris';
 import { distanceDoubt } from '@eremite/shared/science/doubts/distance';
 import type { Doubt } from '@eremite/shared/science/doubts/doubt';
 import { edge } from '@eremite/shared/science/doubts/edge';
-import { extinctionDoubt } from '@eremite/shared/science/doubts/extinction';
+import { EXTINCTION_SETTINGS, extinctionDoubt } from '@eremite/shared/science/doubts/extinction';
 import { hydroxyl } from '@eremite/shared/science/doubts/hydroxyl';
 import { interference } from '@eremite/shared/science/doubts/interference';
 import { recombinationLine } from '@eremite/shared/science/doubts/recombination-line';
@@ -24,7 +24,9 @@ import { numberRole } from '../tiles/role-table.ts';
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
 import { rowName } from './prepared-catalogue.ts';
 import type { StarlightAssessment } from './assess.ts';
+import { signedKms } from './figures.ts';
 import type { NeighbourRow, SurroundingsResult } from './surroundings.ts';
+import { velocityScatterOf } from './weigh-objects.ts';
 
 /** Everything that could fake the result, each with its number and grade, the worst first. */
 export function judgeDoubts(
@@ -48,13 +50,24 @@ export function judgeDoubts(
       { reliability: assessment.reliability, signalToNoise: detection.signalToNoise },
       { ...SPURIOUS_LINE_SETTINGS, seriousReliability: doubts.minimumReliability },
     ),
-    cloud({
-      galacticLonRad: galactic.lon,
-      galacticLatRad: galactic.lat,
-      lsrKms: frame('lsrk'),
-      localGroupKms: frame('km96'),
-      width50Kms: detection.width50Kms,
-    }),
+    withStarsAtVelocity(
+      cloud(
+        {
+          galacticLonRad: galactic.lon,
+          galacticLatRad: galactic.lat,
+          lsrKms: frame('lsrk'),
+          localGroupKms: frame('km96'),
+          width50Kms: detection.width50Kms,
+        },
+        {
+          ...CLOUD_SETTINGS,
+          cloudVelocityKms: doubts.cloudVelocityKms,
+          deviationVelocityKms: doubts.deviationVelocityKms,
+        },
+      ),
+      assessment,
+      criteria,
+    ),
     debrisDoubt(assessment, surroundings, criteria),
     hydroxyl({
       redshift: moving ? detection.redshift : NaN,
@@ -89,7 +102,14 @@ export function judgeDoubts(
       width50Kms: detection.width50Kms,
     }),
     continuum({ strongestMjy: continuumMjy.flux, covered: continuumMjy.covered }),
-    extinctionDoubt({ ebvMag: detection.ebvMag >= 0 ? detection.ebvMag : NaN, galacticLatRad: galactic.lat }),
+    extinctionDoubt(
+      { ebvMag: detection.ebvMag >= 0 ? detection.ebvMag : NaN, galacticLatRad: galactic.lat },
+      {
+        ...EXTINCTION_SETTINGS,
+        maximumReddeningMag: criteria.absence.maximumReddeningMag,
+        minimumLatitudeDeg: criteria.absence.minimumLatitudeDeg,
+      },
+    ),
     edge({
       neighbourCovered: surroundings.covered ?? NaN,
       counterpartCovered: bestCovered(assessment),
@@ -103,6 +123,23 @@ export function judgeDoubts(
     }),
   ];
   return all.map(toContract).sort((a, b) => RANK[b.grade] - RANK[a.grade]);
+}
+
+/**
+ * A galaxy that moves as the gas does speaks against a cloud of the Galaxy before it: the doubt stays, but does not qualify
+ * the headline.
+ */
+function withStarsAtVelocity(doubt: Doubt, { detection, dominating }: StarlightAssessment, criteria: CriteriaSettings) {
+  const reach = 3 * velocityScatterOf(detection, criteria);
+  if (doubt.grade !== 'serious' || !dominating || !(Math.abs(dominating.velocityDifferenceKms) <= reach)) return doubt;
+  const name = rowName(dominating.face.catalogue, dominating.face.index);
+  const off = signedKms(dominating.velocityDifferenceKms);
+  return {
+    ...doubt,
+    grade: 'watch' as const,
+    sentence: `${doubt.sentence.slice(0, -1)}, but its counterpart ${name} moves with it (${off}).`,
+    rule: `${doubt.rule}; watch at most where the counterpart has the velocity of the gas`,
+  };
 }
 
 const RANK = { serious: 3, watch: 2, 'not testable here': 1, clear: 0 } as const;

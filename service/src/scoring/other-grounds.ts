@@ -2,12 +2,18 @@ import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import type { Doubt, Ground } from '@eremite/shared/contracts/verdict';
 import { projectedKpc } from '@eremite/shared/science/surroundings/projected-separation';
 import type { StarlightAssessment } from './assess.ts';
-import { arcsec, kms, kpc, mag, mpc, percent, probability, signedKms } from './figures.ts';
+import { arcsec, kms, kpc, mag, mpc, mpcWithError, percent, probability, signedKms } from './figures.ts';
 import { rowName } from './prepared-catalogue.ts';
-import type { NeighbourRow, SurroundingsResult } from './surroundings.ts';
+import { numberRole } from '../tiles/role-table.ts';
+import { isElsewhereAlong, type NeighbourRow, type SurroundingsResult } from './surroundings.ts';
 
 const neighbourName = (row: NeighbourRow): string =>
   `${rowName(row.catalogue, row.index)} (${row.catalogue.input.name})`;
+
+const ownDistance = ({ catalogue, index }: NeighbourRow): number =>
+  numberRole(catalogue.input.roles, 'distanceMpc')?.[index] ?? NaN;
+
+const galaxies = (count: number): string => `${count} known galax${count === 1 ? 'y lies' : 'ies lie'}`;
 
 /** Why the surroundings verdict is what it is. */
 export function surroundingsGrounds(
@@ -31,26 +37,36 @@ export function surroundingsGrounds(
   if (deciding) {
     const at = detection.angularMpc > 0 ? detection.angularMpc : result.decidingAtMpc;
     const far = kpc(projectedKpc(deciding.separationArcsec, at));
-    const where = detection.angularMpc > 0 ? '' : ` at its own distance of ${mpc(at)}`;
+    const where =
+      detection.angularMpc > 0
+        ? ' in projection at the distance of the gas'
+        : ` in projection at its own distance of ${mpc(at)}`;
     const bright = Number.isNaN(deciding.magnitudeR)
       ? deciding.catalogue.input.kind === 'hi'
         ? 'an HI detection'
         : 'of unknown brightness'
-      : `M_r about ${mag(deciding.magnitudeR - 5 * Math.log10(at) - 25)}`;
+      : `M_r about ${mag(deciding.magnitudeR - 5 * Math.log10(at) - 25)} there`;
     say(
       'for',
-      `${neighbourName(deciding)}, ${bright}, lies ${far}${where} and ${signedKms(deciding.velocityDifferenceKms)} away.`,
+      `${neighbourName(deciding)}, ${bright}, lies ${far} away${where}, ${signedKms(deciding.velocityDifferenceKms)} from the gas.`,
     );
+    if (detection.angularMpc < result.windowMpc && Number.isNaN(ownDistance(deciding))) {
+      say(
+        'against',
+        `No distance of ${neighbourName(deciding)} is known. The window of ${velocityWindowKms} km/s is ${mpc(result.windowMpc)} of Hubble flow, more than the ${mpc(detection.angularMpc)} to the gas: it may lie far behind.`,
+      );
+    }
   }
   if (verdict === 'alone' || verdict === 'cannot tell') {
-    const others = result.neighbours.length;
-    if (others > 0)
-      say('against', `${others} known galax${others === 1 ? 'y lies' : 'ies lie'} in the window, too faint to count.`);
+    const elsewhere = result.neighbours.filter(isElsewhereAlong).length;
+    const faint = result.neighbours.length - elsewhere;
+    if (faint > 0) say('against', `${galaxies(faint)} in the window, too faint to count.`);
+    if (elsewhere > 0) say('note', `${galaxies(elsewhere)} in the window, but elsewhere by distances of their own.`);
     const nearest = result.nearest;
     if (nearest) {
       say(
         'note',
-        `The nearest row within ${velocityWindowKms} km/s is ${neighbourName(nearest)}, ${kpc(projectedKpc(nearest.separationArcsec, detection.angularMpc))} and ${signedKms(nearest.velocityDifferenceKms)} away.`,
+        `The nearest row within ${velocityWindowKms} km/s is ${neighbourName(nearest)}, ${kpc(projectedKpc(nearest.separationArcsec, detection.angularMpc))} and ${signedKms(nearest.velocityDifferenceKms)} away${isElsewhereAlong(nearest) ? `; its own distance is ${mpc(ownDistance(nearest))}` : ''}.`,
       );
     }
   }
@@ -103,7 +119,7 @@ export function dataGrounds({ detection, prior, priorSource, reliability, candid
       flow: `from the flow model at ${kms(distance.velocityUsedKms)}`,
       hubble: `from the Hubble law at ${kms(distance.velocityUsedKms)}`,
     }[distance.kind];
-    say('distance', `Distance ${mpc(distance.luminosityMpc)} +/- ${mpc(distance.errorMpc)}, ${how}.`, 'distance');
+    say('distance', `Distance ${mpcWithError(distance.luminosityMpc, distance.errorMpc)}, ${how}.`, 'distance');
     for (const caution of distance.cautions) say('distance', `Caution: ${caution}.`, 'distance');
   }
   say(

@@ -47,6 +47,8 @@ export interface SurroundingsResult {
   missed: number;
   missedClustered: number;
   covered: number | null;
+  /** Depth in the Hubble flow of the velocity window, Mpc: what a redshift alone cannot tell apart. */
+  windowMpc: number;
   /** Why `alone` cannot be said; empty where it could. */
   obstacles: string[];
   /** Everything the draws of the distance need. */
@@ -56,6 +58,8 @@ export interface SurroundingsResult {
 /** What all detections share. */
 export interface SurroundingsContext {
   criteria: CriteriaSettings;
+  /** km/s/Mpc. */
+  h0: number;
   reaches: readonly RedshiftReach[];
   groups: readonly GroupRow[];
   missed: MissedTable;
@@ -154,6 +158,9 @@ function countsAbove(
 const counts = (row: NeighbourRow, distanceMpc: number): boolean =>
   distanceMpc <= row.insideBelowMpc && distanceMpc >= row.countsAboveMpc;
 
+/** Whether its own measured distance puts a row elsewhere along the line of sight. */
+export const isElsewhereAlong = (row: NeighbourRow): boolean => row.countsAboveMpc === Infinity;
+
 /** Whether a known neighbour counts were the detection at this distance. */
 export function isAccompaniedAt(rows: readonly NeighbourRow[], distanceMpc: number): boolean {
   return rows.some((row) => counts(row, distanceMpc));
@@ -234,6 +241,7 @@ export function judgeSurroundings(
     missed,
     missedClustered: missed * context.missed.boost,
     covered,
+    windowMpc: rules.velocityWindowKms / context.h0,
     obstacles,
     pool: inWindow,
   };
