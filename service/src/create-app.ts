@@ -3,7 +3,10 @@ import { NestFactory } from '@nestjs/core';
 import type { NestExpressApplication } from '@nestjs/platform-express';
 import cookieParser from 'cookie-parser';
 import type { NextFunction, Request, Response } from 'express';
+import type { IncomingMessage } from 'node:http';
 import { AppModule } from './app.module.ts';
+import { apiRequests } from './common/api-requests.ts';
+import { guardJson } from './common/json-guard.ts';
 import { serveOpenApi } from './common/openapi.ts';
 import { Readiness } from './common/readiness.ts';
 import { makeLogger, nestLogger, requestLog } from './common/request-log.ts';
@@ -17,6 +20,7 @@ export async function createApp(env: Env): Promise<NestExpressApplication> {
   const app = await NestFactory.create<NestExpressApplication>(AppModule.register(env), {
     logger: nestLogger(logger),
     abortOnError: false,
+    bodyParser: false,
     forceCloseConnections: true,
   });
   app.set('trust proxy', env.trustProxy);
@@ -32,9 +36,12 @@ export async function createApp(env: Env): Promise<NestExpressApplication> {
     if (/^\/(health\/(live|ready)|metrics)(\?|$)/.test(request.url)) request.url = `/api/v1${request.url}`;
     next();
   });
+  app.use(apiRequests);
   app.use(untilReady(app.get(Readiness, { strict: false })));
   app.use(cookieParser());
-  app.useBodyParser('json', { limit: '5mb' });
+  const verify = (_request: IncomingMessage, _response: unknown, body: Buffer): void => guardJson(body);
+  // JSON only: a form another site sends on its visitor's behalf is not read. The type does not know `verify`.
+  app.useBodyParser('json', { limit: '5mb', verify } as object);
   app.setGlobalPrefix('api/v1');
   serveOpenApi(app);
   return app;

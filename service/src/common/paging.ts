@@ -21,12 +21,19 @@ export function decodeCursor(cursor: string | undefined): (string | number | nul
   ]);
 }
 
+/** The last row number the database can hold: no list goes further. */
+const FURTHEST = 2_147_483_646;
+
+/** A place in a list that can be a cursor's. */
+export const isPlace = (value: unknown): value is number =>
+  Number.isInteger(value) && (value as number) >= 0 && (value as number) <= FURTHEST;
+
 /** Offset of a cursor made by {@link pageByOffset}; 0 without one. */
 export function offsetOf(cursor: string | undefined): number {
   const place = decodeCursor(cursor);
   if (!place) return 0;
   const offset = place[0];
-  if (typeof offset === 'number' && Number.isInteger(offset) && offset >= 0) return offset;
+  if (isPlace(offset)) return offset;
   throw new AppError('VALIDATION_FAILED', 'The cursor is not one of this list; start again without it.');
 }
 

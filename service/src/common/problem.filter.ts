@@ -48,7 +48,7 @@ export function toProblem(error: unknown): Problem {
     };
   }
   const status = error instanceof HttpException ? error.getStatus() : statusOf(error);
-  const code = BY_STATUS[status];
+  const code = BY_STATUS[status] ?? (status >= 400 && status < 500 ? 'VALIDATION_FAILED' : undefined);
   return code ? { ...base(code), ...detailOf(error) } : base('INTERNAL');
 }
 

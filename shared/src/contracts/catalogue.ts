@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { bandFacts, intakeSettings } from './intake-settings.ts';
 import { intakeColumn } from './intake.ts';
-import { listQuery } from './list.ts';
+import { listQuery, rowNumber } from './list.ts';
 import { CATALOGUE_KINDS } from './words.ts';
 
 /** A published table and what is known of it. */
@@ -39,7 +39,7 @@ export const catalogueRowsQuery = listQuery.extend({
   raDeg: z.coerce.number().optional(),
   decDeg: z.coerce.number().min(-90).max(90).optional(),
   radiusArcsec: z.coerce.number().positive().max(36_000).optional(),
-  row: z.coerce.number().int().positive().optional(),
+  row: z.coerce.number().pipe(rowNumber).optional(),
 });
 export const catalogueRow = z.object({
   row: z.int(),

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { listQuery } from './list.ts';
+import { listQuery, rowNumber } from './list.ts';
 import { verdictSort } from './run.ts';
 import { verdictItem } from './verdict.ts';
 import { STARLIGHT_VERDICTS, SURROUNDINGS_VERDICTS } from './words.ts';
@@ -32,7 +32,7 @@ export type Review = z.output<typeof review>;
 
 export const createOverrideRequest = z.strictObject({
   catalogueId: z.uuid(),
-  rowId: z.int().positive(),
+  rowId: rowNumber,
   action: z.enum(['accept', 'reject']),
   note: note.min(1, 'say why: an override needs a note'),
 });

@@ -18,6 +18,7 @@ import {
   UseInterceptors,
 } from '@nestjs/common';
 import { z } from 'zod';
+import { guardJson } from '../../common/json-guard.ts';
 import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
 import { IntakesService } from './intakes.service.ts';
 import { type UploadedTable, UploadInterceptor } from './upload.interceptor.ts';
@@ -25,6 +26,7 @@ import { type UploadedTable, UploadInterceptor } from './upload.interceptor.ts';
 const id = { schema: z.uuid() };
 /** Settings come as JSON text in a field of the form. */
 const settingsText = z.string().transform((text, context) => {
+  guardJson(Buffer.from(text));
   try {
     return JSON.parse(text) as unknown;
   } catch {

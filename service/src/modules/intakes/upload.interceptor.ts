@@ -48,7 +48,7 @@ export class UploadInterceptor implements NestInterceptor {
         this.files
           .save((file as { stream: Readable }).stream)
           .then((kept) => {
-            saved = { ...kept, fileName: file.originalname.slice(0, 255) || 'table' };
+            saved = { ...kept, fileName: shownName(file.originalname) };
             done(null, {});
           })
           .catch((error: Error) => done(error));
@@ -76,6 +76,16 @@ export class UploadInterceptor implements NestInterceptor {
       });
     });
   }
+}
+
+/** The name as it is shown and stored: the file itself lies under a key of its own. */
+function shownName(given: string): string {
+  return (
+    given
+      .replace(/\p{Cc}/gu, '')
+      .trim()
+      .slice(0, 255) || 'table'
+  );
 }
 
 function multipartFault({ code, field, message }: multer.MulterError): string {

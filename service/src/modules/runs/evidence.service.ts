@@ -4,7 +4,7 @@ import type { Candidate, Neighbour } from '@eremite/shared/contracts/verdict';
 import { Injectable } from '@nestjs/common';
 import type { z } from 'zod';
 import { AppError } from '../../common/app-error.ts';
-import { decodeCursor, encodeCursor } from '../../common/paging.ts';
+import { decodeCursor, encodeCursor, isPlace } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { readCandidates, readNeighbours, type EvidenceCatalogue } from '../../scoring/evidence.ts';
 import { CANDIDATE_COLUMNS, evidenceTable, NEIGHBOUR_COLUMNS } from './evidence-columns.ts';
@@ -100,7 +100,6 @@ export class EvidenceService {
 function placeOf(cursor: string | undefined): [position: number, skip: number] {
   const place = decodeCursor(cursor) ?? [0, 0];
   const [position, skip] = place;
-  const whole = (value: unknown): value is number => Number.isInteger(value) && (value as number) >= 0;
-  if (place.length === 2 && whole(position) && whole(skip)) return [position, skip];
+  if (place.length === 2 && isPlace(position) && isPlace(skip)) return [position, skip];
   throw new AppError('VALIDATION_FAILED', 'The cursor is not one of this list; start again without it.');
 }
