@@ -6,22 +6,28 @@ import {
   type NestInterceptor,
   StreamableFile,
 } from '@nestjs/common';
+import { Reflector } from '@nestjs/core';
 import type { Response } from 'express';
 import { catchError, from, mergeMap, type Observable, of, switchMap, throwError } from 'rxjs';
 import { AppError } from './app-error.ts';
 import { IdempotencyRepository } from './idempotency.repository.ts';
+import { IS_SECRET } from './secret-answer.ts';
 import type { SignedInRequest } from './signed-in-user.ts';
 
 /** A POST repeated with the same Idempotency-Key gets the first answer again and does nothing. */
 @Injectable()
 export class IdempotencyInterceptor implements NestInterceptor {
-  constructor(private readonly answers: IdempotencyRepository) {}
+  constructor(
+    private readonly answers: IdempotencyRepository,
+    private readonly reflector: Reflector,
+  ) {}
 
   async intercept(context: ExecutionContext, next: CallHandler): Promise<Observable<unknown>> {
     const http = context.switchToHttp();
     const request = http.getRequest<SignedInRequest>();
     const key = request.get('idempotency-key');
     if (request.method !== 'POST' || !request.user || key === undefined) return next.handle();
+    if (this.reflector.get<boolean>(IS_SECRET, context.getHandler())) return next.handle();
     if (!/^[\x21-\x7e]{1,200}$/.test(key)) {
       throw new AppError('VALIDATION_FAILED', 'Idempotency-Key: 1 to 200 printable characters without blanks.');
     }

@@ -1,6 +1,6 @@
 import { Inject, Injectable } from '@nestjs/common';
 import { idempotentAnswers } from '@eremite/schema';
-import { and, eq, lt, sql } from 'drizzle-orm';
+import { and, eq, isNull, lt, or, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../database/database.ts';
 
 export interface IdempotentKey {
@@ -12,9 +12,15 @@ export interface IdempotentKey {
 export class IdempotencyRepository {
   constructor(@Inject(DATABASE) private readonly db: Database) {}
 
-  /** Claims the key; undefined when it was free, else what is known of the earlier request. */
+  /**
+   * Claims the key; undefined when it was free, else what is known of the earlier request. Answers are kept for a day; a
+   * claim without one after an hour is that of a process that died.
+   */
   async claim(id: IdempotentKey, path: string, bodyHash: string, db = this.db) {
-    await db.delete(idempotentAnswers).where(lt(idempotentAnswers.createdAt, sql`now() - interval '1 day'`));
+    const { createdAt, status } = idempotentAnswers;
+    const old = lt(createdAt, sql`now() - interval '1 day'`);
+    const orphaned = and(isNull(status), lt(createdAt, sql`now() - interval '1 hour'`));
+    await db.delete(idempotentAnswers).where(or(old, orphaned));
     const claimed = await db
       .insert(idempotentAnswers)
       .values({ ...id, path, bodyHash })

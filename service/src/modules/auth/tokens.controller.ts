@@ -8,6 +8,7 @@ import { listOf, type ListQuery, listQuery } from '@eremite/shared/contracts/lis
 import { Body, Controller, Delete, Get, HttpCode, Param, Post, Query, SerializeOptions } from '@nestjs/common';
 import { z } from 'zod';
 import { pageOf } from '../../common/paging.ts';
+import { SecretAnswer } from '../../common/secret-answer.ts';
 import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
 import { TokensService } from './tokens.service.ts';
 
@@ -22,6 +23,7 @@ export class TokensController {
   }
 
   @Post()
+  @SecretAnswer()
   @SerializeOptions({ schema: createdToken })
   create(@CurrentUser() user: SignedInUser, @Body({ schema: createTokenRequest }) body: CreateTokenRequest) {
     return this.tokens.create(user, body);
