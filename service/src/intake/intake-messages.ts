@@ -19,7 +19,7 @@ export type IntakeFailure =
   | { kind: 'settings'; faults: SettingsFault[] }
   | { kind: 'unexpected'; message: string; stack?: string };
 
-/** From the worker. After `tiles` and `sidelined` it waits for one `taken`, so that it never runs ahead of the database. */
+/** From the worker. `tiles` and `sidelined` are answered by a `taken` each, so that it never runs far ahead of the database. */
 export type IntakeMessage =
   | { kind: 'progress'; fraction: number; rows: number }
   | { kind: 'tiles'; tiles: Tile[] }

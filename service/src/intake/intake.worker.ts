@@ -1,7 +1,7 @@
-import { once } from 'node:events';
 import { parentPort } from 'node:worker_threads';
 import { fileSource } from '../tables/bytes/byte-source.ts';
 import { TableError } from '../tables/table.ts';
+import { Handovers } from './handovers.ts';
 import { inspect } from './inspect.ts';
 import type { IntakeFailure, IntakeMessage, IntakeTask } from './intake-messages.ts';
 import { publish } from './publish.ts';
@@ -12,11 +12,11 @@ import { SettingsError } from './resolved.ts';
 const port = parentPort!;
 const send = (message: IntakeMessage, transfer: ArrayBuffer[] = []): void => port.postMessage(message, transfer);
 const REPORT_MS = 100;
+const handovers = new Handovers();
 
 async function handOver(message: IntakeMessage, transfer: ArrayBuffer[] = []): Promise<void> {
-  const taken = once(port, 'message');
+  await handovers.begin();
   send(message, transfer);
-  await taken;
 }
 
 async function work(task: IntakeTask): Promise<void> {
@@ -38,7 +38,9 @@ async function work(task: IntakeTask): Promise<void> {
     },
     sidelined: (rows: Extract<IntakeMessage, { kind: 'sidelined' }>['rows']) => handOver({ kind: 'sidelined', rows }),
   };
-  send({ kind: 'published', published: await publish(source, task.settings, sink, { onProgress }) });
+  const published = await publish(source, task.settings, sink, { onProgress });
+  await handovers.allTaken();
+  send({ kind: 'published', published });
 }
 
 function failureOf(error: unknown): IntakeFailure {
@@ -53,6 +55,10 @@ function failureOf(error: unknown): IntakeFailure {
 }
 
 port.on('message', (message: IntakeTask | 'taken') => {
-  if (message === 'taken') return;
-  void work(message).catch((error: unknown) => send({ kind: 'failed', failure: failureOf(error) }));
+  if (message === 'taken') return handovers.taken();
+  work(message).catch(async (error: unknown) => {
+    // The next task must not hear of what this one has handed over.
+    await handovers.allTaken();
+    send({ kind: 'failed', failure: failureOf(error) });
+  });
 });

@@ -51,16 +51,14 @@ export async function publish(
     const originals = originalTable(chunk);
     const kept = extracted.kept.length === chunk.rows ? originals : selectRows(originals, extracted.kept);
     if (resolved.footprint.type === 'rows') positions.add(extracted.roles);
-    const tiles = collector.add(extracted.roles, kept);
-    if (tiles.length) await sink.tiles(tiles);
+    await handOut(collector.add(extracted.roles, kept), sink);
     const aside = extracted.sidelined.map(({ row, index, text }) => ({
       ...row,
       cells: index === null ? [text ?? ''] : chunk.columns.map((data) => cellAt(data, index)),
     }));
     if (aside.length) await sink.sidelined(aside);
   });
-  const last = collector.finish();
-  if (last.length) await sink.tiles(last);
+  await handOut(collector.finish(), sink);
   const { type, moc, areaSqDeg, note } = coverageOf(resolved, ...positions.all());
   if (settings.footprint === undefined && resolved.kind !== 'hi') {
     questions.push({ level: 'assumed', pointer: '/footprint', text: `The area covered is not stated: ${note}` });
@@ -72,6 +70,22 @@ export async function publish(
     assumed: questions.filter(({ level }) => level === 'assumed').map(({ text }) => text),
     coverage: { type, order: moc?.order ?? null, moc: moc?.toAscii() ?? null, areaSqDeg, note },
   };
+}
+
+/** Bytes of tiles handed over at a time. */
+const BATCH_BYTES = 8 * 1024 ** 2;
+
+async function handOut(tiles: Iterable<Tile>, sink: PublishSink): Promise<void> {
+  let batch: Tile[] = [];
+  let bytes = 0;
+  for (const tile of tiles) {
+    batch.push(tile);
+    bytes += tile.roles.length + tile.originals.length;
+    if (bytes < BATCH_BYTES) continue;
+    await sink.tiles(batch);
+    [batch, bytes] = [[], 0];
+  }
+  if (batch.length > 0) await sink.tiles(batch);
 }
 
 /** Columns by their number, since names may be anything. */

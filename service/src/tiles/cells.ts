@@ -8,7 +8,9 @@ export const TILE_CELLS = cellCount(TILE_ORDER);
 
 /** Nested cell of each position, degrees ICRS. */
 export function tileCells(raDeg: Float64Array, decDeg: Float64Array): Uint32Array {
-  return Uint32Array.from(raDeg, (ra, i) => cellOf(TILE_ORDER, ra * DEGREE, decDeg[i]! * DEGREE));
+  const cells = new Uint32Array(raDeg.length);
+  for (let i = 0; i < cells.length; i++) cells[i] = cellOf(TILE_ORDER, raDeg[i]! * DEGREE, decDeg[i]! * DEGREE);
+  return cells;
 }
 
 /** Cells that a cone can touch, as ranges [first, last] of nested indices. */

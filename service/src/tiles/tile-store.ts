@@ -5,6 +5,7 @@ import { BulkStore } from '../database/bulk.ts';
 import { cellsOfCone } from './cells.ts';
 import { type PackedColumns, textAt, unpackColumns } from './column-pack.ts';
 import { rowCells } from './original-cells.ts';
+import { unpackOriginals } from './original-pack.ts';
 import { joinRoles } from './join-roles.ts';
 import type { RoleTable } from './role-table.ts';
 import { blockOf, PLACES_CELL, placesOf, type RowPlace } from './row-places.ts';
@@ -193,8 +194,9 @@ export class TileStore {
       const { cell, part } = wanted[0]!;
       for await (const batch of this.bulk.read(select, [catalogueId, cell, part], ['bytea', 'bytea'])) {
         for (const [roleBlob, originalBlob] of batch as [Uint8Array, Uint8Array][]) {
-          const { columns } = unpackColumns(roleBlob);
-          const originals = unpackColumns(originalBlob);
+          const roles = unpackColumns(roleBlob);
+          const { columns } = roles;
+          const originals = unpackOriginals(originalBlob, roles);
           for (const { row, at } of wanted) {
             const [raDeg, decDeg] = [(columns['raDeg'] as Float64Array)[at]!, (columns['decDeg'] as Float64Array)[at]!];
             rows.set(row, { row, raDeg, decDeg, separationArcsec: null, cells: rowCells(originals, at) });
@@ -213,7 +215,8 @@ function within(
   decDeg: number,
   radiusArcsec: number,
 ): StoredRow[] {
-  const { columns, rows } = unpackColumns(roleBlob);
+  const roles = unpackColumns(roleBlob);
+  const { columns, rows } = roles;
   const [ra, dec, row] = [
     columns['raDeg'] as Float64Array,
     columns['decDeg'] as Float64Array,
@@ -226,7 +229,7 @@ function within(
     if (Math.abs(dec[i]! - decDeg) > reach) continue;
     const apart = (separation(raDeg * DEGREE, decDeg * DEGREE, ra[i]! * DEGREE, dec[i]! * DEGREE) / DEGREE) * 3600;
     if (apart > radiusArcsec) continue;
-    originals ??= unpackColumns(originalBlob);
+    originals ??= unpackOriginals(originalBlob, roles);
     found.push({
       row: row[i]!,
       raDeg: ra[i]!,
