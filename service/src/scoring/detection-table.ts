@@ -41,6 +41,8 @@ export interface Detection {
   signalToNoise: number;
   reliability: number;
   ebvMag: number;
+  /** Table whose rows about the place gave the reddening; empty where it is the detection's own or missing. */
+  ebvSource: string;
   continuumMjy: number;
   beam: { major: number; minor: number; angleDeg: number } | null;
   /** 1-D errors of the HI position with its systematic part. */
@@ -132,6 +134,7 @@ function readDetection(
     signalToNoise: positive('signalToNoise'),
     reliability: value('reliability'),
     ebvMag: value('ebvMag'),
+    ebvSource: '',
     continuumMjy: value('continuumMjy'),
     beam: catalogue.beamArcsec,
     ...placeError(input, catalogue, positive('positionErrorArcsec'), positive('signalToNoise'), logHiMass, distance),

@@ -105,6 +105,9 @@ describe('the sentences of a near detection', () => {
       'No distance of far (stars) is known. The window of 500 km/s is 7.1 Mpc of Hubble flow, more than the 1.0 Mpc to the gas: it may lie far behind.',
     ]);
     expect(behind(distant)).toEqual([]);
+    const [approaching] = await score(['m,150,-26,-200,100,800'], ['a,151,-26,-250,5']);
+    expect(approaching!.item.surroundings).toBe('accompanied');
+    expect(behind(approaching)).toEqual([]);
   });
 
   it('tell galaxies that are elsewhere by their own distances from those too faint to count', async () => {

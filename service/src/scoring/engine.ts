@@ -14,6 +14,7 @@ import { relationOf } from './expectation.ts';
 import { readGroups } from './group-list.ts';
 import { judgeDoubts } from './judge-doubts.ts';
 import { learnPriors, learnRelation, learntNotes, type Lesson, lessonOf } from './learning.ts';
+import { fillReddening } from './local-reddening.ts';
 import { MissedTable } from './missed-table.ts';
 import { buildNeighbourPool, type NeighbourPool } from './neighbour-pool.ts';
 import { type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
@@ -67,6 +68,7 @@ export class Engine {
   constructor(readonly input: EngineInput) {
     const { criteria, survey } = input;
     this.detections = readDetections(input);
+    fillReddening(this.detections, input.catalogues);
     this.catalogues = input.catalogues.map((catalogue, index) =>
       prepareCatalogue(catalogue, index, criteria, COUNTERPART_KINDS.includes(catalogue.kind)),
     );

@@ -5,7 +5,12 @@ export const percent = (p: number): string => {
   if (value > 99.9 && value < 100) return 'over 99.9 per cent';
   return `${value >= 10 ? Number(value.toPrecision(3)) : Number(value.toPrecision(2))} per cent`;
 };
-export const arcsec = (x: number): string => `${x >= 100 ? x.toFixed(0) : x.toFixed(1)} arcsec`;
+/** An angle given in arcsec; in arcmin or degrees where it is large. */
+export function arcsec(x: number): string {
+  if (x >= 2 * 3600) return `${(x / 3600).toFixed(1)} degrees`;
+  if (x >= 1000) return `${(x / 60).toFixed(1)} arcmin`;
+  return `${x >= 100 ? x.toFixed(0) : x.toFixed(1)} arcsec`;
+}
 export const kms = (x: number): string => `${x.toFixed(0)} km/s`;
 export const signedKms = (x: number): string => `${x < 0 ? '-' : '+'}${Math.abs(x).toFixed(0)} km/s`;
 export const kpc = (x: number): string => (x >= 1000 ? `${(x / 1000).toFixed(2)} Mpc` : `${x.toFixed(0)} kpc`);
@@ -26,3 +31,11 @@ export const probability = (p: number): string => {
   if (p > 0.999 && p < 1) return 'over 0.999';
   return p.toFixed(p > 0.99 || p < 0.01 ? 3 : 2);
 };
+/** A power, never rounded up: it is read against a threshold close to one. */
+export const powerFigure = (p: number): string =>
+  p > 0.999 && p < 1 ? 'over 0.999' : (Math.floor(1000 * p + 1e-9) / 1000).toFixed(3);
+/** A probability said to be under a limit, with as many digits as that takes to be seen. */
+export function probabilityUnder(p: number, limit: number): string {
+  const plain = probability(p);
+  return Number(plain) < limit || !plain.startsWith('0') ? plain : (Math.floor(1000 * p) / 1000).toFixed(3);
+}

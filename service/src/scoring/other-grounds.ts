@@ -50,7 +50,9 @@ export function surroundingsGrounds(
       'for',
       `${neighbourName(deciding)}, ${bright}, lies ${far} away${where}, ${signedKms(deciding.velocityDifferenceKms)} from the gas.`,
     );
-    if (detection.angularMpc < result.windowMpc && Number.isNaN(ownDistance(deciding))) {
+    // What approaches is no part of the Hubble flow.
+    const recedes = (deciding.catalogue.czKms?.[deciding.index] ?? NaN) > 0;
+    if (recedes && detection.angularMpc < result.windowMpc && Number.isNaN(ownDistance(deciding))) {
       say(
         'against',
         `No distance of ${neighbourName(deciding)} is known. The window of ${velocityWindowKms} km/s is ${mpc(result.windowMpc)} of Hubble flow, more than the ${mpc(detection.angularMpc)} to the gas: it may lie far behind.`,
@@ -127,12 +129,18 @@ export function dataGrounds({ detection, prior, priorSource, reliability, candid
     `Position error ${arcsec(detection.error.majorArcsec)} (one-dimensional), ${detection.errorSource}; search radius ${arcsec(detection.searchArcsec)}, ${detection.searchSource}.`,
     'position',
   );
-  say('data', `Prior share with a galaxy of stars: ${prior.toFixed(3)}, ${priorSource}.`, 'prior');
+  say('data', `Prior share with a galaxy of stars: ${probability(prior)}, ${priorSource}.`, 'prior');
   if (Number.isNaN(reliability))
     say('data', 'No reliability of the line is given: it is taken as real.', 'reliability');
   if (!(detection.fluxJyKms > 0))
     say('data', 'No HI flux is given: the expected counterpart is known only roughly.', 'expected');
   if (Number.isNaN(detection.ebvMag)) say('data', 'No reddening is given: extinction is taken as zero.', 'extinction');
+  else if (detection.ebvSource !== '')
+    say(
+      'data',
+      `The detection gives no reddening: E(B-V) ${detection.ebvMag.toFixed(2)} mag is the median of the rows of ${detection.ebvSource} within 10 arcmin.`,
+      'extinction',
+    );
   const absurd = candidates.filter(
     ({ czKms, usableCzKms }) => Number.isNaN(usableCzKms) && Number.isFinite(czKms),
   ).length;

@@ -3,7 +3,7 @@ import type { Ground } from '@eremite/shared/contracts/verdict';
 import { mahalanobisSquared } from '@eremite/shared/science/counterpart/position-error';
 import { numberRole } from '../tiles/role-table.ts';
 import type { StarlightAssessment } from './assess.ts';
-import { arcsec, kms, mag, percent, probability, ratio, signedKms } from './figures.ts';
+import { arcsec, kms, mag, percent, powerFigure, probability, probabilityUnder, ratio, signedKms } from './figures.ts';
 import { rowName } from './prepared-catalogue.ts';
 import type { WeighedObject } from './weighed-object.ts';
 
@@ -175,8 +175,7 @@ function sayContested(assessment: StarlightAssessment, say: Say): void {
   );
 }
 
-const powerWords = (power: number | null): string =>
-  power === null ? 'unknown' : power > 0.99 && power < 0.9999 ? power.toFixed(4) : power.toFixed(3);
+const powerWords = (power: number | null): string => (power === null ? 'unknown' : powerFigure(power));
 
 function powerSentence({ silence, detection }: StarlightAssessment): string {
   const { best } = silence;
@@ -224,13 +223,13 @@ function sayCannotTell(assessment: StarlightAssessment, criteria: CriteriaSettin
   if (none < absence.darkProbability) {
     say(
       'for',
-      `P(none) is ${probability(none)}, under ${absence.darkProbability}; P(missed) is ${probability(missed)}, P(spurious) ${probability(spurious)}.`,
+      `P(none) is ${probabilityUnder(none, absence.darkProbability)}, under ${absence.darkProbability}; P(missed) is ${probability(missed)}, P(spurious) ${probability(spurious)}.`,
       'absence',
     );
   } else if (none + missed < absence.noneOrMissedProbability) {
     say(
       'for',
-      `P(none) + P(missed) is ${probability(none + missed)}, under ${absence.noneOrMissedProbability}.`,
+      `P(none) + P(missed) is ${probabilityUnder(none + missed, absence.noneOrMissedProbability)}, under ${absence.noneOrMissedProbability}.`,
       'absence',
     );
   }

@@ -1,0 +1,70 @@
+import { DEGREE } from '@eremite/shared/science/constants';
+import { cellOf } from '@eremite/shared/science/sky/healpix';
+import { buildZoneGrid } from '../matching/build-zone-grid.ts';
+import { pairSearch } from '../matching/pair-search.ts';
+import { numberRole } from '../tiles/role-table.ts';
+import type { Detection } from './detection-table.ts';
+import type { EngineCatalogue } from './engine-input.ts';
+
+/** The map of the dust behind such columns is 6 arcmin wide (Schlegel et al. 1998), so that this is still the same place. */
+const NEAR_ARCSEC = 600;
+/** One row a cell of 1.7 arcmin says all that the map has to say, and bounds the work in deep tables. */
+const THIN_ORDER = 11;
+
+interface Samples {
+  name: string;
+  raDeg: Float64Array;
+  decDeg: Float64Array;
+  ebvMag: Float64Array;
+}
+
+/** Rows with a reddening, thinned; undefined where the table has none. */
+function samplesOf({ name, roles }: EngineCatalogue): Samples | undefined {
+  const ebv = numberRole(roles, 'ebvMag');
+  if (!ebv) return undefined;
+  const { raDeg, decDeg } = roles.columns;
+  const kept: number[] = [];
+  const seen = new Set<number>();
+  for (let i = 0; i < roles.rows; i++) {
+    if (!(ebv[i]! >= 0)) continue;
+    const cell = cellOf(THIN_ORDER, (((raDeg[i]! % 360) + 360) % 360) * DEGREE, decDeg[i]! * DEGREE);
+    if (seen.has(cell)) continue;
+    seen.add(cell);
+    kept.push(i);
+  }
+  if (kept.length === 0) return undefined;
+  const pick = (values: Float64Array) => Float64Array.from(kept, (i) => values[i]!);
+  return { name, raDeg: pick(raDeg), decDeg: pick(decDeg), ebvMag: pick(ebv) };
+}
+
+/**
+ * Gives detections without a reddening of their own that of the sky about them: the median E(B-V) of the rows within 10
+ * arcmin of the first table, in the order of the run, that has any there. Where no table has, it stays missing.
+ */
+export function fillReddening(detections: readonly Detection[], catalogues: readonly EngineCatalogue[]): void {
+  let open = detections.filter(({ ebvMag }) => Number.isNaN(ebvMag));
+  for (const catalogue of catalogues) {
+    if (open.length === 0) return;
+    const samples = samplesOf(catalogue);
+    if (!samples) continue;
+    const pairs = pairSearch(buildZoneGrid(samples.raDeg, samples.decDeg), {
+      raDeg: Float64Array.from(open, ({ raDeg }) => raDeg),
+      decDeg: Float64Array.from(open, ({ decDeg }) => decDeg),
+      radiusArcsec: new Float64Array(open.length).fill(NEAR_ARCSEC),
+    });
+    const near: number[][] = open.map(() => []);
+    for (let k = 0; k < pairs.position.length; k++) near[pairs.position[k]!]!.push(samples.ebvMag[pairs.row[k]!]!);
+    near.forEach((values, i) => {
+      if (values.length === 0) return;
+      open[i]!.ebvMag = median(values);
+      open[i]!.ebvSource = samples.name;
+    });
+    open = open.filter(({ ebvMag }) => Number.isNaN(ebvMag));
+  }
+}
+
+function median(values: number[]): number {
+  const sorted = values.sort((a, b) => a - b);
+  const middle = sorted.length >> 1;
+  return sorted.length % 2 === 1 ? sorted[middle]! : (sorted[middle - 1]! + sorted[middle]!) / 2;
+}
