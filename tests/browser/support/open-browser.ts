@@ -43,7 +43,8 @@ export async function openBrowser(): Promise<TestBrowser> {
     if (theme) {
       const kept = JSON.stringify({ theme });
       await made.addInitScript((value) => {
-        if (!localStorage.getItem('eremite.preferences')) localStorage.setItem('eremite.preferences', value);
+        // Not on the blank page a tab begins with, which may keep nothing.
+        if (location.protocol === 'http:') localStorage.setItem('eremite.preferences', value);
       }, kept);
     }
     return made;

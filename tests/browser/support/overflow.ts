@@ -26,7 +26,7 @@ export function overflow(page: Page): Promise<string[]> {
       const name = `${element.tagName.toLowerCase()} “${(element.textContent || element.id).trim().slice(0, 40)}”`;
       if (box.right > root.clientWidth + 1 || box.left < -1)
         found.push(`${name} reaches from ${box.left} to ${box.right}`);
-      const isBlock = getComputedStyle(element).display !== 'inline' && element.tagName !== 'SELECT';
+      const isBlock = getComputedStyle(element).display !== 'inline' && !/^(SELECT|INPUT)$/.test(element.tagName);
       if (isBlock && element.scrollWidth > element.clientWidth + 2) found.push(`${name} is cut`);
     }
     return found;
