@@ -29,7 +29,7 @@ export function Component() {
         </div>
       </div>
       <CriteriaForm
-        surveyId={survey.id}
+        survey={survey}
         start={base.data?.settings ?? criteriaSettings.parse({})}
         onSaved={({ number }) => {
           void say(`Saved as criteria ${number}.`);

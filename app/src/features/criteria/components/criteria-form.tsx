@@ -5,26 +5,28 @@ import {
   type Criteria,
   type CriteriaSettings,
 } from '@eremite/shared/contracts/criteria';
+import type { Survey } from '@eremite/shared/contracts/survey';
 import { useMemo, useState } from 'react';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { useSaveCriteria } from '../api/criteria.ts';
 import { CRITERIA_FIELDS, isStandard, valueOf } from '../hooks/criteria-fields.ts';
 import { CriteriaRow } from './criteria-row.tsx';
+import { PreviewPanel } from './preview-panel.tsx';
 import { SectionNav } from './section-nav.tsx';
 import './criteria.css';
 
 interface CriteriaFormProps {
-  surveyId: string;
+  survey: Survey;
   start: CriteriaSettings;
   onSaved: (saved: Criteria) => void;
 }
 
 /** The published defaults, each with what it does, its unit and its source; what differs is marked. */
-export function CriteriaForm({ surveyId, start, onSaved }: CriteriaFormProps) {
+export function CriteriaForm({ survey, start, onSaved }: CriteriaFormProps) {
   const [settings, setSettings] = useState(start);
   const [note, setNote] = useState('');
   const [onlyChanged, setOnlyChanged] = useState(false);
-  const save = useSaveCriteria(surveyId);
+  const save = useSaveCriteria(survey.id);
   const read = useMemo(() => criteriaSettings.safeParse(settings), [settings]);
   const faults = new Map(
     read.success ? [] : read.error.issues.map(({ path, message }) => [path.slice(0, 2).join('.'), message]),
@@ -34,7 +36,7 @@ export function CriteriaForm({ surveyId, start, onSaved }: CriteriaFormProps) {
   const set = (section: keyof CriteriaSettings, key: string, value: unknown) =>
     setSettings((old) => ({ ...old, [section]: { ...old[section], [key]: value } }));
   return (
-    <div className="criteria">
+    <div className="criteria criteria--preview">
       <SectionNav changed={changed}>
         <Switch
           checked={onlyChanged}
@@ -95,6 +97,7 @@ export function CriteriaForm({ surveyId, start, onSaved }: CriteriaFormProps) {
           )}
         </div>
       </div>
+      <PreviewPanel survey={survey} settings={read.data} />
     </div>
   );
 }
