@@ -34,7 +34,15 @@ export function closingQuestions(
       });
     }
   }
-  if (broken) questions.push({ level: 'warning', pointer: '/table', text: breakOff(broken) });
+  if (broken) {
+    // Rows may be missing that nobody knows of, so a person has to say that the rest is to be used.
+    const text = breakOff(broken);
+    questions.push(
+      settings.acceptTruncated
+        ? { level: 'assumed', pointer: '/acceptTruncated', text: `${text} That part is taken as accepted.` }
+        : { level: 'ask', pointer: '/acceptTruncated', text: `${text} Or set acceptTruncated to take that part.` },
+    );
+  }
   return questions;
 }
 

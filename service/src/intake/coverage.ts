@@ -73,7 +73,9 @@ function known({ kind, region }: Footprint, note: string): Coverage {
 function mocOf(value: unknown): Moc {
   if (typeof value === 'string') return Moc.parse(value);
   if (typeof value === 'object' && value !== null) return Moc.parseJson(JSON.stringify(value));
-  throw new DomainError('A MOC is given as text, such as "6/24185 24190", or as JSON by order.');
+  throw new DomainError(
+    'A MOC is given as text, such as "6/24185 24190", as JSON by order, or as {"fits": …} with a FITS file in base64.',
+  );
 }
 
 const isNumbers = (value: unknown, length: number): value is number[] =>

@@ -53,6 +53,8 @@ export async function inspect(
       ...settings,
       table: table.index,
       name: resolution.resolved.name,
+      // A region sent as a FITS file is shown as what was read.
+      ...(settings.footprint?.type === 'moc' ? { footprint: resolution.resolved.footprint } : {}),
       columns: takenColumns(catalogue, settings),
     },
   };

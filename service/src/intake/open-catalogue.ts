@@ -9,6 +9,7 @@ import {
   TableError,
   type TableFacts,
 } from '../tables/table.ts';
+import { withReadMoc } from './fits-moc.ts';
 import { type Resolution, resolveSettings } from './resolve-settings.ts';
 import { type SettingsFault } from './resolved.ts';
 import { type ColumnSample, sampleColumns } from './sample.ts';
@@ -58,9 +59,10 @@ export async function openCatalogue(
     const known = open.tables.map(({ index, name }) => `${index} (${name})`).join(', ');
     faults.push({ pointer: '/table', detail: `The file has no table ${wanted}; it has ${known}.` });
   }
+  const stated = await withReadMoc(settings, faults);
   const firstChunk = await first(open, table.index);
   const samples = sampleColumns(firstChunk, table.columns.length);
-  const resolution = resolveSettings(settings, table, samples);
+  const resolution = resolveSettings(stated, table, samples);
   resolution.faults.unshift(...faults);
   for (const note of table.notes) resolution.questions.push({ level: 'warning', pointer: '/table', text: note });
   let broken: TableError | undefined;

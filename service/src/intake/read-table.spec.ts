@@ -177,7 +177,13 @@ describe('reading a catalogue', () => {
       '<VOTABLE version="1.4"><RESOURCE><TABLE><FIELD name="ra" datatype="double" unit="deg"/><FIELD name="dec" datatype="double" unit="deg"/><DATA><TABLEDATA>';
     const reading = await read(`${head}${cells}`.slice(0, -20));
     expect(reading.roles.rows).toBe(299);
-    expect(reading.questions.some(({ level, text }) => level === 'warning' && /only in part/.test(text))).toBe(true);
+    // Asked of a person; a plan, which asks nobody, takes the rows and says so.
+    expect(levelAt(reading, '/acceptTruncated')).toEqual(['ask']);
+    expect(reading.check.ready).toBe(false);
+    expect(reading.assumed.join()).toMatch(/only in part.*299 rows before it are kept/);
+    const accepted = await read(`${head}${cells}`.slice(0, -20), { acceptTruncated: true });
+    expect(levelAt(accepted, '/acceptTruncated')).toEqual(['assumed']);
+    expect(accepted.check.ready).toBe(true);
   });
 
   it('takes the area from dense rows, states it, and refuses for sparse ones', async () => {

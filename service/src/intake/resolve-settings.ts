@@ -59,6 +59,8 @@ export function resolveSettings(
     keep: resolveKeep(settings, names, remarks),
     footprint: settings.footprint ?? { type: 'rows' },
     reference: settings.reference ?? '',
+    ...(settings.acceptTruncated ? { acceptTruncated: true } : {}),
+    ...(settings.mergeDuplicates && kind === 'hi' ? { mergeDuplicates: true } : {}),
   };
   for (const { band, column } of columns.magnitudes) {
     const unit = resolved.units[`magnitude:${band}`] ?? 'mag';

@@ -6,6 +6,8 @@ import { closingQuestions } from './closing-questions.ts';
 import { statedFootprint } from './coverage.ts';
 import { type ExtractedChunk, RoleExtractor } from './extract-roles.ts';
 import type { OpenCatalogue } from './open-catalogue.ts';
+import type { Duplicate } from './find-duplicates.ts';
+import { DuplicateFinder, duplicateQuestions, duplicatesIn, withoutDuplicates } from './merge-duplicates.ts';
 import { SettingsError } from './resolved.ts';
 import { SidelineTally } from './sideline-tally.ts';
 
@@ -33,18 +35,26 @@ export async function streamCatalogue(
   const extractor = new RoleExtractor(resolution.resolved, table.columns);
   const sidelined = new SidelineTally();
   const gatherer = new FactsGatherer();
+  const isHi = resolution.resolved.kind === 'hi';
+  const merging = isHi && settings.mergeDuplicates === true;
+  const duplicates = merging
+    ? await duplicatesIn(catalogue.chunks(), resolution.resolved, table.columns)
+    : new Map<number, Duplicate>();
+  const finder = new DuplicateFinder(resolution.resolved);
   let rows = 0;
   let leftOut = 0;
   for await (const chunk of catalogue.chunks()) {
-    const extracted = extractor.extract(chunk);
+    const extracted = withoutDuplicates(extractor.extract(chunk), chunk, duplicates);
     rows += chunk.rows + (chunk.broken?.length ?? 0);
     leftOut += extracted.leftOut;
     for (const { row } of extracted.sidelined) sidelined.add(row);
     gatherer.add(extracted.roles);
+    if (isHi && !merging) finder.add(extracted.roles);
     await take(extracted, chunk);
   }
   const closing = closingQuestions(settings, resolution.resolved, table, extractor, catalogue.broken());
-  const questions = [...resolution.questions, ...closing];
+  const found = merging ? [...duplicates.values()] : finder.find();
+  const questions = [...resolution.questions, ...closing, ...duplicateQuestions(found, merging)];
   const facts = gatherer.facts();
   const check: IntakeCheck = {
     rows,

@@ -75,7 +75,7 @@ export const bandFacts = z.strictObject({
 });
 
 export const FOOTPRINT_TYPES = ['unknown', 'rows', 'moc', 'circles', 'polygons', 'all-sky'] as const;
-/** `moc`: text (ASCII or JSON) or an object; `circles`: [[raDeg, decDeg, radiusDeg]]; `polygons`: [[[raDeg, decDeg], ...]]. */
+/** `moc`: text (ASCII or JSON), an object, or `{"fits": base64}` of a FITS file; `circles`: [[raDeg, decDeg, radiusDeg]]; `polygons`: [[[raDeg, decDeg], ...]]. */
 export const footprint = z.strictObject({ type: z.enum(FOOTPRINT_TYPES), value: z.unknown().optional() });
 
 /** How a table is read: the whole of what the wizard asks. All keys are optional but `kind`, `columns.ra` and `columns.dec`. */
@@ -119,6 +119,12 @@ export const intakeSettings = z.strictObject({
     .optional(),
   footprint: footprint.optional(),
   reference: z.string().max(2000).optional(),
+  /** The file breaks off and the rows before the break are to be taken all the same. */
+  acceptTruncated: z.boolean().optional(),
+  /** HI lists: of one source detected twice keep the row of the higher signal-to-noise ratio. */
+  mergeDuplicates: z.boolean().optional(),
+  /** Catalogue of the same survey and kind whose new version this is; it is used by no further run. */
+  supersedes: z.uuid().nullable().optional(),
 });
 export type IntakeSettings = z.output<typeof intakeSettings>;
 export type BandFacts = z.output<typeof bandFacts>;

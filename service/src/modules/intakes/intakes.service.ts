@@ -144,6 +144,9 @@ function remembered(earlier: IntakeRow): IntakeSettings {
     table: _table,
     footprint: _footprint,
     reference: _reference,
+    acceptTruncated: _truncated,
+    mergeDuplicates: _merge,
+    supersedes: _supersedes,
     ...settings
   } = storedCheck(earlier).filled;
   return settings;

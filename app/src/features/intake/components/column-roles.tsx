@@ -3,10 +3,11 @@ import '#components/data-table/data-table.css';
 import type { Intake } from '@eremite/shared/contracts/intake';
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { useMemo } from 'react';
-import { assign, readAssignment, writeAssignment } from '../hooks/column-assignment.ts';
+import { assign, readAssignment, takesUnit, withUnit, writeAssignment } from '../hooks/column-assignment.ts';
 import type { Change } from '../hooks/use-intake-draft.ts';
 import { Confidence } from './confidence.tsx';
 import { MAGNITUDE_ROLES, ROLE_WORDS } from './role-words.ts';
+import { UnitCell } from './unit-cell.tsx';
 
 interface ColumnRolesProps {
   intake: Intake;
@@ -18,7 +19,11 @@ interface ColumnRolesProps {
 export function ColumnRoles({ intake, draft, change }: ColumnRolesProps) {
   const assignment = useMemo(() => readAssignment(intake.columns, draft), [intake.columns, draft]);
   const set = (column: string, role: string | null) =>
-    change({ columns: writeAssignment(assign(assignment, column, role)) });
+    change({
+      columns: writeAssignment(assign(assignment, column, role)),
+      // The unit belonged to the column that had the role before.
+      ...(role && draft.units?.[role] !== undefined ? { units: withUnit(draft.units, role, undefined) } : {}),
+    });
   return (
     <div className="data-table__scroll column-roles" tabIndex={0} role="region" aria-label="Columns and their roles">
       <table className="data-table">
@@ -49,7 +54,18 @@ export function ColumnRoles({ intake, draft, change }: ColumnRolesProps) {
                 <td className="is-left" title={[column.description, column.ucd].filter(Boolean).join(' · ')}>
                   {column.name}
                 </td>
-                <td className="is-left">{column.unit ?? ''}</td>
+                <td className="is-left">
+                  {role && takesUnit(role) ? (
+                    <UnitCell
+                      column={column.name}
+                      stated={column.unit}
+                      given={draft.units?.[role]}
+                      onChange={(unit) => change({ units: withUnit(draft.units, role, unit) })}
+                    />
+                  ) : (
+                    (column.unit ?? '')
+                  )}
+                </td>
                 <td className="is-left column-roles__values">{firstValues(intake.preview, at)}</td>
                 <td className="is-left">
                   <RoleSelect column={column.name} role={role} onChange={(next) => set(column.name, next)} />

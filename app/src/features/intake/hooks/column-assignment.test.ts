@@ -1,6 +1,6 @@
 import type { IntakeColumn } from '@eremite/shared/contracts/intake';
 import { describe, expect, it } from 'vitest';
-import { assign, readAssignment, writeAssignment } from './column-assignment.ts';
+import { assign, readAssignment, takesUnit, withUnit, writeAssignment } from './column-assignment.ts';
 
 const column = (name: string, guess: string | null): IntakeColumn => ({
   name,
@@ -48,5 +48,21 @@ describe('the roles of columns', () => {
     expect(writeAssignment(readAssignment(COLUMNS, {})).magnitudes).toEqual([
       { column: 'rmag', error: 'e_rmag', limitFlag: null, band: 'r' },
     ]);
+  });
+});
+
+describe('the unit of a column', () => {
+  it('can be given for what has one', () => {
+    expect(['ra', 'distance', 'velocity', 'flux', 'magnitude:r'].filter(takesUnit)).toHaveLength(5);
+    expect(['name', 'redshift', 'decSign', 'raHours', 'magnitudeError:r', 'magnitudeLimit:r'].some(takesUnit)).toBe(
+      false,
+    );
+  });
+
+  it('is put in beside the others, and taken out again', () => {
+    const units = withUnit({ velocity: 'm/s' }, 'distance', 'kpc');
+    expect(units).toEqual({ velocity: 'm/s', distance: 'kpc' });
+    expect(withUnit(units, 'velocity', undefined)).toEqual({ distance: 'kpc' });
+    expect(withUnit({ distance: 'kpc' }, 'distance', undefined)).toBeUndefined();
   });
 });

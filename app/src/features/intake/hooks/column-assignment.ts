@@ -60,3 +60,21 @@ export function assign(assignment: Assignment, column: string, role: string | nu
   next[column] = role;
   return next;
 }
+
+/** Text, flags and pure numbers; the parts of a sexagesimal position have their units in their names. */
+const WITHOUT_UNIT =
+  /^(name|redshift|redshiftError|redshiftQuality|signalToNoise|reliability|axisRatio|starGalaxy|memberCount|ra(Hours|Minutes|Seconds)|dec(Sign|Degrees|Minutes|Seconds)|magnitude(Error|Limit):.*)$/;
+
+/** Whether a unit may be given for a role; errors and limits of a magnitude share that of the magnitude. */
+export const takesUnit = (role: string): boolean => !WITHOUT_UNIT.test(role);
+
+/** Units with one put in, or taken out where it is undefined. */
+export function withUnit(
+  units: IntakeSettings['units'],
+  role: string,
+  unit: string | undefined,
+): IntakeSettings['units'] {
+  const next = Object.fromEntries(Object.entries(units ?? {}).filter(([key]) => key !== role));
+  if (unit !== undefined) next[role] = unit;
+  return Object.keys(next).length > 0 ? next : undefined;
+}

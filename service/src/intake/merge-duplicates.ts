@@ -1,0 +1,82 @@
+import type { SettingsQuestion } from '@eremite/shared/contracts/intake';
+import type { ColumnFacts, RowChunk } from '../tables/table.ts';
+import type { Column, PackedColumns } from '../tiles/column-pack.ts';
+import { concatColumns, selectRows } from '../tiles/column-rows.ts';
+import { type ExtractedChunk, RoleExtractor } from './extract-roles.ts';
+import { type Duplicate, findDuplicates } from './find-duplicates.ts';
+import { lineOf } from './number-cells.ts';
+import type { ResolvedSettings } from './resolved.ts';
+
+const NEEDED = ['row', 'raDeg', 'decDeg', 'czKms', 'width50Kms', 'signalToNoise', 'positionErrorArcsec'];
+const EXAMPLES = 3;
+
+/** Gathers what is needed of every row of an HI list and finds the sources that are in it twice. */
+export class DuplicateFinder {
+  private readonly pieces: PackedColumns[] = [];
+
+  constructor(private readonly resolved: ResolvedSettings) {}
+
+  add({ rows, columns }: PackedColumns): void {
+    const own = NEEDED.filter((name) => columns[name]).map((name): [string, Column] => [name, columns[name]!]);
+    if (rows > 0) this.pieces.push({ rows, columns: Object.fromEntries(own) });
+  }
+
+  find(): Duplicate[] {
+    return this.pieces.length === 0 ? [] : findDuplicates(concatColumns(this.pieces), this.resolved);
+  }
+}
+
+/** Reads a list once through to find its duplicates. */
+export async function duplicatesIn(
+  chunks: AsyncIterable<RowChunk>,
+  resolved: ResolvedSettings,
+  columns: readonly ColumnFacts[],
+): Promise<Map<number, Duplicate>> {
+  const extractor = new RoleExtractor(resolved, columns);
+  const finder = new DuplicateFinder(resolved);
+  for await (const chunk of chunks) finder.add(extractor.extract(chunk).roles);
+  return new Map(finder.find().map((duplicate) => [duplicate.row, duplicate]));
+}
+
+/** The chunk with its duplicates put aside. */
+export function withoutDuplicates(
+  extracted: ExtractedChunk,
+  chunk: RowChunk,
+  duplicates: ReadonlyMap<number, Duplicate>,
+): ExtractedChunk {
+  const rows = extracted.roles.columns['row'] as Uint32Array;
+  const stays = Uint32Array.from({ length: rows.length }, (_, i) => i).filter((i) => !duplicates.has(rows[i]!));
+  if (stays.length === rows.length) return extracted;
+  const sidelined = [...extracted.sidelined];
+  for (let i = 0; i < rows.length; i++) {
+    const duplicate = duplicates.get(rows[i]!);
+    if (!duplicate) continue;
+    const index = extracted.kept[i]!;
+    const reason = `same source as row ${duplicate.of}`;
+    sidelined.push({ index, row: { row: rows[i]!, line: lineOf(chunk, index), column: null, value: null, reason } });
+  }
+  sidelined.sort((a, b) => a.row.row - b.row.row);
+  return {
+    ...extracted,
+    sidelined,
+    roles: selectRows(extracted.roles, stays),
+    kept: Uint32Array.from(stays, (i) => extracted.kept[i]!),
+  };
+}
+
+/** One sentence with the count and the first examples; none where there are none. */
+export function duplicateQuestions(duplicates: readonly Duplicate[], merged: boolean): SettingsQuestion[] {
+  if (duplicates.length === 0) return [];
+  const pointer = '/mergeDuplicates';
+  const told = duplicates.slice(0, EXAMPLES).map(({ row, of, separationArcsec, differenceKms }) => {
+    return `row ${row} and row ${of} (${separationArcsec.toFixed(1)} arcsec and ${differenceKms.toFixed(1)} km/s apart)`;
+  });
+  const count = duplicates.length === 1 ? 'One row seems' : `${duplicates.length.toLocaleString('en')} rows seem`;
+  const first = `${duplicates.length > EXAMPLES ? 'the first are ' : ''}${told.join(', ')}`;
+  const text = `${count} to be a source that another row has too: ${first}.`;
+  if (merged) {
+    const kept = 'The row of the higher signal-to-noise ratio is kept, the other put aside.';
+    return [{ level: 'assumed', pointer, text: `${text} ${kept}` }];
+  }
+  return [{ level: 'warning', pointer, text: `${text} Set mergeDuplicates to keep the better one of each.` }];
+}
