@@ -48,7 +48,8 @@ async function main() {
   mkdirSync(CACHE, { recursive: true });
   rmSync(RESULTS, { force: true });
   console.log('\n--- tests');
-  const env = { ...process.env, ...(LONG && { EREMITE_LONG: '1' }) };
+  // A build in this process has set NODE_ENV to production, under which React refuses to be tested.
+  const env = { ...process.env, NODE_ENV: 'test', ...(LONG && { EREMITE_LONG: '1' }) };
   const args = ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${RESULTS}`, ...ARGUMENTS];
   const before = failed;
   const status = await run('vitest', args, { env });
