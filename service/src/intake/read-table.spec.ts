@@ -202,6 +202,17 @@ describe('reading a catalogue', () => {
     expect(faults[0]!.pointer).toBe('/footprint/value');
   });
 
+  it('asks about distances that are more likely kpc, and takes the unit it is told', async () => {
+    const text = 'id,ra_deg,dec_deg,dist\na,40,1,4000\nb,41,1,2500\nc,41,2,500\n';
+    const settings = { kind: 'hi' as const, columns: { distance: 'dist' } };
+    expect(levelAt(await read(text, settings), '/units/distance')).toEqual(['ask']);
+    const told = await read(text, { ...settings, units: { distance: 'kpc' } });
+    expect(levelAt(told, '/units/distance')).toEqual([]);
+    expect(told.roles.columns['distanceMpc']).toEqual(new Float64Array([4, 2.5, 0.5]));
+    const near = await read(text.replace('4000', '40').replace('2500', '25'), settings);
+    expect(levelAt(near, '/units/distance')).toEqual(['assumed']);
+  });
+
   it('asks about velocities that must be m/s and does not use a distance without a unit', async () => {
     const reading = await read('id,ra_deg,dec_deg,cz,dist\na,40,1,2400000,20\nb,41,1,2500000,21\n', { kind: 'hi' });
     expect(levelAt(reading, '/units/velocity')).toEqual(['ask']);

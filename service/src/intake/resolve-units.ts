@@ -9,6 +9,8 @@ import { CANONICAL_UNIT, conversionOf, type Quantity } from './units.ts';
 
 /** A typical velocity beyond this without a unit is more likely one in m/s than one of a galaxy at z > 1. */
 const FASTEST_KMS = 300_000;
+/** Beyond this the 21-cm line has hardly been seen: such a column without a unit is more likely one in kpc. */
+const FARTHEST_MPC = 2000;
 const UNITLESS: readonly Quantity[] = ['number'];
 
 /**
@@ -58,9 +60,14 @@ export function resolveUnits(
     // Sexagesimal text and plain degrees need no unit; whether decimals may be hours is asked when all are seen.
     if (quantity === 'angle') return;
     const inMetres = quantity === 'velocity' && sample.numbers > 0 && Math.abs(sample.median) > FASTEST_KMS;
-    const doubt = inMetres ? ' Its values are above the speed of light in km/s: are they m/s?' : '';
+    const inKpc = quantity === 'distance' && sample.numbers > 0 && sample.median > FARTHEST_MPC;
+    const doubt = inMetres
+      ? ' Its values are above the speed of light in km/s: are they m/s?'
+      : inKpc
+        ? ` Half its values are above ${FARTHEST_MPC}: are they kpc?`
+        : '';
     remarks.questions.push({
-      level: inMetres ? 'ask' : 'assumed',
+      level: inMetres || inKpc ? 'ask' : 'assumed',
       pointer,
       text: `The unit of "${column}" (${says}) is not stated: ${CANONICAL_UNIT[quantity]} is assumed.${doubt}`,
     });

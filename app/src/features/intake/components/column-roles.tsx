@@ -57,6 +57,7 @@ export function ColumnRoles({ intake, draft, change }: ColumnRolesProps) {
                 <td className="is-left">
                   {role && takesUnit(role) ? (
                     <UnitCell
+                      key={`${role} ${draft.units?.[role] ?? ''}`}
                       column={column.name}
                       stated={column.unit}
                       given={draft.units?.[role]}

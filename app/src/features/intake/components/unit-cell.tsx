@@ -1,5 +1,5 @@
 import { InputGroup } from '@blueprintjs/core';
-import { useEffect, useState } from 'react';
+import { useState } from 'react';
 
 interface UnitCellProps {
   column: string;
@@ -13,7 +13,6 @@ interface UnitCellProps {
 /** The unit of a column with a role: the file's, or another put in its place. Taken over on leaving the field or Enter. */
 export function UnitCell({ column, stated, given, onChange }: UnitCellProps) {
   const [text, setText] = useState(given ?? '');
-  useEffect(() => setText(given ?? ''), [given]);
   const take = () => {
     const unit = text.trim() || undefined;
     if (unit !== given) onChange(unit);
