@@ -51,8 +51,10 @@ export default {
     {
       name: 'kernels-are-pure',
       severity: 'error',
-      from: { path: '^service/src/(matching|scoring|tables)/', pathNot: TESTS },
-      to: { path: '^(schema/|service/src/(modules|database|jobs|common|config)/|node_modules/(@nestjs|drizzle-orm|@electric-sql)/)' },
+      from: { path: '^service/src/(matching|scoring|tables|intake|plan)/', pathNot: TESTS },
+      to: {
+        path: '^(schema/|service/src/(modules|database|jobs|common|config)/|node_modules/(@nestjs|drizzle-orm|@electric-sql)/)',
+      },
     },
     { name: 'no-cycles', severity: 'error', from: {}, to: { circular: true } },
     { name: 'resolvable', severity: 'error', from: {}, to: { couldNotResolve: true } },
