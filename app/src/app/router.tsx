@@ -50,6 +50,7 @@ export function createRouter(client: QueryClient) {
                 { path: 'runs/:runId/difference', ...page(() => import('./routes/run-difference.tsx')) },
                 { path: 'ledger', ...page(() => import('./routes/ledger.tsx')) },
                 { path: 'people', ...page(() => import('./routes/people.tsx')) },
+                { path: 'settings', ...page(() => import('./routes/survey-settings.tsx')) },
               ],
             },
             { path: '*', Component: NotFound },

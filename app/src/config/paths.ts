@@ -25,6 +25,7 @@ export const paths = {
     `${survey(surveyId)}/runs/${runId}/difference?from=${from}`,
   ledger: (surveyId: string) => `${survey(surveyId)}/ledger`,
   people: (surveyId: string) => `${survey(surveyId)}/people`,
+  surveySettings: (surveyId: string) => `${survey(surveyId)}/settings`,
   account: () => '/account',
   administration: () => '/administration',
 } as const;

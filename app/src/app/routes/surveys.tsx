@@ -4,6 +4,7 @@ import { useState } from 'react';
 import { useNavigate } from 'react-router-dom';
 import { EmptyState } from '#components/feedback/empty-state.tsx';
 import { surveysQuery } from '#features/surveys/api/surveys.ts';
+import { DeletedSurveys } from '#features/surveys/components/deleted-surveys.tsx';
 import { NewSurveyDialog } from '#features/surveys/components/new-survey-dialog.tsx';
 import { SurveyCard } from '#features/surveys/components/survey-card.tsx';
 import { paths } from '#config/paths.ts';
@@ -43,6 +44,7 @@ export function Component() {
           ))}
         </ul>
       )}
+      <DeletedSurveys />
       <NewSurveyDialog
         isOpen={isOpen}
         teams={ledTeams}

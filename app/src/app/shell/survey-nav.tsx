@@ -1,6 +1,7 @@
 import type { Survey } from '@eremite/shared/contracts/survey';
 import { NavLink } from 'react-router-dom';
 import { paths } from '#config/paths.ts';
+import { mayLead } from '#lib/role.ts';
 
 const groups = (id: string) => [
   {
@@ -26,18 +27,22 @@ const groups = (id: string) => [
     links: [
       { to: paths.ledger(id), text: 'Ledger' },
       { to: paths.people(id), text: 'People' },
+      { to: paths.surveySettings(id), text: 'Settings' },
     ],
   },
 ];
 
-/** The places of a survey, in the order of the work. An observer is not led to Intake, which he cannot use. */
+/** Places that only a lead can use. */
+const FOR_LEADS = ['Intake', 'Settings'];
+
+/** The places of a survey, in the order of the work; nobody is led to where he can do nothing. */
 export function SurveyNav({ survey }: { survey: Survey }) {
   return (
     <nav className="shell__nav" aria-label="Survey">
       {groups(survey.id).map(({ name, links }) => (
         <ul key={name} aria-label={name}>
           {links
-            .filter(({ text }) => text !== 'Intake' || survey.role === 'lead')
+            .filter(({ text }) => !FOR_LEADS.includes(text) || mayLead(survey.role))
             .map(({ to, text, end }) => (
               <li key={to}>
                 <NavLink to={to} end={end ?? false}>

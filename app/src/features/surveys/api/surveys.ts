@@ -1,6 +1,6 @@
 import { team } from '@eremite/shared/contracts/auth';
 import { listOf } from '@eremite/shared/contracts/list';
-import type { createSurveyRequest} from '@eremite/shared/contracts/survey';
+import type { createSurveyRequest } from '@eremite/shared/contracts/survey';
 import { survey } from '@eremite/shared/contracts/survey';
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import type { z } from 'zod';

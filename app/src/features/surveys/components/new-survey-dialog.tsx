@@ -1,17 +1,10 @@
-import {
-  Button,
-  Dialog,
-  DialogBody,
-  DialogFooter,
-  FormGroup,
-  HTMLSelect,
-  InputGroup,
-  TextArea,
-} from '@blueprintjs/core';
+import { Button, Dialog, DialogBody, DialogFooter, FormGroup, HTMLSelect } from '@blueprintjs/core';
 import type { Survey } from '@eremite/shared/contracts/survey';
 import { useState, type FormEvent } from 'react';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { useCreateSurvey } from '../api/surveys.ts';
+import { EMPTY_DRAFT, requestOf } from '../hooks/survey-draft.ts';
+import { SurveyFields } from './survey-fields.tsx';
 
 interface NewSurveyDialogProps {
   isOpen: boolean;
@@ -21,14 +14,13 @@ interface NewSurveyDialogProps {
 }
 
 export function NewSurveyDialog({ isOpen, teams, onClose, onCreated }: NewSurveyDialogProps) {
-  const [fields, setFields] = useState({ teamId: '', name: '', description: '', h0: '70', omegaM: '0.3' });
+  const [chosen, setChosen] = useState('');
+  const [draft, setDraft] = useState(EMPTY_DRAFT);
   const create = useCreateSurvey();
-  const set = (key: keyof typeof fields) => (value: string) => setFields((old) => ({ ...old, [key]: value }));
+  const teamId = chosen || (teams[0]?.id ?? '');
   const submit = (event: FormEvent) => {
     event.preventDefault();
-    const { teamId, name, description, h0, omegaM } = fields;
-    const cosmology = { h0: Number(h0), omegaM: Number(omegaM) };
-    create.mutate({ teamId: teamId || teams[0]!.id, name, description, cosmology }, { onSuccess: onCreated });
+    create.mutate({ teamId, ...requestOf(draft) }, { onSuccess: onCreated });
   };
   return (
     <Dialog isOpen={isOpen} onClose={onClose} title="New survey" style={{ width: 'min(560px, 92vw)' }}>
@@ -38,57 +30,12 @@ export function NewSurveyDialog({ isOpen, teams, onClose, onCreated }: NewSurvey
             <HTMLSelect
               id="survey-team"
               fill
-              value={fields.teamId || teams[0]?.id}
-              onChange={(event) => set('teamId')(event.target.value)}
+              value={teamId}
+              onChange={(event) => setChosen(event.target.value)}
               options={teams.map(({ id, name }) => ({ value: id, label: name }))}
             />
           </FormGroup>
-          <FormGroup label="Name" labelFor="survey-name">
-            <InputGroup
-              id="survey-name"
-              required
-              maxLength={120}
-              value={fields.name}
-              onValueChange={set('name')}
-              autoFocus
-            />
-          </FormGroup>
-          <FormGroup label="Description" labelFor="survey-text" labelInfo="(optional)">
-            <TextArea
-              id="survey-text"
-              fill
-              rows={3}
-              maxLength={4000}
-              value={fields.description}
-              onChange={(event) => set('description')(event.target.value)}
-            />
-          </FormGroup>
-          <div className="columns" style={{ gridTemplateColumns: '1fr 1fr' }}>
-            <FormGroup label="Hubble constant" labelInfo="km/s/Mpc" labelFor="survey-h0">
-              <InputGroup
-                id="survey-h0"
-                type="number"
-                min={20}
-                max={200}
-                step="any"
-                required
-                value={fields.h0}
-                onValueChange={set('h0')}
-              />
-            </FormGroup>
-            <FormGroup label="Matter density" labelInfo="flat universe" labelFor="survey-om">
-              <InputGroup
-                id="survey-om"
-                type="number"
-                min={0}
-                max={1}
-                step="any"
-                required
-                value={fields.omegaM}
-                onValueChange={set('omegaM')}
-              />
-            </FormGroup>
-          </div>
+          <SurveyFields draft={draft} onChange={(change) => setDraft((old) => ({ ...old, ...change }))} autoFocus />
           <ProblemCallout error={create.error} />
         </DialogBody>
         <DialogFooter
