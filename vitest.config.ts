@@ -3,9 +3,15 @@ import { defineConfig } from 'vitest/config';
 export default defineConfig({
   test: {
     projects: [
-      { extends: true, test: { name: 'unit', include: ['{shared,service,schema}/src/**/*.{test,spec}.ts', 'testdata/**/*.test.ts'] } },
+      {
+        extends: true,
+        test: { name: 'unit', include: ['{shared,service,schema}/src/**/*.{test,spec}.ts', 'testdata/**/*.test.ts'] },
+      },
       { extends: true, test: { name: 'app', include: ['app/src/**/*.test.{ts,tsx}'], environment: 'jsdom' } },
-      { extends: true, test: { name: 'architecture', include: ['tests/architecture/**/*.test.ts'], testTimeout: 120_000 } },
+      {
+        extends: true,
+        test: { name: 'architecture', include: ['tests/architecture/**/*.test.ts'], testTimeout: 120_000 },
+      },
       { extends: true, test: { name: 'accuracy', include: ['tests/accuracy/**/*.test.ts'], testTimeout: 120_000 } },
       {
         extends: true,

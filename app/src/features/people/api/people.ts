@@ -1,4 +1,4 @@
-import type { invitationRequest} from '@eremite/shared/contracts/auth';
+import type { invitationRequest } from '@eremite/shared/contracts/auth';
 import { invitation, outboxMail, teamMember } from '@eremite/shared/contracts/auth';
 import { listOf } from '@eremite/shared/contracts/list';
 import type { TeamRole } from '@eremite/shared/contracts/words';
