@@ -2,6 +2,9 @@ import { defineConfig } from 'vitest/config';
 
 export default defineConfig({
   test: {
+    // Generous, since no test is about time and a shared machine can be slow.
+    testTimeout: 60_000,
+    hookTimeout: 120_000,
     projects: [
       {
         extends: true,
