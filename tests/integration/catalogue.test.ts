@@ -43,6 +43,42 @@ async function publish(
   return job.result.catalogueId;
 }
 
+describe('a new version', () => {
+  const hi = (rows: string[]) => `name,ra_deg,dec_deg,cz_kms,snr\n${rows.join('\n')}\n`;
+  const settings = { kind: 'hi', columns: { ra: 'ra_deg', dec: 'dec_deg' } };
+
+  it('takes the place of a catalogue, which stays readable and comes back when the new one is removed', async () => {
+    const survey = await aSurvey(staff.lead, staff.team.id);
+    const first = await publish(hi(['A,10,5,3000,9']), settings, 'first.csv', survey.id);
+    const [old] = (await staff.observer.get(`/surveys/${survey.id}/detections`)).body.items;
+    const second = await publish(
+      hi(['A,10,5,3000,9', 'B,11,5,3100,9']),
+      { ...settings, supersedes: first },
+      'second.csv',
+      survey.id,
+    );
+    expect((await staff.observer.get(`/catalogues/${first}`)).body.state).toBe('superseded');
+    expect((await staff.observer.get(`/catalogues/${first}/rows`)).body.total).toBe(1);
+    expect((await staff.observer.get(`/detections/${old.id}`)).status).toBe(200);
+    expect((await staff.observer.get(`/surveys/${survey.id}/detections`)).body.total).toBe(2);
+    const list = await staff.observer.get(`/surveys/${survey.id}/catalogues`);
+    expect(list.body.items.map(({ state }: { state: string }) => state)).toEqual(['superseded', 'published']);
+    expect((await staff.lead.delete(`/catalogues/${second}`)).status).toBe(204);
+    expect((await staff.observer.get(`/catalogues/${first}`)).body.state).toBe('published');
+    expect((await staff.observer.get(`/surveys/${survey.id}/detections`)).body.total).toBe(1);
+  });
+
+  it('is refused where there is no such catalogue of the survey and kind', async () => {
+    const survey = await aSurvey(staff.lead, staff.team.id);
+    const elsewhere = await publish(hi(['A,10,5,3000,9']), settings);
+    const { body } = await staff.lead.upload(`/surveys/${survey.id}/intakes`, 'b.csv', hi(['A,10,5,3000,9']), {
+      settings: { ...settings, supersedes: elsewhere },
+    });
+    const refused = await staff.lead.post(`/intakes/${body.id}/publish`);
+    expect([refused.status, refused.body.errors?.[0]?.pointer]).toEqual([422, '/supersedes']);
+  });
+});
+
 describe('a catalogue', () => {
   it('hands out its rows in file order, page by page, and around a place across 0 h', async () => {
     const { text, ra, dec } = manyRows(3000);

@@ -64,4 +64,21 @@ describe('detections', () => {
     const back = await staff.lead.patch(`/detections/${id}`, { distanceMpc: null, note: 'the paper was withdrawn' });
     expect(back.body).toMatchObject({ distanceMpc: 10, distanceOverride: null });
   });
+
+  it('are handed out as positions with a radius for an archive, as CSV or VOTable', async () => {
+    const path = `/surveys/${staff.survey.id}/positions`;
+    const csv = await staff.observer.get(`${path}?radiusArcsec=90`);
+    expect(csv.status, csv.text).toBe(200);
+    expect(csv.text.trim().split(/\r?\n/)).toEqual([
+      'name,ra,dec,radius',
+      'H1,150,2,90',
+      'H2,151,2,90',
+      '3,152,2,90',
+      'H1 (row 4),153,2,90',
+    ]);
+    const votable = await staff.observer.get(`${path}?radiusArcsec=90&format=votable`);
+    expect(votable.text).toContain('<TR><TD>H2</TD><TD>151</TD><TD>2</TD><TD>90</TD></TR>');
+    expect((await staff.observer.get(path)).status).toBe(400);
+    expect((await staff.stranger.get(`${path}?radiusArcsec=90`)).status).toBe(404);
+  });
 });

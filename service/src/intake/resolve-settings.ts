@@ -59,6 +59,7 @@ export function resolveSettings(
     keep: resolveKeep(settings, names, remarks),
     footprint: settings.footprint ?? { type: 'rows' },
     reference: settings.reference ?? '',
+    ...(settings.supersedes ? { supersedes: settings.supersedes } : {}),
     ...(settings.acceptTruncated ? { acceptTruncated: true } : {}),
     ...(settings.mergeDuplicates && kind === 'hi' ? { mergeDuplicates: true } : {}),
   };

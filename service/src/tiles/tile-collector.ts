@@ -19,7 +19,7 @@ export class TileCollector {
   private readonly parts = new Uint32Array(TILE_CELLS);
   private readonly places = new RowPlaces();
 
-  constructor(private readonly bufferBytes = 96 * 1024 ** 2) {}
+  constructor(private readonly bufferBytes = 48 * 1024 ** 2) {}
 
   /**
    * @param roles rows of the next chunk, in file order

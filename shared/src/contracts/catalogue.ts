@@ -10,7 +10,8 @@ export const catalogue = z.object({
   surveyId: z.uuid(),
   name: z.string(),
   kind: z.enum(CATALOGUE_KINDS),
-  state: z.enum(['publishing', 'published', 'removed']),
+  /** `superseded`: kept for the runs that read it, used by no further one. */
+  state: z.enum(['publishing', 'published', 'superseded', 'removed']),
   fileName: z.string(),
   sha256: z.string(),
   rows: z.int(),

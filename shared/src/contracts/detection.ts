@@ -32,6 +32,12 @@ export type Detection = z.output<typeof detection>;
 
 export const detectionsQuery = listQuery.extend({ search: z.string().max(200).optional() });
 
+/** The survey's positions as a file for an archive's list search; the radius is the same for all. */
+export const positionsQuery = z.object({
+  format: z.enum(['csv', 'votable']).default('csv'),
+  radiusArcsec: z.coerce.number().positive().max(36_000),
+});
+
 /** Replaces a detection's distance, or with null returns to the table's. */
 export const updateDetectionRequest = z.strictObject({
   distanceMpc: z.number().positive().max(20_000).nullable(),

@@ -17,12 +17,12 @@ export class CataloguesRepository {
     return this.db.transaction((tx) => work(tx as Database));
   }
 
-  /** A published catalogue with the number of runs that used it. */
+  /** A published or superseded catalogue with the number of runs that used it. */
   async find(id: string, db = this.db) {
     const [row] = await db
       .select({ catalogue: catalogues, usedByRuns })
       .from(catalogues)
-      .where(and(eq(catalogues.id, id), eq(catalogues.state, 'published')));
+      .where(and(eq(catalogues.id, id), inArray(catalogues.state, ['published', 'superseded'])));
     return row;
   }
 
@@ -31,7 +31,7 @@ export class CataloguesRepository {
     return db
       .select({ catalogue: catalogues, usedByRuns })
       .from(catalogues)
-      .where(and(eq(catalogues.surveyId, surveyId), eq(catalogues.state, 'published')))
+      .where(and(eq(catalogues.surveyId, surveyId), inArray(catalogues.state, ['published', 'superseded'])))
       .orderBy(asc(catalogues.publishedAt), asc(catalogues.id));
   }
 
@@ -40,8 +40,17 @@ export class CataloguesRepository {
     await db.select({ id: catalogues.id }).from(catalogues).where(eq(catalogues.id, id)).for('update');
   }
 
-  /** Removes a catalogue with its rows; the upload it came from can be published again. */
-  async remove(id: string, db: Database): Promise<void> {
+  /**
+   * Removes a catalogue with its rows; the upload it came from can be published again, and the one it superseded is in
+   * use again.
+   */
+  async remove(id: string, supersedes: string | undefined, db: Database): Promise<void> {
+    if (supersedes !== undefined) {
+      await db
+        .update(catalogues)
+        .set({ state: 'published' })
+        .where(and(eq(catalogues.id, supersedes), eq(catalogues.state, 'superseded')));
+    }
     await db.update(intakes).set({ state: 'staged', catalogueId: null }).where(eq(intakes.catalogueId, id));
     await db.delete(catalogues).where(eq(catalogues.id, id));
   }

@@ -1,6 +1,7 @@
 import type { Catalogue } from '@eremite/shared/contracts/catalogue';
 import { catalogueRowsQuery } from '@eremite/shared/contracts/catalogue';
 import type { SidelinedRow } from '@eremite/shared/contracts/intake';
+import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { List, ListQuery } from '@eremite/shared/contracts/list';
 import { Injectable } from '@nestjs/common';
 import type { z } from 'zod';
@@ -47,7 +48,10 @@ export class CataloguesService {
         const runs = now.usedByRuns === 1 ? 'A run' : `${now.usedByRuns} runs`;
         throw new AppError('IN_USE', `${runs} read "${catalogue.name}"; what a run stands on is kept.`);
       }
-      await this.catalogues.remove(id, tx);
+      const { supersedes } = catalogue.settings as IntakeSettings;
+      // A version between two others gives its place to none: only the last one brings back the one before.
+      const last = now.catalogue.state === 'published';
+      await this.catalogues.remove(id, last ? (supersedes ?? undefined) : undefined, tx);
       const { surveyId, name, rows, kind, contentHash } = catalogue;
       await this.ledger.append(
         {

@@ -45,6 +45,15 @@ export class DetectionsRepository {
     return rows.map(({ detection }) => detection);
   }
 
+  async positions(surveyId: string, db = this.db) {
+    return db
+      .select({ name: detections.name, raDeg: detections.raDeg, decDeg: detections.decDeg })
+      .from(detections)
+      .innerJoin(catalogues, eq(catalogues.id, detections.catalogueId))
+      .where(matching({ surveyId }))
+      .orderBy(asc(catalogues.publishedAt), asc(catalogues.id), asc(detections.row));
+  }
+
   async count(filter: DetectionFilter, db = this.db): Promise<number> {
     const [row] = await db
       .select({ total: sql<number>`count(*)::int` })
@@ -58,8 +67,8 @@ export class DetectionsRepository {
     const [row] = await db
       .select({ detection: detections })
       .from(detections)
-      .innerJoin(catalogues, and(eq(catalogues.id, detections.catalogueId), eq(catalogues.state, 'published')))
-      .where(eq(detections.id, id));
+      .innerJoin(catalogues, eq(catalogues.id, detections.catalogueId))
+      .where(and(eq(detections.id, id), inArray(catalogues.state, ['published', 'superseded'])));
     return row?.detection;
   }
 

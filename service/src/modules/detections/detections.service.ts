@@ -40,6 +40,12 @@ export class DetectionsService {
     return pageByOffset(await this.#describe(rows), total, offset);
   }
 
+  /** Names and places of all detections, in the order of their lists. */
+  async positions(user: SignedInUser, surveyId: string) {
+    await this.access.survey(user, surveyId, 'read');
+    return this.detections.positions(surveyId);
+  }
+
   async get(user: SignedInUser, id: string): Promise<Detection> {
     return (await this.#describe([await this.#row(user, id, 'read')]))[0]!;
   }

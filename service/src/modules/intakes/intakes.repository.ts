@@ -89,6 +89,25 @@ export class IntakesRepository {
     return rows.length === 1;
   }
 
+  /** Whether a catalogue is there to be superseded by one of this survey and kind. */
+  async supersedable(id: string, surveyId: string, kind: string, db = this.db): Promise<boolean> {
+    const rows = await db
+      .select({ id: catalogues.id })
+      .from(catalogues)
+      .where(inForce(id, surveyId, kind));
+    return rows.length === 1;
+  }
+
+  /** Takes a catalogue out of use, for its new version; false if it is not there to be. */
+  async supersede(id: string, surveyId: string, kind: string, db: Database): Promise<boolean> {
+    const rows = await db
+      .update(catalogues)
+      .set({ state: 'superseded' })
+      .where(inForce(id, surveyId, kind))
+      .returning({ id: catalogues.id });
+    return rows.length === 1;
+  }
+
   async publishedCounts(id: string, db = this.db): Promise<{ rows: number; sidelined: number }> {
     const [row] = await db
       .select({ rows: catalogues.rows, sidelined: catalogues.sidelined })
@@ -102,5 +121,13 @@ export class IntakesRepository {
     await db.delete(catalogues).where(and(eq(catalogues.intakeId, intakeId), eq(catalogues.state, 'publishing')));
   }
 }
+
+const inForce = (id: string, surveyId: string, kind: string) =>
+  and(
+    eq(catalogues.id, id),
+    eq(catalogues.surveyId, surveyId),
+    eq(catalogues.kind, kind),
+    eq(catalogues.state, 'published'),
+  );
 
 const kept = (surveyId: string) => and(eq(intakes.surveyId, surveyId), ne(intakes.state, 'discarded'));

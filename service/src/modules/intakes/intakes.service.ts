@@ -107,6 +107,7 @@ export class IntakesService {
     const row = await this.#row(user, id, 'lead');
     assertStaged(row);
     assertReady(row);
+    await this.#assertSupersedable(row);
     const jobId = await this.intakes.transaction(async (tx) => {
       if (!(await this.intakes.change(id, 'staged', { state: 'publishing' }, tx)))
         assertStaged({ state: 'publishing' });
@@ -127,6 +128,16 @@ export class IntakesService {
     assertStaged(row);
     if (!(await this.intakes.change(id, 'staged', { state: 'discarded' }))) assertStaged({ state: 'publishing' });
     await this.files.remove(row.fileKey);
+  }
+
+  /** @throws {AppError} SETTINGS_INCOMPLETE where the catalogue to be superseded is no such one */
+  async #assertSupersedable(row: IntakeRow): Promise<void> {
+    const { supersedes, kind } = storedCheck(row).filled;
+    if (!supersedes) return;
+    // The kind may be a guess; whether it fits is certain only once the table is read, and asked again then.
+    if (kind === undefined || (await this.intakes.supersedable(supersedes, row.surveyId, kind))) return;
+    const detail = `The survey has no catalogue of kind "${kind}" in use with the id ${supersedes}.`;
+    throw new AppError('SETTINGS_INCOMPLETE', detail, [{ pointer: '/supersedes', detail }]);
   }
 
   async #row(user: SignedInUser, id: string, need: 'read' | 'lead'): Promise<IntakeRow> {

@@ -178,6 +178,10 @@ export class PublishingService implements OnModuleInit {
     await this.intakes.transaction(async (tx) => {
       if (!(await this.intakes.showCatalogue(catalogueId, values, tx)))
         throw new AppError('CONFLICT', 'The staged table is gone.');
+      const { supersedes } = resolved;
+      if (supersedes && !(await this.intakes.supersede(supersedes, surveyId, resolved.kind, tx))) {
+        throw new AppError('CONFLICT', 'The catalogue it is to supersede is no longer in use.');
+      }
       await this.intakes.change(intake.id, 'publishing', { state: 'published', catalogueId }, tx);
       await this.ledger.append(
         {
@@ -194,6 +198,7 @@ export class PublishingService implements OnModuleInit {
             sha256,
             contentHash,
             assumed,
+            ...(supersedes ? { supersedes } : {}),
           },
         },
         tx,

@@ -31,7 +31,7 @@ export class RunInputs {
     progress: (fraction: number, message: string) => void,
   ): Promise<PackedInput> {
     const inputs = run.inputs as { catalogueId: string; name: string }[];
-    const found = await this.runs.publishedCatalogues(
+    const found = await this.runs.cataloguesOfRun(
       run.surveyId,
       inputs.map((input) => input.catalogueId),
     );

@@ -107,15 +107,20 @@ export class RunsRepository {
     });
   }
 
+  /** Published tables a run was started with, those superseded meanwhile among them. */
+  cataloguesOfRun(surveyId: string, ids: readonly string[], db = this.db) {
+    return this.publishedCatalogues(surveyId, ids, db, ['published', 'superseded']);
+  }
+
   /** Published tables of a survey in the order they were published. */
-  publishedCatalogues(surveyId: string, ids: readonly string[] | undefined, db = this.db) {
+  publishedCatalogues(surveyId: string, ids: readonly string[] | undefined, db = this.db, states = ['published']) {
     return db
       .select()
       .from(catalogues)
       .where(
         and(
           eq(catalogues.surveyId, surveyId),
-          eq(catalogues.state, 'published'),
+          inArray(catalogues.state, states),
           ids ? inArray(catalogues.id, [...ids]) : undefined,
         ),
       )
