@@ -9,6 +9,9 @@ export interface PanelView {
   height: number;
 }
 
+/** Width, pixels, from which the buttons at the upper left end before the middle. */
+const CLEAR_OF_BUTTONS = 530;
+
 interface FrameProps {
   view: PanelView;
   /** Angular-diameter distance, Mpc; null draws no physical ruler. */
@@ -57,7 +60,7 @@ export function Frame({ view, distanceMpc }: FrameProps) {
     <svg className="sky-frame" width={width} height={height} aria-hidden="true">
       {across.filter(({ at }) => clear(at, width)).map((tick) => bottom(tick, height))}
       {up.filter(({ at }) => clear(at, height)).map((tick) => right(tick, width, height))}
-      <text className="sky-frame__point" x={width / 2} y={17} textAnchor="middle">
+      <text className="sky-frame__point" x={width / 2} y={width < CLEAR_OF_BUTTONS ? 52 : 17} textAnchor="middle">
         N
       </text>
       <text className="sky-frame__point" x={10} y={height / 2 + 4}>
