@@ -21,11 +21,12 @@ const reviewsOf = async (id: string) =>
   );
 const idInAddress = () => /docket\/([0-9a-f-]{36})/.exec(page.url())![1]!;
 
-/** Presses a key and waits until another detection stands on the page. */
+/** Presses a key and waits until another detection stands on the page: in the address, in the heading, on the sky. */
 async function moves(key: string): Promise<void> {
-  const before = idInAddress();
+  const [before, heading] = [idInAddress(), await title()];
   await page.keyboard.press(key);
   await page.waitForURL((url) => !url.pathname.includes(before));
+  await page.waitForFunction((old) => (document.querySelector('h1')?.innerText ?? old) !== old, heading);
   await page.getByRole('group', { name: /^Sky about/ }).waitFor();
 }
 
