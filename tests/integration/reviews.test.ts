@@ -142,6 +142,10 @@ describe('the docket', () => {
     expect(mine.total).toBe(2);
     expect(mine.items[0]).toMatchObject({ assignedTo: ['A reviewer'], reviewedByMe: false });
     expect((await docket(screened.reviewer, '?assigned=me')).total).toBe(0);
+    // S03 is reviewed already, S07 and S08 are not; only the lead is told.
+    const progress = await screened.lead.get(`/surveys/${screened.surveyId}/assignments`);
+    expect(progress.body.items).toEqual([{ userId, name: 'A reviewer', assigned: 3, reviewed: 1 }]);
+    expect((await screened.reviewer.get(`/surveys/${screened.surveyId}/assignments`)).status).toBe(403);
     const overview = await second.client.get(`/surveys/${screened.surveyId}/overview`);
     expect(overview.body.awaitingMe).toBe(2);
     expect((await assign(screened.lead, ['S08'], userId, 'DELETE')).status).toBe(204);

@@ -69,6 +69,15 @@ export const docketQuery = listQuery.extend({
   state: z.enum(['open', 'done', 'all']).default('open'),
 });
 export const docketItem = verdictItem.extend({ assignedTo: z.array(z.string()), reviewedByMe: z.boolean() });
+/** How far a reviewer is with what was assigned; on the latest finished run. */
+export const reviewerProgress = z.object({
+  userId: z.uuid(),
+  name: z.string(),
+  assigned: z.int(),
+  /** Of those assigned. */
+  reviewed: z.int(),
+});
+export type ReviewerProgress = z.output<typeof reviewerProgress>;
 export const assignmentsRequest = z.strictObject({
   detectionIds: z.array(z.uuid()).min(1).max(10_000),
   userId: z.uuid(),

@@ -11,6 +11,7 @@ import { Pager } from '#components/filters/pager.tsx';
 import { useSearchFilters } from '#components/filters/use-search-filters.ts';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { AssignBar } from '#features/docket/components/assign-bar.tsx';
+import { ReviewerProgress } from '#features/docket/components/reviewer-progress.tsx';
 import { docketColumns } from '#features/docket/components/docket-columns.tsx';
 import { paths } from '#config/paths.ts';
 import { docketQuery } from '#lib/queries/docket.ts';
@@ -80,9 +81,12 @@ export function Component() {
             surveyId={survey.id}
             teamId={survey.teamId}
             detectionIds={items.map(({ detectionId }) => detectionId)}
+            filter={{ assigned, state }}
+            total={query.data!.total}
           />
         )}
       </div>
+      {mayLead(survey.role) && <ReviewerProgress surveyId={survey.id} />}
       <ProblemCallout error={query.error} />
       {query.isLoading && <Loading what="Reading the docket" />}
       {query.data && items.length === 0 && (

@@ -5,6 +5,7 @@ import {
   createReviewRequest,
   override,
   review,
+  reviewerProgress,
   settleRequest,
   withdrawRequest,
   type CreateOverrideRequest,
@@ -82,6 +83,17 @@ export class ReviewsController {
     @Body({ schema: withdrawRequest }) request: { note: string },
   ) {
     return this.overrides.withdraw(user, id, request.note);
+  }
+
+  /** How far each reviewer is with what was assigned. */
+  @Get('surveys/:surveyId/assignments')
+  @SerializeOptions({ schema: listOf(reviewerProgress) })
+  assignments(
+    @CurrentUser() user: SignedInUser,
+    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
+    @Query({ schema: listQuery }) query: ListQuery,
+  ) {
+    return this.reviews.progress(user, surveyId, query);
   }
 
   @Post('surveys/:surveyId/assignments')

@@ -11,7 +11,7 @@ import {
 } from '@eremite/schema';
 import { Inject, Injectable } from '@nestjs/common';
 import { alias } from 'drizzle-orm/pg-core';
-import { and, asc, desc, eq, inArray, isNull } from 'drizzle-orm';
+import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
 const withdrawer = alias(users, 'withdrawer');
@@ -171,6 +171,25 @@ export class ReviewsRepository {
     await db
       .delete(assignments)
       .where(and(inArray(assignments.detectionId, [...detectionIds]), eq(assignments.userId, userId)));
+  }
+
+  /** Detections assigned to each reviewer of a survey, and how many of them he has reviewed on the latest finished run. */
+  progress(surveyId: string, db = this.db) {
+    const latest = sql`(select r.id from ${runs} r where r.survey_id = ${surveyId} and r.state = 'done' order by r.number desc limit 1)`;
+    const done = sql`exists (select 1 from ${reviews} v where v.detection_id = ${assignments.detectionId} and v.reviewer_id = ${assignments.userId} and v.run_id = ${latest} and v.superseded_at is null)`;
+    return db
+      .select({
+        userId: assignments.userId,
+        name: users.name,
+        assigned: sql<number>`count(*)::int`,
+        reviewed: sql<number>`(count(*) filter (where ${done}))::int`,
+      })
+      .from(assignments)
+      .innerJoin(detections, eq(detections.id, assignments.detectionId))
+      .innerJoin(users, eq(users.id, assignments.userId))
+      .where(eq(detections.surveyId, surveyId))
+      .groupBy(assignments.userId, users.name)
+      .orderBy(asc(users.name));
   }
 
   assignedOf(detectionId: string, db = this.db) {

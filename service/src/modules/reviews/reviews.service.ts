@@ -1,5 +1,5 @@
 import type { List, ListQuery } from '@eremite/shared/contracts/list';
-import type { CreateReviewRequest, Review, SettleRequest } from '@eremite/shared/contracts/review';
+import type { CreateReviewRequest, Review, ReviewerProgress, SettleRequest } from '@eremite/shared/contracts/review';
 import type { TeamRole } from '@eremite/shared/contracts/words';
 import { Injectable } from '@nestjs/common';
 import { AccessService, type Need } from '../../common/access.ts';
@@ -99,6 +99,12 @@ export class ReviewsService {
     const computed = await this.verdicts.computed(runId, detectionId, surveyId);
     if (!computed) throw new AppError('NOT_FOUND', 'That run has no verdict on this detection.');
     return computed;
+  }
+
+  /** How far each reviewer is; says nothing of what was decided. */
+  async progress(user: SignedInUser, surveyId: string, query: ListQuery): Promise<List<ReviewerProgress>> {
+    await this.access.survey(user, surveyId, 'lead');
+    return pageOf(await this.reviews.progress(surveyId), query);
   }
 
   /** Puts detections on a reviewer's docket, or takes them off. */

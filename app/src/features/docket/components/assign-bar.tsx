@@ -9,22 +9,26 @@ import { useAssign } from '../api/assign.ts';
 interface AssignBarProps {
   surveyId: string;
   teamId: string;
+  /** Those on the page. */
   detectionIds: string[];
+  /** What finds them, and how many it finds over all pages. */
+  filter: Record<string, string>;
+  total: number;
 }
 
-/** Gives what is listed to a reviewer. */
-export function AssignBar({ surveyId, teamId, detectionIds }: AssignBarProps) {
+/** Gives what is listed, or all that the filter finds, to a reviewer. */
+export function AssignBar({ surveyId, teamId, detectionIds, filter, total }: AssignBarProps) {
   const { data: members } = useQuery(membersQuery(teamId));
   const [chosen, setChosen] = useState('');
   const assign = useAssign(surveyId);
   const able = members?.items.filter(({ role }) => role !== 'observer') ?? [];
   const userId = chosen || able[0]?.userId || '';
   const name = able.find((member) => member.userId === userId)?.name;
-  const give = () =>
+  const give = (what: Parameters<typeof assign.mutate>[0]['what']) =>
     assign.mutate(
-      { detectionIds, userId },
+      { what, userId },
       {
-        onSuccess: () => void say(`${count(detectionIds.length)} detections are now ${name}’s.`),
+        onSuccess: (given) => void say(`${count(given)} detections are now ${name}’s.`),
         onError: (error) => void complain(error),
       },
     );
@@ -37,11 +41,19 @@ export function AssignBar({ surveyId, teamId, detectionIds }: AssignBarProps) {
         options={able.map((member) => ({ value: member.userId, label: member.name }))}
       />
       <Button
-        text={`Assign these ${count(detectionIds.length)}`}
+        text={`Assign ${total > detectionIds.length ? 'these' : 'all'} ${count(detectionIds.length)}`}
         disabled={!userId}
         loading={assign.isPending}
-        onClick={give}
+        onClick={() => give({ detectionIds })}
       />
+      {total > detectionIds.length && (
+        <Button
+          text={`Assign all ${count(total)}`}
+          disabled={!userId}
+          loading={assign.isPending}
+          onClick={() => give({ filter })}
+        />
+      )}
     </div>
   );
 }
