@@ -1,7 +1,7 @@
 import { BulkStore, type BulkColumn, type BulkType } from './bulk.ts';
-import { copyFromSql, copyToSql, PIECE_BYTES } from './bulk-sql.ts';
+import { copyFromSql, copyToSql } from './bulk-sql.ts';
 import { CopyDecoder } from './copy-decoder.ts';
-import { CopyEncoder } from './copy-encoder.ts';
+import { sendInPieces } from './copy-pieces.ts';
 import type { PgliteProxy } from './pglite-proxy.ts';
 import { withLiterals } from './sql-literal.ts';
 
@@ -17,26 +17,15 @@ export class PgliteBulkStore extends BulkStore {
     rows: AsyncIterable<readonly unknown[][]> | Iterable<readonly unknown[][]>,
   ): Promise<number> {
     const sql = copyFromSql(table, columns, `'/dev/blob'`);
-    let written = 0;
     // The next piece is put together while the database writes the one before.
     let inFlight: Promise<unknown> = Promise.resolve();
-    let encoder = new CopyEncoder(columns);
-    const send = async () => {
+    const sent = await sendInPieces(columns, rows, async (piece) => {
       await inFlight;
-      written += encoder.rows;
-      inFlight = this.client.copyIn(sql, encoder.finish());
+      inFlight = this.client.copyIn(sql, piece);
       inFlight.catch(() => undefined);
-      encoder = new CopyEncoder(columns, PIECE_BYTES + (1 << 20));
-    };
-    for await (const batch of rows) {
-      for (const row of batch) {
-        encoder.add(row);
-        if (encoder.length >= PIECE_BYTES) await send();
-      }
-    }
-    if (encoder.rows > 0) await send();
+    });
     await inFlight;
-    return written;
+    return sent;
   }
 
   override async *read(

@@ -2,9 +2,9 @@ import { pipeline } from 'node:stream/promises';
 import type { Pool } from 'pg';
 import { from as copyFrom, to as copyTo } from 'pg-copy-streams';
 import { BulkStore, type BulkColumn, type BulkType } from './bulk.ts';
-import { copyFromSql, copyToSql, PIECE_BYTES } from './bulk-sql.ts';
+import { copyFromSql, copyToSql } from './bulk-sql.ts';
 import { CopyDecoder } from './copy-decoder.ts';
-import { CopyEncoder } from './copy-encoder.ts';
+import { sendInPieces } from './copy-pieces.ts';
 import { withLiterals } from './sql-literal.ts';
 
 /** Bulk rows through PostgreSQL's copy streams. */
@@ -19,28 +19,16 @@ export class PostgresBulkStore extends BulkStore {
     rows: AsyncIterable<readonly unknown[][]> | Iterable<readonly unknown[][]>,
   ): Promise<number> {
     const sql = copyFromSql(table, columns, 'stdin');
-    let written = 0;
-    let encoder = new CopyEncoder(columns);
-    const send = async () => {
+    return sendInPieces(columns, rows, async (piece) => {
       const client = await this.pool.connect();
       try {
-        await pipeline([encoder.finish()], client.query(copyFrom(sql)));
+        await pipeline([piece], client.query(copyFrom(sql)));
         client.release();
       } catch (error) {
         client.release(true);
         throw error;
       }
-      written += encoder.rows;
-      encoder = new CopyEncoder(columns, PIECE_BYTES + (1 << 20));
-    };
-    for await (const batch of rows) {
-      for (const row of batch) {
-        encoder.add(row);
-        if (encoder.length >= PIECE_BYTES) await send();
-      }
-    }
-    if (encoder.rows > 0) await send();
-    return written;
+    });
   }
 
   override async *read(

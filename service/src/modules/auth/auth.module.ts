@@ -12,32 +12,20 @@ import { SignInThrottle } from './sign-in-throttle.ts';
 import { TokensController } from './tokens.controller.ts';
 import { TokensService } from './tokens.service.ts';
 
+/** All of it is shared: other modules sign people in and ask who they are. */
+const PROVIDERS = [
+  AccessTokens,
+  AuthGuard,
+  AuthRepository,
+  AuthService,
+  CsrfTokens,
+  FirstAccounts,
+  Passwords,
+  RequestUser,
+  SignInThrottle,
+  TokensService,
+];
+
 @Global()
-@Module({
-  controllers: [AuthController, TokensController],
-  providers: [
-    AccessTokens,
-    AuthGuard,
-    AuthRepository,
-    AuthService,
-    CsrfTokens,
-    FirstAccounts,
-    Passwords,
-    RequestUser,
-    SignInThrottle,
-    TokensService,
-  ],
-  exports: [
-    AccessTokens,
-    AuthGuard,
-    AuthRepository,
-    AuthService,
-    CsrfTokens,
-    FirstAccounts,
-    Passwords,
-    RequestUser,
-    SignInThrottle,
-    TokensService,
-  ],
-})
+@Module({ controllers: [AuthController, TokensController], providers: PROVIDERS, exports: PROVIDERS })
 export class AuthModule {}
