@@ -37,6 +37,23 @@ describe('teams', () => {
     expect(body.items).toContainEqual({ id: team.id, name: team.name, role: null, members: 3 });
   });
 
+  it('answer 409, not 500, when two teams take in one newcomer at the same moment', async () => {
+    const email = 'wanted.twice@example.org';
+    const tokens: string[] = [];
+    for (const { team, lead } of [await aStaffedSurvey(app), await aStaffedSurvey(app)]) {
+      await lead.post(`/teams/${team.id}/invitations`, { email, role: 'reviewer' });
+      const mail = (await lead.get('/outbox')).body.items.find((one: { to: string }) => one.to === email);
+      tokens.push(tokenIn(mail.text));
+    }
+    const accept = (token: string) =>
+      app.client().post('/invitations/accept', { token, name: 'Wanted', password: PASSWORD });
+    const statuses = (await Promise.all(tokens.map(accept))).map(({ status }) => status).sort();
+    expect([[200, 200], [200, 409]]).toContainEqual(statuses); // prettier-ignore
+    for (const token of tokens) expect([200, 410]).toContain((await accept(token)).status);
+    const joined = await app.signIn(email);
+    expect((await joined.get('/auth/me')).body.teams).toHaveLength(2);
+  });
+
   it('take a colleague in by invitation, once', async () => {
     const { team, lead, observer, stranger } = await aStaffedSurvey(app);
     const email = 'new.colleague@example.org';

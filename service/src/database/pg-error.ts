@@ -1,5 +1,5 @@
 /** SQLSTATE of a database error, also where Drizzle wrapped it; undefined for other errors. */
-export function sqlState(error: unknown): string | undefined {
+function sqlState(error: unknown): string | undefined {
   for (let cause = error; cause instanceof Error; cause = cause.cause) {
     const { code } = cause as Error & { code?: unknown };
     if (typeof code === 'string' && /^[0-9A-Z]{5}$/.test(code)) return code;
@@ -8,4 +8,3 @@ export function sqlState(error: unknown): string | undefined {
 }
 
 export const isUniqueViolation = (error: unknown): boolean => sqlState(error) === '23505';
-export const isForeignKeyViolation = (error: unknown): boolean => sqlState(error) === '23503';

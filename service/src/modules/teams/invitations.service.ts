@@ -4,6 +4,7 @@ import { AccessService } from '../../common/access.ts';
 import { AppError } from '../../common/app-error.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { ENV, type Env } from '../../config/env.ts';
+import { isUniqueViolation } from '../../database/pg-error.ts';
 import { AuthRepository } from '../auth/auth.repository.ts';
 import { Passwords } from '../auth/passwords.ts';
 import { randomToken, tokenHash } from '../auth/random-token.ts';
@@ -96,11 +97,20 @@ export class InvitationsService {
       throw new AppError('SIGN_IN_FAILED', 'This address has an account; give its password.');
     }
     const passwordHash = existing ? '' : await this.passwords.hash(password);
-    return this.teams.db.transaction(async (tx) => {
+    const joining = this.teams.db.transaction(async (tx) => {
       if (!(await this.teams.accept(invitation.id, tx))) throw new AppError('LINK_EXPIRED');
       const { id } = existing ?? (await this.accounts.insertUser({ email, name, passwordHash }, tx));
       await this.teams.join(teamId, id, role, tx);
       return id;
+    });
+    return joining.catch((error: unknown) => {
+      // Invitations of two teams accepted at once: the other one made the account.
+      if (isUniqueViolation(error))
+        throw new AppError(
+          'CONFLICT',
+          'This address was given an account a moment ago; accept again with its password.',
+        );
+      throw error;
     });
   }
 
