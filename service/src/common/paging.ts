@@ -48,20 +48,3 @@ export function pageOf<T>(all: readonly T[], query: { limit: number; cursor?: st
   const offset = offsetOf(query.cursor);
   return pageByOffset(all.slice(offset, offset + query.limit), all.length, offset);
 }
-
-/**
- * A page cut by its last item's place.
- *
- * @param rows one more than `limit` where there is more
- * @param placeOf sort values of an item, as the next query compares them
- */
-export function pageByPlace<T>(
-  rows: T[],
-  limit: number,
-  total: number,
-  placeOf: (row: T) => readonly (string | number | null)[],
-): List<T> {
-  const items = rows.slice(0, limit);
-  const last = items.at(-1);
-  return { items, total, nextCursor: rows.length > limit && last !== undefined ? encodeCursor(placeOf(last)) : null };
-}

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { COLUMN_ROLES, intakeSettings } from './intake-settings.ts';
+import { intakeSettings } from './intake-settings.ts';
 
 export const intakeColumn = z.object({
   name: z.string(),
@@ -68,6 +68,5 @@ export const intake = z.object({
 export type Intake = z.output<typeof intake>;
 
 export const updateIntakeRequest = z.strictObject({ settings: intakeSettings });
-export const GUESSABLE_ROLES = COLUMN_ROLES;
 export const publishResult = z.object({ catalogueId: z.uuid(), rows: z.int(), sidelined: z.int() });
 export type PublishResult = z.output<typeof publishResult>;

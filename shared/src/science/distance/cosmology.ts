@@ -7,9 +7,6 @@ export interface Cosmology {
   readonly omegaM: number;
 }
 
-/** Defaults, stored with every result. */
-export const DEFAULT_COSMOLOGY: Cosmology = { h0: 70, omegaM: 0.3 };
-
 /** Abscissae and weights of ten-point Gauss-Legendre quadrature (positive half). Abramowitz & Stegun, table 25.4. */
 const NODES = [0.1488743389816312, 0.4333953941292472, 0.6794095682990244, 0.8650633666889845, 0.9739065285171717];
 const WEIGHTS = [0.2955242247147529, 0.2692667193099964, 0.219086362515982, 0.1494513491505806, 0.0666713443086881];

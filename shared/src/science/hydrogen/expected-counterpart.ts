@@ -87,9 +87,6 @@ export function expectedCounterpart(
   };
 }
 
-/** Prior that a detection without a usable distance has a counterpart: most are clouds. Measured; a default to refit. */
-export const COUNTERPART_PRIOR_WITHOUT_DISTANCE = 0.1;
-
 /** Where a distance is unusable the source is near: log-uniform between these, Mpc. Our choice. */
 const NEAR_MPC = { from: 0.5, to: 10 };
 

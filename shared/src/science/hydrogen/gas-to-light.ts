@@ -7,9 +7,6 @@ export interface GasToLight {
   bound: 'value' | 'lower limit';
 }
 
-/** Ratios over this are called almost dark; 20 is the usual line, ordinary spirals have 0.1-1, gas-rich dwarfs up to 10. */
-export const NEARLY_DARK_RATIO = 20;
-
 /**
  * HI mass per unit of light or of stellar mass.
  *

@@ -1,9 +1,6 @@
 import { ARCSECOND } from '../constants.ts';
 import { DomainError } from '../domain-error.ts';
 
-/** Scatter of the size-mass relation, dex. */
-export const HI_SIZE_SCATTER_DEX = 0.06;
-
 /**
  * Diameter of an ordinary HI disc where its surface density falls to 1 solar mass per square parsec.
  *

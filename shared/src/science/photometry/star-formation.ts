@@ -17,9 +17,6 @@ export const STAR_FORMATION_LOG_C = {
 
 export type StarFormationTracer = keyof typeof STAR_FORMATION_LOG_C;
 
-/** Below this rate, solar masses a year, ultraviolet and H-alpha light are stochastic: quote as rate-equivalent. */
-export const STOCHASTIC_RATE = 1e-3;
-
 const MEGAPARSEC_CM = 3.0856775814913673e24;
 const LIGHT_MICRON_HZ = 2.99792458e14;
 const JANSKY_CGS = 1e-23;

@@ -2,9 +2,6 @@ import { DomainError } from '../domain-error.ts';
 import { wilsonInterval } from './intervals.ts';
 import type { Interval } from './intervals.ts';
 
-/** Bins with fewer sources than this say nothing of the calibration. */
-export const LEAST_IN_BIN = 30;
-
 /** One bin of a calibration plot. */
 export interface CalibrationBin {
   from: number;
