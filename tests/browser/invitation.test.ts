@@ -35,7 +35,7 @@ it('a colleague is invited, finds the mail in the outbox, joins from a clean bro
   await guest.getByRole('button', { name: 'Join the team' }).click();
   await guest.getByRole('link', { name: 'Halcyon Strip' }).click();
   await guest.getByRole('link', { name: 'People' }).click();
-  await guest.getByRole('row', { name: /Ilse Varga/ }).waitFor();
+  await guest.getByRole('row').filter({ hasText: email }).waitFor();
 
   const again = await browser.visitor();
   await again.goto(pathname + search);
