@@ -58,6 +58,8 @@ export const catalogueMagnitudes = z.object({
       band: z.string(),
       system: z.enum(['AB', 'Vega']),
       depth5Sigma: z.number().nullable(),
+      /** Where the counts turn over, with its uncertainty; never used unless a person sets it as the depth. */
+      suggestedDepth: z.object({ magnitude: z.number(), uncertainty: z.number() }).nullable(),
       count: z.int(),
       limits: z.int(),
       brightest: z.number(),

@@ -10,6 +10,7 @@ import { AppError } from '../../common/app-error.ts';
 import { encodeCursor, offsetOf, pageByOffset, pageOf } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { FactsGatherer } from '../../intake/catalogue-facts.ts';
+import { turnoverDepth } from '../../intake/turnover-depth.ts';
 import type { ResolvedBand } from '../../intake/resolved.ts';
 import { type StoredRow, TileStore } from '../../tiles/tile-store.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
@@ -126,7 +127,9 @@ export class CataloguesService {
         const found = magnitudes[name];
         if (!found || found.count === 0) return [];
         const { count, limits, min, max, histogram } = found;
-        return [{ band: name, system, depth5Sigma, count, limits, faintest: max, brightest: min, ...histogram }];
+        const suggestedDepth = turnoverDepth(histogram) ?? null;
+        const span = { faintest: max, brightest: min };
+        return [{ band: name, system, depth5Sigma, suggestedDepth, count, limits, ...span, ...histogram }];
       }),
     };
   }
