@@ -218,6 +218,7 @@ function debrisDoubt(
           name: rowName(row.catalogue, row.index),
           separationRad: row.separationArcsec * ARCSECOND,
           distanceMpc,
+          distanceTaken: !(stated > 0),
           velocityDifferenceKms: row.velocityDifferenceKms,
           logHiMass:
             row.fluxJyKms > 0 && distanceMpc > 0 ? Math.log10(hiMass(row.fluxJyKms, distanceMpc)) : expectedGas,

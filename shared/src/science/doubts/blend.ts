@@ -1,5 +1,5 @@
 import { blendNumber } from './blend-probability.ts';
-import { doubt, inWords } from './doubt.ts';
+import { doubt, inWords, roughly } from './doubt.ts';
 import type { Doubt, DoubtRule } from './doubt.ts';
 
 export interface BlendInput {
@@ -51,7 +51,7 @@ export function blend(input: BlendInput): Doubt {
   return doubt(
     RULE,
     grade,
-    `At ${inWords(distanceMpc)} Mpc a beam of ${inWords(beamArcmin)} arcmin holds another source with a chance of ${inWords(100 * chance)} per cent.`,
+    `At ${roughly(distanceMpc)} Mpc a beam of ${inWords(beamArcmin)} arcmin holds another source with a chance of ${roughly(100 * chance)} per cent.`,
     chance,
     'probability',
   );

@@ -36,7 +36,13 @@ describe('doubt of debris', () => {
     const result = of(neighbour({ name: 'far', separationRad: 5 * DEGREE }), neighbour({ name: 'near' }));
     expect(result).toMatchObject({ grade: 'serious', responsible: 1, unit: 'kpc' });
     expect(result.value).toBeCloseTo(28_000 * 0.2 * DEGREE, 9);
-    expect(result.sentence).toContain('near is 97.7 kpc and 100 km/s away at its own distance');
+    expect(result.sentence).toContain('near is 98 kpc and 100 km/s away at its own distance');
+  });
+
+  it('does not call a distance the own one of a neighbour that has none', () => {
+    const { sentence } = of(neighbour({ distanceTaken: true }));
+    expect(sentence).toContain('away at the distance of the gas');
+    expect(sentence).not.toContain('own');
   });
 
   it('is watched within 500 kpc and 500 km/s', () => {

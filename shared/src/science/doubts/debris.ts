@@ -1,4 +1,4 @@
-import { doubt, inWords } from './doubt.ts';
+import { doubt, inWords, roughly } from './doubt.ts';
 import type { Doubt, DoubtRule } from './doubt.ts';
 
 /** A galaxy that could have shed the gas. */
@@ -8,6 +8,8 @@ export interface DebrisNeighbour {
   separationRad: number;
   /** Its own angular-diameter distance, Mpc; NaN where unknown, then it cannot be tested. */
   distanceMpc: number;
+  /** It has none of its own: `distanceMpc` is that of the detection. */
+  distanceTaken?: boolean;
   /** Velocity difference (neighbour - detection) / (1 + z), km/s. */
   velocityDifferenceKms: number;
   /** log10 of its HI and stellar mass in solar masses; NaN where unknown. */
@@ -87,7 +89,8 @@ export function debris(input: DebrisInput, settings = DEBRIS_SETTINGS): DebrisDo
     const neighbour = input.neighbours[best.index]!;
     const mass = best.massive ? '' : ', whose mass is not known';
     const bridge = neighbour.bridge ? ' and gas points to it' : '';
-    const sentence = `${neighbour.name}${mass} is ${inWords(best.kpc)} kpc and ${inWords(Math.abs(neighbour.velocityDifferenceKms))} km/s away at its own distance${bridge}: the gas may be its debris.`;
+    const at = neighbour.distanceTaken ? 'at the distance of the gas' : 'at its own distance';
+    const sentence = `${neighbour.name}${mass} is ${roughly(best.kpc)} kpc and ${inWords(Math.abs(neighbour.velocityDifferenceKms))} km/s away ${at}${bridge}: the gas may be its debris.`;
     return { ...doubt(rule, best.grade, sentence, best.kpc, 'kpc'), responsible: best.index };
   }
   if (!input.covered) {

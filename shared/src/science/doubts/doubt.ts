@@ -60,6 +60,9 @@ export function worstGrade(doubts: readonly Doubt[]): DoubtGrade {
   return DOUBT_GRADES[worst]!;
 }
 
+/** As {@link inWords} with two digits: for what rests on a distance or a model. */
+export const roughly = (value: number): string => inWords(Number(value.toPrecision(2)));
+
 /** A number for a sentence: three significant digits, no exponent below a million. */
 export function inWords(value: number): string {
   if (value === 0) return '0';
