@@ -47,7 +47,12 @@ export function VerdictSummary({ detail }: { detail: VerdictDetail }) {
             <Factor term="covered" value={aloneFactors.covered} />
           </dl>
         ) : (
-          <p className="muted">Not testable here: {detail.distance.note}</p>
+          <p className="muted">
+            Not testable here:{' '}
+            {detail.distance.kind === 'none'
+              ? detail.distance.note
+              : 'what the tables with redshifts cover, or how deep they reach, is not known at this place.'}
+          </p>
         )}
       </div>
     </section>
