@@ -24,6 +24,7 @@ export function createRouter(client: QueryClient) {
           children: [
             { index: true, loader: () => redirect(paths.surveys()) },
             { path: 'surveys', ...page(() => import('./routes/surveys.tsx')) },
+            { path: 'methods', ...page(() => import('./routes/methods.tsx')) },
             { path: 'account', ...page(() => import('./routes/account.tsx')) },
             { path: 'administration', ...page(() => import('./routes/administration.tsx')) },
             {

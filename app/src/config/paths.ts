@@ -26,6 +26,7 @@ export const paths = {
   ledger: (surveyId: string) => `${survey(surveyId)}/ledger`,
   people: (surveyId: string) => `${survey(surveyId)}/people`,
   surveySettings: (surveyId: string) => `${survey(surveyId)}/settings`,
+  methods: (method?: string) => (method ? `/methods#${method}` : '/methods'),
   account: () => '/account',
   administration: () => '/administration',
 } as const;

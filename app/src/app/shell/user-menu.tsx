@@ -31,6 +31,7 @@ export function UserMenu({ me }: { me: Me }) {
       content={
         <Menu>
           <MenuDivider title={`${me.name} · ${me.email}`} />
+          <MenuItem text="Methods" onClick={() => navigate(paths.methods())} />
           <MenuItem text="Account" onClick={() => navigate(paths.account())} />
           {me.isAdministrator && <MenuItem text="Administration" onClick={() => navigate(paths.administration())} />}
           <MenuItem text={`Use the ${other} theme`} onClick={() => setPreferences({ theme: other })} />

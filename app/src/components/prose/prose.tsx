@@ -1,7 +1,11 @@
 import { Fragment } from 'react';
 
 /** Plain signs as they are printed: plus-minus, and a true minus before a number. */
-const typeset = (text: string) => text.replaceAll('+/-', '±').replace(/(^|[\s(])-(?=\d)/g, '$1−');
+const typeset = (text: string) =>
+  text
+    .replaceAll('+/-', '±')
+    .replaceAll('->', '→')
+    .replace(/(^|[\s(])-(?=\d)/g, '$1−');
 
 /** A sentence of the service with its signs and subscripts set: `M_HI` becomes M with a low HI. */
 export function Prose({ text }: { text: string }) {

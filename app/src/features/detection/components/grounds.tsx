@@ -1,5 +1,7 @@
 import type { Ground } from '@eremite/shared/contracts/verdict';
+import { Link } from 'react-router-dom';
 import { Prose } from '#components/prose/prose.tsx';
+import { paths } from '#config/paths.ts';
 
 /** Why the verdict is what it is, in sentences: what speaks against it first, what is only worth knowing folded away. */
 export function Grounds({ grounds }: { grounds: readonly Ground[] }) {
@@ -21,11 +23,19 @@ export function Grounds({ grounds }: { grounds: readonly Ground[] }) {
   );
 }
 
-const item = ({ text, weight, about }: Ground) => (
+const item = ({ text, weight, about, method }: Ground) => (
   <li key={about + text} className={`grounds__item grounds__item--${weight}`}>
     <span className="grounds__weight">{weight}</span>
     <span>
       <Prose text={text} />
+      {method && (
+        <>
+          {' '}
+          <Link to={paths.methods(method)} className="grounds__method" aria-label={`Method: ${method}`}>
+            how
+          </Link>
+        </>
+      )}
     </span>
   </li>
 );

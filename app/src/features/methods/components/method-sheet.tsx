@@ -1,0 +1,67 @@
+import { CRITERIA_FIELDS, valueText } from '#features/criteria/hooks/criteria-fields.ts';
+import type { MethodEntry } from '../method-entry.ts';
+import { Formula } from './formula.tsx';
+
+/** One method: what it is for, its formulas with their symbols, its settings with their defaults, where it holds. */
+export function MethodSheet({ entry }: { entry: MethodEntry }) {
+  const fields = CRITERIA_FIELDS.filter(({ section, key }) => entry.criteria.includes(`${section}.${key}`));
+  return (
+    <section id={entry.id} className="panel method" aria-labelledby={`method-${entry.id}`}>
+      <div className="panel__head">
+        <h2 id={`method-${entry.id}`} tabIndex={-1}>
+          {entry.title}
+        </h2>
+      </div>
+      <div className="panel__body stack">
+        <p>{entry.summary}</p>
+        <ul className="method__formulas" aria-label="Formulas">
+          {entry.formulas.map((formula) => (
+            <li key={formula}>
+              <Formula text={formula} />
+            </li>
+          ))}
+        </ul>
+        <dl className="method__symbols" aria-label="Symbols">
+          {entry.symbols.map(([symbol, meaning, unit]) => (
+            <div key={symbol}>
+              <dt>
+                <Formula text={symbol} />
+              </dt>
+              <dd>
+                <Formula text={meaning} />
+              </dd>
+              <dd className="mono small muted">
+                <Formula text={unit} />
+              </dd>
+            </div>
+          ))}
+        </dl>
+        <table className="method__settings">
+          <caption>Settings of the criteria</caption>
+          <thead>
+            <tr>
+              <th scope="col">Setting</th>
+              <th scope="col">Default</th>
+              <th scope="col">Source</th>
+            </tr>
+          </thead>
+          <tbody>
+            {fields.map((field) => (
+              <tr key={`${field.section}.${field.key}`}>
+                <th scope="row">{field.title}</th>
+                <td className={field.kind === 'choice' ? undefined : 'mono'}>
+                  {valueText(field, field.standard)} {field.standard !== null && field.unit}
+                </td>
+                <td className="muted">{field.source}</td>
+              </tr>
+            ))}
+          </tbody>
+        </table>
+        <p>
+          <b>Where it holds.</b> {entry.validity}
+        </p>
+        <p className="muted small">{entry.sources.join(' · ')}</p>
+      </div>
+    </section>
+  );
+}

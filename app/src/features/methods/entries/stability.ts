@@ -1,0 +1,17 @@
+import type { MethodEntry } from '../method-entry.ts';
+
+export const stability: MethodEntry = {
+  id: 'stability',
+  title: 'Stability',
+  summary:
+    'The verdict is repeated with what it holds fixed drawn from its errors: distance, positions, depth, scatter of the relation. The share of draws that keep it is its stability; what flips it is said.',
+  formulas: ['p = k / n,   95 per cent interval after Wilson'],
+  symbols: [
+    ['k', 'draws with the stated verdict', ''],
+    ['n', 'draws', ''],
+  ],
+  criteria: ['robustness.draws', 'robustness.seed'],
+  validity:
+    'With 2000 draws the standard error at p = 0.5 is 0.011. The same seed gives the same numbers. It measures what errors do to the verdict, not whether the model is right.',
+  sources: ['Wilson (1927), J. Am. Stat. Assoc. 22, 209'],
+};
