@@ -5,13 +5,12 @@ import { EmptyState } from '#components/feedback/empty-state.tsx';
 import { Loading } from '#components/feedback/loading.tsx';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
-import { differenceQuery } from '#features/runs/api/runs.ts';
+import { differenceQuery, hasOtherWords } from '#features/runs/api/runs.ts';
+import { ChangedCriterion } from '#features/runs/components/changed-criterion.tsx';
 import { DifferenceTable } from '#features/runs/components/difference-table.tsx';
 import { paths } from '#config/paths.ts';
 import { count } from '#lib/format/number.ts';
 import { useTitle } from '#lib/use-title.ts';
-
-const text = (value: unknown) => (typeof value === 'object' ? JSON.stringify(value) : String(value));
 
 export function Component() {
   const survey = useSurvey();
@@ -27,6 +26,7 @@ export function Component() {
       </div>
     );
   }
+  const otherWords = data.changed.filter(hasOtherWords).length;
   return (
     <div className="page stack">
       <div className="page__head" style={{ marginBottom: 0 }}>
@@ -35,7 +35,8 @@ export function Component() {
             Run {data.from.number} to run {data.to.number}
           </h1>
           <p className="page__lede">
-            <span className="num">{count(data.changed.length)}</span> verdicts moved,{' '}
+            <span className="num">{count(otherWords)}</span> {otherWords === 1 ? 'verdict' : 'verdicts'} changed,{' '}
+            <span className="num">{count(data.changed.length - otherWords)}</span> more moved in their numbers,{' '}
             <span className="num">{count(data.unchanged)}</span> stand.
           </p>
         </div>
@@ -49,12 +50,7 @@ export function Component() {
           <div className="panel__body">
             <dl className="facts">
               {data.criteriaChanged.map(({ key, from: before, to }) => (
-                <div key={key} style={{ display: 'contents' }}>
-                  <dt className="mono small">{key}</dt>
-                  <dd className="mono">
-                    {text(before)} → {text(to)}
-                  </dd>
-                </div>
+                <ChangedCriterion key={key} name={key} from={before} to={to} />
               ))}
               {data.inputsChanged.map((change) => (
                 <div key={change} style={{ display: 'contents' }}>

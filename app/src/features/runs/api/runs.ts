@@ -20,3 +20,7 @@ export const differenceQuery = (runId: string, from: string) =>
     queryFn: ({ signal }) => call(runDifference, `/runs/${runId}/difference?from=${from}`, { signal }),
     staleTime: Infinity,
   });
+
+/** Whether a verdict itself changed, not only the numbers behind it. */
+export const hasOtherWords = ({ starlight, surroundings }: RunDifference['changed'][number]): boolean =>
+  starlight[0] !== starlight[1] || surroundings[0] !== surroundings[1];

@@ -1,8 +1,9 @@
 import { Link } from 'react-router-dom';
 import { DataTable, type Column } from '#components/data-table/data-table.tsx';
+import { Prose } from '#components/prose/prose.tsx';
 import { paths } from '#config/paths.ts';
 import { probability } from '#lib/format/number.ts';
-import type { RunDifference } from '../api/runs.ts';
+import { hasOtherWords, type RunDifference } from '../api/runs.ts';
 
 type Change = RunDifference['changed'][number];
 
@@ -33,16 +34,24 @@ const columns = (surveyId: string, runId: string): Column<Change>[] => [
     cell: ({ surroundings }) => <span className="prose">{moved(surroundings, (v) => v ?? 'absent')}</span>,
   },
   { key: 'pNone', header: 'P(none)', align: 'left', cell: ({ pNone }) => moved(pNone, probability) },
-  { key: 'why', header: 'Why', align: 'left', cell: ({ why }) => <span className="prose">{why.join('; ')}</span> },
+  {
+    key: 'why',
+    header: 'Why',
+    align: 'left',
+    cell: ({ why }) => (
+      <span className="prose">{why.length > 0 ? <Prose text={why.join('; ')} /> : 'another threshold'}</span>
+    ),
+  },
 ];
 
-/** The detections whose verdict moved between two runs, each with what moved it. */
+/** The detections that moved between two runs, each with what moved it; those with another verdict first. */
 export function DifferenceTable({ surveyId, difference }: { surveyId: string; difference: RunDifference }) {
+  const sorted = [...difference.changed].sort((a, b) => Number(hasOtherWords(b)) - Number(hasOtherWords(a)));
   return (
     <DataTable
       caption={`Verdicts that differ between run ${difference.from.number} and run ${difference.to.number}`}
       columns={columns(surveyId, difference.to.id)}
-      rows={difference.changed}
+      rows={sorted}
       rowKey={({ detectionId }) => detectionId}
     />
   );
