@@ -65,6 +65,7 @@ export function CatalogueFacts({ catalogue: c }: { catalogue: Catalogue }) {
       <dt>Used by</dt>
       <dd>
         <span className="num">{c.usedByRuns}</span> {c.usedByRuns === 1 ? 'run' : 'runs'}
+        {c.usedByRuns > 0 && <span className="muted"> and kept for them: it cannot be removed</span>}
       </dd>
     </dl>
   );

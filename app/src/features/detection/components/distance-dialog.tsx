@@ -1,6 +1,7 @@
 import { FormGroup, InputGroup } from '@blueprintjs/core';
 import { useState } from 'react';
 import { NoteDialog } from '#components/dialogs/note-dialog.tsx';
+import { say } from '#lib/toaster.ts';
 import { useSetDistance } from '../api/decisions.ts';
 
 interface DistanceDialogProps {
@@ -17,7 +18,19 @@ export function DistanceDialog({ detectionId, isOpen, onClose }: DistanceDialogP
   const confirm = (note: string) => {
     const distanceMpc = fields.distance === '' ? null : Number(fields.distance);
     const errorMpc = fields.error === '' ? null : Number(fields.error);
-    save.mutate({ distanceMpc, errorMpc, source: fields.source, note }, { onSuccess: onClose });
+    save.mutate(
+      { distanceMpc, errorMpc, source: fields.source, note },
+      {
+        onSuccess: () => {
+          onClose();
+          void say(
+            distanceMpc === null
+              ? 'The next run returns to the distance of the table.'
+              : 'Saved: the next run uses it.',
+          );
+        },
+      },
+    );
   };
   return (
     <NoteDialog

@@ -3,7 +3,7 @@ import { ProbabilityBar } from '#components/probability-bar/probability-bar.tsx'
 import { Prose } from '#components/prose/prose.tsx';
 import { StarlightMark } from '#components/verdict-mark/starlight-mark.tsx';
 import { SurroundingsMark } from '#components/verdict-mark/surroundings-mark.tsx';
-import { probability } from '#lib/format/number.ts';
+import { fixed, probability } from '#lib/format/number.ts';
 import '#components/verdict-mark/verdict-mark.css';
 
 /** Both verdicts with what they rest on: the bar that adds to one, and P(no neighbour) in its three factors. */
@@ -29,6 +29,7 @@ export function VerdictSummary({ detail }: { detail: VerdictDetail }) {
             <Prose text={v.headline} />
           </p>
         )}
+        <Stands share={v.robustness?.starlightStability} />
         <ProbabilityBar pNone={v.pNone} pMissed={v.pMissed} pSpurious={v.pSpurious} />
       </div>
       <div>
@@ -38,6 +39,7 @@ export function VerdictSummary({ detail }: { detail: VerdictDetail }) {
             P(no neighbour) <b>{probability(v.pAlone)}</b>
           </span>
         </h2>
+        <Stands share={v.robustness?.surroundingsStability} />
         {aloneFactors ? (
           <dl className="factors" aria-label="Factors of the probability of no neighbour">
             <Factor term="no known one" value={aloneFactors.noneKnown} />
@@ -58,6 +60,14 @@ export function VerdictSummary({ detail }: { detail: VerdictDetail }) {
     </section>
   );
 }
+
+/** How often the verdict survives draws of what it holds fixed; the tab of that name says more. */
+const Stands = ({ share }: { share: number | null | undefined }) =>
+  share === null || share === undefined ? null : (
+    <p className="muted small">
+      stands in <span className="num">{fixed(share * 100, share > 0.995 && share < 1 ? 1 : 0)} %</span> of the draws
+    </p>
+  );
 
 const Factor = ({ term, value }: { term: string; value: number }) => (
   <div>
