@@ -5,7 +5,7 @@ import { Link, useNavigate, type LoaderFunctionArgs } from 'react-router-dom';
 import { DataTable, type Column } from '#components/data-table/data-table.tsx';
 import { EmptyState } from '#components/feedback/empty-state.tsx';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
-import { CRITERIA_FIELDS, isStandard, valueOf, valueText } from '#features/criteria/hooks/criteria-fields.ts';
+import { CRITERIA_FIELDS, isStandard, valueOf, valueText } from '#lib/criteria/criteria-fields.ts';
 import { paths } from '#config/paths.ts';
 import { moment } from '#lib/format/time.ts';
 import { criteriaListQuery } from '#lib/queries/criteria.ts';

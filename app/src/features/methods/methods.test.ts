@@ -1,7 +1,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { CRITERIA_FIELDS } from '#features/criteria/hooks/criteria-fields.ts';
+import { CRITERIA_FIELDS } from '#lib/criteria/criteria-fields.ts';
 import { METHODS } from './methods.ts';
 
 const SCORING = join(import.meta.dirname, '../../../../service/src/scoring');

@@ -9,7 +9,7 @@ import type { Survey } from '@eremite/shared/contracts/survey';
 import { useMemo, useState } from 'react';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { useSaveCriteria } from '../api/criteria.ts';
-import { CRITERIA_FIELDS, isStandard, valueOf } from '../hooks/criteria-fields.ts';
+import { CRITERIA_FIELDS, isStandard, valueOf } from '#lib/criteria/criteria-fields.ts';
 import { CriteriaRow } from './criteria-row.tsx';
 import { PreviewPanel } from './preview-panel.tsx';
 import { SectionNav } from './section-nav.tsx';

@@ -1,6 +1,6 @@
 import { Button } from '@blueprintjs/core';
 import { useState } from 'react';
-import { isStandard, valueText, type CriteriaField } from '../hooks/criteria-fields.ts';
+import { isStandard, valueText, type CriteriaField } from '#lib/criteria/criteria-fields.ts';
 import { FieldInput } from './field-input.tsx';
 
 interface CriteriaRowProps {

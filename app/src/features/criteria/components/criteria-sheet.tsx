@@ -1,5 +1,5 @@
 import { CRITERIA_SECTIONS, type CriteriaSettings } from '@eremite/shared/contracts/criteria';
-import { CRITERIA_FIELDS, isStandard, valueOf } from '../hooks/criteria-fields.ts';
+import { CRITERIA_FIELDS, isStandard, valueOf } from '#lib/criteria/criteria-fields.ts';
 import { CriteriaRow } from './criteria-row.tsx';
 import { SectionNav } from './section-nav.tsx';
 import './criteria.css';

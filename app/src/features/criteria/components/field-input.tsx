@@ -1,6 +1,6 @@
 import { HTMLSelect, InputGroup, Switch } from '@blueprintjs/core';
 import { useState } from 'react';
-import { valueText, type CriteriaField } from '../hooks/criteria-fields.ts';
+import { valueText, type CriteriaField } from '#lib/criteria/criteria-fields.ts';
 
 interface FieldInputProps {
   id: string;

@@ -1,6 +1,6 @@
 import { CRITERIA_SECTIONS } from '@eremite/shared/contracts/criteria';
 import type { ReactNode } from 'react';
-import type { CriteriaField } from '../hooks/criteria-fields.ts';
+import type { CriteriaField } from '#lib/criteria/criteria-fields.ts';
 
 /** Jumps to a section; says how much of it differs from the defaults. */
 export function SectionNav({ changed, children }: { changed: readonly CriteriaField[]; children?: ReactNode }) {

@@ -1,4 +1,4 @@
-import { CRITERIA_FIELDS, valueText } from '#features/criteria/hooks/criteria-fields.ts';
+import { CRITERIA_FIELDS, valueText } from '#lib/criteria/criteria-fields.ts';
 import type { MethodEntry } from '../method-entry.ts';
 import { Formula } from './formula.tsx';
 

@@ -1,4 +1,4 @@
-import { CRITERIA_FIELDS, valueText } from '#features/criteria/hooks/criteria-fields.ts';
+import { CRITERIA_FIELDS, valueText } from '#lib/criteria/criteria-fields.ts';
 
 interface ChangedCriterionProps {
   /** `section.key` of the criteria. */
