@@ -101,6 +101,17 @@ describe('a catalogue', () => {
     const expected = flat.flatMap((d, i) => (d <= radius ? [i + 1] : [])).sort((a, b) => flat[a - 1]! - flat[b - 1]!);
     expect(cone.items.map((item: { row: number }) => item.row)).toEqual(expected);
     expect(cone.items[0].separationArcsec).toBeCloseTo(flat[expected[0]! - 1]!, 1);
+    for (const [k, at] of [
+      [7, 'raDeg=0&decDeg=0'],
+      [3, 'raDeg=180&decDeg=-40'],
+    ] as const) {
+      const { body } = await staff.observer.get(`/catalogues/${id}/rows?${at}&nearest=${k}`);
+      expect(body.items).toHaveLength(k);
+      if (at === 'raDeg=0&decDeg=0') {
+        const nearest = flat.map((_, i) => i + 1).sort((a, b) => flat[a - 1]! - flat[b - 1]!);
+        expect(body.items.map((item: { row: number }) => item.row)).toEqual(nearest.slice(0, k));
+      } else expect(body.items[0].separationArcsec).toBeGreaterThan(400_000);
+    }
     const single = await staff.observer.get(`/catalogues/${id}/rows?row=1234`);
     expect(single.body.items[0].cells[0]).toBe('g1234');
     expect((await staff.observer.get(`/catalogues/${id}/rows?raDeg=0`)).status).toBe(400);

@@ -1,9 +1,9 @@
-import { DEGREE } from '@eremite/shared/science/constants';
-import { separation } from '@eremite/shared/science/sky/separation';
 import { Inject, Injectable } from '@nestjs/common';
 import { BulkStore } from '../database/bulk.ts';
+import { buildConeIndex } from '../matching/cone-index.ts';
+import { coneSearch, nearestRows } from '../matching/cone-search.ts';
 import { cellsOfCone } from './cells.ts';
-import { type PackedColumns, textAt, unpackColumns } from './column-pack.ts';
+import { textAt, unpackColumns } from './column-pack.ts';
 import { rowCells } from './original-cells.ts';
 import { unpackOriginals } from './original-pack.ts';
 import { joinRoles } from './join-roles.ts';
@@ -21,6 +21,8 @@ export interface StoredRow {
   cells: string[];
 }
 
+/** Cones in which the nearest rows are looked for, arcsec; at last the whole catalogue. */
+const WIDENING_ARCSEC = [600, 3600, 36_000, Infinity];
 /** Bytes of roles asked of the database at a time. */
 const READ_BYTES = 48 * 1024 ** 2;
 
@@ -127,6 +129,31 @@ export class TileStore {
     return found.sort((a, b) => a.separationArcsec! - b.separationArcsec! || a.row - b.row);
   }
 
+  /**
+   * The k rows nearest to a place however far, nearest first: in cones that widen until they hold them.
+   *
+   * @param k at least 1
+   */
+  async readNearest(catalogueId: string, raDeg: number, decDeg: number, k: number): Promise<StoredRow[]> {
+    for (const radiusArcsec of WIDENING_ARCSEC) {
+      const whole = radiusArcsec === Infinity;
+      const { columns, rows } = whole
+        ? await this.readRoles(catalogueId)
+        : await this.readRolesNear(catalogueId, raDeg, decDeg, radiusArcsec);
+      if (rows < k && !whole) continue;
+      const near = nearestRows(buildConeIndex(columns.raDeg, columns.decDeg), raDeg, decDeg, k);
+      // Beyond the cone there may be nearer rows in cells that it did not touch.
+      if (!whole && near.separationArcsec.at(-1)! > radiusArcsec) continue;
+      const found: StoredRow[] = [];
+      for (let i = 0; i < near.row.length; i++) {
+        const stored = await this.readRow(catalogueId, columns.row[near.row[i]!]!);
+        if (stored) found.push({ ...stored, separationArcsec: near.separationArcsec[i]! });
+      }
+      return found;
+    }
+    return [];
+  }
+
   /** Ranges of cells whose roles together are about `READ_BYTES`. */
   private async cellGroups(catalogueId: string): Promise<[number, number][]> {
     const select =
@@ -216,27 +243,24 @@ function within(
   radiusArcsec: number,
 ): StoredRow[] {
   const roles = unpackColumns(roleBlob);
-  const { columns, rows } = roles;
+  const { columns } = roles;
   const [ra, dec, row] = [
     columns['raDeg'] as Float64Array,
     columns['decDeg'] as Float64Array,
     columns['row'] as Uint32Array,
   ];
   const found: StoredRow[] = [];
-  const reach = radiusArcsec / 3600;
-  let originals: PackedColumns | undefined;
-  for (let i = 0; i < rows; i++) {
-    if (Math.abs(dec[i]! - decDeg) > reach) continue;
-    const apart = (separation(raDeg * DEGREE, decDeg * DEGREE, ra[i]! * DEGREE, dec[i]! * DEGREE) / DEGREE) * 3600;
-    if (apart > radiusArcsec) continue;
-    originals ??= unpackOriginals(originalBlob, roles);
+  const near = coneSearch(buildConeIndex(ra, dec), raDeg, decDeg, radiusArcsec);
+  if (near.row.length === 0) return found;
+  const originals = unpackOriginals(originalBlob, roles);
+  near.row.forEach((i, n) =>
     found.push({
       row: row[i]!,
       raDeg: ra[i]!,
       decDeg: dec[i]!,
-      separationArcsec: apart,
+      separationArcsec: near.separationArcsec[n]!,
       cells: rowCells(originals, i),
-    });
-  }
+    }),
+  );
   return found;
 }

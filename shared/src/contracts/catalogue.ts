@@ -40,6 +40,8 @@ export const catalogueRowsQuery = listQuery.extend({
   raDeg: z.coerce.number().optional(),
   decDeg: z.coerce.number().min(-90).max(90).optional(),
   radiusArcsec: z.coerce.number().positive().max(36_000).optional(),
+  /** In place of a radius: so many rows nearest to the place, however far. */
+  nearest: z.coerce.number().int().min(1).max(100).optional(),
   row: z.coerce.number().pipe(rowNumber).optional(),
 });
 export const catalogueRow = z.object({

@@ -70,11 +70,14 @@ export class CataloguesService {
   /** Rows around a place, nearest first, or in the order of the file. */
   async rows(user: SignedInUser, id: string, query: RowsQuery): Promise<List<StoredRow>> {
     const { catalogue } = await this.#found(user, id, 'read');
-    const { raDeg, decDeg, radiusArcsec, row, limit, cursor } = query;
+    const { raDeg, decDeg, radiusArcsec, nearest, row, limit, cursor } = query;
     if (row !== undefined) return pageOf(await this.#single(id, row), query);
-    if ([raDeg, decDeg, radiusArcsec].some((value) => value !== undefined)) {
+    if (nearest !== undefined && raDeg !== undefined && decDeg !== undefined) {
+      return pageOf(await this.tiles.readNearest(id, ((raDeg % 360) + 360) % 360, decDeg, nearest), query);
+    }
+    if ([raDeg, decDeg, radiusArcsec, nearest].some((value) => value !== undefined)) {
       if (raDeg === undefined || decDeg === undefined || radiusArcsec === undefined) {
-        throw new AppError('VALIDATION_FAILED', 'A place needs raDeg, decDeg and radiusArcsec together.');
+        throw new AppError('VALIDATION_FAILED', 'A place needs raDeg, decDeg and radiusArcsec (or nearest) together.');
       }
       return pageOf(await this.tiles.readCone(id, ((raDeg % 360) + 360) % 360, decDeg, radiusArcsec), query);
     }

@@ -89,7 +89,12 @@ export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardP
       <aside className="intake__side stack" aria-label="Outcome">
         <CheckPanel check={intake.check} isChecking={isChecking} />
         <ProblemCallout error={error} title="These settings do not fit" />
-        <PublishPanel intake={intake} isUnsettled={isChecking || error !== null} onPublished={onPublished} onDiscarded={onDiscarded} />
+        <PublishPanel
+          intake={intake}
+          isUnsettled={isChecking || error !== null}
+          onPublished={onPublished}
+          onDiscarded={onDiscarded}
+        />
       </aside>
     </div>
   );

@@ -1,6 +1,6 @@
 import { FormGroup, TextArea } from '@blueprintjs/core';
 import type { Intake } from '@eremite/shared/contracts/intake';
-import type { FOOTPRINT_TYPES} from '@eremite/shared/contracts/intake-settings';
+import type { FOOTPRINT_TYPES } from '@eremite/shared/contracts/intake-settings';
 import { type IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { useId, useState } from 'react';
 import type { Change } from '../hooks/use-intake-draft.ts';
