@@ -31,7 +31,7 @@ const item = ({ text, weight, about, method }: Ground) => (
       {method && (
         <>
           {' '}
-          <Link to={paths.methods(method)} className="grounds__method" aria-label={`Method: ${method}`}>
+          <Link to={paths.methods(method)} className="grounds__method" aria-label={`how: method ${method}`}>
             how
           </Link>
         </>
