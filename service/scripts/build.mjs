@@ -1,5 +1,5 @@
 import { existsSync, mkdirSync, readdirSync, readFileSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
-import { join } from 'node:path';
+import { dirname, join, relative } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import { fingerprint } from './fingerprint.mjs';
 import { CACHE, ROOT } from './paths.mjs';
@@ -17,26 +17,28 @@ const PARTS = {
     entry: 'index.html',
   },
 };
-/** Scripts of an older build that a running server may still want to load. */
-const KEEP_MS = 10 * 60_000;
+/** How long the pieces of an older build stay: a running server or an open page may still want to load them. */
+const KEEP_MS = 24 * 3600_000;
 
-/** Moves the new scripts in one by one, so that whoever loads one at this moment gets the old or the new, never half. */
-function moveIn(from, to) {
+/**
+ * Moves a fresh build in file by file, the entry last: whoever loads a file at this moment gets the old one or the new
+ * one, never half, and a page or a server still running on the old build finds the pieces it has yet to ask for.
+ */
+function moveIn(from, to, entry) {
   mkdirSync(to, { recursive: true });
-  const fresh = new Set(readdirSync(from));
-  for (const name of fresh) renameSync(join(from, name), join(to, name));
-  for (const name of readdirSync(to)) {
-    const path = join(to, name);
-    if (!fresh.has(name) && name.startsWith('chunk-') && Date.now() - statSync(path).mtimeMs > KEEP_MS) rmSync(path);
+  const files = (folder) =>
+    readdirSync(folder, { recursive: true, withFileTypes: true })
+      .filter((found) => found.isFile())
+      .map((found) => relative(folder, join(found.parentPath, found.name)));
+  const fresh = new Set(files(from));
+  for (const name of [...fresh].sort((a, b) => Number(a === entry) - Number(b === entry))) {
+    mkdirSync(dirname(join(to, name)), { recursive: true });
+    renameSync(join(from, name), join(to, name));
   }
-}
-
-function swap(from, to) {
-  const old = `${to}.old`;
-  rmSync(old, { recursive: true, force: true });
-  if (existsSync(to)) renameSync(to, old);
-  renameSync(from, to);
-  rmSync(old, { recursive: true, force: true });
+  for (const name of files(to)) {
+    const path = join(to, name);
+    if (!fresh.has(name) && Date.now() - statSync(path).mtimeMs > KEEP_MS) rmSync(path);
+  }
 }
 
 async function build(part) {
@@ -53,8 +55,7 @@ async function build(part) {
       mode: 'production',
       build: options,
     });
-    if (part === 'service') moveIn(draft, join(root, 'dist'));
-    else swap(draft, join(root, 'dist'));
+    moveIn(draft, join(root, 'dist'), PARTS[part].entry);
   } finally {
     rmSync(draft, { recursive: true, force: true });
   }

@@ -54,6 +54,12 @@ export function nestLogger(logger: Logger): LoggerService {
   };
 }
 
+/** A probe that asks before the server is ready gets an honest 503; that is no fault to wake anyone for. */
+export function levelOf(request: IncomingMessage, response: ServerResponse, error?: Error): 'error' | 'info' | 'debug' {
+  if (request.url?.split('?')[0]?.endsWith('/health/ready') && response.statusCode === 503) return 'debug';
+  return error || response.statusCode >= 500 ? 'error' : response.statusCode >= 400 ? 'info' : 'debug';
+}
+
 /** One line a request: id, method, path without query, status, time. */
 export function requestLog(logger: Logger) {
   return pinoHttp({
@@ -72,7 +78,6 @@ export function requestLog(logger: Logger) {
       }),
       res: (response: { statusCode: number }) => ({ status: response.statusCode }),
     },
-    customLogLevel: (_request, response, error) =>
-      error || response.statusCode >= 500 ? 'error' : response.statusCode >= 400 ? 'info' : 'debug',
+    customLogLevel: levelOf,
   });
 }
