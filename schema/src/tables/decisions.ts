@@ -1,11 +1,26 @@
-import { bigserial, index, integer, jsonb, pgTable, primaryKey, text, uniqueIndex, uuid } from 'drizzle-orm/pg-core';
+import {
+  bigserial,
+  boolean,
+  doublePrecision,
+  index,
+  integer,
+  jsonb,
+  pgTable,
+  primaryKey,
+  text,
+  uniqueIndex,
+  uuid,
+} from 'drizzle-orm/pg-core';
 import { sql } from 'drizzle-orm';
 import { at, createdAt, id } from '../columns.ts';
-import { users } from './people.ts';
+import { teams, users } from './people.ts';
 import { runs } from './runs.ts';
 import { catalogues, detections, surveys } from './surveys.ts';
 
-/** A reviewer's word on one detection of one run; a later one of the same reviewer supersedes it. */
+/**
+ * A reviewer's word on one detection of one run; a later one of the same reviewer supersedes it. Where the evidence stands
+ * in a later run the word is carried there as a row of its own, which names the one that was given.
+ */
 export const reviews = pgTable(
   'reviews',
   {
@@ -21,11 +36,46 @@ export const reviews = pgTable(
       .references(() => users.id),
     starlight: text('starlight').notNull(),
     surroundings: text('surroundings').notNull(),
+    /** `verdict`, or what the reviewer says in place of one. */
+    outcome: text('outcome').notNull().default('verdict'),
     note: text('note').notNull(),
+    /** Given before another's word on the same run could be seen: only these count for the agreement of two reviewers. */
+    blind: boolean('blind').notNull().default(true),
+    /** The review this row carries into a later run. */
+    carriedFrom: uuid('carried_from'),
     supersededAt: at('superseded_at'),
+    withdrawnAt: at('withdrawn_at'),
     createdAt: createdAt(),
   },
-  (table) => [index('reviews_detection').on(table.detectionId)],
+  (table) => [
+    index('reviews_detection').on(table.detectionId),
+    index('reviews_run').on(table.runId),
+    uniqueIndex('reviews_current')
+      .on(table.detectionId, table.runId, table.reviewerId)
+      .where(sql`superseded_at is null`),
+  ],
+);
+
+/** A review whose evidence moved: its detection comes back to the reviewer, marked with what moved. */
+export const returns = pgTable(
+  'returns',
+  {
+    runId: uuid('run_id')
+      .notNull()
+      .references(() => runs.id, { onDelete: 'cascade' }),
+    detectionId: uuid('detection_id')
+      .notNull()
+      .references(() => detections.id, { onDelete: 'cascade' }),
+    reviewerId: uuid('reviewer_id')
+      .notNull()
+      .references(() => users.id),
+    reviewId: uuid('review_id')
+      .notNull()
+      .references(() => reviews.id),
+    /** The contract's `moved`. */
+    moved: jsonb('moved').notNull(),
+  },
+  (table) => [primaryKey({ columns: [table.runId, table.detectionId, table.reviewerId] })],
 );
 
 /** The lead's settled word. */
@@ -44,7 +94,11 @@ export const settlements = pgTable(
       .references(() => users.id),
     starlight: text('starlight').notNull(),
     surroundings: text('surroundings').notNull(),
+    outcome: text('outcome').notNull().default('verdict'),
     note: text('note').notNull(),
+    carriedFrom: uuid('carried_from'),
+    /** What moved since in the latest finished run; null while the evidence stands. */
+    moved: jsonb('moved'),
     supersededAt: at('superseded_at'),
     createdAt: createdAt(),
   },
@@ -62,14 +116,18 @@ export const overrides = pgTable(
     id: id(),
     detectionId: uuid('detection_id')
       .notNull()
-      .references(() => detections.id),
+      .references(() => detections.id, { onDelete: 'cascade' }),
     catalogueId: uuid('catalogue_id')
       .notNull()
-      .references(() => catalogues.id),
+      .references(() => catalogues.id, { onDelete: 'cascade' }),
     row: integer('row').notNull(),
     objectName: text('object_name').notNull(),
+    /** Where the object stands: by this and its name it is found again in a new version of its table. */
+    raDeg: doublePrecision('ra_deg'),
+    decDeg: doublePrecision('dec_deg'),
     action: text('action').notNull(),
     note: text('note').notNull(),
+    carriedFrom: uuid('carried_from'),
     createdBy: uuid('created_by')
       .notNull()
       .references(() => users.id),
@@ -86,12 +144,133 @@ export const overrides = pgTable(
   ],
 );
 
+/** A person's word on a doubt: cleared by what the catalogues cannot know, or confirmed. */
+export const doubtWords = pgTable(
+  'doubt_words',
+  {
+    id: id(),
+    detectionId: uuid('detection_id')
+      .notNull()
+      .references(() => detections.id, { onDelete: 'cascade' }),
+    runId: uuid('run_id')
+      .notNull()
+      .references(() => runs.id),
+    doubt: text('doubt').notNull(),
+    word: text('word').notNull(),
+    /** As graded when the word was given. */
+    grade: text('grade').notNull(),
+    note: text('note').notNull(),
+    carriedFrom: uuid('carried_from'),
+    createdBy: uuid('created_by')
+      .notNull()
+      .references(() => users.id),
+    withdrawnAt: at('withdrawn_at'),
+    withdrawnBy: uuid('withdrawn_by').references(() => users.id),
+    withdrawnNote: text('withdrawn_note'),
+    createdAt: createdAt(),
+  },
+  (table) => [
+    uniqueIndex('doubt_words_current')
+      .on(table.detectionId, table.doubt)
+      .where(sql`withdrawn_at is null`),
+  ],
+);
+
+/** Something said of a detection without deciding; those mentioned are written to. */
+export const remarks = pgTable(
+  'remarks',
+  {
+    id: id(),
+    detectionId: uuid('detection_id')
+      .notNull()
+      .references(() => detections.id, { onDelete: 'cascade' }),
+    authorId: uuid('author_id')
+      .notNull()
+      .references(() => users.id),
+    text: text('text').notNull(),
+    /** Ids of accounts. */
+    mentions: jsonb('mentions').notNull().default([]),
+    createdAt: createdAt(),
+  },
+  (table) => [index('remarks_detection').on(table.detectionId)],
+);
+
+/** A file that goes with a note; without a subject until the decision is sent. */
+export const attachments = pgTable(
+  'attachments',
+  {
+    id: id(),
+    detectionId: uuid('detection_id')
+      .notNull()
+      .references(() => detections.id, { onDelete: 'cascade' }),
+    /** The review, settlement, override, doubt word or remark whose note it goes with. */
+    subjectId: uuid('subject_id'),
+    uploadedBy: uuid('uploaded_by')
+      .notNull()
+      .references(() => users.id),
+    fileName: text('file_name').notNull(),
+    mediaType: text('media_type').notNull(),
+    bytes: integer('bytes').notNull(),
+    sha256: text('sha256').notNull(),
+    fileKey: text('file_key').notNull(),
+    createdAt: createdAt(),
+  },
+  (table) => [index('attachments_detection').on(table.detectionId), index('attachments_subject').on(table.subjectId)],
+);
+
+/** Phrases a team keeps at hand for its notes. */
+export const notePhrases = pgTable('note_phrases', {
+  teamId: uuid('team_id')
+    .primaryKey()
+    .references(() => teams.id, { onDelete: 'cascade' }),
+  phrases: jsonb('phrases').notNull(),
+});
+
+/**
+ * Which source of a new version of a table is the one that people's words were given on. `open` ones could not be told and
+ * are asked.
+ */
+export const bindings = pgTable(
+  'bindings',
+  {
+    id: id(),
+    surveyId: uuid('survey_id')
+      .notNull()
+      .references(() => surveys.id),
+    /** The new version. */
+    catalogueId: uuid('catalogue_id')
+      .notNull()
+      .references(() => catalogues.id, { onDelete: 'cascade' }),
+    /** `detection`: all words on it; `object`: one override. */
+    kind: text('kind').notNull(),
+    detectionId: uuid('detection_id')
+      .notNull()
+      .references(() => detections.id, { onDelete: 'cascade' }),
+    overrideId: uuid('override_id').references(() => overrides.id, { onDelete: 'cascade' }),
+    name: text('name').notNull(),
+    /** `sure`, `open`, `answered` or `dropped`. */
+    state: text('state').notNull(),
+    /** [{row, name, separationArcsec}]. */
+    candidates: jsonb('candidates').notNull(),
+    row: integer('row'),
+    /** The detection of the new version, where the kind is `detection`. */
+    successorId: uuid('successor_id').references(() => detections.id, { onDelete: 'cascade' }),
+    answeredBy: uuid('answered_by').references(() => users.id),
+    note: text('note').notNull().default(''),
+    createdAt: createdAt(),
+  },
+  (table) => [
+    index('bindings_survey').on(table.surveyId, table.state),
+    index('bindings_successor').on(table.successorId),
+  ],
+);
+
 export const assignments = pgTable(
   'assignments',
   {
     detectionId: uuid('detection_id')
       .notNull()
-      .references(() => detections.id),
+      .references(() => detections.id, { onDelete: 'cascade' }),
     userId: uuid('user_id')
       .notNull()
       .references(() => users.id),
