@@ -4,7 +4,7 @@ import type { ColumnFacts, RowChunk } from '../tables/table.ts';
 import type { Column, PackedColumns, TextColumn } from '../tiles/column-pack.ts';
 import { selectRows } from '../tiles/column-rows.ts';
 import { CellTally } from './cell-tally.ts';
-import { keptRows } from './keep-rows.ts';
+import { RowKeeper } from './keep-rows.ts';
 import { lineOf, numberCells, type NumberRecipe, rowOf } from './number-cells.ts';
 import { sigmaOfError } from '@eremite/shared/science/counterpart/position-error';
 import { chunkPositions, type ChunkPositions, DecimalRightAscensions } from './positions.ts';
@@ -34,16 +34,18 @@ export class RoleExtractor {
   readonly decimals = new DecimalRightAscensions();
   private readonly recipe: Recipe;
   private readonly tally = new CellTally();
+  private readonly keeper: RowKeeper;
 
   constructor(
     private readonly resolved: ResolvedSettings,
     columns: readonly ColumnFacts[],
   ) {
     this.recipe = recipeOf(resolved, columns);
+    this.keeper = new RowKeeper(this.recipe.keep);
   }
 
   extract(chunk: RowChunk): ExtractedChunk {
-    const wanted = keptRows(chunk, this.recipe.keep);
+    const wanted = this.keeper.keep(chunk);
     const { recipe } = this;
     const positions = chunkPositions(chunk, recipe.position, recipe.marks, this.decimals, this.tally);
     const sidelined: ExtractedChunk['sidelined'] = [];
@@ -72,7 +74,7 @@ export class RoleExtractor {
 
   /** What the cells gave rise to, once all chunks are through. */
   questions(): SettingsQuestion[] {
-    const questions = this.tally.questions();
+    const questions = [...this.keeper.questions(), ...this.tally.questions()];
     if (this.decimals.negative > 0) {
       const text = `${this.decimals.negative.toLocaleString('en')} right ascensions below 0 were brought into 0 to 360 degrees.`;
       questions.push({ level: 'warning', pointer: '/columns/ra', text });

@@ -56,6 +56,14 @@ describe('guessing roles', () => {
     expect(guess(column('z', 18.4), column('g', 19))).toEqual({ z: 'magnitude:z', g: 'magnitude:g' });
   });
 
+  it('takes a distance with a unit before a modulus, and a modulus before a distance without', () => {
+    const modulus = column('distance_modulus', 24.4);
+    expect(guess(modulus, column('distance', 760, { unit: 'kpc' }))['distance']).toBe('distance');
+    expect(guess(modulus, column('distance_kpc', 760))['distance_kpc']).toBe('distance');
+    expect(guess(modulus, column('distance', 760))['distance_modulus']).toBe('distance');
+    expect(nameParts('distance_modulus').unit).toBe('mag');
+  });
+
   it('finds bands, their errors and their limit flags', () => {
     const found = guess(
       column('gmag', 19),

@@ -31,6 +31,9 @@ const ERROR_PREFIX = /^(e_|err_|error_|sig_|sigma_|unc_|u_|d_(?=[a-z]{2}))/;
 const ERROR_SUFFIX = /(_err|_error|_unc|_uncertainty|_e|(?<=[a-z0-9])err)$/;
 const LIMIT = /^l_|_(limit_?flag|lim_?flag|uplim|upper_?limit|is_?limit)$/;
 
+/** Names of a distance modulus, which says its unit: mag. */
+export const DISTANCE_MODULUS = /^(dm|mod|distance_?modulus|dist_?mod(ulus)?)$/;
+
 /** Takes a column name apart. A unit in brackets ("cz [km/s]", "dist (Mpc)") is handed over as it stands. */
 export function nameParts(name: string): NameParts {
   let unit: string | undefined;
@@ -53,6 +56,7 @@ export function nameParts(name: string): NameParts {
     !/^(e_?pos|e_?maj|e_?b_?v|sigma_?(v|pos)|sig_?v|d_lum)$/.test(base) &&
     (ERROR_PREFIX.test(base) || ERROR_SUFFIX.test(base));
   if (error) base = (ERROR_PREFIX.test(base) ? base.replace(ERROR_PREFIX, '') : base.replace(ERROR_SUFFIX, '')) || base;
+  if (unit === undefined && !error && DISTANCE_MODULUS.test(base)) unit = 'mag';
   return { base, ...(unit === undefined ? {} : { unit }), error, limit };
 }
 

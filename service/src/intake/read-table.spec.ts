@@ -222,4 +222,30 @@ describe('reading a catalogue', () => {
     expect(column(told, 'distanceMpc')).toEqual([20]);
     expect(levelAt(told, '/units/distance')).toEqual(['assumed']);
   });
+
+  it('asks about a filter that no row passes, and says what the column holds', async () => {
+    const rows = 'id,ra_deg,dec_deg,type\na,10,5,G\nb,11,5,GPair\nc,12,5,*\n';
+    const none = await read(rows, { keep: [{ column: 'type', values: ['g', 'Gal'] }] });
+    const [question] = none.questions.filter(({ pointer }) => pointer === '/keep/0/values');
+    expect(question).toEqual({
+      level: 'ask',
+      pointer: '/keep/0/values',
+      text: 'No row has "g" or "Gal" in "type", so none would be kept. Other values there are "G", "GPair", "*".',
+    });
+    expect(none.check).toMatchObject({ usable: 0, leftOut: 3, ready: false });
+    expect(none.assumed.join()).toContain('No row has "g"');
+    const some = await read(rows, { keep: [{ column: 'type', values: ['G', 'Gal'] }] });
+    expect(levelAt(some, '/keep/0/values')).toEqual(['warning']);
+    expect(some.check).toMatchObject({ usable: 1, ready: true });
+    expect(levelAt(await read(rows, { keep: [{ column: 'type', values: ['G', '*'] }] }), '/keep/0/values')).toEqual([]);
+  });
+
+  it('asks for the reddening column where a band is to be corrected by one', async () => {
+    const bands = [{ name: 'r', extinction: 'column' as const }];
+    const rows = 'id,ra_deg,dec_deg,rmag,ebv\na,10,5,18,0.03\n';
+    expect(levelAt(await read(rows, { bands }), '/columns/reddening')).toEqual([]);
+    const without = await read(rows, { bands, columns: { reddening: null } });
+    expect(levelAt(without, '/columns/reddening')).toEqual(['ask']);
+    expect(without.check.ready).toBe(false);
+  });
 });

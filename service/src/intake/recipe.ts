@@ -49,7 +49,8 @@ export interface Recipe {
   /** With a distance modulus the error is one of the modulus, mag. */
   distanceError: { recipe: NumberRecipe; ofModulus: boolean } | null;
   magnitudes: { band: string; value: NumberRecipe; error: NumberRecipe | null; limitFlag: number | null }[];
-  keep: { index: number; texts: Set<string>; numbers: Set<number> }[];
+  /** Values by their text and, where they are numbers, by the number too; each leads to the value as it was written. */
+  keep: { index: number; column: string; values: Map<string | number, string> }[];
   marks: MissingMarks;
 }
 
@@ -125,12 +126,18 @@ export function recipeOf(resolved: ResolvedSettings, columns: readonly ColumnFac
     }),
     keep: resolved.keep.map(({ column, values }) => ({
       index: indexOf(column),
-      texts: new Set(values.map((value) => value.trim())),
-      numbers: new Set(
-        values
-          .filter((value) => value.trim() !== '')
-          .map(Number)
-          .filter(Number.isFinite),
+      column,
+      values: new Map(
+        values.flatMap((value): [string | number, string][] => {
+          const text = value.trim();
+          const number = text === '' ? NaN : Number(text);
+          return Number.isFinite(number)
+            ? [
+                [text, text],
+                [number, text],
+              ]
+            : [[text, text]];
+        }),
       ),
     })),
     marks: new MissingMarks(resolved.missing),

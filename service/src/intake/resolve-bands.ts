@@ -11,6 +11,7 @@ import type { ResolvedBand, ResolvedMagnitude } from './resolved.ts';
 export function resolveBands(
   settings: IntakeSettings,
   magnitudes: readonly ResolvedMagnitude[],
+  hasReddening: boolean,
   remarks: Remarks,
 ): ResolvedBand[] {
   const described: { facts: BandFacts; pointer: string }[] = (settings.bands ?? []).map((facts, i) => ({
@@ -50,6 +51,14 @@ export function resolveBands(
   if (systems.length) say(`The magnitude system is not stated: ${systems.join(', ')} assumed.`);
   if (bands.length && described.every(({ facts }) => facts.extinction === undefined)) {
     say('Magnitudes are taken as not corrected for Galactic extinction.');
+  }
+  const reddened = bands.filter(({ extinction }) => extinction === 'column').map(({ name }) => name);
+  if (reddened.length > 0 && !hasReddening) {
+    remarks.questions.push({
+      level: 'ask',
+      pointer: '/columns/reddening',
+      text: `The extinction in ${reddened.join(', ')} is to come from the reddening column: which column holds E(B-V)?`,
+    });
   }
   if (unstated.length) {
     say(`The depth of ${unstated.join(', ')} is not stated: where this table has no object, that shows nothing.`);

@@ -53,7 +53,7 @@ export function resolveSettings(
     positionErrorArcsec: settings.positionErrorArcsec ?? null,
     beamArcsec: settings.beamArcsec ? { ...settings.beamArcsec, angleDeg: settings.beamArcsec.angleDeg ?? 0 } : null,
     distanceKind: settings.distanceKind ?? 'angular',
-    bands: resolveBands(settings, columns.magnitudes, remarks),
+    bands: resolveBands(settings, columns.magnitudes, columns.reddening !== null, remarks),
     redshiftDepth: settings.redshiftDepth ?? null,
     missing: settings.missing ?? [],
     keep: resolveKeep(settings, names, remarks),

@@ -1,4 +1,5 @@
 import type { ColumnRole } from '@eremite/shared/contracts/intake-settings';
+import { DISTANCE_MODULUS } from './name-parts.ts';
 import type { Quantity } from './units.ts';
 
 /** What is known of a role: how people name such columns, what they may hold, how it is called in a sentence. */
@@ -147,7 +148,11 @@ export const ROLE_FACTS: Readonly<Record<ColumnRole, RoleFacts>> = {
     'distance',
     'distance',
     above(20_000),
-    [[/^(dist|distance|d|d_?lum|dist_?best|distance_?best|dm|mod|distance_?modulus|dist_?mod)$/, 0.8]],
+    [
+      [/^(dist|distance|d|d_?lum|dist_?best|distance_?best)$/, 0.8],
+      // A modulus is taken where there is no distance with a unit: it says the same, less directly.
+      [DISTANCE_MODULUS, 0.7],
+    ],
     [
       [/^pos\.distance/, 0.9],
       [/^phot\.mag\.distmod/, 0.85],
