@@ -1,39 +1,44 @@
 import { asciiText } from './ascii-text.ts';
-import { collectRows } from './collect-rows.ts';
-import type { OutputCell, OutputColumn, OutputRow, OutputRows, OutputTable } from './output-column.ts';
+import {
+  type OutputCell,
+  type OutputColumn,
+  type OutputRow,
+  type OutputRows,
+  type OutputTable,
+  roundCell,
+} from './output-column.ts';
+import { RowSpool } from './row-spool.ts';
 
 const BLOCK = 2880;
 const CARD = 80;
 /** Stored value for a missing whole number. */
 const NULL_LONG = -(2n ** 63n);
 const CODES = { double: 'D', integer: 'K', boolean: 'L', text: 'A' };
-const ROWS_A_PIECE = 1_000;
 
 /**
  * Writes a FITS file with one binary table (FITS 4.0, section 7.3). Text is ASCII, as the standard demands. Rows are
- * collected first, since the header tells their number and the widths of text.
+ * spooled first, since the header tells their number and the widths of text.
  */
 export async function* writeFits(
   columns: OutputColumn[],
   rows: OutputRows,
   table: OutputTable,
 ): AsyncIterable<Uint8Array> {
-  const held = await collectRows(rows);
-  const widths = columns.map((column, i) => cellWidth(column, i, held));
-  const rowBytes = widths.reduce((sum, width) => sum + width, 0);
-  yield block([card('SIMPLE', true), card('BITPIX', 8), card('NAXIS', 0), card('EXTEND', true)]);
-  yield block(tableCards(columns, widths, rowBytes, held.length, table));
-  for (let from = 0; from < held.length; from += ROWS_A_PIECE) {
-    yield encodeRows(columns, widths, rowBytes, held.slice(from, from + ROWS_A_PIECE));
+  const widths = columns.map(({ datatype }) => (datatype === 'boolean' || datatype === 'text' ? 1 : 8));
+  const texts = columns.flatMap(({ datatype }, i) => (datatype === 'text' ? [i] : []));
+  const spool = await RowSpool.of(rows, (row) => {
+    for (const i of texts) widths[i] = Math.max(widths[i]!, textOf(row[i] ?? null).length);
+  });
+  try {
+    const rowBytes = widths.reduce((sum, width) => sum + width, 0);
+    yield block([card('SIMPLE', true), card('BITPIX', 8), card('NAXIS', 0), card('EXTEND', true)]);
+    yield block(tableCards(columns, widths, rowBytes, spool.count, table));
+    for await (const some of spool.blocks()) yield encodeRows(columns, widths, rowBytes, some);
+    const over = (rowBytes * spool.count) % BLOCK;
+    if (over > 0) yield new Uint8Array(BLOCK - over);
+  } finally {
+    await spool.close();
   }
-  const over = (rowBytes * held.length) % BLOCK;
-  if (over > 0) yield new Uint8Array(BLOCK - over);
-}
-
-function cellWidth({ datatype }: OutputColumn, index: number, rows: OutputRow[]): number {
-  if (datatype === 'boolean') return 1;
-  if (datatype !== 'text') return 8;
-  return rows.reduce((width, row) => Math.max(width, textOf(row[index] ?? null).length), 1);
 }
 
 function tableCards(
@@ -88,7 +93,7 @@ function encodeRows(columns: OutputColumn[], widths: number[], rowBytes: number,
   for (const row of rows) {
     for (const [i, { datatype }] of columns.entries()) {
       const cell = row[i] ?? null;
-      if (datatype === 'double') bytes.writeDoubleBE(finite(cell) ?? NaN, at);
+      if (datatype === 'double') bytes.writeDoubleBE(numberOf(cell, columns[i]!) ?? NaN, at);
       else if (datatype === 'integer') bytes.writeBigInt64BE(longOf(cell), at);
       else if (datatype === 'boolean') bytes[at] = cell === null ? 0 : cell ? 0x54 : 0x46;
       else bytes.write(textOf(cell), at, 'latin1');
@@ -98,13 +103,12 @@ function encodeRows(columns: OutputColumn[], widths: number[], rowBytes: number,
   return bytes;
 }
 
-function finite(cell: OutputCell): number | undefined {
-  return typeof cell === 'number' && Number.isFinite(cell) ? cell : undefined;
+function numberOf(cell: OutputCell, column: OutputColumn): number | null {
+  return typeof cell === 'number' ? roundCell(cell, column) : null;
 }
 
 function longOf(cell: OutputCell): bigint {
-  const value = finite(cell);
-  return value === undefined ? NULL_LONG : BigInt(Math.round(value));
+  return typeof cell === 'number' && Number.isFinite(cell) ? BigInt(Math.round(cell)) : NULL_LONG;
 }
 
 function textOf(cell: OutputCell): string {

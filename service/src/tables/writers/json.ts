@@ -1,4 +1,4 @@
-import type { OutputCell, OutputColumn, OutputRows, OutputTable } from './output-column.ts';
+import { type OutputCell, type OutputColumn, type OutputRows, type OutputTable, roundCell } from './output-column.ts';
 import { utf8Pieces } from './utf8-pieces.ts';
 
 /** Writes one JSON object: `{"table", "columns", "rows"}`, a row being an array in the order of the columns. */
@@ -16,8 +16,6 @@ async function* jsonTexts(columns: OutputColumn[], rows: OutputRows, table: Outp
   yield '\n]}\n';
 }
 
-function jsonCell(cell: OutputCell, { datatype, decimals }: OutputColumn): OutputCell {
-  if (typeof cell !== 'number') return cell;
-  if (!Number.isFinite(cell)) return null;
-  return decimals === undefined || datatype === 'integer' ? cell : Number(cell.toFixed(decimals));
+function jsonCell(cell: OutputCell, column: OutputColumn): OutputCell {
+  return typeof cell === 'number' ? roundCell(cell, column) : cell;
 }

@@ -1,6 +1,6 @@
 import { asciiText } from './ascii-text.ts';
-import { collectRows } from './collect-rows.ts';
-import { formatCell, type OutputColumn, type OutputRow, type OutputRows, type OutputTable } from './output-column.ts';
+import { formatCell, type OutputCell, type OutputColumn, type OutputRows, type OutputTable } from './output-column.ts';
+import { RowSpool } from './row-spool.ts';
 import { utf8Pieces } from './utf8-pieces.ts';
 
 const LINE = 80;
@@ -12,18 +12,9 @@ export interface MrtTable extends OutputTable {
   authors: string;
 }
 
-interface Laid {
-  column: OutputColumn;
-  label: string;
-  format: string;
-  cells: string[];
-  width: number;
-  hasNull: boolean;
-}
-
 /**
  * Writes a machine-readable table as journals take it (CDS Standards for Astronomical Catalogues): a byte-by-byte
- * description, then rows in fixed places. Blank is null wherever `?` is declared. Text is ASCII. Rows are collected
+ * description, then rows in fixed places. Blank is null wherever `?` is declared. Text is ASCII. Rows are spooled
  * first, since the description tells their widths.
  */
 export function writeMrt(columns: OutputColumn[], rows: OutputRows, table: MrtTable): AsyncIterable<Uint8Array> {
@@ -31,73 +22,130 @@ export function writeMrt(columns: OutputColumn[], rows: OutputRows, table: MrtTa
 }
 
 async function* mrtTexts(columns: OutputColumn[], rows: OutputRows, table: MrtTable): AsyncIterable<string> {
-  const held = await collectRows(rows);
+  const layouts = columns.map((column) => new CellLayout(column));
+  const spool = await RowSpool.of(rows, (row) => layouts.forEach((layout, i) => layout.see(row[i] ?? null)));
+  try {
+    yield head(columns, layouts, table);
+    for await (const block of spool.blocks()) {
+      const lines = block.map((row) =>
+        layouts
+          .map((layout, i) => layout.write(row[i] ?? null))
+          .join(' ')
+          .trimEnd(),
+      );
+      yield `${lines.join('\n')}\n`;
+    }
+  } finally {
+    await spool.close();
+  }
+}
+
+function head(columns: OutputColumn[], layouts: readonly CellLayout[], table: MrtTable): string {
   const labels = uniqueLabels(columns);
-  const laid = columns.map((column, i) => layColumn(column, labels[i]!, held, i));
-  yield `${wrap('Title: ', table.title)}${wrap('Authors: ', table.authors)}${wrap('Table: ', table.name)}`;
-  yield `${'='.repeat(LINE)}\n`;
-  yield `Byte-by-byte Description of file: ${
+  const file =
     asciiText(table.name)
       .trim()
-      .replace(/[^\w.-]+/g, '_') || 'table'
-  }.txt\n`;
-  yield `${'-'.repeat(LINE)}\n`;
-  const labelWidth = Math.max(5, ...laid.map(({ label }) => label.length));
-  const unitWidth = Math.max(5, ...laid.map(({ column }) => unitOf(column).length));
-  yield `   Bytes Format ${'Units'.padEnd(unitWidth)} ${'Label'.padEnd(labelWidth)} Explanations\n${'-'.repeat(LINE)}\n`;
+      .replace(/[^\w.-]+/g, '_') || 'table';
+  const labelWidth = Math.max(5, ...labels.map(({ length }) => length));
+  const unitWidth = Math.max(5, ...columns.map((column) => unitOf(column).length));
+  const end = layouts.reduce((sum, { width }) => sum + width + 1, 0);
+  const digits = Math.max(3, String(end).length);
+  const rule = `${'-'.repeat(LINE)}\n`;
+  const lines = [
+    wrap('Title: ', table.title),
+    wrap('Authors: ', table.authors),
+    wrap('Table: ', table.name),
+    `${'='.repeat(LINE)}\n`,
+    `Byte-by-byte Description of file: ${file}.txt\n`,
+    rule,
+    `${'Bytes'.padStart(2 * digits + 1)} Format ${'Units'.padEnd(unitWidth)} ${'Label'.padEnd(labelWidth)} Explanations\n`,
+    rule,
+  ];
   let byte = 1;
-  for (const { column, label, format, width, hasNull } of laid) {
+  for (const [i, column] of columns.entries()) {
+    const { width, format, hasNull } = layouts[i]!;
     const last = byte + width - 1;
-    const bytes = width === 1 ? String(byte).padStart(8) : `${String(byte).padStart(4)}-${String(last).padStart(3)}`;
-    const start = `${bytes.padStart(8)} ${format.padEnd(6)} ${unitOf(column).padEnd(unitWidth)} ${label.padEnd(labelWidth)} `;
-    yield wrap(start, `${hasNull ? '? ' : ''}${(column.description ?? column.name).replace(/^[\s?[\]]+/, '')}`);
+    const place = width === 1 ? String(byte) : `${byte}-${String(last).padStart(digits)}`;
+    const start = `${place.padStart(2 * digits + 1)} ${format.padEnd(6)} ${unitOf(column).padEnd(unitWidth)} ${labels[i]!.padEnd(labelWidth)} `;
+    lines.push(wrap(start, `${hasNull ? '? ' : ''}${(column.description ?? column.name).replace(/^[\s?[\]]+/, '')}`));
     byte = last + 2;
   }
-  if (table.description !== undefined) yield `${'-'.repeat(LINE)}\n${wrap('Note (1): ', table.description)}`;
-  yield `${'-'.repeat(LINE)}\n`;
-  for (let row = 0; row < held.length; row++) {
-    const cells = laid.map(({ column, cells, width }) => {
-      return column.datatype === 'text' ? cells[row]!.padEnd(width) : cells[row]!.padStart(width);
-    });
-    yield `${cells.join(' ').trimEnd()}\n`;
+  if (table.description !== undefined) lines.push(rule, wrap('Note (1): ', table.description));
+  return [...lines, rule].join('');
+}
+
+/** The fixed place of one column: measured over all rows, then written. Numbers have one form in the whole column. */
+class CellLayout {
+  hasNull = false;
+  #widest = 1;
+  #decimals = 0;
+  #whole = 1;
+  #exponential = 1;
+  #isExponential = false;
+
+  constructor(private readonly column: OutputColumn) {}
+
+  see(cell: OutputCell): void {
+    const text = this.#text(cell);
+    if (text === '') this.hasNull = true;
+    else if (this.column.datatype !== 'double') this.#widest = Math.max(this.#widest, text.length);
+    else {
+      const point = text.indexOf('.');
+      this.#isExponential ||= /e/i.test(text);
+      this.#whole = Math.max(this.#whole, point < 0 ? text.length : point);
+      this.#decimals = Math.max(this.#decimals, point < 0 ? 0 : text.length - point - 1);
+      this.#exponential = Math.max(this.#exponential, exponential(text).length);
+    }
+  }
+
+  get #isFixed(): boolean {
+    return !this.#isExponential && this.#decimals <= MAX_DECIMALS;
+  }
+
+  get width(): number {
+    if (this.column.datatype !== 'double') return this.#widest;
+    if (!this.#isFixed) return this.#exponential;
+    return this.#whole + (this.#decimals > 0 ? this.#decimals + 1 : 0);
+  }
+
+  get format(): string {
+    if (this.column.datatype === 'integer') return `I${this.width}`;
+    if (this.column.datatype !== 'double') return `A${this.width}`;
+    return this.#isFixed ? `F${this.width}.${this.#decimals}` : `E${this.width}.${Math.max(0, this.#exponential - 6)}`;
+  }
+
+  write(cell: OutputCell): string {
+    const text = this.#text(cell);
+    if (text === '' || this.column.datatype === 'text') return text.padEnd(this.width);
+    if (this.column.datatype !== 'double') return text.padStart(this.width);
+    return (this.#isFixed ? Number(text).toFixed(this.#decimals) : exponential(text)).padStart(this.width);
+  }
+
+  #text(cell: OutputCell): string {
+    return asciiText(formatCell(cell, this.column));
   }
 }
 
-function layColumn(column: OutputColumn, label: string, rows: OutputRow[], index: number): Laid {
-  const cells = column.datatype === 'double' ? numberCells(column, rows, index) : plainCells(column, rows, index);
-  const width = cells.reduce((widest, cell) => Math.max(widest, cell.length), 1);
-  const decimals = cells.reduce((most, cell) => Math.max(most, /\.(\d*)/.exec(cell)?.[1]!.length ?? 0), 0);
-  const isExponent = cells.some((cell) => cell.includes('E'));
-  const number = isExponent ? `E${width}.${decimals}` : `F${width}.${decimals}`;
-  const format = { text: `A${width}`, boolean: `A${width}`, integer: `I${width}`, double: number }[column.datatype];
-  return { column, label, format, cells, width, hasNull: cells.includes('') };
-}
+const exponential = (text: string): string => Number(text).toExponential().toUpperCase();
 
-function plainCells(column: OutputColumn, rows: OutputRow[], index: number): string[] {
-  return rows.map((row) => asciiText(formatCell(row[index] ?? null, column)));
-}
-
-/** One form for the whole column: fixed point where that loses nothing, else exponents. */
-function numberCells(column: OutputColumn, rows: OutputRow[], index: number): string[] {
-  const written = plainCells(column, rows, index);
-  if (column.decimals !== undefined && written.every((cell) => !/e/i.test(cell))) return written;
-  const decimals = Math.max(0, ...written.map((cell) => /\.(\d*)/.exec(cell)?.[1]!.length ?? 0));
-  const fits = decimals <= MAX_DECIMALS && written.every((cell) => !/e/i.test(cell));
-  return written.map((cell) => {
-    if (cell === '') return '';
-    return fits ? Number(cell).toFixed(decimals) : Number(cell).toExponential().toUpperCase();
-  });
-}
-
+/** Units as the CDS writes them: a logarithm stands in brackets. */
 function unitOf({ unit }: OutputColumn): string {
-  return unit ? asciiText(unit).trim().replace(/\s+/g, '.') : '---';
+  if (!unit) return '---';
+  return asciiText(unit)
+    .trim()
+    .replace(/\s+/g, '.')
+    .replace(/^log\((.*)\)$/, '[$1]');
 }
 
 /** Labels have no blanks and 16 characters at most, and differ from each other. */
 function uniqueLabels(columns: OutputColumn[]): string[] {
   const taken = new Set<string>();
-  return columns.map(({ name }, i) => {
-    const bare = asciiText(name).trim().replace(/\s+/g, '_').slice(0, MAX_LABEL) || `column_${i + 1}`;
+  return columns.map(({ name, label: short }, i) => {
+    const bare =
+      asciiText(short ?? name)
+        .trim()
+        .replace(/\s+/g, '_')
+        .slice(0, MAX_LABEL) || `column_${i + 1}`;
     let label = bare;
     for (let number = 2; taken.has(label); number++)
       label = `${bare.slice(0, MAX_LABEL - 1 - String(number).length)}_${number}`;

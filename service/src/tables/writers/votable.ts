@@ -3,14 +3,27 @@ import { utf8Pieces } from './utf8-pieces.ts';
 
 const INTEGER_NULL = '-9223372036854775808';
 
-/** Writes a VOTable 1.5 document with one table in TABLEDATA. */
-export function writeVotable(columns: OutputColumn[], rows: OutputRows, table: OutputTable): AsyncIterable<Uint8Array> {
-  return utf8Pieces(votableTexts(columns, rows, table));
+export const VOTABLE_VERSIONS = ['1.5', '1.4'] as const;
+export type VotableVersion = (typeof VOTABLE_VERSIONS)[number];
+
+/** Writes a VOTable document with one table in TABLEDATA; both versions have the namespace of 1.3. */
+export function writeVotable(
+  columns: OutputColumn[],
+  rows: OutputRows,
+  table: OutputTable,
+  version: VotableVersion = '1.5',
+): AsyncIterable<Uint8Array> {
+  return utf8Pieces(votableTexts(columns, rows, table, version));
 }
 
-async function* votableTexts(columns: OutputColumn[], rows: OutputRows, table: OutputTable): AsyncIterable<string> {
+async function* votableTexts(
+  columns: OutputColumn[],
+  rows: OutputRows,
+  table: OutputTable,
+  version: VotableVersion,
+): AsyncIterable<string> {
   yield '<?xml version="1.0" encoding="UTF-8"?>\n';
-  yield '<VOTABLE version="1.5" xmlns="http://www.ivoa.net/xml/VOTable/v1.3">\n<RESOURCE type="results">\n';
+  yield `<VOTABLE version="${version}" xmlns="http://www.ivoa.net/xml/VOTable/v1.3">\n<RESOURCE type="results">\n`;
   if (table.frame !== undefined) yield `<COOSYS ID="frame" system="${escapeXml(table.frame)}"/>\n`;
   yield `<TABLE name="${escapeXml(table.name)}">\n`;
   if (table.description !== undefined) yield `<DESCRIPTION>${escapeXml(table.description)}</DESCRIPTION>\n`;
