@@ -7,9 +7,9 @@ import { AppError } from '../../common/app-error.ts';
 import { decodeCursor, encodeCursor, isPlace } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { readCandidates, readNeighbours, type EvidenceCatalogue } from '../../scoring/evidence.ts';
-import { CANDIDATE_COLUMNS, evidenceTable, NEIGHBOUR_COLUMNS } from './evidence-columns.ts';
+import { CANDIDATE_COLUMNS, NEIGHBOUR_COLUMNS } from '../../edition/columns/evidence-columns.ts';
+import { type TableAnswer, tableOf } from '../../edition/columns/table-column.ts';
 import { RunsService } from './runs.service.ts';
-import type { TableAnswer } from './send-table.ts';
 import { VerdictsRepository } from './verdicts.repository.ts';
 
 type Query = z.output<typeof evidenceQuery>;
@@ -87,12 +87,12 @@ export class EvidenceService {
 
   async candidateTable(user: SignedInUser, runId: string, detectionId?: string): Promise<TableAnswer> {
     const { run, lines } = await this.#lines(user, runId, readCandidates, 'candidates', detectionId);
-    return evidenceTable(CANDIDATE_COLUMNS, lines, `Candidates of run ${run.number}`);
+    return tableOf(CANDIDATE_COLUMNS, lines, `Candidates of run ${run.number}`);
   }
 
   async neighbourTable(user: SignedInUser, runId: string, detectionId?: string): Promise<TableAnswer> {
     const { run, lines } = await this.#lines(user, runId, readNeighbours, 'neighbours', detectionId);
-    return evidenceTable(NEIGHBOUR_COLUMNS, lines, `Neighbours of run ${run.number}`);
+    return tableOf(NEIGHBOUR_COLUMNS, lines, `Neighbours of run ${run.number}`);
   }
 }
 

@@ -1,37 +1,37 @@
 import { once } from 'node:events';
 import { SCREENING_CAUTION } from '@eremite/shared/contracts/words';
 import type { Response } from 'express';
-import { writeCsv } from '../../tables/writers/csv.ts';
-import type { OutputColumn, OutputRows } from '../../tables/writers/output-column.ts';
-import { writeVotable } from '../../tables/writers/votable.ts';
-
-/** A table on its way out, in whatever format is asked for. */
-export interface TableAnswer {
-  columns: OutputColumn[];
-  rows: OutputRows;
-  description: string;
-}
-
-const FORMATS = {
-  csv: { type: 'text/csv; charset=utf-8; header=present', ending: 'csv' },
-  votable: { type: 'application/x-votable+xml; charset=utf-8', ending: 'vot' },
-} as const;
+import type { TableAnswer } from '../../edition/columns/table-column.ts';
+import { FORMAT_FACTS, type TableFormat, type WriteOptions, writeTable } from '../../tables/writers/write-table.ts';
 
 /** Streams a table as a download; the screening caution goes with it. */
 export async function sendTable(
   response: Response,
-  format: keyof typeof FORMATS,
+  format: TableFormat,
   name: string,
-  table: TableAnswer,
+  { columns, rows, description }: TableAnswer,
+  options: WriteOptions & { authors?: string } = {},
 ): Promise<void> {
-  const { type, ending } = FORMATS[format];
+  const { type, ending } = FORMAT_FACTS[format];
+  const table = {
+    name,
+    title: description,
+    authors: options.authors ?? 'The survey team',
+    description: `${description}. ${SCREENING_CAUTION}`,
+    columns,
+    rows,
+  };
+  await sendPieces(response, { type, fileName: `${name}.${ending}` }, writeTable(format, table, options));
+}
+
+/** Streams a download at the pace of its reader. */
+export async function sendPieces(
+  response: Response,
+  { type, fileName }: { type: string; fileName: string },
+  pieces: AsyncIterable<Uint8Array>,
+): Promise<void> {
   response.setHeader('Content-Type', type);
-  response.setHeader('Content-Disposition', `attachment; filename="${name}.${ending}"`);
-  const description = `${table.description}. ${SCREENING_CAUTION}`;
-  const pieces =
-    format === 'csv'
-      ? writeCsv(table.columns, table.rows, { comments: [description] })
-      : writeVotable(table.columns, table.rows, { name: name.replaceAll('-', '_'), description, frame: 'ICRS' });
+  response.setHeader('Content-Disposition', `attachment; filename="${fileName}"`);
   for await (const piece of pieces) {
     if (response.destroyed) return;
     if (!response.write(piece)) await Promise.race([once(response, 'drain'), once(response, 'close')]);

@@ -9,7 +9,7 @@ import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { readCandidates, readNeighbours } from '../../scoring/evidence.ts';
 import { RunsService } from './runs.service.ts';
 import { type VerdictFilter, VerdictsRepository } from './verdicts.repository.ts';
-import type { VerdictLine } from './verdict-columns.ts';
+import type { VerdictLine } from '../../edition/columns/verdict-columns.ts';
 
 /** Verdicts held at a time while exporting. */
 const EXPORT_BLOCK = 500;
