@@ -9,7 +9,8 @@ const only = (name, from, allowed) => ({
 export default {
   forbidden: [
     only('science-imports-nothing', '^shared/src/science/', '^shared/src/science/'),
-    only('contracts-import-zod', '^shared/src/contracts/', ['^shared/src/', '^node_modules/zod/']),
+    only('contracts-import-zod', '^shared/src/contracts/', ['^shared/src/(contracts|science)/', '^node_modules/zod/']),
+    only('drawing-imports-science-and-contracts', '^shared/src/drawing/', ['^shared/src/']),
     only('schema-imports-drizzle', '^schema/src/', ['^schema/src/', '^node_modules/drizzle-orm/']),
     {
       name: 'service-rooms',

@@ -1,5 +1,5 @@
-import { ARCSEC_PER_RAD } from './project.ts';
-import { rulerTicks, type Tick } from './ruler.ts';
+import { ARCSEC_PER_RAD } from '@eremite/shared/drawing/panel-plane';
+import { rulerTicks, type Tick } from '@eremite/shared/drawing/ruler';
 
 export interface PanelView {
   centre: [x: number, y: number];

@@ -1,5 +1,5 @@
 import { fixed, signed } from '#lib/format/number.ts';
-import type { SkyMark } from './sky-mark.ts';
+import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
 
 /** Distance from the centre in the unit that reads best: `26″` or `3.6′`. */
 export const arc = (arcsec: number): string =>

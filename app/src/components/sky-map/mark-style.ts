@@ -5,7 +5,7 @@ import Stroke from 'ol/style/Stroke.js';
 import Style from 'ol/style/Style.js';
 import Text from 'ol/style/Text.js';
 import type { Palette } from './palette.ts';
-import type { SkyMark } from './sky-mark.ts';
+import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
 
 /** Radius of a mark on the screen, pixels: brighter is larger; without a magnitude small. */
 export function markRadius(magnitude: number | null, isStar: boolean): number {

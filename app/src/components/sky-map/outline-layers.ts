@@ -10,8 +10,8 @@ import Style from 'ol/style/Style.js';
 import Text from 'ol/style/Text.js';
 import type { Palette } from './palette.ts';
 import { hatchPattern } from './palette.ts';
-import { ellipseOutline, rayleighRadius, type PanelPoint } from './project.ts';
-import type { UncoveredArea } from './uncovered-cells.ts';
+import { ellipseOutline, rayleighRadius, type PanelPoint } from '@eremite/shared/drawing/panel-plane';
+import type { UncoveredArea } from '@eremite/shared/drawing/uncovered-cells';
 
 /** Everything on the panel that is not an object. Radii and axes in arcsec, angles in degrees east of north. */
 export interface Outlines {

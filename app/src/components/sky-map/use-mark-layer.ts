@@ -8,8 +8,8 @@ import { useEffect, useRef } from 'react';
 import { markLabel } from './mark-label.ts';
 import { litStyle, markStyle } from './mark-style.ts';
 import type { Palette } from './palette.ts';
-import { toPanel } from './project.ts';
-import type { SkyMark } from './sky-mark.ts';
+import { toPanel } from '@eremite/shared/drawing/panel-plane';
+import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
 
 interface MarkLayerOptions {
   map: OlMap | undefined;

@@ -1,5 +1,5 @@
 import { useMemo } from 'react';
-import type { SkyMark } from '#components/sky-map/sky-mark.ts';
+import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
 import { fixed, signed } from '#lib/format/number.ts';
 import { STRIP_MARGIN, stripScale } from './strip-scale.ts';
 import { StripZones, type Zones } from './strip-zones.tsx';

@@ -2,7 +2,7 @@ import { Button } from '@blueprintjs/core';
 import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import { fixed, significant, withError } from '#lib/format/number.ts';
 import { declination, rightAscension } from '#lib/format/position.ts';
-import { rayleighRadius } from '#components/sky-map/project.ts';
+import { rayleighRadius } from '@eremite/shared/drawing/panel-plane';
 
 const KIND = { measured: 'measured', flow: 'flow model', hubble: 'Hubble law', none: '' } as const;
 

@@ -3,7 +3,7 @@ import type { Override, Review } from '@eremite/shared/contracts/review';
 import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import { useMemo, type ReactNode } from 'react';
 import { DataTable } from '#components/data-table/data-table.tsx';
-import { rowKey } from '#components/sky-map/sky-mark.ts';
+import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { chosenCandidate, type Decisions } from '../hooks/use-decisions.ts';
 import { History } from './history.tsx';
 import { LimitTable } from './limit-table.tsx';

@@ -1,6 +1,6 @@
 import type { Candidate, Neighbour } from '@eremite/shared/contracts/verdict';
 import type { Column } from '#components/data-table/data-table.tsx';
-import { rowKey } from '#components/sky-map/sky-mark.ts';
+import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { fixed, NO_VALUE, probabilityCell, signed, significant } from '#lib/format/number.ts';
 
 type Pick = (key: string) => void;

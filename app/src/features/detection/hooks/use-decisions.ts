@@ -2,7 +2,7 @@ import type { Override } from '@eremite/shared/contracts/review';
 import type { Candidate, VerdictDetail } from '@eremite/shared/contracts/verdict';
 import type { TeamRole } from '@eremite/shared/contracts/words';
 import { useState } from 'react';
-import { rowKey } from '#components/sky-map/sky-mark.ts';
+import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { mayLead, mayReview } from '#lib/role.ts';
 import { complain, say } from '#lib/toaster.ts';
 import { useOverride, useReview, useSettle, useWithdraw } from '../api/decisions.ts';

@@ -3,9 +3,9 @@ import type { Catalogue } from '@eremite/shared/contracts/catalogue';
 import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import { useMemo } from 'react';
 import type { Outlines } from '#components/sky-map/outline-layers.ts';
-import { toPanel } from '#components/sky-map/project.ts';
-import { toSkyMarks } from '#components/sky-map/sky-mark.ts';
-import { uncoveredAreas } from '#components/sky-map/uncovered-cells.ts';
+import { toPanel } from '@eremite/shared/drawing/panel-plane';
+import { toSkyMarks } from '@eremite/shared/drawing/sky-mark';
+import { uncoveredAreas } from '@eremite/shared/drawing/uncovered-cells';
 import type { Zones } from '#components/surroundings-strip/strip-zones.tsx';
 
 /** What the sky panel and the strip draw of one verdict. */

@@ -1,7 +1,7 @@
-import { cellBoundary, cellCentre, cellSide } from '@eremite/shared/science/sky/healpix';
-import { coneRanges } from '@eremite/shared/science/sky/healpix-cone';
-import { Moc } from '@eremite/shared/science/sky/moc';
-import { toPanel, type PanelPoint } from './project.ts';
+import { cellBoundary, cellCentre, cellSide } from '../science/sky/healpix.ts';
+import { coneRanges } from '../science/sky/healpix-cone.ts';
+import { Moc } from '../science/sky/moc.ts';
+import { toPanel, type PanelPoint } from './panel-plane.ts';
 
 const RAD = Math.PI / 180;
 const MOST_CELLS = 6000;

@@ -1,4 +1,4 @@
-import type { Candidate, Neighbour } from '@eremite/shared/contracts/verdict';
+import type { Candidate, Neighbour } from '../contracts/verdict.ts';
 
 /** How the object's velocity stands to the gas. */
 export type VelocityAgreement = 'concordant' | 'other' | 'none';

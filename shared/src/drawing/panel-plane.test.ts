@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { containsOrigin, ellipseOutline, rayleighRadius, toPanel } from './project.ts';
+import { containsOrigin, ellipseOutline, rayleighRadius, toPanel } from './panel-plane.ts';
 
 describe('the sky panel', () => {
   const centre = { raDeg: 48, decDeg: 14 };

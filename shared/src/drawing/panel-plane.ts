@@ -1,4 +1,4 @@
-import { toTangentPlane } from '@eremite/shared/science/sky/tangent-plane';
+import { toTangentPlane } from '../science/sky/tangent-plane.ts';
 
 const RAD = Math.PI / 180;
 export const ARCSEC_PER_RAD = (180 * 3600) / Math.PI;
