@@ -33,8 +33,15 @@ export function coverageOf(
 ): Coverage {
   if (footprint.type === 'rows') return fromRows(kind, raDeg, decDeg);
   const stated = statedFootprint(footprint);
+  if (stated && footprint.type === 'cones') return { ...known(stated, conesNote(footprint.value)), type: 'cones' };
   if (!stated) return unknown('it is unknown, so a place without rows shows nothing.');
   return known(stated, footprint.type === 'all-sky' ? 'the whole sky, as stated.' : `the ${WORDS[stated.kind]} given.`);
+}
+
+function conesNote(value: unknown): string {
+  const { radiusArcsec, centres = [] } = value as ConesValue;
+  const cones = centres.length === 1 ? 'the one cone' : `the ${centres.length.toLocaleString('en')} cones`;
+  return `${cones} of ${radiusArcsec} arcsec around the detections; what lies outside, neighbours and shifted positions too, it cannot tell.`;
 }
 
 const WORDS = { rows: 'rows', moc: 'region', circles: 'circles', polygons: 'polygons', 'all-sky': 'sky' } as const;
@@ -56,6 +63,7 @@ export function statedFootprint({ type, value }: ResolvedSettings['footprint']):
     if (type === 'all-sky') return allSkyFootprint();
     if (type === 'moc') return mocFootprint(mocOf(value));
     if (type === 'circles') return circlesFootprint(circlesOf(value));
+    if (type === 'cones') return circlesFootprint(conesOf(value));
     if (type === 'polygons') return polygonsFootprint(polygonsOf(value));
     return undefined;
   } catch (error) {
@@ -89,6 +97,26 @@ function circlesOf(value: unknown) {
       throw new DomainError(`A circle is [raDeg, decDeg, radiusDeg], found ${JSON.stringify(circle)}.`);
     const [ra, dec, radius] = circle as [number, number, number];
     return { lon: ra * DEGREE, lat: dec * DEGREE, radius: radius * DEGREE };
+  });
+}
+
+interface ConesValue {
+  radiusArcsec: number;
+  centres?: [number, number][];
+}
+
+function conesOf(value: unknown) {
+  const { radiusArcsec, centres } = (typeof value === 'object' && value !== null ? value : {}) as Partial<ConesValue>;
+  if (!(typeof radiusArcsec === 'number' && radiusArcsec > 0 && radiusArcsec <= 36_000)) {
+    throw new DomainError('Cones need the radius that was asked for, in arcsec, above 0 and at most 36,000.');
+  }
+  if (!Array.isArray(centres) || centres.length === 0) {
+    throw new DomainError('There are no detections for the cones to lie around: publish the HI list first.');
+  }
+  const radius = (radiusArcsec / 3600) * DEGREE;
+  return centres.map((centre: unknown) => {
+    if (!isNumbers(centre, 2)) throw new DomainError(`A centre is [raDeg, decDeg], found ${JSON.stringify(centre)}.`);
+    return { lon: centre[0]! * DEGREE, lat: centre[1]! * DEGREE, radius };
   });
 }
 

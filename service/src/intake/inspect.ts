@@ -1,7 +1,9 @@
 import type { ColumnRole, IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { Intake, IntakeCheck, IntakeColumn, SettingsQuestion } from '@eremite/shared/contracts/intake';
+import { Moc } from '@eremite/shared/science/sky/moc';
 import { type ByteSource } from '../tables/table.ts';
-import { coverageOf } from './coverage.ts';
+import { bandCountsOf } from './band-counts.ts';
+import { type Coverage, coverageOf } from './coverage.ts';
 import { openCatalogue, type OpenCatalogue, type ReadOptions } from './open-catalogue.ts';
 import { cellAt } from './sample.ts';
 import { SettingsError } from './resolved.ts';
@@ -14,6 +16,9 @@ export interface Inspection {
   columns: IntakeColumn[];
   preview: string[][];
   check: IntakeCheck;
+  magnitudes: Intake['magnitudes'];
+  coverage: Intake['coverage'];
+  duplicates: Intake['duplicates'];
   /** Settings that cannot be carried out; with one of these the rows are only counted. */
   faults: { pointer: string; detail: string }[];
   /** The settings as the person wrote them, with the columns that were taken by guess written out. */
@@ -36,7 +41,8 @@ export async function inspect(
 ): Promise<Inspection> {
   const catalogue = await openCatalogue(source, settings, options);
   const { open, table, resolution } = catalogue;
-  const { check, faults } = await checkAll(catalogue, settings);
+  const { faults, ...found } = await checkAll(catalogue, settings);
+  const { check } = found;
   return {
     format: open.format,
     tables: open.tables.map(({ index, name, declaredRows, columns }) => ({
@@ -47,7 +53,7 @@ export async function inspect(
     })),
     columns: columnsOf(catalogue),
     preview: previewOf(catalogue),
-    check,
+    ...found,
     faults,
     filled: {
       ...settings,
@@ -63,7 +69,7 @@ export async function inspect(
 async function checkAll(
   catalogue: OpenCatalogue,
   settings: IntakeSettings,
-): Promise<{ check: IntakeCheck; faults: Inspection['faults'] }> {
+): Promise<Pick<Inspection, 'check' | 'magnitudes' | 'coverage' | 'duplicates' | 'faults'>> {
   const { resolution } = catalogue;
   try {
     assertReadable(catalogue);
@@ -77,24 +83,37 @@ async function checkAll(
     for await (const chunk of catalogue.chunks()) rows += chunk.rows + (chunk.broken?.length ?? 0);
     const questions = [...more, ...resolution.questions];
     const check = { rows, usable: 0, sidelined: 0, leftOut: 0, reasons: [], questions, ready: false };
-    return { check, faults: [...error.faults] };
+    const nothing = { magnitudes: [], coverage: null, duplicates: { count: 0, pairs: [] } };
+    return { check, ...nothing, faults: [...error.faults] };
   }
   const positions: [Float64Array, Float64Array][] = [];
   const wantsArea = settings.footprint === undefined || settings.footprint.type === 'rows';
-  const { check } = await streamCatalogue(catalogue, settings, ({ roles }) => {
+  const { check, facts, duplicates } = await streamCatalogue(catalogue, settings, ({ roles }) => {
     if (wantsArea) positions.push([roles.columns['raDeg'] as Float64Array, roles.columns['decDeg'] as Float64Array]);
   });
-  if (wantsArea && check.usable > 0 && resolution.resolved.kind !== 'hi') {
-    const { note } = coverageOf(
-      resolution.resolved,
-      joined(positions.map(([ra]) => ra)),
-      joined(positions.map(([, dec]) => dec)),
-    );
+  const { resolved } = resolution;
+  const coverage = coverageOf(resolved, joined(positions.map(([ra]) => ra)), joined(positions.map(([, dec]) => dec)));
+  if (wantsArea && check.usable > 0 && resolved.kind !== 'hi') {
     const said =
       settings.footprint === undefined ? 'The area covered is not stated' : 'The area is taken from the rows';
-    check.questions.push({ level: 'assumed', pointer: '/footprint', text: `${said}: ${note}` });
+    check.questions.push({ level: 'assumed', pointer: '/footprint', text: `${said}: ${coverage.note}` });
   }
-  return { check, faults: [] };
+  return {
+    check,
+    magnitudes: bandCountsOf(resolved.bands, facts),
+    coverage: shown(coverage),
+    duplicates,
+    faults: [],
+  };
+}
+
+/** Range edges beyond which a region is coarsened to be shown; what is published keeps them all. */
+const MOST_EDGES = 20_000;
+
+function shown({ type, moc, areaSqDeg, note }: Coverage): Inspection['coverage'] {
+  let region: Moc | null = moc;
+  while (region && region.ranges.length > MOST_EDGES && region.order > 3) region = region.degraded(region.order - 1);
+  return { type, areaSqDeg, moc: region?.toAscii() ?? null, note };
 }
 
 function joined(parts: readonly Float64Array[]): Float64Array {

@@ -1,14 +1,24 @@
+import type { DuplicatePair } from '@eremite/shared/contracts/duplicate-pair';
 import type { SettingsQuestion } from '@eremite/shared/contracts/intake';
 import type { ColumnFacts, RowChunk } from '../tables/table.ts';
 import type { Column, PackedColumns } from '../tiles/column-pack.ts';
 import { concatColumns, selectRows } from '../tiles/column-rows.ts';
 import { type ExtractedChunk, RoleExtractor } from './extract-roles.ts';
+import { duplicatePairs } from './duplicate-pairs.ts';
 import { type Duplicate, findDuplicates } from './find-duplicates.ts';
 import { lineOf } from './number-cells.ts';
 import type { ResolvedSettings } from './resolved.ts';
 
-const NEEDED = ['row', 'raDeg', 'decDeg', 'czKms', 'width50Kms', 'signalToNoise', 'positionErrorArcsec'];
+const NEEDED = ['row', 'name', 'raDeg', 'decDeg', 'czKms', 'width50Kms', 'signalToNoise', 'positionErrorArcsec'];
 const EXAMPLES = 3;
+/** Pairs shown to a person; more are counted. */
+const MOST_PAIRS = 200;
+
+export interface FoundDuplicates {
+  duplicates: Duplicate[];
+  /** The first of them with what tells the two rows apart. */
+  pairs: DuplicatePair[];
+}
 
 /** Gathers what is needed of every row of an HI list and finds the sources that are in it twice. */
 export class DuplicateFinder {
@@ -21,8 +31,11 @@ export class DuplicateFinder {
     if (rows > 0) this.pieces.push({ rows, columns: Object.fromEntries(own) });
   }
 
-  find(): Duplicate[] {
-    return this.pieces.length === 0 ? [] : findDuplicates(concatColumns(this.pieces), this.resolved);
+  find(): FoundDuplicates {
+    if (this.pieces.length === 0) return { duplicates: [], pairs: [] };
+    const list = concatColumns(this.pieces);
+    const duplicates = findDuplicates(list, this.resolved);
+    return { duplicates, pairs: duplicatePairs(list, duplicates.slice(0, MOST_PAIRS)) };
   }
 }
 
@@ -31,11 +44,11 @@ export async function duplicatesIn(
   chunks: AsyncIterable<RowChunk>,
   resolved: ResolvedSettings,
   columns: readonly ColumnFacts[],
-): Promise<Map<number, Duplicate>> {
+): Promise<FoundDuplicates> {
   const extractor = new RoleExtractor(resolved, columns);
   const finder = new DuplicateFinder(resolved);
   for await (const chunk of chunks) finder.add(extractor.extract(chunk).roles);
-  return new Map(finder.find().map((duplicate) => [duplicate.row, duplicate]));
+  return finder.find();
 }
 
 /** The chunk with its duplicates put aside. */
@@ -64,8 +77,16 @@ export function withoutDuplicates(
   };
 }
 
-/** One sentence with the count and the first examples; none where there are none. */
-export function duplicateQuestions(duplicates: readonly Duplicate[], merged: boolean): SettingsQuestion[] {
+/**
+ * One sentence with the count and the first examples; none where there are none.
+ *
+ * @param keptApart how many of them a person says are sources of their own
+ */
+export function duplicateQuestions(
+  duplicates: readonly Duplicate[],
+  merged: boolean,
+  keptApart: number,
+): SettingsQuestion[] {
   if (duplicates.length === 0) return [];
   const pointer = '/mergeDuplicates';
   const told = duplicates.slice(0, EXAMPLES).map(({ row, of, separationArcsec, differenceKms }) => {
@@ -76,7 +97,8 @@ export function duplicateQuestions(duplicates: readonly Duplicate[], merged: boo
   const text = `${count} to be a source that another row has too: ${first}.`;
   if (merged) {
     const kept = 'The row of the higher signal-to-noise ratio is kept, the other put aside.';
-    return [{ level: 'assumed', pointer, text: `${text} ${kept}` }];
+    const apart = keptApart > 0 ? ` ${keptApart.toLocaleString('en')} of them are kept apart, as stated.` : '';
+    return [{ level: 'assumed', pointer, text: `${text} ${kept}${apart}` }];
   }
   return [{ level: 'warning', pointer, text: `${text} Set mergeDuplicates to keep the better one of each.` }];
 }

@@ -1,12 +1,11 @@
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
-import type { IntakeCheck, SettingsQuestion } from '@eremite/shared/contracts/intake';
+import type { Intake, IntakeCheck, SettingsQuestion } from '@eremite/shared/contracts/intake';
 import type { RowChunk } from '../tables/table.ts';
 import { type CatalogueFacts, FactsGatherer } from './catalogue-facts.ts';
 import { closingQuestions } from './closing-questions.ts';
 import { statedFootprint } from './coverage.ts';
 import { type ExtractedChunk, RoleExtractor } from './extract-roles.ts';
 import type { OpenCatalogue } from './open-catalogue.ts';
-import type { Duplicate } from './find-duplicates.ts';
 import { DuplicateFinder, duplicateQuestions, duplicatesIn, withoutDuplicates } from './merge-duplicates.ts';
 import { SettingsError } from './resolved.ts';
 import { SidelineTally } from './sideline-tally.ts';
@@ -17,6 +16,8 @@ export interface CatalogueSummary {
   facts: CatalogueFacts;
   /** Every question of the resolution and of the rows, in that order. */
   questions: SettingsQuestion[];
+  /** Rows of an HI list that seem one source, merged or not. */
+  duplicates: Intake['duplicates'];
 }
 
 /**
@@ -37,9 +38,10 @@ export async function streamCatalogue(
   const gatherer = new FactsGatherer();
   const isHi = resolution.resolved.kind === 'hi';
   const merging = isHi && settings.mergeDuplicates === true;
-  const duplicates = merging
-    ? await duplicatesIn(catalogue.chunks(), resolution.resolved, table.columns)
-    : new Map<number, Duplicate>();
+  const apart = new Set(settings.keepApart ?? []);
+  const before = merging ? await duplicatesIn(catalogue.chunks(), resolution.resolved, table.columns) : undefined;
+  const put = before?.duplicates.filter(({ row }) => !apart.has(row)) ?? [];
+  const duplicates = new Map(put.map((duplicate) => [duplicate.row, duplicate]));
   const finder = new DuplicateFinder(resolution.resolved);
   let rows = 0;
   let leftOut = 0;
@@ -53,8 +55,10 @@ export async function streamCatalogue(
     await take(extracted, chunk);
   }
   const closing = closingQuestions(settings, resolution.resolved, table, extractor, catalogue.broken());
-  const found = merging ? [...duplicates.values()] : finder.find();
-  const questions = [...resolution.questions, ...closing, ...duplicateQuestions(found, merging)];
+  const found = before ?? finder.find();
+  const keptApart = found.duplicates.length - put.length;
+  const remarks = duplicateQuestions(found.duplicates, merging, keptApart);
+  const questions = [...resolution.questions, ...closing, ...remarks];
   const facts = gatherer.facts();
   const check: IntakeCheck = {
     rows,
@@ -65,7 +69,7 @@ export async function streamCatalogue(
     questions,
     ready: facts.rows > 0 && questions.every(({ level }) => level !== 'ask'),
   };
-  return { check, facts, questions };
+  return { check, facts, questions, duplicates: { count: found.duplicates.length, pairs: found.pairs } };
 }
 
 /** Faults, and a position that is still asked for, make rows unreadable. @throws {SettingsError} */

@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
 import { basename } from 'node:path';
 import { pipeline } from 'node:stream/promises';
+import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { type CatalogueReading, readCatalogue } from '../intake/read-table.ts';
 import { SettingsError } from '../intake/resolved.ts';
 import { engineCatalogue } from '../scoring/engine-catalogue.ts';
@@ -32,12 +33,18 @@ export async function readTables(
   onProgress: (fraction: number, message: string) => void,
 ): Promise<PlanTable[]> {
   const tables: PlanTable[] = [];
+  const centres: [number, number][] = [];
   const faults: string[] = [];
-  for (const [i, path] of files.entries()) {
-    const { file, settings } = plan.tables[i]!;
+  // The list of detections comes first: cones of other tables lie around it.
+  const isHi = (i: number) => plan.tables[i]!.settings.kind === 'hi';
+  const order = files.map((_, i) => i).sort((a, b) => Number(isHi(b)) - Number(isHi(a)) || a - b);
+  for (const [done, i] of order.entries()) {
+    const path = files[i]!;
+    const { file } = plan.tables[i]!;
+    const settings = withCentres(plan.tables[i]!.settings, centres);
     try {
       const { roles, ...reading } = await readCatalogue(path, settings, {
-        onProgress: (fraction) => onProgress((i + fraction) / files.length, `reading ${file}`),
+        onProgress: (fraction) => onProgress((done + fraction) / files.length, `reading ${file}`),
       });
       faults.push(...faultsOf(file, reading));
       const { resolved, coverage } = reading;
@@ -47,7 +54,11 @@ export async function readTables(
         region: coverage.moc && { order: coverage.moc.order, ranges: coverage.moc.ranges },
         note: `What it covers: ${coverage.note}`,
       });
-      tables.push({ file, sha256, reading, catalogue });
+      if (resolved.kind === 'hi') {
+        const { raDeg, decDeg } = roles.columns;
+        for (let row = 0; row < roles.rows; row++) centres.push([raDeg[row]!, decDeg[row]!]);
+      }
+      tables[i] = { file, sha256, reading, catalogue };
     } catch (error) {
       if (error instanceof SettingsError) {
         for (const { pointer, detail } of error.faults) faults.push(`${file}: settings${pointer}: ${detail}`);
@@ -60,6 +71,13 @@ export async function readTables(
   }
   if (faults.length > 0) throw new PlanError(faults);
   return tables;
+}
+
+/** Settings whose cones, if they name no centres, lie around the detections read so far. */
+function withCentres(settings: IntakeSettings, centres: [number, number][]): IntakeSettings {
+  const { type, value } = settings.footprint ?? {};
+  if (type !== 'cones' || typeof value !== 'object' || value === null || 'centres' in value) return settings;
+  return { ...settings, footprint: { type, value: { ...value, centres } } };
 }
 
 /** What no default can mend: a table without a position. */

@@ -1,4 +1,6 @@
 import { z } from 'zod';
+import { bandCounts } from './band-counts.ts';
+import { coverage } from './coverage.ts';
 import { bandFacts, intakeSettings } from './intake-settings.ts';
 import { intakeColumn } from './intake.ts';
 import { listQuery, rowNumber } from './list.ts';
@@ -21,14 +23,7 @@ export const catalogue = z.object({
   columns: z.array(intakeColumn),
   settings: intakeSettings,
   assumed: z.array(z.string()),
-  coverage: z.object({
-    type: z.string(),
-    /** Square degrees; null when unknown. */
-    areaSqDeg: z.number().nullable(),
-    /** MOC in ASCII, or null. */
-    moc: z.string().nullable(),
-    note: z.string(),
-  }),
+  coverage,
   reference: z.string(),
   publishedAt: z.iso.datetime().nullable(),
   usedByRuns: z.int(),
@@ -53,23 +48,6 @@ export const catalogueRow = z.object({
   cells: z.array(z.string()),
 });
 
-/** Counts of magnitudes by band: bin `i` runs from `start + i * step` to the next, limits left out. */
-export const catalogueMagnitudes = z.object({
-  bands: z.array(
-    z.object({
-      band: z.string(),
-      system: z.enum(['AB', 'Vega']),
-      depth5Sigma: z.number().nullable(),
-      /** Where the counts turn over, with its uncertainty; never used unless a person sets it as the depth. */
-      suggestedDepth: z.object({ magnitude: z.number(), uncertainty: z.number() }).nullable(),
-      count: z.int(),
-      limits: z.int(),
-      brightest: z.number(),
-      faintest: z.number(),
-      start: z.number(),
-      step: z.number(),
-      counts: z.array(z.int()),
-    }),
-  ),
-});
+/** Counts of magnitudes by band. */
+export const catalogueMagnitudes = z.object({ bands: z.array(bandCounts) });
 export type CatalogueMagnitudes = z.output<typeof catalogueMagnitudes>;

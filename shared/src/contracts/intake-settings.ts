@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { rowNumber } from './list.ts';
 import { CATALOGUE_KINDS } from './words.ts';
 
 /** Name of a column in the uploaded table; null says "none", absent says "guess". */
@@ -74,8 +75,12 @@ export const bandFacts = z.strictObject({
   extinction: z.enum(['none', 'column', 'already-corrected']).optional(),
 });
 
-export const FOOTPRINT_TYPES = ['unknown', 'rows', 'moc', 'circles', 'polygons', 'all-sky'] as const;
-/** `moc`: text (ASCII or JSON), an object, or `{"fits": base64}` of a FITS file; `circles`: [[raDeg, decDeg, radiusDeg]]; `polygons`: [[[raDeg, decDeg], ...]]. */
+export const FOOTPRINT_TYPES = ['unknown', 'rows', 'moc', 'circles', 'cones', 'polygons', 'all-sky'] as const;
+/**
+ * `moc`: text (ASCII or JSON), an object, or `{"fits": base64}` of a FITS file; `circles`:
+ * [[raDeg, decDeg, radiusDeg]]; `polygons`: [[[raDeg, decDeg], ...]]; `cones`: {"radiusArcsec": 120}, for a table fetched
+ * in cones around the survey's detections, or with the centres they had then as "centres": [[raDeg, decDeg]].
+ */
 export const footprint = z.strictObject({ type: z.enum(FOOTPRINT_TYPES), value: z.unknown().optional() });
 
 /** How a table is read: the whole of what the wizard asks. All keys are optional but `kind`, `columns.ra` and `columns.dec`. */
@@ -123,6 +128,8 @@ export const intakeSettings = z.strictObject({
   acceptTruncated: z.boolean().optional(),
   /** HI lists: of one source detected twice keep the row of the higher signal-to-noise ratio. */
   mergeDuplicates: z.boolean().optional(),
+  /** Rows of an HI list, by number, that are sources of their own though they look like duplicates. */
+  keepApart: z.array(rowNumber).max(100_000).optional(),
   /** Catalogue of the same survey and kind whose new version this is; it is used by no further run. */
   supersedes: z.uuid().nullable().optional(),
 });

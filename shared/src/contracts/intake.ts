@@ -1,4 +1,7 @@
 import { z } from 'zod';
+import { bandCounts } from './band-counts.ts';
+import { coverage } from './coverage.ts';
+import { duplicatePair } from './duplicate-pair.ts';
 import { intakeSettings } from './intake-settings.ts';
 
 export const intakeColumn = z.object({
@@ -61,6 +64,12 @@ export const intake = z.object({
   rows: z.int(),
   settings: intakeSettings,
   check: intakeCheck,
+  /** Counts of the magnitudes of the usable rows, by band. */
+  magnitudes: z.array(bandCounts),
+  /** The region as the settings have it; its cells are coarsened where there are very many. Null before rows can be read. */
+  coverage: coverage.nullable(),
+  /** HI lists: rows that seem one source. `count` is of all, `pairs` holds the first of them. */
+  duplicates: z.object({ count: z.int(), pairs: z.array(duplicatePair) }),
   warnings: z.array(z.string()),
   catalogueId: z.uuid().nullable(),
   createdAt: z.iso.datetime(),

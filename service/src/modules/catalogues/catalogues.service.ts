@@ -9,8 +9,8 @@ import { AccessService } from '../../common/access.ts';
 import { AppError } from '../../common/app-error.ts';
 import { encodeCursor, offsetOf, pageByOffset, pageOf } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
+import { bandCountsOf } from '../../intake/band-counts.ts';
 import { FactsGatherer } from '../../intake/catalogue-facts.ts';
-import { turnoverDepth } from '../../intake/turnover-depth.ts';
 import type { ResolvedBand } from '../../intake/resolved.ts';
 import { type StoredRow, TileStore } from '../../tiles/tile-store.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
@@ -124,17 +124,7 @@ export class CataloguesService {
     const { catalogue } = await this.#found(user, id, 'read');
     const gatherer = new FactsGatherer();
     gatherer.add(await this.tiles.readRoles(id, 'sky'));
-    const { magnitudes } = gatherer.facts();
-    return {
-      bands: (catalogue.bands as ResolvedBand[]).flatMap(({ name, system, depth5Sigma }) => {
-        const found = magnitudes[name];
-        if (!found || found.count === 0) return [];
-        const { count, limits, min, max, histogram } = found;
-        const suggestedDepth = turnoverDepth(histogram) ?? null;
-        const span = { faintest: max, brightest: min };
-        return [{ band: name, system, depth5Sigma, suggestedDepth, count, limits, ...span, ...histogram }];
-      }),
-    };
+    return { bands: bandCountsOf(catalogue.bands as ResolvedBand[], gatherer.facts()) };
   }
 
   /** Name of a row, its number where the table names none; undefined if there is no such row. */

@@ -1,6 +1,6 @@
-import { catalogues, intakes } from '@eremite/schema';
+import { catalogues, detections, intakes } from '@eremite/schema';
 import { Inject, Injectable } from '@nestjs/common';
-import { and, desc, eq, ne, sql } from 'drizzle-orm';
+import { and, asc, desc, eq, ne, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
 export type IntakeRow = typeof intakes.$inferSelect;
@@ -63,6 +63,17 @@ export class IntakesRepository {
     );
     const [row] = await db.select().from(intakes).where(same).orderBy(desc(intakes.createdAt)).limit(1);
     return row;
+  }
+
+  /** Positions of the survey's detections, [RA, Dec] in degrees. */
+  async detectionPlaces(surveyId: string, db = this.db): Promise<[number, number][]> {
+    const rows = await db
+      .select({ raDeg: detections.raDeg, decDeg: detections.decDeg })
+      .from(detections)
+      .innerJoin(catalogues, and(eq(catalogues.id, detections.catalogueId), eq(catalogues.state, 'published')))
+      .where(eq(detections.surveyId, surveyId))
+      .orderBy(asc(detections.catalogueId), asc(detections.row));
+    return rows.map(({ raDeg, decDeg }) => [raDeg, decDeg]);
   }
 
   /** Another table of the survey with the same bytes. */

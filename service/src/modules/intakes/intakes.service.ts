@@ -8,6 +8,7 @@ import { offsetOf, pageByOffset } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { JobsService } from '../../jobs/jobs.service.ts';
 import { FilesService } from '../files/files.service.ts';
+import type { Inspection } from '../../intake/inspect.ts';
 import { IntakeWorker } from './intake-worker.ts';
 import { type IntakeRow, IntakesRepository } from './intakes.repository.ts';
 import { PUBLISH } from './publishing.service.ts';
@@ -55,12 +56,12 @@ export class IntakesService {
     const file = { path: this.files.path(fileKey), fileName };
     const warnings: string[] = [];
     let settings = given ?? {};
-    let inspection = await this.worker.inspect({ ...file, settings });
+    let inspection = await this.#inspect(surveyId, file, settings);
     const hash = headerHash(inspection.columns);
     const earlier = given ? undefined : await this.intakes.sameHeader(surveyId, hash);
     if (earlier) {
       settings = remembered(earlier);
-      inspection = await this.worker.inspect({ ...file, settings });
+      inspection = await this.#inspect(surveyId, file, settings);
       warnings.push(`The settings are those of "${earlier.fileName}", which has the same columns; look them over.`);
     }
     const twin = await this.intakes.sameContent(surveyId, sha256);
@@ -73,7 +74,7 @@ export class IntakesService {
       fileKey,
       bytes,
       sha256,
-      settings,
+      settings: await this.#complete(surveyId, settings),
       warnings,
       headerHash: hash,
       ...values,
@@ -89,14 +90,12 @@ export class IntakesService {
   async update(user: SignedInUser, id: string, settings: IntakeSettings): Promise<Intake> {
     const row = await this.#row(user, id, 'lead');
     assertStaged(row);
-    const inspection = await this.worker.inspect({
-      path: this.files.path(row.fileKey),
-      fileName: row.fileName,
-      settings,
-    });
+    const file = { path: this.files.path(row.fileKey), fileName: row.fileName };
+    const inspection = await this.#inspect(row.surveyId, file, settings);
     const wrong = inspection.faults.filter(({ pointer }) => !isOpenPosition(pointer, settings));
     if (wrong.length) throw new AppError('SETTINGS_INCOMPLETE', wrong.map(({ detail }) => detail).join(' '), wrong);
-    const values = { settings, headerHash: headerHash(inspection.columns), ...inspectedValues(inspection) };
+    const complete = await this.#complete(row.surveyId, settings);
+    const values = { settings: complete, headerHash: headerHash(inspection.columns), ...inspectedValues(inspection) };
     const changed = await this.intakes.change(id, 'staged', values);
     if (!changed) throw new AppError('NOT_READY', 'The table is being published meanwhile.');
     return toIntake(changed);
@@ -138,6 +137,25 @@ export class IntakesService {
     if (kind === undefined || (await this.intakes.supersedable(supersedes, row.surveyId, kind))) return;
     const detail = `The survey has no catalogue of kind "${kind}" in use with the id ${supersedes}.`;
     throw new AppError('SETTINGS_INCOMPLETE', detail, [{ pointer: '/supersedes', detail }]);
+  }
+
+  /** Reads the whole table; what is shown of the settings is as the person wrote them. */
+  async #inspect(
+    surveyId: string,
+    file: { path: string; fileName: string },
+    settings: IntakeSettings,
+  ): Promise<Inspection> {
+    const inspection = await this.worker.inspect({ ...file, settings: await this.#complete(surveyId, settings) });
+    if (settings.footprint?.type === 'cones') inspection.filled.footprint = settings.footprint;
+    return inspection;
+  }
+
+  /** Settings with what the survey knows: cones without centres lie around its detections as they are now. */
+  async #complete(surveyId: string, settings: IntakeSettings): Promise<IntakeSettings> {
+    const { type, value } = settings.footprint ?? {};
+    if (type !== 'cones' || typeof value !== 'object' || value === null || 'centres' in value) return settings;
+    const centres = await this.intakes.detectionPlaces(surveyId);
+    return { ...settings, footprint: { type, value: { ...value, centres } } };
   }
 
   async #row(user: SignedInUser, id: string, need: 'read' | 'lead'): Promise<IntakeRow> {

@@ -4,15 +4,19 @@ import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { Inspection } from '../../intake/inspect.ts';
 import type { IntakeRow } from './intakes.repository.ts';
 
-/** The check as it is stored: with the faults that forbid publishing and the settings with guesses written out. */
+/** The check as it is stored: with what else was found, the faults that forbid publishing and the settings with guesses written out. */
 export interface StoredCheck extends IntakeCheck {
   faults: Inspection['faults'];
   filled: IntakeSettings;
+  /** Absent in checks stored before these were looked at. */
+  magnitudes?: Intake['magnitudes'];
+  coverage?: Intake['coverage'];
+  duplicates?: Intake['duplicates'];
 }
 
 /** The columns of an intake's row that an inspection fills. */
-export function inspectedValues({ format, tables, columns, preview, check, faults, filled }: Inspection) {
-  const stored: StoredCheck = { ...check, faults, filled };
+export function inspectedValues({ format, tables, columns, preview, check, ...found }: Inspection) {
+  const stored: StoredCheck = { ...check, ...found };
   return { format, tables, columns, preview, rows: check.rows, check: stored };
 }
 
@@ -27,6 +31,7 @@ export const storedCheck = (row: Pick<IntakeRow, 'check'>): StoredCheck => row.c
 
 /** The contract's form of a row. */
 export function toIntake(row: IntakeRow): Intake {
+  const { filled, magnitudes = [], coverage = null, duplicates, ...check } = storedCheck(row);
   const { id, surveyId, fileName, bytes, sha256, format, rows, catalogueId } = row;
   return {
     id,
@@ -40,8 +45,11 @@ export function toIntake(row: IntakeRow): Intake {
     columns: row.columns as Intake['columns'],
     preview: row.preview as Intake['preview'],
     rows,
-    settings: storedCheck(row).filled,
-    check: storedCheck(row),
+    settings: filled,
+    check,
+    magnitudes,
+    coverage,
+    duplicates: duplicates ?? { count: 0, pairs: [] },
     warnings: row.warnings as string[],
     catalogueId,
     createdAt: row.createdAt.toISOString(),

@@ -36,6 +36,18 @@ function rowsInBox(count: number, keep: (ra: number, dec: number) => boolean = (
 }
 
 describe('circlesFootprint', () => {
+  it('loses none of very many small circles', () => {
+    // 2,500 circles of 10 arcsec: by their edges alone the cells would be larger than they are.
+    const circles = Array.from({ length: 2500 }, (_, i) => ({
+      lon: (100 + (i % 50) * 0.5) * DEGREE,
+      lat: (Math.floor(i / 50) * 0.5 - 12) * DEGREE,
+      radius: 10 * (DEGREE / 3600),
+    }));
+    const { region } = circlesFootprint(circles);
+    expect(circles.every(({ lon, lat }) => region.contains(lon, lat))).toBe(true);
+    expect(region.area / (2500 * Math.PI * (10 * (DEGREE / 3600)) ** 2)).toBeCloseTo(1, 2);
+  });
+
   it('covers its circle to a four-hundredth of the radius', () => {
     const footprint = circlesFootprint([{ lon: 1, lat: 0.8, radius: 2 * DEGREE }]);
     expect(footprint.region.area / (2 * Math.PI * (1 - Math.cos(2 * DEGREE)))).toBeCloseTo(1, 3);

@@ -15,6 +15,8 @@ const SAMPLES = 1024;
 /** Cells along the radius of the smallest shape, and the most cells along all edges together. */
 const CELLS_PER_RADIUS = 400;
 const MOST_EDGE_CELLS = 60_000;
+/** However many the shapes are, the smallest keeps this many cells along its radius: else it might have none at all. */
+const LEAST_PER_RADIUS = 4;
 const FINEST_SHAPE_ORDER = 18;
 
 /** The part of the sky that a catalogue covers. Outside it, "nothing in the catalogue" is no evidence. */
@@ -85,7 +87,8 @@ export interface Circle extends Direction {
 
 /** Order at which the cells are fine against the shapes, yet not too many along their edges. */
 function shapeOrder(smallestRadius: number, perimeter: number): number {
-  const side = Math.max(smallestRadius / CELLS_PER_RADIUS, perimeter / MOST_EDGE_CELLS);
+  const wished = Math.max(smallestRadius / CELLS_PER_RADIUS, perimeter / MOST_EDGE_CELLS);
+  const side = Math.min(wished, smallestRadius / LEAST_PER_RADIUS);
   return Math.min(FINEST_SHAPE_ORDER, Math.max(3, Math.ceil(Math.log2(cellSide(0) / side))));
 }
 

@@ -12,6 +12,7 @@ const FOOTPRINTS: Record<(typeof FOOTPRINT_TYPES)[number], string> = {
   rows: 'where the rows are',
   moc: 'a MOC',
   circles: 'circles',
+  cones: 'cones around the detections',
   polygons: 'polygons',
   'all-sky': 'the whole sky',
 };
