@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { observabilityQuery } from './observability.ts';
 import { verdictItem } from './verdict.ts';
 import { DOUBT_GRADES, STARLIGHT_VERDICTS, SURROUNDINGS_VERDICTS } from './words.ts';
 
@@ -9,6 +10,8 @@ export const priority = z.object({
   pNone: share,
   pAlone: share.nullable(),
   stability: share.nullable(),
+  /** Dark hours over those of the best placed one; null where no site was named, and then it does not count. */
+  visibility: share.nullable(),
   /** The product. */
   value: share,
 });
@@ -52,6 +55,8 @@ export const shortlistRule = z.strictObject({
   minStability: share.default(0),
   /** Gravest doubt that may stand. */
   worstDoubt: z.enum(DOUBT_GRADES).extract(['clear', 'watch', 'serious']).default('watch'),
+  /** Ranks by what a site can see, too. */
+  observe: observabilityQuery.optional(),
   /** The best so many; all that fit where absent. */
   limit: z.int().min(1).max(10_000).optional(),
 });
@@ -66,6 +71,8 @@ export const shortlistProposal = z.object({
       name: z.string(),
       reason: z.string(),
       priority,
+      /** Dark hours from the site named. */
+      hours: z.number().nullable(),
       isOn: z.boolean(),
     }),
   ),

@@ -24,7 +24,7 @@ export async function* writeFits(
   rows: OutputRows,
   table: OutputTable,
 ): AsyncIterable<Uint8Array> {
-  const widths = columns.map(({ datatype }) => (datatype === 'boolean' || datatype === 'text' ? 1 : 8));
+  const widths = columns.map(({ datatype }): number => (datatype === 'boolean' || datatype === 'text' ? 1 : 8));
   const texts = columns.flatMap(({ datatype }, i) => (datatype === 'text' ? [i] : []));
   const spool = await RowSpool.of(rows, (row) => {
     for (const i of texts) widths[i] = Math.max(widths[i]!, textOf(row[i] ?? null).length);
