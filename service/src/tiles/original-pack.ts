@@ -1,4 +1,5 @@
-import { type Column, ColumnPackError, packColumns, type PackedColumns, unpackColumns } from './column-pack.ts';
+import { type Column, ColumnPackError, type PackedColumns } from './column-pack.ts';
+import { packTight, unpackTight } from './tight-pack.ts';
 
 const MAGIC = 0x4f505245; // 'ERPO' read little-endian
 const HEAD_BYTES = 8;
@@ -48,14 +49,12 @@ export function packOriginals(
   order: readonly string[],
   same: SameColumns,
 ): Uint8Array {
-  if (same.size === 0) return packColumns({ rows, columns });
+  const packed = packTight({ rows, columns });
+  if (same.size === 0) return packed;
   const head = Buffer.from(JSON.stringify(order.map((name) => (same.has(name) ? [name, same.get(name)] : [name]))));
   const start = Math.ceil((HEAD_BYTES + head.length) / 8) * 8;
-  let blob = new Uint8Array(0);
-  packColumns({ rows, columns }, (bytes) => {
-    blob = new Uint8Array(start + bytes);
-    return blob.subarray(start);
-  });
+  const blob = new Uint8Array(start + packed.length);
+  blob.set(packed, start);
   const view = new DataView(blob.buffer);
   view.setUint32(0, MAGIC, true);
   view.setUint32(4, head.length, true);
@@ -72,10 +71,10 @@ export function packOriginals(
 export function unpackOriginals(bytes: Uint8Array, roles: PackedColumns): PackedColumns {
   const blob = bytes.byteOffset % 8 === 0 ? bytes : Uint8Array.from(bytes);
   const view = new DataView(blob.buffer, blob.byteOffset, blob.byteLength);
-  if (blob.length < HEAD_BYTES || view.getUint32(0, true) !== MAGIC) return unpackColumns(blob);
+  if (blob.length < HEAD_BYTES || view.getUint32(0, true) !== MAGIC) return unpackTight(blob);
   const end = HEAD_BYTES + view.getUint32(4, true);
   const order = readOrder(blob, end);
-  const { rows, columns } = unpackColumns(blob.subarray(Math.ceil(end / 8) * 8));
+  const { rows, columns } = unpackTight(blob.subarray(Math.ceil(end / 8) * 8));
   if (rows !== roles.rows) {
     throw new ColumnPackError(`the originals of a tile have ${rows} rows, its roles ${roles.rows}`);
   }

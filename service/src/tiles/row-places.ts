@@ -1,4 +1,5 @@
-import { packColumns, type PackedColumns, unpackColumns } from './column-pack.ts';
+import type { PackedColumns } from './column-pack.ts';
+import { packTight, unpackTight } from './tight-pack.ts';
 import type { Tile } from './tile.ts';
 
 /** Cell number under which the table of places is kept: none of the sky. */
@@ -60,7 +61,7 @@ export class RowPlaces {
       Object.entries(this.pending).map(([name, values]) => [name, values.slice(0, count)]),
     );
     this.count = 0;
-    const roles = packColumns({ rows: count, columns });
+    const roles = packTight({ rows: count, columns });
     return [{ cell: PLACES_CELL, part: block, count, roles, originals: new Uint8Array(0) }];
   }
 
@@ -82,7 +83,7 @@ export interface RowPlace {
 
 /** Reads a block back, rows ascending. */
 export function placesOf(blob: Uint8Array): RowPlace[] {
-  const { rows, columns }: PackedColumns = unpackColumns(blob);
+  const { rows, columns }: PackedColumns = unpackTight(blob);
   const column = (name: string) => columns[name] as Uint32Array | Int32Array;
   const [row, cell, part, at] = [column('row'), column('cell'), column('part'), column('at')];
   return Array.from({ length: rows }, (_, i) => ({ row: row[i]!, cell: cell[i]!, part: part[i]!, at: at[i]! }));

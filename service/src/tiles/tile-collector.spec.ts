@@ -1,9 +1,10 @@
 import { describe, expect, it } from 'vitest';
 import { tileCells } from './cells.ts';
-import { type PackedColumns, textColumn, unpackColumns } from './column-pack.ts';
+import { type PackedColumns, textColumn } from './column-pack.ts';
 import { packOriginals, unpackOriginals } from './original-pack.ts';
 import { rowCells } from './original-cells.ts';
 import { PLACES_CELL, placesOf } from './row-places.ts';
+import { unpackTight } from './tight-pack.ts';
 import type { Tile } from './tile.ts';
 import { TileCollector } from './tile-collector.ts';
 
@@ -42,7 +43,7 @@ describe('a tile collector', () => {
     const tiles = collect(5000, 300, bufferBytes);
     const seen = new Map<number, string[]>();
     for (const { cell, count, roles, originals } of tiles.filter((tile) => tile.cell !== PLACES_CELL)) {
-      const unpacked = unpackColumns(roles);
+      const unpacked = unpackTight(roles);
       const { rows, columns } = unpacked;
       expect(rows).toBe(count);
       const row = Array.from(columns['row'] as Uint32Array);
@@ -64,7 +65,7 @@ describe('a tile collector', () => {
     const kept = (c2: Float64Array) => {
       const collector = new TileCollector(1e9);
       collector.add({ ...roles }, { rows: 1000, columns: { ...originals.columns, c2 } });
-      return [...collector.finish()].filter((tile) => Buffer.from(tile.originals).includes('["c2","f64"')).length;
+      return [...collector.finish()].filter((tile) => Buffer.from(tile.originals).includes('["c2",{"as"')).length;
     };
     const declinations = (originals.columns['c2'] as Float64Array).slice();
     expect(kept(declinations)).toBe(0);
@@ -94,7 +95,7 @@ describe('a tile collector', () => {
     expect(places.map(({ row }) => row)).toEqual(Array.from({ length: 60_000 }, (_, i) => 3 * i + 1));
     expect(blocks.map(({ part }) => part)).toEqual([0, 1, 2]);
     for (const { row, cell, part, at } of places.filter((_, i) => i % 997 === 0)) {
-      const { columns } = unpackColumns(byPlace.get(`${cell}:${part}`)!.roles);
+      const { columns } = unpackTight(byPlace.get(`${cell}:${part}`)!.roles);
       expect((columns['row'] as Uint32Array)[at]).toBe(row);
     }
   });

@@ -1,9 +1,10 @@
 import { TILE_CELLS, tileCells } from './cells.ts';
-import { type Column, packColumns, type PackedColumns } from './column-pack.ts';
+import type { Column, PackedColumns } from './column-pack.ts';
 import { alike } from './original-cells.ts';
 import { packOriginals, sameColumns } from './original-pack.ts';
 import { RowPlaces } from './row-places.ts';
 import { scatterColumn } from './scatter-columns.ts';
+import { packTight } from './tight-pack.ts';
 import type { Tile } from './tile.ts';
 
 /** Rows in one tile at most, so that a crowded cell is still read in pieces. */
@@ -69,7 +70,7 @@ export class TileCollector {
           cell,
           part: this.parts[cell]!++,
           count: to - from,
-          roles: packColumns(slice(roles, from, to)),
+          roles: packTight(slice(roles, from, to)),
           originals: packOriginals(slice(apart, from, to), order, same),
         };
       }

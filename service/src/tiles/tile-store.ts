@@ -3,11 +3,12 @@ import { BulkStore } from '../database/bulk.ts';
 import { buildConeIndex } from '../matching/cone-index.ts';
 import { coneSearch, nearestRows } from '../matching/cone-search.ts';
 import { cellsOfCone } from './cells.ts';
-import { textAt, unpackColumns } from './column-pack.ts';
+import { textAt } from './column-pack.ts';
 import { rowCells } from './original-cells.ts';
 import { unpackOriginals } from './original-pack.ts';
 import { joinRoles } from './join-roles.ts';
 import type { RoleTable } from './role-table.ts';
+import { openPack, unpackTight } from './tight-pack.ts';
 import { blockOf, PLACES_CELL, placesOf, type RowPlace } from './row-places.ts';
 import type { Tile } from './tile.ts';
 
@@ -99,7 +100,7 @@ export class TileStore {
     const select = 'select roles from tiles where catalogue_id = $1 and cell = $2 and part = $3';
     for await (const batch of this.bulk.read(select, [catalogueId, place.cell, place.part], ['bytea'])) {
       for (const [blob] of batch) {
-        const names = unpackColumns(blob as Uint8Array).columns['name'];
+        const names = openPack(blob as Uint8Array).column('name');
         return names && 'kind' in names ? textAt(names, place.at) : '';
       }
     }
@@ -221,7 +222,7 @@ export class TileStore {
       const { cell, part } = wanted[0]!;
       for await (const batch of this.bulk.read(select, [catalogueId, cell, part], ['bytea', 'bytea'])) {
         for (const [roleBlob, originalBlob] of batch as [Uint8Array, Uint8Array][]) {
-          const roles = unpackColumns(roleBlob);
+          const roles = unpackTight(roleBlob);
           const { columns } = roles;
           const originals = unpackOriginals(originalBlob, roles);
           for (const { row, at } of wanted) {
@@ -242,7 +243,7 @@ function within(
   decDeg: number,
   radiusArcsec: number,
 ): StoredRow[] {
-  const roles = unpackColumns(roleBlob);
+  const roles = unpackTight(roleBlob);
   const { columns } = roles;
   const [ra, dec, row] = [
     columns['raDeg'] as Float64Array,
