@@ -54,8 +54,10 @@ export const STAR_PROBABILITY = 0.5;
 /** Galaxies do not move: a faster object is a star of the Galaxy, mas/yr. */
 const STAR_MOTION_MAS_YR = 20;
 
-export function isStar(catalogue: PreparedCatalogue, row: number): boolean {
-  const { starProbability, pmRa, pmDec } = catalogue;
+export function isStar(
+  { starProbability, pmRa, pmDec }: Pick<PreparedCatalogue, 'starProbability' | 'pmRa' | 'pmDec'>,
+  row: number,
+): boolean {
   if (starProbability && starProbability[row]! > STAR_PROBABILITY) return true;
   return pmRa !== undefined && pmDec !== undefined && Math.hypot(pmRa[row]!, pmDec[row]!) > STAR_MOTION_MAS_YR;
 }

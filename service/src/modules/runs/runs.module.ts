@@ -4,7 +4,10 @@ import { LedgerModule } from '../ledger/ledger.module.ts';
 import { SurveysModule } from '../surveys/surveys.module.ts';
 import { DocketService } from './docket.service.ts';
 import { EvidenceService } from './evidence.service.ts';
+import { FieldService } from './field.service.ts';
 import { OverviewService } from './overview.service.ts';
+import { PicturesController } from './pictures.controller.ts';
+import { PlotsService } from './plots.service.ts';
 import { PreviewTables } from './preview-tables.ts';
 import { PreviewThread } from './preview-thread.ts';
 import { PreviewController } from './preview.controller.ts';
@@ -19,11 +22,13 @@ import { VerdictsService } from './verdicts.service.ts';
 
 @Module({
   imports: [LedgerModule, CriteriaModule, SurveysModule],
-  controllers: [RunsController, PreviewController],
+  controllers: [RunsController, PreviewController, PicturesController],
   providers: [
     RunsService,
     VerdictsService,
     EvidenceService,
+    FieldService,
+    PlotsService,
     DocketService,
     OverviewService,
     PreviewService,

@@ -1,4 +1,14 @@
-import { assignments, detections, evidence, overrides, reviews, settlements, users, verdicts } from '@eremite/schema';
+import {
+  assignments,
+  detections,
+  evidence,
+  overrides,
+  returns,
+  reviews,
+  settlements,
+  users,
+  verdicts,
+} from '@eremite/schema';
 import type { VerdictsQuery } from '@eremite/shared/contracts/run';
 import { Inject, Injectable } from '@nestjs/common';
 import { and, asc, desc, eq, gte, ilike, inArray, isNull, type SQL, sql } from 'drizzle-orm';
@@ -23,12 +33,45 @@ const SORTS: Record<string, SQL> = {
 /** Verdicts that need eyes come first, and of these the likeliest dark. */
 const DOCKET = sql`array_position(array['dark','nearly dark','contested','confused','cannot tell','starlit'], ${verdicts.starlight})`;
 
+const graded = (grade: string) =>
+  sql`(select count(*) from jsonb_array_elements(${verdicts.item}->'doubts') d where d->>'grade' = ${grade})`;
+const SERIOUS = graded('serious');
+const WATCHED = graded('watch');
+/** An account that may see what all reviewers said. */
+export const EVERYONE = 'all';
+const onThis = sql`r.detection_id = ${verdicts.detectionId} and r.run_id = ${verdicts.runId}`;
+/** Reviewers are blind until they have spoken on the run. */
+const maySee = (viewer: string): SQL =>
+  viewer === EVERYONE
+    ? sql`true`
+    : sql`exists (select 1 from ${reviews} r where ${onThis} and r.reviewer_id = ${viewer} and r.superseded_at is null)`;
+const disagreement = (viewer: string): SQL =>
+  sql`(${maySee(viewer)} and (select count(distinct (r.starlight, r.surroundings, r.outcome)) > 1 from ${reviews} r where ${onThis} and r.superseded_at is null))`;
+const isSettled = sql`exists (select 1 from ${settlements} s where s.detection_id = ${verdicts.detectionId} and s.superseded_at is null)`;
+/** Came back and was not spoken on again; a settlement that does not stand any more likewise. */
+const returned = (viewer: string): SQL => {
+  const whose = viewer === EVERYONE ? sql`true` : sql`t.reviewer_id = ${viewer}`;
+  return sql`(exists (select 1 from ${returns} t where t.detection_id = ${verdicts.detectionId} and t.run_id = ${verdicts.runId} and ${whose}
+      and not exists (select 1 from ${reviews} r where ${onThis} and r.reviewer_id = t.reviewer_id and r.superseded_at is null))
+    or exists (select 1 from ${settlements} s where s.detection_id = ${verdicts.detectionId} and s.superseded_at is null and s.moved is not null))`;
+};
+
 /** What a page of verdicts may be narrowed by, beyond the query of the contract. */
 export interface VerdictFilter extends Partial<VerdictsQuery> {
   detectionIds?: readonly string[];
   assignedTo?: string;
+  unassigned?: boolean;
   notReviewedBy?: string;
   reviewedBy?: string;
+  settled?: 'yes' | 'no' | undefined;
+  /** Whose words came back because their evidence moved; settlements that did come back to everyone. */
+  returnedTo?: string;
+  /** Reviewers differ, as far as an account may know: `all` knows all. */
+  disagreementSeenBy?: string;
+  /** A reviewer gave this answer, likewise. */
+  outcome?: { is: string; seenBy: string };
+  /** For the orders of the docket. */
+  viewer?: string;
 }
 
 @Injectable()
@@ -36,7 +79,7 @@ export class VerdictsRepository {
   constructor(@Inject(DATABASE) private readonly db: Database) {}
 
   #where(runId: string, filter: VerdictFilter): SQL {
-    const reviewed = sql`exists (select 1 from ${reviews} r where r.detection_id = ${verdicts.detectionId} and r.superseded_at is null)`;
+    const reviewed = sql`exists (select 1 from ${reviews} r where r.detection_id = ${verdicts.detectionId} and r.run_id = ${verdicts.runId} and r.superseded_at is null)`;
     const by = (userId: string) =>
       sql`exists (select 1 from ${reviews} r where r.detection_id = ${verdicts.detectionId} and r.run_id = ${verdicts.runId} and r.reviewer_id = ${userId} and r.superseded_at is null)`;
     const doubt = filter.doubt ?? filter.doubtGrade;
@@ -57,13 +100,27 @@ export class VerdictsRepository {
       filter.assignedTo
         ? sql`exists (select 1 from ${assignments} a where a.detection_id = ${verdicts.detectionId} and a.user_id = ${filter.assignedTo})`
         : undefined,
+      filter.unassigned
+        ? sql`not exists (select 1 from ${assignments} a where a.detection_id = ${verdicts.detectionId})`
+        : undefined,
       filter.reviewedBy ? by(filter.reviewedBy) : undefined,
       filter.notReviewedBy ? sql`not ${by(filter.notReviewedBy)}` : undefined,
+      filter.settled === 'yes' ? isSettled : undefined,
+      filter.settled === 'no' ? sql`not ${isSettled}` : undefined,
+      filter.returnedTo ? returned(filter.returnedTo) : undefined,
+      filter.disagreementSeenBy ? disagreement(filter.disagreementSeenBy) : undefined,
+      filter.outcome
+        ? sql`(${maySee(filter.outcome.seenBy)} and exists (select 1 from ${reviews} r where r.detection_id = ${verdicts.detectionId} and r.run_id = ${verdicts.runId} and r.superseded_at is null and r.outcome = ${filter.outcome.is}))`
+        : undefined,
     )!;
   }
 
-  #order(sort: string | undefined): SQL[] {
-    if (sort === 'docket') return [DOCKET, sql`${likelyDark} desc`, sql`${verdicts.position}`];
+  #order(sort: string | undefined, viewer = EVERYONE): SQL[] {
+    const likeliest = [DOCKET, sql`${likelyDark} desc`, sql`${verdicts.position}`];
+    if (sort === 'docket') return likeliest;
+    if (sort === 'doubt') return [sql`${SERIOUS} desc`, sql`${WATCHED} desc`, ...likeliest];
+    if (sort === 'disagreement') return [sql`${disagreement(viewer)} desc`, ...likeliest];
+    if (sort === 'returned') return [sql`${returned(viewer)} desc`, ...likeliest];
     const down = sort?.startsWith('-') ?? false;
     const key = SORTS[sort?.replace(/^-/, '') ?? 'position'] ?? SORTS['position']!;
     return [down ? sql`${key} desc nulls last` : sql`${key} asc nulls last`, sql`${verdicts.position}`];
@@ -79,7 +136,7 @@ export class VerdictsRepository {
       .select({ detectionId: verdicts.detectionId, item: verdicts.item })
       .from(verdicts)
       .where(this.#where(runId, filter))
-      .orderBy(...this.#order(page.sort))
+      .orderBy(...this.#order(page.sort, filter.viewer))
       .limit(page.limit)
       .offset(page.offset);
   }
@@ -149,7 +206,9 @@ export class VerdictsRepository {
         detectionId: settlements.detectionId,
         starlight: settlements.starlight,
         surroundings: settlements.surroundings,
+        outcome: settlements.outcome,
         note: settlements.note,
+        moved: settlements.moved,
         by: users.name,
       })
       .from(settlements)
@@ -176,6 +235,30 @@ export class VerdictsRepository {
     return { settled, reviews: reviewed, overrides: overridden, assigned };
   }
 
+  /** What the docket tells an account of some detections besides their verdicts. */
+  async docketFacts(
+    runId: string,
+    detectionIds: readonly string[],
+    of: { userId: string; sees: string },
+    db = this.db,
+  ) {
+    if (detectionIds.length === 0) return [];
+    const moved = sql<unknown>`coalesce(
+      (select t.moved from ${returns} t where t.detection_id = ${verdicts.detectionId} and t.run_id = ${verdicts.runId} and t.reviewer_id = ${of.userId}
+        and not exists (select 1 from ${reviews} r where ${onThis} and r.reviewer_id = t.reviewer_id and r.superseded_at is null)),
+      (select s.moved from ${settlements} s where s.detection_id = ${verdicts.detectionId} and s.superseded_at is null),
+      '[]'::jsonb)`;
+    return db
+      .select({
+        detectionId: verdicts.detectionId,
+        seen: sql<boolean>`${maySee(of.sees)}`,
+        disagreement: sql<boolean>`${disagreement(of.sees)}`,
+        moved,
+      })
+      .from(verdicts)
+      .where(and(eq(verdicts.runId, runId), inArray(verdicts.detectionId, [...detectionIds])));
+  }
+
   /** One mark a detection of the survey, with its verdict in a run where there is one. */
   marks(surveyId: string, runId: string | null, db = this.db) {
     const join = runId ? and(eq(verdicts.detectionId, detections.id), eq(verdicts.runId, runId)) : sql`false`;
@@ -192,6 +275,22 @@ export class VerdictsRepository {
       .leftJoin(verdicts, join!)
       .where(eq(detections.surveyId, surveyId))
       .orderBy(asc(detections.catalogueId), asc(detections.row));
+  }
+
+  /** What the plots of a survey need of a whole run, in input order. */
+  async plotted(runId: string, db = this.db) {
+    const { detectionId, name, starlight, surroundings, pNone, pMissed, pAlone, logHiMass, distanceMpc } = verdicts;
+    const keys = ['pSpurious', 'distanceErrorMpc', 'signalToNoise', 'width50Kms', 'gasToLight', 'gasToLightIsLimit'];
+    const pairs = keys.map((key) => sql`${key}::text, ${verdicts.item}->${key}`);
+    const rows = await db
+      .select({
+        own: { detectionId, name, starlight, surroundings, pNone, pMissed, pAlone, logHiMass, distanceMpc },
+        rest: sql<Record<string, unknown>>`jsonb_build_object(${sql.join(pairs, sql`, `)})`,
+      })
+      .from(verdicts)
+      .where(eq(verdicts.runId, runId))
+      .orderBy(asc(verdicts.position));
+    return rows.map(({ own, rest }) => ({ ...own, ...rest }));
   }
 
   /** Verdict columns of a whole run, for comparing two. */
