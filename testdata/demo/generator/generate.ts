@@ -1,9 +1,10 @@
 /**
  * Makes the demo's tables: an invented survey ("Halcyon Strip") of about 300 HI detections and the catalogues over
  * the same field, from published number counts and scaling relations, with each case a user must tell apart.
- * `npx tsx testdata/demo/generator/generate.ts` writes testdata/demo/*; the same seed gives the same bytes.
+ * `npx tsx testdata/demo/generator/generate.ts [folder]` writes testdata/demo/*; the same seed gives the same tables.
  */
 import { writeFileSync } from 'node:fs';
+import { pathToFileURL } from 'node:url';
 import { gzipSync } from 'node:zlib';
 import { areaSqDeg, C_KMS, FIELD, H0, inside, localGroupCorrection } from './field.ts';
 import { detect, isCatalogued } from './observe.ts';
@@ -13,7 +14,8 @@ import { type Source } from './galaxy.ts';
 import { makeBackground, makeGalaxies } from './universe.ts';
 
 const SEED = 20_261_201;
-const FOLDER = new URL('../', import.meta.url);
+/** Where the tables go: beside this folder, or into the one given. */
+const FOLDER = process.argv[2] ? pathToFileURL(`${process.argv[2]}/`) : new URL('../', import.meta.url);
 
 type Row = (string | number)[];
 const fixed = (value: number, digits: number): string => (Number.isFinite(value) ? value.toFixed(digits) : '');
@@ -67,7 +69,16 @@ const wideOnly = makeBackground(random, FIELD.wide, FIELD.redshifts.depthR).filt
   (source) => !inside(source.raDeg, source.decDeg),
 );
 const behind = makeBackground(random, deepField, FIELD.optical.cutR);
-const everything = [...sources, ...behind];
+// No distant galaxy stands by chance where a story says that nothing does.
+const empty = stories.sources.filter(({ story }) => story.startsWith('dark'));
+const CLEAR_ARCSEC = 30;
+const isByChance = ({ raDeg, decDeg }: Source): boolean =>
+  empty.some(
+    (place) =>
+      Math.hypot((raDeg - place.raDeg) * Math.cos((decDeg * Math.PI) / 180), decDeg - place.decDeg) * 3600 <
+      CLEAR_ARCSEC,
+  );
+const everything = [...sources, ...behind.filter((source) => !isByChance(source))];
 
 const deep: Row[] = [];
 const ultraviolet: Row[] = [];
@@ -129,6 +140,8 @@ for (const source of [...everything, ...wideOnly]) {
   const bad = random.uniform() < 0.004;
   const error = 30;
   const z = (bad ? random.uniform(0.003, 0.2) * C_KMS : source.czKms + random.normal(0, error)) / C_KMS;
+  // Nor does a wrong redshift make up a neighbour there.
+  if (bad && !isClear({ ...source, czKms: z * C_KMS }, stories.cleared)) continue;
   const [ra, dec] = position(source, 0.15);
   redshifts.push([
     0,

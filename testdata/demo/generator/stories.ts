@@ -83,7 +83,7 @@ export function tellStories(random: Random): Stories {
   for (const [a, b, distance] of [
     [9.35, 9.25, 62],
     [9.5, 9.45, 78],
-    [9.2, 9.1, 55],
+    [9.2, 9.1, 47],
   ] as const) {
     const place = next(distance);
     sources.push(withStars(place, a, -18.4, 9.2, 3.1, random, 'two in a beam'));
@@ -140,8 +140,9 @@ export function tellStories(random: Random): Stories {
   }
   for (const distance of [110, 125]) {
     const place = next(distance);
+    // A second of arc either way: less than the error of the gas position, more than the half-light radius.
     for (const angle of [70, 250]) {
-      const host = beside(place, (2.2 * distance) / 206.265, angle, 0);
+      const host = beside(place, distance / 206.265, angle, 0);
       sources.push({ ...withStars(host, NaN, -15.9, 8, 0.5, random, 'contested host'), width50Kms: NaN });
     }
     sources.push(darkAt(place, 9.0, random, 'contested'));
