@@ -42,6 +42,8 @@ export const intakes = pgTable(
     fileKey: text('file_key').notNull(),
     bytes: bigint('bytes', { mode: 'number' }).notNull(),
     sha256: text('sha256').notNull(),
+    /** Files that came with it, [{role: 'readMe' | 'part', fileName, key, bytes, sha256}]: its ReadMe, further parts of it. */
+    companions: jsonb('companions').notNull().default([]),
     state: text('state').notNull().default('staged'),
     format: text('format').notNull(),
     /** Facts of every table of the file, as the reader gave them. */
@@ -75,7 +77,9 @@ export const catalogues = pgTable(
     state: text('state').notNull(),
     fileName: text('file_name').notNull(),
     sha256: text('sha256').notNull(),
-    /** sha256 over file hash and settings: what a run cites. */
+    /** Of a catalogue of several files: [{fileName, sha256, firstRow, rows}]. */
+    parts: jsonb('parts').notNull().default([]),
+    /** sha256 over file hashes and settings: what a run cites. */
     contentHash: text('content_hash').notNull(),
     rows: integer('rows').notNull().default(0),
     sidelined: integer('sidelined').notNull().default(0),
