@@ -12,8 +12,9 @@ export interface DarkNight {
   date: string;
   start: Date;
   end: Date;
-  /** Local sidereal time at each step, radians. */
-  siderealRad: Float64Array;
+  /** Cosine and sine of the local sidereal time at the middle of each step. */
+  cosSidereal: Float64Array;
+  sinSidereal: Float64Array;
 }
 
 /** First and last evening of a semester: A is February to July, B August to January. */
@@ -44,12 +45,17 @@ export function darkNights(site: Site, semester: string, twilightDeg: number): D
       const at = new Date(dark.start.getTime() + (i + 0.5) * STEP_MINUTES * 60_000);
       return localSidereal(at, site.longitudeDeg);
     });
-    nights.push({ date: new Date(day).toISOString().slice(0, 10), ...dark, siderealRad });
+    nights.push({
+      date: new Date(day).toISOString().slice(0, 10),
+      ...dark,
+      cosSidereal: siderealRad.map(Math.cos),
+      sinSidereal: siderealRad.map(Math.sin),
+    });
   }
   return nights;
 }
 
-export function localSidereal(at: FlexibleDateTime, longitudeDeg: number): number {
+function localSidereal(at: FlexibleDateTime, longitudeDeg: number): number {
   return (SiderealTime(at) * 15 + longitudeDeg) * (Math.PI / 180);
 }
 

@@ -43,23 +43,27 @@ export function observabilityOf(targets: readonly Target[], query: Observability
   const toDate = Rotation_EQJ_EQD(MakeTime(new Date((Date.parse(from) + Date.parse(to)) / 2)));
   const [sinLatitude, cosLatitude] = [Math.sin(site.latitudeDeg * DEGREE), Math.cos(site.latitudeDeg * DEGREE)];
   const sinLeast = Math.sin(altitudeOf(maximumAirmass) * DEGREE);
-  const items = targets.map((target) => {
+  const items = targets.map(({ detectionId, name, raDeg, decDeg }) => {
+    const target = { detectionId, name, raDeg, decDeg };
     const { ra, dec } = ofDate(target, toDate);
-    const [sinDec, cosDec] = [Math.sin(dec), Math.cos(dec)];
-    const sinAltitude = (sidereal: number): number =>
-      sinLatitude * sinDec + cosLatitude * cosDec * Math.cos(sidereal - ra);
+    const sines = sinLatitude * Math.sin(dec);
+    // cos(sidereal - ra) by its addition theorem: thousands of targets are gone through in a request.
+    const [cosRa, sinRa] = [cosLatitude * Math.cos(dec) * Math.cos(ra), cosLatitude * Math.cos(dec) * Math.sin(ra)];
     let hours = 0;
     let best: { night: DarkNight; hours: number } | undefined;
-    let transit: { night: DarkNight; off: number } | undefined;
+    let transit: { night: DarkNight; near: number } | undefined;
     for (const night of nights) {
+      const { cosSidereal, sinSidereal } = night;
       let steps = 0;
-      for (const sidereal of night.siderealRad) if (sinAltitude(sidereal) >= sinLeast) steps++;
+      for (let i = 0; i < cosSidereal.length; i++) {
+        if (sines + cosRa * cosSidereal[i]! + sinRa * sinSidereal[i]! >= sinLeast) steps++;
+      }
       const ofNight = (steps * STEP_MINUTES) / 60;
       hours += ofNight;
       if (!best || ofNight > best.hours) best = { night, hours: ofNight };
-      const middle = night.siderealRad[Math.floor(night.siderealRad.length / 2)]!;
-      const off = Math.abs(Math.atan2(Math.sin(middle - ra), Math.cos(middle - ra)));
-      if (!transit || off < transit.off) transit = { night, off };
+      const middle = Math.floor(cosSidereal.length / 2);
+      const near = Math.cos(ra) * cosSidereal[middle]! + Math.sin(ra) * sinSidereal[middle]!;
+      if (!transit || near > transit.near) transit = { night, near };
     }
     const highest = 90 - Math.abs(site.latitudeDeg - dec / DEGREE);
     return {

@@ -1,23 +1,58 @@
-import { putShortlistRequest, shortlist, type PutShortlistRequest } from '@eremite/shared/contracts/shortlist';
-import { Body, Controller, Get, Headers, Param, Put, Query, Res, SerializeOptions } from '@nestjs/common';
+import {
+  observabilityAnswer,
+  observabilityQuery,
+  type ObservabilityQuery,
+} from '@eremite/shared/contracts/observability';
+import {
+  putShortlistRequest,
+  shortlist,
+  shortlistProposal,
+  shortlistRule,
+  type PutShortlistRequest,
+  type ShortlistRule,
+} from '@eremite/shared/contracts/shortlist';
+import {
+  Body,
+  Controller,
+  Get,
+  Headers,
+  HttpCode,
+  Param,
+  Post,
+  Put,
+  Query,
+  Res,
+  SerializeOptions,
+} from '@nestjs/common';
 import type { Response } from 'express';
 import { z } from 'zod';
 import { etagOf } from '../../common/etag.ts';
 import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
+import { observabilityOf } from '../../edition/observability/observability-of.ts';
+import { TABLE_FORMATS } from '../../tables/writers/write-table.ts';
 import { sendTable } from '../runs/send-table.ts';
 import { verdictTable } from '../runs/verdict-columns.ts';
+import { ProposalsService } from './proposals.service.ts';
 import { ShortlistsService } from './shortlists.service.ts';
 
-const formatQuery = z.object({ format: z.enum(['csv', 'votable']).default('csv') });
+const formatQuery = z.object({
+  format: z.enum(TABLE_FORMATS).default('csv'),
+  units: z.enum(['yes', 'no']).default('no'),
+});
+const uuid = z.uuid();
+
 @Controller('surveys/:surveyId/shortlist')
 export class ShortlistsController {
-  constructor(private readonly shortlists: ShortlistsService) {}
+  constructor(
+    private readonly shortlists: ShortlistsService,
+    private readonly proposals: ProposalsService,
+  ) {}
 
   @Get()
   @SerializeOptions({ schema: shortlist })
   async get(
     @CurrentUser() user: SignedInUser,
-    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
+    @Param('surveyId', { schema: uuid }) surveyId: string,
     @Res({ passthrough: true }) response: Response,
   ) {
     const list = await this.shortlists.get(user, surveyId);
@@ -29,7 +64,7 @@ export class ShortlistsController {
   @SerializeOptions({ schema: shortlist })
   async put(
     @CurrentUser() user: SignedInUser,
-    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
+    @Param('surveyId', { schema: uuid }) surveyId: string,
     @Body({ schema: putShortlistRequest }) request: PutShortlistRequest,
     @Headers('if-match') ifMatch: string | undefined,
     @Res({ passthrough: true }) response: Response,
@@ -39,23 +74,47 @@ export class ShortlistsController {
     return list;
   }
 
+  /** What a rule would pick; nothing is changed. */
+  @Post('proposals')
+  @HttpCode(200)
+  @SerializeOptions({ schema: shortlistProposal })
+  propose(
+    @CurrentUser() user: SignedInUser,
+    @Param('surveyId', { schema: uuid }) surveyId: string,
+    @Body({ schema: shortlistRule }) rule: ShortlistRule,
+  ) {
+    return this.proposals.propose(user, surveyId, rule);
+  }
+
+  @Get('observability')
+  @SerializeOptions({ schema: observabilityAnswer })
+  async observability(
+    @CurrentUser() user: SignedInUser,
+    @Param('surveyId', { schema: uuid }) surveyId: string,
+    @Query({ schema: observabilityQuery }) query: ObservabilityQuery,
+  ) {
+    const { entries } = await this.shortlists.get(user, surveyId);
+    return observabilityOf(
+      entries.flatMap(({ verdict }) => (verdict ? [verdict] : [])),
+      query,
+    );
+  }
+
   @Get('export')
   async export(
     @CurrentUser() user: SignedInUser,
-    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
-    @Query({ schema: formatQuery }) query: { format: 'csv' | 'votable' },
+    @Param('surveyId', { schema: uuid }) surveyId: string,
+    @Query({ schema: formatQuery }) query: z.output<typeof formatQuery>,
     @Res() response: Response,
   ) {
     const list = await this.shortlists.get(user, surveyId);
     const table = verdictTable(
-      list.entries.flatMap((entry) =>
-        entry.verdict
-          ? [{ item: entry.verdict, rank: entry.rank, reason: entry.reason, nullResult: entry.nullResult }]
-          : [],
+      list.entries.flatMap(({ verdict, priority, rank, reason, nullResult }) =>
+        verdict ? [{ item: verdict, rank, reason, nullResult, priority: priority?.value ?? null }] : [],
       ),
       `Shortlist of run ${list.runNumber ?? 'none'}`,
       true,
     );
-    await sendTable(response, query.format, 'shortlist', table);
+    await sendTable(response, query.format, 'shortlist', table, { unitsRow: query.units === 'yes' });
   }
 }

@@ -1,12 +1,26 @@
-import { shortlistEntries, shortlists } from '@eremite/schema';
+import { runs, settlements, shortlistEntries, shortlists, users } from '@eremite/schema';
 import { Inject, Injectable } from '@nestjs/common';
-import { asc, eq, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
 export interface EntryValues {
   detectionId: string;
   reason: string;
   nullResult: string;
+}
+
+/** The lead's word in force on a detection. */
+export interface SettledRow {
+  detectionId: string;
+  runNumber: number;
+  starlight: string;
+  surroundings: string;
+  outcome: string;
+  /** What moved since; null while the evidence stands. */
+  moved: unknown;
+  note: string;
+  by: string;
+  at: Date;
 }
 
 @Injectable()
@@ -54,4 +68,37 @@ export class ShortlistsRepository {
     for (let from = 0; from < rows.length; from += 1000)
       await db.insert(shortlistEntries).values(rows.slice(from, from + 1000));
   }
+
+  /** Settled words in force on some detections, or on all of a run. */
+  async settled(of: { detectionIds: readonly string[] } | { runId: string }, db = this.db): Promise<SettledRow[]> {
+    const found: SettledRow[] = [];
+    const lists =
+      'runId' in of
+        ? [sql`${settlements.detectionId} in (select v.detection_id from verdicts v where v.run_id = ${of.runId})`]
+        : chunks(of.detectionIds).map((ids) => inArray(settlements.detectionId, ids));
+    for (const list of lists) {
+      const rows = await db
+        .select({
+          detectionId: settlements.detectionId,
+          runNumber: runs.number,
+          starlight: settlements.starlight,
+          surroundings: settlements.surroundings,
+          outcome: settlements.outcome,
+          moved: settlements.moved,
+          note: settlements.note,
+          by: users.name,
+          at: settlements.createdAt,
+        })
+        .from(settlements)
+        .innerJoin(users, eq(users.id, settlements.settledBy))
+        .innerJoin(runs, eq(runs.id, settlements.runId))
+        .where(and(list, isNull(settlements.supersededAt)));
+      found.push(...rows);
+    }
+    return found;
+  }
+}
+
+function chunks(ids: readonly string[], size = 1000): string[][] {
+  return Array.from({ length: Math.ceil(ids.length / size) }, (_, i) => ids.slice(i * size, (i + 1) * size));
 }

@@ -4,9 +4,11 @@ import { AccessService } from '../../common/access.ts';
 import { AppError } from '../../common/app-error.ts';
 import { requireMatch } from '../../common/etag.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
+import { priorityOf } from '../../edition/priority-of.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { RunsService } from '../runs/runs.service.ts';
 import { VerdictsService } from '../runs/verdicts.service.ts';
+import { notReady } from './not-ready.ts';
 import { ShortlistsRepository } from './shortlists.repository.ts';
 
 /** The lead's ordered pick of one run's detections. */
@@ -30,17 +32,23 @@ export class ShortlistsService {
       head.runId,
       entries.map((entry) => entry.detectionId),
     );
+    const settled = await this.#settled(entries.map((entry) => entry.detectionId));
     return {
       runId: head.runId,
       runNumber: run.number,
       version: head.version,
-      entries: entries.map(({ detectionId, rank, reason, nullResult }) => ({
-        detectionId,
-        rank,
-        reason,
-        nullResult,
-        verdict: items.get(detectionId) ?? null,
-      })),
+      entries: entries.map(({ detectionId, rank, reason, nullResult }) => {
+        const verdict = items.get(detectionId) ?? null;
+        return {
+          detectionId,
+          rank,
+          reason,
+          nullResult,
+          priority: verdict && priorityOf(verdict),
+          verdict,
+          notReady: notReady(settled.get(detectionId)),
+        };
+      }),
     };
   }
 
@@ -69,6 +77,7 @@ export class ShortlistsService {
       ]);
     }
     const seen = await this.get(user, surveyId);
+    await this.#refuseUnsettled(ids, seen, items);
     requireMatch(ifMatch, seen.version, seen);
     const stood = await this.shortlists.transaction(async (tx) => {
       const version = await this.shortlists.lock(surveyId, tx);
@@ -84,5 +93,27 @@ export class ShortlistsService {
     // Someone was quicker between the look and the lock.
     if (!stood) requireMatch(ifMatch, '', await this.get(user, surveyId));
     return this.get(user, surveyId);
+  }
+
+  /** What is on the list already may stay and be moved; freezing an edition looks at it again. */
+  async #refuseUnsettled(
+    ids: readonly string[],
+    seen: Shortlist,
+    items: ReadonlyMap<string, { name: string }>,
+  ): Promise<void> {
+    const there = new Set(seen.entries.map((entry) => entry.detectionId));
+    const settled = await this.#settled(ids);
+    const refused = ids.flatMap((id, i) => {
+      const why = there.has(id) ? null : notReady(settled.get(id));
+      return why === null ? [] : [{ pointer: `/entries/${i}/detectionId`, detail: `${items.get(id)!.name}: ${why}` }];
+    });
+    if (refused.length === 0) return;
+    const first = refused[0]!.detail;
+    const more = refused.length > 1 ? ` (and ${refused.length - 1} more)` : '';
+    throw new AppError('NOT_READY', `The shortlist takes settled detections. ${first}${more}.`, refused);
+  }
+
+  async #settled(detectionIds: readonly string[]) {
+    return new Map((await this.shortlists.settled({ detectionIds })).map((row) => [row.detectionId, row]));
   }
 }
