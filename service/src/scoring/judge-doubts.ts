@@ -68,7 +68,7 @@ export function judgeDoubts(
       assessment,
       criteria,
     ),
-    debrisDoubt(assessment, surroundings, criteria),
+    withStarsOfItsOwn(debrisDoubt(assessment, surroundings, criteria), assessment, criteria),
     hydroxyl({
       redshift: moving ? detection.redshift : NaN,
       sources: infraredSources(assessment),
@@ -139,6 +139,30 @@ function withStarsAtVelocity(doubt: Doubt, { detection, dominating }: StarlightA
     grade: 'watch' as const,
     sentence: `${doubt.sentence.slice(0, -1)}, but its counterpart ${name} moves with it (${off}).`,
     rule: `${doubt.rule}; watch at most where the counterpart has the velocity of the gas`,
+  };
+}
+
+/**
+ * Debris is asked after where gas has no galaxy of its own. Beside a plain counterpart the neighbour is worth a look at
+ * most, and none where the counterpart moves with the gas.
+ */
+function withStarsOfItsOwn(
+  doubt: Doubt,
+  { detection, starlight, dominating }: StarlightAssessment,
+  criteria: CriteriaSettings,
+): Doubt {
+  if (starlight !== 'starlit' || !dominating || (doubt.grade !== 'serious' && doubt.grade !== 'watch')) return doubt;
+  const reach = 3 * velocityScatterOf(detection, criteria);
+  const moves = Math.abs(dominating.velocityDifferenceKms) <= reach;
+  const name = rowName(dominating.face.catalogue, dominating.face.index);
+  const own = moves
+    ? `, but the gas has a galaxy of its own, ${name}, at its velocity (${signedKms(dominating.velocityDifferenceKms)})`
+    : `, but the gas has a galaxy of its own, ${name}`;
+  return {
+    ...doubt,
+    grade: moves ? 'clear' : 'watch',
+    sentence: `${doubt.sentence.slice(0, -1)}${own}.`,
+    rule: `${doubt.rule}; watch at most where the detection is starlit, clear where the counterpart has the velocity of the gas`,
   };
 }
 

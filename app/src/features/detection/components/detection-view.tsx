@@ -155,7 +155,7 @@ export function DetectionView(props: DetectionViewProps) {
         </div>
         <div className="det__evidence">
           <VerdictSummary detail={detail} />
-          <Grounds grounds={detail.verdict.grounds} />
+          <Grounds verdict={detail.verdict} />
           <div className="det__twin">
             <section aria-labelledby="silence">
               <h3 id="silence">What silence is worth here</h3>
