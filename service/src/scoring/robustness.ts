@@ -14,9 +14,10 @@ import type { z } from 'zod';
 import { detectionSettings } from './detection-settings.ts';
 import { type BandExpectation, expectIn, type Perturbation } from './expectation.ts';
 import { nearestFlip } from './other-grounds.ts';
-import type { PreparedBand } from './prepared-catalogue.ts';
+import type { Detection } from './detection-table.ts';
+import { type PreparedBand, rowName } from './prepared-catalogue.ts';
 import type { Assessment } from './scored-detection.ts';
-import { drawnDistances, isAccompaniedAt, type SurroundingsContext } from './surroundings.ts';
+import { drawnDistances, isAccompaniedAt, LEAST_DRAW, neighbourAt, type SurroundingsContext } from './surroundings.ts';
 import type { WeighingModel } from './weigh-objects.ts';
 
 export type RobustnessResult = z.output<typeof robustnessResult>;
@@ -29,6 +30,8 @@ const SOME_DRAWS = 200;
 /** Objects and bands that cannot matter in any draw are left at their nominal values. */
 const LEAST_PROBABILITY = 1e-4;
 const BANDS_REDRAWN = 2;
+/** A verdict that stands in fewer draws than this is told what would flip it, whatever it claims. */
+const FIRM = 0.975;
 
 /**
  * How often the verdicts of a detection stand when what the score holds fixed is drawn from its errors: distance, flux and
@@ -73,7 +76,10 @@ export function judgeStability(
     starlightInterval: [result.interval.low, result.interval.high],
     surroundingsStability: agreeing / result.draws,
     surroundingsInterval: [around.low, around.high],
-    flips: claims ? flipSentences(assessment, starlightOf) : [],
+    flips: [
+      ...(claims || agreeing / result.draws < FIRM ? surroundingsFlips(assessment, surroundingsOf, claims) : []),
+      ...(claims || result.agreement < FIRM ? starlightFlips(assessment, starlightOf) : []),
+    ],
   };
 }
 
@@ -170,40 +176,55 @@ function surroundingsRedrawn(
   };
 }
 
-/** What single change would flip a verdict, in sentences. */
-function flipSentences(
-  { detection, surroundings, starlight }: Assessment,
-  starlightOf: (draw: Draw) => Starlight,
+/** Distances within three errors of the nominal one, as factors; undefined without a distance or an error of it. */
+function distanceRange({ angularMpc, distanceErrorMpc }: Detection) {
+  if (!(angularMpc > 0 && distanceErrorMpc > 0)) return undefined;
+  const reach = Math.min(1 - LEAST_DRAW, (3 * distanceErrorMpc) / angularMpc);
+  return { low: 1 - reach, high: 1 + reach };
+}
+
+const SIDES = [
+  ['nearer', 'below'],
+  ['further', 'above'],
+] as const;
+
+/** At which distance the verdict on neighbours would change. */
+function surroundingsFlips(
+  { detection, surroundings }: Assessment,
+  surroundingsOf: (draw: Draw) => Surroundings,
+  evenFar: boolean,
 ): string[] {
+  const named = evenFar ? nearestFlip(detection.angularMpc, surroundings) : undefined;
+  const sentences = named ? [named] : [];
+  const range = distanceRange(detection);
+  if (!range) return sentences;
+  const found = flips(1, range, (distanceFactor) => surroundingsOf({ ...NO_CHANGE, distanceFactor }), 20);
+  for (const [word, side] of SIDES) {
+    const flip = found[side];
+    if (!flip || (named && side === 'below')) continue;
+    const distance = flip.value * detection.angularMpc;
+    const by = flip.verdict === 'accompanied' ? neighbourAt(surroundings.pool, distance) : undefined;
+    sentences.push(
+      `Surroundings would be "${flip.verdict}"${by ? ` (${rowName(by.catalogue, by.index)})` : ''} instead of "${surroundings.verdict}" were it ${word} than ${distance.toFixed(1)} Mpc.`,
+    );
+  }
+  return sentences;
+}
+
+/** What single change would flip the starlight verdict: depth or distance. */
+function starlightFlips({ detection, starlight }: Assessment, starlightOf: (draw: Draw) => Starlight): string[] {
   const sentences: string[] = [];
-  const neighbour = nearestFlip(detection.angularMpc, surroundings);
-  if (neighbour) sentences.push(neighbour);
+  const would = (verdict: Starlight, cause: string) =>
+    sentences.push(`Starlight would be "${verdict}" instead of "${starlight}" were ${cause}.`);
   const depth = flips(0, { low: -1, high: 1 }, (depthShiftMag) => starlightOf({ ...NO_CHANGE, depthShiftMag }), 20);
-  if (depth.below)
-    sentences.push(
-      `Starlight would be "${depth.below.verdict}" instead of "${starlight}" were the depth ${(-depth.below.value).toFixed(2)} mag shallower than stated.`,
-    );
-  if (depth.above)
-    sentences.push(
-      `Starlight would be "${depth.above.verdict}" instead of "${starlight}" were the depth ${depth.above.value.toFixed(2)} mag deeper than stated.`,
-    );
-  if (detection.angularMpc > 0 && detection.distanceErrorMpc > 0) {
-    const reach = Math.min(0.6, (3 * detection.distanceErrorMpc) / detection.angularMpc);
-    const far = flips(
-      1,
-      { low: 1 - reach, high: 1 + reach },
-      (distanceFactor) => starlightOf({ ...NO_CHANGE, distanceFactor }),
-      20,
-    );
-    for (const [side, flip] of [
-      ['nearer', far.below],
-      ['further', far.above],
-    ] as const) {
-      if (flip)
-        sentences.push(
-          `Starlight would be "${flip.verdict}" were it ${side} than ${(flip.value * detection.angularMpc).toFixed(1)} Mpc.`,
-        );
-    }
+  if (depth.below) would(depth.below.verdict, `the depth ${(-depth.below.value).toFixed(2)} mag shallower than stated`);
+  if (depth.above) would(depth.above.verdict, `the depth ${depth.above.value.toFixed(2)} mag deeper than stated`);
+  const range = distanceRange(detection);
+  if (!range) return sentences;
+  const found = flips(1, range, (distanceFactor) => starlightOf({ ...NO_CHANGE, distanceFactor }), 20);
+  for (const [word, side] of SIDES) {
+    const flip = found[side];
+    if (flip) would(flip.verdict, `it ${word} than ${(flip.value * detection.angularMpc).toFixed(1)} Mpc`);
   }
   return sentences;
 }

@@ -161,6 +161,10 @@ const counts = (row: NeighbourRow, distanceMpc: number): boolean =>
 /** Whether its own measured distance puts a row elsewhere along the line of sight. */
 export const isElsewhereAlong = (row: NeighbourRow): boolean => row.countsAboveMpc === Infinity;
 
+/** The nearest row that counts as a neighbour were the detection at this distance. */
+export const neighbourAt = (rows: readonly NeighbourRow[], distanceMpc: number): NeighbourRow | undefined =>
+  rows.find((row) => counts(row, distanceMpc));
+
 /** Whether a known neighbour counts were the detection at this distance. */
 export function isAccompaniedAt(rows: readonly NeighbourRow[], distanceMpc: number): boolean {
   return rows.some((row) => counts(row, distanceMpc));
