@@ -1,3 +1,6 @@
+import { workerUrl } from './common/worker-url.ts';
+import { readThreads } from './config/env.ts';
 import { planCommand } from './plan/command.ts';
 
-process.exitCode = await planCommand(process.argv.slice(2), (line) => process.stderr.write(`${line}\n`));
+const say = (line: string): void => void process.stderr.write(`${line}\n`);
+process.exitCode = await planCommand(process.argv.slice(2), say, { worker: workerUrl('plan'), threads: readThreads() });

@@ -9,11 +9,14 @@ const COMMAND = join(import.meta.dirname, '../../service/dist/plan.js');
 const root = mkdtempSync(join(tmpdir(), 'eremite-plan-'));
 afterAll(() => rmSync(root, { recursive: true, force: true }));
 
-function carryOut(name: string, plan: unknown, universe = makeUniverse()) {
+function carryOut(name: string, plan: unknown, universe = makeUniverse(), env: Record<string, string> = {}) {
   const folder = join(root, name);
   const path = writePlan(folder, plan, universe);
   const out = join(folder, 'out');
-  const { status, stderr, stdout } = spawnSync(process.execPath, [COMMAND, path, '--out', out], { encoding: 'utf8' });
+  const { status, stderr, stdout } = spawnSync(process.execPath, [COMMAND, path, '--out', out], {
+    encoding: 'utf8',
+    env: { ...process.env, ...env },
+  });
   return { status, stderr, stdout, out };
 }
 
@@ -152,6 +155,32 @@ describe('a plan over a field deep enough for a claim', () => {
       expect(readFileSync(join(again, name)).equals(readFileSync(join(out, name))), name).toBe(true);
     }
     expect(readdirSync(out).sort()).toEqual(['candidates.csv', 'neighbours.csv', 'summary.json', 'verdicts.csv']);
+  });
+
+  it('leaves the same bytes with one, two and three threads', () => {
+    const universe = makeUniverse();
+    // Enough detections for several units of work, for learning and for shifted positions.
+    const more = Array.from({ length: 1100 }, (_, i) => {
+      const [ra, dec] = [150.2 + ((i * 0.0731) % 7.6), 0.2 + ((i * 0.0517) % 5.6)];
+      return [`more-${i}`, ra.toFixed(5), dec.toFixed(5), 2000 + ((i * 37) % 7000), 120, 2, 12].join(',');
+    });
+    universe.files['fine.csv'] += `${more.join('\n')}\n`;
+    const plan = planOf(26.5, { criteria: { robustness: { draws: 100 }, control: { offsetsPerSource: 4 } } });
+    const outs = ['1', '2', '3'].map((threads) => {
+      const {
+        status,
+        stderr,
+        out: folder,
+      } = carryOut(`threads-${threads}`, plan, universe, { EREMITE_THREADS: threads });
+      expect(status, stderr).toBe(0);
+      return folder;
+    });
+    const { counts, control, notes } = JSON.parse(readFileSync(join(outs[0]!, 'summary.json'), 'utf8'));
+    expect([counts.detections, control.positionsKept > 1000, notes.length > 1]).toEqual([1111, true, true]);
+    for (const name of ['verdicts.csv', 'candidates.csv', 'neighbours.csv', 'summary.json']) {
+      const [one, two, three] = outs.map((folder) => readFileSync(join(folder, name)));
+      expect([two!.equals(one!), three!.equals(one!)], name).toEqual([true, true]);
+    }
   });
 
   it('does not mind the order of the rows of a catalogue', () => {

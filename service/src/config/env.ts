@@ -1,4 +1,5 @@
 import { existsSync, readFileSync } from 'node:fs';
+import { availableParallelism } from 'node:os';
 import { resolve } from 'node:path';
 import { parseEnv } from 'node:util';
 import { z } from 'zod';
@@ -39,6 +40,7 @@ const variables = z.object({
   EREMITE_LOG_LEVEL: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'silent']).default('info'),
   EREMITE_MAX_UPLOAD: bytes.prefault('4GiB'),
   EREMITE_JOB_WORKERS: z.coerce.number().int().min(0).max(64).default(2),
+  EREMITE_THREADS: z.coerce.number().int().min(1).max(256).optional(),
   EREMITE_TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),
   EREMITE_ACCESS_MINUTES: z.coerce.number().positive().max(1440).default(60),
 });
@@ -66,6 +68,8 @@ export interface Env {
   readonly logLevel: string;
   readonly maxUploadBytes: number;
   readonly jobWorkers: number;
+  /** Threads of a run. */
+  readonly threads: number;
   readonly trustProxy: number;
   readonly accessMinutes: number;
 }
@@ -80,6 +84,12 @@ export class EnvError extends Error {
 
 function fromFile(): Record<string, string | undefined> {
   return existsSync('.env') ? parseEnv(readFileSync('.env', 'utf8')) : {};
+}
+
+/** Threads of a run or a plan, of the environment alone: a plan needs nothing else of it. */
+export function readThreads(): number {
+  const asked = Number({ ...fromFile(), ...process.env }['EREMITE_THREADS']);
+  return asked >= 1 ? Math.min(256, Math.floor(asked)) : availableParallelism();
 }
 
 /** The validated environment: `overrides` before the process before the file `.env`. The only reader of process.env. */
@@ -109,6 +119,7 @@ export function readEnv(overrides: Partial<Env> = {}): Env {
     logLevel: value.EREMITE_LOG_LEVEL,
     maxUploadBytes: value.EREMITE_MAX_UPLOAD,
     jobWorkers: value.EREMITE_JOB_WORKERS,
+    threads: value.EREMITE_THREADS ?? readThreads(),
     trustProxy: value.EREMITE_TRUST_PROXY,
     accessMinutes: value.EREMITE_ACCESS_MINUTES,
     ...overrides,

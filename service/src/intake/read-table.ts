@@ -1,6 +1,7 @@
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { IntakeCheck, SettingsQuestion, SidelinedRow } from '@eremite/shared/contracts/intake';
 import { sigmaOfError } from '@eremite/shared/science/counterpart/position-error';
+import { type Memory, plainMemory } from '../matching/memory.ts';
 import type { ByteSource, TableFacts, TableFormat } from '../tables/table.ts';
 import type { PackedColumns } from '../tiles/column-pack.ts';
 import { concatColumns } from '../tiles/column-rows.ts';
@@ -36,6 +37,7 @@ const MAX_SIDELINED = 1000;
  * Reads one catalogue whole into memory: what a plan does, and what a check of an upload does without the rows.
  *
  * @param source path of the file, or its bytes
+ * @param options.memory maker of the memory of the rows
  * @param settings as a person wrote them; whatever they leave open takes its documented default
  * @throws {TableError} for a file that cannot be read as a table
  * @throws {SettingsError} for settings that do not fit it, every fault named
@@ -43,7 +45,7 @@ const MAX_SIDELINED = 1000;
 export async function readCatalogue(
   source: ByteSource | string,
   settings: IntakeSettings,
-  options: ReadOptions = {},
+  { memory = plainMemory, ...options }: ReadOptions & { memory?: Memory } = {},
 ): Promise<CatalogueReading> {
   const catalogue = await openCatalogue(source, settings, options);
   const { resolved } = catalogue.resolution;
@@ -53,7 +55,7 @@ export async function readCatalogue(
     parts.push(extracted.roles);
     for (const { row } of extracted.sidelined) if (sidelined.length < MAX_SIDELINED) sidelined.push(row);
   });
-  const roles = joined(parts);
+  const roles = joined(parts, memory);
   const coverage = coverageOf(resolved, roles.columns.raDeg, roles.columns.decDeg);
   if (settings.footprint === undefined && resolved.kind !== 'hi') {
     questions.push({
@@ -77,9 +79,9 @@ export async function readCatalogue(
   };
 }
 
-function joined(parts: PackedColumns[]): RoleTable {
+function joined(parts: PackedColumns[], memory: Memory): RoleTable {
   const empty = { row: new Uint32Array(0), raDeg: new Float64Array(0), decDeg: new Float64Array(0) };
-  const { rows, columns } = parts.length ? concatColumns(parts) : { rows: 0, columns: empty };
+  const { rows, columns } = parts.length ? concatColumns(parts, memory) : { rows: 0, columns: empty };
   // A limit column in which nothing is a limit says nothing.
   const told = Object.entries(columns).filter(
     ([name, column]) => !name.startsWith('magLimit:') || (column as Uint8Array).some((flag) => flag !== 0),

@@ -1,5 +1,6 @@
 import type { Numbers } from './sky-position.ts';
-import { emptyGrid, type GridSource, type Memory, plainMemory, type ZoneGrid } from './zone-grid.ts';
+import { type Memory, plainMemory } from './memory.ts';
+import { emptyGrid, type GridSource, type ZoneGrid } from './zone-grid.ts';
 import { blocksOf, blockStarts, countBlocks, measureRows, placeBlocks, spreadRows } from './zone-grid-steps.ts';
 import { layoutZones } from './zone-layout.ts';
 

@@ -5,7 +5,7 @@ import { HitLimitError } from './hit-limit.ts';
 import { pairSearch, type Pairs } from './pair-search.ts';
 import { separationArcsec } from './separation-arcsec.ts';
 import { brutePairs, evenSky, near, seeded, type SkyPoints, testSeparation } from './testing/brute-force.ts';
-import { sharedMemory } from './zone-grid.ts';
+import { sharedMemory } from './memory.ts';
 
 vi.setConfig({ testTimeout: 30_000 }); // all against all is slow on a busy machine
 

@@ -1,6 +1,7 @@
 import { buildGridOf } from './build-zone-grid.ts';
 import type { Numbers } from './sky-position.ts';
-import { type Memory, plainMemory, type ZoneGrid } from './zone-grid.ts';
+import { type Memory, plainMemory } from './memory.ts';
+import type { ZoneGrid } from './zone-grid.ts';
 
 /** A grid of those rows of a catalogue that have a velocity. */
 export interface VelocityGrid extends ZoneGrid {

@@ -1,3 +1,4 @@
+import type { Memory } from './memory.ts';
 import type { Numbers } from './sky-position.ts';
 import type { ZoneLayout } from './zone-layout.ts';
 
@@ -29,11 +30,6 @@ export interface ZoneGrid {
   raDeg: Numbers;
   decDeg: Numbers;
 }
-
-/** Maker of the memory of a grid: plain, or shared between threads. */
-export type Memory = (bytes: number) => ArrayBufferLike;
-export const plainMemory: Memory = (bytes) => new ArrayBuffer(bytes);
-export const sharedMemory: Memory = (bytes) => new SharedArrayBuffer(bytes);
 
 /** A grid with room for the rows and none in it yet; `placeBlocks` fills it. */
 export function emptyGrid(layout: ZoneLayout, rows: number, { raDeg, decDeg }: GridSource, memory: Memory): ZoneGrid {

@@ -1,7 +1,7 @@
 import { existsSync, statSync } from 'node:fs';
 import { resolve } from 'node:path';
 import { PlanError, readPlan } from './read-plan.ts';
-import { runPlan } from './run-plan.ts';
+import { type PlanPlace, runPlan } from './run-plan.ts';
 
 const USAGE = 'usage: npm run plan -- path/to/plan.json --out some/folder';
 
@@ -28,9 +28,14 @@ function readArguments(words: readonly string[]): { plan: string; out: string } 
  *
  * @param words arguments after the script's name
  * @param say where progress and faults go
+ * @param place threads that do the work
  * @returns exit status: 0 done, 1 failed, 2 a bad plan (nothing is written)
  */
-export async function planCommand(words: readonly string[], say: (line: string) => void): Promise<number> {
+export async function planCommand(
+  words: readonly string[],
+  say: (line: string) => void,
+  place: PlanPlace,
+): Promise<number> {
   try {
     const { plan: path, out } = readArguments(words);
     const folder = resolve(out);
@@ -40,13 +45,14 @@ export async function planCommand(words: readonly string[], say: (line: string) 
     }
     let last = 0;
     let lastMessage = '';
-    const summary = await runPlan(read, folder, (fraction, message) => {
+    const report = (fraction: number, message: string) => {
       const now = Date.now();
       if (now - last < 1000 && message === lastMessage) return;
       last = now;
       lastMessage = message;
       say(`${String(Math.round(100 * fraction)).padStart(3)} % ${message}`);
-    });
+    };
+    const summary = await runPlan(read, folder, report, place);
     const words_ = Object.entries(summary.counts.starlight).map(([word, count]) => `${count} ${word}`);
     say(`100 % done: ${summary.counts.detections} detections (${words_.join(', ')}) in ${folder}`);
     return 0;

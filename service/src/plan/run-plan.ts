@@ -1,11 +1,16 @@
 import { createHash } from 'node:crypto';
 import { SCREENING_CAUTION } from '@eremite/shared/contracts/words';
-import { runEngine } from '../scoring/run-engine.ts';
-import { SCORING_VERSION } from '../scoring/version.ts';
-import type { ReadPlan } from './read-plan.ts';
-import { PlanOutputs } from './plan-outputs.ts';
-import { type PlanTable, readTables } from './read-tables.ts';
+import { openTaskPool, type TaskPool } from '../matching/task-pool.ts';
 import type { EngineInput } from '../scoring/engine-input.ts';
+import { runScoring } from '../scoring/run-engine.ts';
+import type { ScoringAsked } from '../scoring/scoring-task.ts';
+import { SCORING_VERSION } from '../scoring/version.ts';
+import type { PlanAsked } from './plan.worker.ts';
+import type { PlanUnit } from './plan-lines.ts';
+import { PlanOutputs } from './plan-outputs.ts';
+import type { ReadPlan } from './read-plan.ts';
+import type { PlanTable } from './read-plan-table.ts';
+import { type ReadOne, readTables } from './read-tables.ts';
 
 export type Progress = (fraction: number, message: string) => void;
 
@@ -19,9 +24,36 @@ const READING = 0.4;
  * @returns the summary, as written
  * @throws {PlanError} for a plan that cannot be carried out; nothing is written then
  */
-export async function runPlan(read: ReadPlan, folder: string, onProgress: Progress): Promise<Summary> {
+export async function runPlan(
+  read: ReadPlan,
+  folder: string,
+  onProgress: Progress,
+  { worker, threads }: PlanPlace,
+): Promise<Summary> {
+  const pool = openTaskPool<PlanAsked, unknown, string>(worker, {
+    ...(threads !== undefined && { threads }),
+    restore: (message) => new Error(message),
+  });
+  try {
+    const tables = await readTables(
+      read,
+      (fraction, message) => onProgress(READING * fraction, message),
+      (task) => pool.ask({ read: task }) as ReturnType<ReadOne>,
+    );
+    return await scorePlan(read, tables, folder, onProgress, pool);
+  } finally {
+    await pool.close();
+  }
+}
+
+async function scorePlan(
+  read: ReadPlan,
+  tables: readonly PlanTable[],
+  folder: string,
+  onProgress: Progress,
+  pool: TaskPool<PlanAsked, unknown>,
+): Promise<Summary> {
   const { plan } = read;
-  const tables = await readTables(read, (fraction, message) => onProgress(READING * fraction, message));
   const input: EngineInput = {
     survey: plan.survey.cosmology,
     criteria: plan.criteria,
@@ -30,33 +62,25 @@ export async function runPlan(read: ReadPlan, folder: string, onProgress: Progre
   };
   const outputs = new PlanOutputs(folder, plan.outputs);
   try {
-    const counts = {
-      detections: 0,
-      starlight: {} as Record<string, number>,
-      surroundings: {} as Record<string, number>,
+    const counts = { detections: 0, starlight: {}, surroundings: {}, candidates: 0, neighbours: 0 };
+    const place = {
+      threads: pool.threads,
+      ask: (asked: ScoringAsked) => pool.ask({ ...asked, outputs: plan.outputs }),
     };
-    let candidates = 0;
-    let neighbours = 0;
-    const result = await runEngine(
-      input,
-      (scored, engine) => {
-        outputs.add(scored, engine);
-        for (const { item, ...rest } of scored) {
-          counts.detections++;
-          counts.starlight[item.starlight] = (counts.starlight[item.starlight] ?? 0) + 1;
-          counts.surroundings[item.surroundings] = (counts.surroundings[item.surroundings] ?? 0) + 1;
-          candidates += rest.candidates.length;
-          neighbours += rest.neighbours.length;
-        }
-      },
-      { onProgress: (fraction, message) => onProgress(READING + (1 - READING) * fraction, message) },
-    );
+    const take = (unit: PlanUnit) => {
+      outputs.add(unit);
+      for (const name of ['detections', 'candidates', 'neighbours'] as const) counts[name] += unit[name];
+      for (const name of ['starlight', 'surroundings'] as const) addCounts(counts[name], unit[name]);
+    };
+    const result = await runScoring<PlanUnit>(place, input, take, {
+      onProgress: (fraction, message) => onProgress(READING + (1 - READING) * fraction, message),
+    });
     const summary = {
       survey: plan.survey,
       caution: SCREENING_CAUTION,
       scoring: SCORING_VERSION,
       inputHash: inputHash(read, tables),
-      counts: { ...counts, candidates, neighbours },
+      counts,
       notes: result.notes,
       control: result.control,
       tables: tables.map(summarise),
@@ -68,6 +92,16 @@ export async function runPlan(read: ReadPlan, folder: string, onProgress: Progre
     outputs.discard();
     throw error;
   }
+}
+
+function addCounts(sums: Record<string, number>, more: Record<string, number>): void {
+  for (const [word, count] of Object.entries(more)) sums[word] = (sums[word] ?? 0) + count;
+}
+
+/** The built worker of a plan, and how many threads of it; as many as there are processors unless given. */
+export interface PlanPlace {
+  worker: URL;
+  threads?: number;
 }
 
 export interface Summary {

@@ -8,6 +8,7 @@ import type { z } from 'zod';
 import { buildZoneGrid } from '../matching/build-zone-grid.ts';
 import { pairSearch } from '../matching/pair-search.ts';
 import type { Detection } from './detection-table.ts';
+import type { Detections } from './detections.ts';
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
 
 export type ControlResult = z.output<typeof controlResult>;
@@ -17,21 +18,31 @@ const MOST_POSITIONS = 30_000;
 /** Shifted positions keep this far from every HI source, in beams or, without one, in search radii. Common practice. */
 const CLEARANCE = 3;
 
+/** Places to which detections are moved: the position of the detection, and the place in degrees. */
+export interface ShiftedPlaces {
+  source: Uint32Array;
+  raDeg: Float64Array;
+  decDeg: Float64Array;
+}
+
 /**
- * Detections moved to places where there is no HI source, each in a ring about its own, inside the same coverage.
+ * Places without an HI source to which detections are moved, each in a ring about its own, inside the same coverage.
  *
- * @returns the moved detections, numbered anew from 0
+ * @param offsetsPerSource none for 0
  */
-export function shiftedDetections(
-  detections: readonly Detection[],
-  catalogues: readonly PreparedCatalogue[],
+export function shiftedPlaces(
+  detections: Detections,
+  catalogues: readonly Pick<PreparedCatalogue, 'moc'>[],
   offsetsPerSource: number,
   seed: number,
-): Detection[] {
+): ShiftedPlaces {
+  if (offsetsPerSource === 0) return pickPlaces([], () => true);
   const step = Math.max(1, Math.ceil((detections.length * offsetsPerSource) / MOST_POSITIONS));
-  const shifted: Detection[] = [];
-  for (let i = 0; i < detections.length; i += step) {
-    const source = detections[i]!;
+  const sources = detections.pick(
+    Array.from({ length: Math.ceil(detections.length / step) }, (_, i) => Math.min(i * step, detections.length - 1)),
+  );
+  const shifted: { source: Detection; raDeg: number; decDeg: number }[] = [];
+  for (const source of sources) {
     const here = { lon: (((source.raDeg % 360) + 360) % 360) * DEGREE, lat: source.decDeg * DEGREE };
     const covering = catalogues.filter(({ moc }) => moc?.contains(here.lon, here.lat));
     const usable = ({ lon, lat }: Direction) => covering.every(({ moc }) => moc!.contains(lon, lat));
@@ -49,28 +60,31 @@ export function shiftedDetections(
       usable,
       ring,
     );
-    for (const { lon, lat } of positions) {
-      shifted.push({ ...source, position: shifted.length, raDeg: lon / DEGREE, decDeg: lat / DEGREE });
-    }
+    for (const { lon, lat } of positions) shifted.push({ source, raDeg: lon / DEGREE, decDeg: lat / DEGREE });
   }
-  return clearOfDetections(shifted, detections).map((moved, position) => ({ ...moved, position }));
-}
-
-function clearOfDetections(shifted: readonly Detection[], detections: readonly Detection[]): Detection[] {
-  const grid = buildZoneGrid(
-    Float64Array.from(detections, ({ raDeg }) => raDeg),
-    Float64Array.from(detections, ({ decDeg }) => decDeg),
-  );
-  const near = pairSearch(grid, {
-    raDeg: Float64Array.from(shifted, ({ raDeg }) => raDeg),
-    decDeg: Float64Array.from(shifted, ({ decDeg }) => decDeg),
+  const { raDeg, decDeg } = detections.places();
+  const near = pairSearch(buildZoneGrid(raDeg, decDeg), {
+    raDeg: Float64Array.from(shifted, (one) => one.raDeg),
+    decDeg: Float64Array.from(shifted, (one) => one.decDeg),
     radiusArcsec: Float64Array.from(
       shifted,
-      ({ beam, searchArcsec }) => CLEARANCE * (beam ? beam.major : searchArcsec),
+      ({ source: { beam, searchArcsec } }) => CLEARANCE * (beam ? beam.major : searchArcsec),
     ),
   });
   const blocked = new Set(near.position);
-  return shifted.filter((_, i) => !blocked.has(i));
+  return pickPlaces(shifted, (i) => !blocked.has(i));
+}
+
+function pickPlaces(
+  shifted: readonly { source: Detection; raDeg: number; decDeg: number }[],
+  keep: (i: number) => boolean,
+): ShiftedPlaces {
+  const kept = shifted.filter((_, i) => keep(i));
+  return {
+    source: Uint32Array.from(kept, ({ source }) => source.position),
+    raDeg: Float64Array.from(kept, (one) => one.raDeg),
+    decDeg: Float64Array.from(kept, (one) => one.decDeg),
+  };
 }
 
 /**

@@ -64,26 +64,27 @@ export interface Detection {
   logHiMass: number;
 }
 
-/** All detections of a run, in input order: HI tables as listed, rows as in the file. */
-export function readDetections(input: EngineInput): Detection[] {
-  const detections: Detection[] = [];
-  const replaced = new Map(input.decisions.distances.map((d) => [`${d.catalogueId}/${d.row}`, d]));
-  input.catalogues.forEach((catalogue, c) => {
-    if (catalogue.kind !== 'hi') return;
-    for (let i = 0; i < catalogue.roles.rows; i++) {
-      detections.push(readDetection(input, catalogue, c, i, detections.length, replaced));
-    }
-  });
-  return detections;
+/** Distances that people put in place of a table's, by table and row. */
+export type ReplacedDistances = ReadonlyMap<string, EngineInput['decisions']['distances'][number]>;
+
+export function replacedDistances({ decisions }: EngineInput): ReplacedDistances {
+  return new Map(decisions.distances.map((d) => [`${d.catalogueId}/${d.row}`, d]));
 }
 
-function readDetection(
+/**
+ * Reads one row of an HI table.
+ *
+ * @param c index of the table in the input
+ * @param index of the row in the table's roles
+ * @param position place in the input order
+ */
+export function readDetection(
   input: EngineInput,
   catalogue: EngineCatalogue,
   c: number,
   index: number,
   position: number,
-  replaced: ReadonlyMap<string, EngineInput['decisions']['distances'][number]>,
+  replaced: ReplacedDistances,
 ): Detection {
   const { roles } = catalogue;
   const value = (role: NumberRole): number => numberRole(roles, role)?.[index] ?? NaN;

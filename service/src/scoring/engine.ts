@@ -6,15 +6,15 @@ import { pairSearch } from '../matching/pair-search.ts';
 import { assessStarlight, type AssessmentContext, type StarlightAssessment } from './assess.ts';
 import { type CandidateRow, makeCandidate, type OverrideOf } from './candidate-row.ts';
 import { CoveredShares } from './covered-share.ts';
-import { shiftedDetections } from './control-run.ts';
+import { type ShiftedPlaces, shiftedPlaces } from './control-run.ts';
 import { describeDetail, describeItem } from './describe.ts';
-import { type Detection, readDetections } from './detection-table.ts';
+import type { Detection } from './detection-table.ts';
+import { Detections } from './detections.ts';
 import type { EngineInput } from './engine-input.ts';
 import { relationOf } from './expectation.ts';
 import { readGroups } from './group-list.ts';
 import { judgeDoubts } from './judge-doubts.ts';
-import { learnPriors, learnRelation, learntNotes, type Lesson, lessonOf } from './learning.ts';
-import { fillReddening } from './local-reddening.ts';
+import { learnPriors, learntNotes, type Lesson, lessonOf } from './learning.ts';
 import { MissedTable } from './missed-table.ts';
 import { buildNeighbourPool, type NeighbourPool } from './neighbour-pool.ts';
 import { type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
@@ -37,6 +37,8 @@ const COUNTERPART_KINDS = ['optical', 'infrared', 'ultraviolet', 'continuum'];
 const FAR_MPC = 5;
 /** Detections to learn from: more would move what is learnt by less than its error. */
 const MOST_PUPILS = 6000;
+/** Fewer detections teach nothing. Our choice. */
+const LEAST_DETECTIONS = 100;
 /** And without a distance: neighbours with a distance of their own, degrees. */
 const NO_DISTANCE_DEG = 10;
 
@@ -55,7 +57,7 @@ export interface Learnt {
  * ranges of detections in any order.
  */
 export class Engine {
-  readonly detections: Detection[];
+  readonly detections: Detections;
   readonly catalogues: PreparedCatalogue[];
   private readonly searched: PreparedCatalogue[];
   private readonly pool: NeighbourPool;
@@ -67,8 +69,7 @@ export class Engine {
 
   constructor(readonly input: EngineInput) {
     const { criteria, survey } = input;
-    this.detections = readDetections(input);
-    fillReddening(this.detections, input.catalogues);
+    this.detections = new Detections(input);
     this.catalogues = input.catalogues.map((catalogue, index) =>
       prepareCatalogue(catalogue, index, criteria, COUNTERPART_KINDS.includes(catalogue.kind)),
     );
@@ -138,42 +139,32 @@ export class Engine {
     return candidates.map((rows, i) => assessStarlight(range[i]!, rows, masks[i]!, context));
   }
 
-  /** Detections a run learns from: all, or every k-th so that there are at most so many. */
-  get pupils(): Detection[] {
-    const step = Math.ceil(this.detections.length / MOST_PUPILS);
-    return this.detections.filter((_, i) => i % step === 0);
+  /** A run learns from every so-many-th detection, so that there are at most {@link MOST_PUPILS}. */
+  private get step(): number {
+    return Math.max(1, Math.ceil(this.detections.length / MOST_PUPILS));
   }
 
-  /** What some detections teach, given a relation. */
-  lessons(pupils: readonly Detection[], relation: GasStarRelation | null): Lesson[] {
-    const context = this.context(relation, []);
-    return this.assess(pupils, context).map((assessment) => lessonOf(assessment, context.model.relation));
-  }
-
-  /** Whether there are enough detections to learn anything from. */
-  get canLearn(): boolean {
+  /** How many detections a run learns from; 0 where it does not want to or has too few. */
+  get pupils(): number {
     const { learnPrior, learnMagnitudes } = this.input.criteria.counterpart;
-    return (learnPrior || learnMagnitudes) && this.detections.length >= 100;
+    const learns = (learnPrior || learnMagnitudes) && this.detections.length >= LEAST_DETECTIONS;
+    return learns ? Math.ceil(this.detections.length / this.step) : 0;
   }
 
-  /**
-   * Learns relation and priors from lessons of all detections.
-   *
-   * @param again gives the lessons anew under another relation
-   */
-  learnFrom(lessons: Lesson[], again: (relation: GasStarRelation) => Lesson[]): Learnt {
-    const { criteria } = this.input;
-    const base = relationOf(criteria);
-    const relation = criteria.counterpart.learnMagnitudes ? learnRelation(lessons, base) : undefined;
-    const known = relation ? again(relation) : lessons;
-    const priors = learnPriors(known, criteria);
-    this.learnt = {
-      ...this.learnt,
-      relation: relation ?? null,
-      priors,
-      notes: learntNotes(relation, priors, known),
-    };
-    return this.learnt;
+  /** What the pupils [from, to) teach under a relation; null for that of the criteria. */
+  lessons(from: number, to: number, relation: GasStarRelation | null): Lesson[] {
+    const context = this.context(relation, []);
+    const positions = Array.from({ length: to - from }, (_, i) => (from + i) * this.step);
+    return this.assess(this.detections.pick(positions), context).map((assessment) =>
+      lessonOf(assessment, context.model.relation),
+    );
+  }
+
+  /** Concludes from the lessons of all pupils under the relation that they taught; null where they taught none. */
+  learn(relation: GasStarRelation | null, lessons: readonly Lesson[]): Learnt {
+    const priors = learnPriors(lessons, this.input.criteria);
+    const notes = learntNotes(relation ?? undefined, priors, lessons);
+    return { ...this.learnt, relation, priors, notes };
   }
 
   /** Takes over what was learnt elsewhere from the same input. */
@@ -251,7 +242,7 @@ export class Engine {
   score(from: number, to: number): ScoredDetection[] {
     const { criteria } = this.input;
     const context = this.context(this.learnt.relation, this.learnt.priors);
-    const assessed = this.assess(this.detections.slice(from, to), context);
+    const assessed = this.assess(this.detections.range(from, to), context);
     const around = this.neighboursOf(assessed);
     const far = this.farNearest(assessed, around);
     return assessed.map((starlight, i) => {
@@ -266,6 +257,7 @@ export class Engine {
         position: detection.position,
         catalogueId: this.input.catalogues[detection.catalogue]!.id,
         row: detection.row,
+        detection,
         item: { ...describeItem(assessment, doubts, criteria), robustness },
         candidates: starlight.candidates,
         neighbours: surroundings.neighbours,
@@ -274,19 +266,20 @@ export class Engine {
     });
   }
 
-  /** Shifted detections of the control; none where it is switched off. */
-  shifted(): Detection[] {
+  /** Shifted positions of the control; none where it is switched off. */
+  shifted(): ShiftedPlaces {
     const { control, robustness } = this.input.criteria;
-    if (control.offsetsPerSource === 0) return [];
-    return shiftedDetections(this.detections, this.searched, control.offsetsPerSource, robustness.seed);
+    return shiftedPlaces(this.detections, this.searched, control.offsetsPerSource, robustness.seed);
   }
 
-  /** How many of some shifted detections would have been given a counterpart, by the same code and without overrides. */
-  chanceMatches(shifted: readonly Detection[]): number {
+  /** At how many of the shifted positions [from, to) a counterpart would have been found, by the same code and without overrides. */
+  chanceMatches({ source, raDeg, decDeg }: ShiftedPlaces, from: number, to: number): number {
     const context = this.context(this.learnt.relation, this.learnt.priors);
-    const numbered = shifted.map((detection, position) => ({ ...detection, position }));
-    const shares = new CoveredShares(numbered.length, this.catalogues.length);
-    return this.assess(numbered, { ...context, shares }, null).filter(({ dominating }) => dominating !== null).length;
+    const moved = this.detections
+      .pick(Array.from(source.subarray(from, to)))
+      .map((detection, i) => ({ ...detection, position: i, raDeg: raDeg[from + i]!, decDeg: decDeg[from + i]! }));
+    const shares = new CoveredShares(moved.length, this.catalogues.length);
+    return this.assess(moved, { ...context, shares }, null).filter(({ dominating }) => dominating !== null).length;
   }
 
   /** The nearest row with a velocity for detections that have none in their window. */

@@ -2,6 +2,7 @@ import { DEGREE } from '@eremite/shared/science/constants';
 import { cellOf } from '@eremite/shared/science/sky/healpix';
 import { buildZoneGrid } from '../matching/build-zone-grid.ts';
 import { pairSearch } from '../matching/pair-search.ts';
+import type { ZoneGrid } from '../matching/zone-grid.ts';
 import { numberRole } from '../tiles/role-table.ts';
 import type { Detection } from './detection-table.ts';
 import type { EngineCatalogue } from './engine-input.ts';
@@ -19,7 +20,7 @@ interface Samples {
 }
 
 /** Rows with a reddening, thinned; undefined where the table has none. */
-function samplesOf({ name, roles }: EngineCatalogue): Samples | undefined {
+function samplesOf({ name, roles }: Pick<EngineCatalogue, 'name' | 'roles'>): Samples | undefined {
   const ebv = numberRole(roles, 'ebvMag');
   if (!ebv) return undefined;
   const { raDeg, decDeg } = roles.columns;
@@ -37,29 +38,39 @@ function samplesOf({ name, roles }: EngineCatalogue): Samples | undefined {
   return { name, raDeg: pick(raDeg), decDeg: pick(decDeg), ebvMag: pick(ebv) };
 }
 
-/**
- * Gives detections without a reddening of their own that of the sky about them: the median E(B-V) of the rows within 10
- * arcmin of the first table, in the order of the run, that has any there. Where no table has, it stays missing.
- */
-export function fillReddening(detections: readonly Detection[], catalogues: readonly EngineCatalogue[]): void {
-  let open = detections.filter(({ ebvMag }) => Number.isNaN(ebvMag));
-  for (const catalogue of catalogues) {
-    if (open.length === 0) return;
-    const samples = samplesOf(catalogue);
-    if (!samples) continue;
-    const pairs = pairSearch(buildZoneGrid(samples.raDeg, samples.decDeg), {
-      raDeg: Float64Array.from(open, ({ raDeg }) => raDeg),
-      decDeg: Float64Array.from(open, ({ decDeg }) => decDeg),
-      radiusArcsec: new Float64Array(open.length).fill(NEAR_ARCSEC),
+/** E(B-V) of the sky about detections that give none, told from rows of the tables. */
+export class LocalReddening {
+  private readonly tables: { samples: Samples; grid: ZoneGrid }[];
+
+  constructor(catalogues: readonly Pick<EngineCatalogue, 'name' | 'roles'>[]) {
+    this.tables = catalogues.flatMap((catalogue) => {
+      const samples = samplesOf(catalogue);
+      return samples ? [{ samples, grid: buildZoneGrid(samples.raDeg, samples.decDeg) }] : [];
     });
-    const near: number[][] = open.map(() => []);
-    for (let k = 0; k < pairs.position.length; k++) near[pairs.position[k]!]!.push(samples.ebvMag[pairs.row[k]!]!);
-    near.forEach((values, i) => {
-      if (values.length === 0) return;
-      open[i]!.ebvMag = median(values);
-      open[i]!.ebvSource = samples.name;
-    });
-    open = open.filter(({ ebvMag }) => Number.isNaN(ebvMag));
+  }
+
+  /**
+   * Gives detections without a reddening of their own the median E(B-V) of the rows within 10 arcmin of the first table, in
+   * the order of the run, that has any there. Where no table has, it stays missing.
+   */
+  fill(detections: readonly Detection[]): void {
+    let open = detections.filter(({ ebvMag }) => Number.isNaN(ebvMag));
+    for (const { samples, grid } of this.tables) {
+      if (open.length === 0) return;
+      const pairs = pairSearch(grid, {
+        raDeg: Float64Array.from(open, ({ raDeg }) => raDeg),
+        decDeg: Float64Array.from(open, ({ decDeg }) => decDeg),
+        radiusArcsec: new Float64Array(open.length).fill(NEAR_ARCSEC),
+      });
+      const near: number[][] = open.map(() => []);
+      for (let k = 0; k < pairs.position.length; k++) near[pairs.position[k]!]!.push(samples.ebvMag[pairs.row[k]!]!);
+      near.forEach((values, i) => {
+        if (values.length === 0) return;
+        open[i]!.ebvMag = median(values);
+        open[i]!.ebvSource = samples.name;
+      });
+      open = open.filter(({ ebvMag }) => Number.isNaN(ebvMag));
+    }
   }
 }
 

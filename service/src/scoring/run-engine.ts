@@ -1,10 +1,15 @@
+import { setImmediate } from 'node:timers/promises';
 import { type ControlResult, controlSummary } from './control-run.ts';
-import { Engine } from './engine.ts';
+import type { Learnt } from './engine.ts';
 import type { EngineInput } from './engine-input.ts';
+import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
+import type { Lesson } from './learning.ts';
+import { inOrder } from './in-order.ts';
 import type { ScoredDetection } from './scored-detection.ts';
+import { type Render, type ScoringAsked, scoringDesk, type ScoringTasks } from './scoring-task.ts';
 
-/** Detections scored between two looks at the clock: the unit of progress and of cancel. */
-const UNIT = 500;
+/** Detections scored at a time: the unit of progress, of cancel and of what a thread takes. Results do not depend on it. */
+const UNIT = 250;
 
 export type { ControlResult };
 
@@ -15,63 +20,107 @@ export interface RunOptions {
   signal?: AbortSignal;
 }
 
-/** Verdicts in which an object was accepted as the counterpart. */
-const FOUND = new Set(['starlit', 'nearly dark']);
+/** Where the steps of a run are done, and how many side by side. */
+export interface ScoringPlace {
+  threads: number;
+  ask(asked: ScoringAsked): Promise<unknown>;
+}
 
 export interface RunResult {
-  engine: Engine;
   notes: string[];
+  learnt: Learnt | null;
   /** Result of the shifted positions; null where they are switched off. */
   control: ControlResult | null;
 }
 
+let runs = 0;
+
 /**
- * Does a whole run in this thread: index, learn, score in input order.
+ * Does a whole run: learn from the survey, score every detection, look at the shifted positions. The results are the same
+ * however many threads there are.
  *
- * @param take receives the results unit by unit, in input order
+ * @param take receives what became of the detections of each unit, in input order, and is waited for
  */
-export async function runEngine(
+export async function runScoring<R>(
+  place: ScoringPlace,
   input: EngineInput,
-  take: (scored: ScoredDetection[], engine: Engine) => void | Promise<void>,
+  take: (rendered: R) => void | Promise<void>,
   { onProgress, signal }: RunOptions = {},
 ): Promise<RunResult> {
+  const run = `run ${++runs}`;
+  let learnt: Learnt | null = null;
+  const ask = <N extends keyof ScoringTasks<R>>(name: N, task: ScoringTasks<R>[N]['task']) =>
+    place.ask({ run, input, learnt, name, task }) as Promise<ScoringTasks<R>[N]['result']>;
+  const over = <T>(count: number, start: (range: { from: number; to: number }) => Promise<T>, taken: (done: T, to: number) => void | Promise<void>) =>
+    inOrder(count, UNIT, 2 * place.threads, async (range) => {
+      signal?.throwIfAborted();
+      return start(range);
+    }, taken); // prettier-ignore
+
   onProgress?.(0, 'indexing the tables');
-  const engine = new Engine(input);
-  const count = engine.detections.length;
-  const learning = engine.canLearn;
-  const share = learning ? 0.25 : 0.05;
-  const pause = async () => {
-    await new Promise<void>((resolve) => setImmediate(resolve));
-    signal?.throwIfAborted();
+  const { detections, pupils } = await ask('extent', {});
+  const learning = pupils > 0 ? 0.2 : 0.05;
+  const teach = async (relation: GasStarRelation | null, base: number) => {
+    const lessons: Lesson[] = [];
+    await over(
+      pupils,
+      (range) => ask('lessons', { ...range, relation }),
+      (some, to) => {
+        lessons.push(...some);
+        onProgress?.(base + 0.075 * (to / pupils), 'learning from the survey');
+      },
+    );
+    return lessons;
   };
-  if (learning) {
-    const { pupils } = engine;
-    const lessons: ReturnType<Engine['lessons']> = [];
-    for (let from = 0; from < pupils.length; from += UNIT) {
-      await pause();
-      lessons.push(...engine.lessons(pupils.slice(from, from + UNIT), null));
-      onProgress?.(0.05 + (share - 0.05) * (lessons.length / pupils.length), 'learning from the survey');
-    }
-    engine.learnFrom(lessons, (relation) => engine.lessons(pupils, relation));
+  if (pupils > 0) {
+    const lessons = await teach(null, 0.05);
+    const relation = await ask('relation', { lessons });
+    learnt = await ask('learn', { relation, lessons: relation ? await teach(relation, 0.125) : lessons });
   }
+  const places = await ask('shift', {});
+  const shifted = places.source.length;
+  const scored = shifted > 0 ? 0.85 : 1;
   let matched = 0;
-  const shifted = engine.shifted();
-  const scored = shifted.length > 0 ? 0.8 : 1;
-  for (let from = 0; from < count; from += UNIT) {
-    await pause();
-    const to = Math.min(count, from + UNIT);
-    const results = engine.score(from, to);
-    for (const { item } of results) if (FOUND.has(item.starlight)) matched++;
-    await take(results, engine);
-    onProgress?.(share + (scored - share) * (to / count), 'scoring');
-  }
+  await over(
+    detections,
+    (range) => ask('score', range),
+    async ({ rendered, found }, to) => {
+      matched += found;
+      await take(rendered);
+      onProgress?.(learning + (scored - learning) * (to / detections), 'scoring');
+    },
+  );
   let chance = 0;
-  for (let from = 0; from < shifted.length; from += UNIT) {
-    await pause();
-    chance += engine.chanceMatches(shifted.slice(from, from + UNIT));
-    onProgress?.(scored + (1 - scored) * Math.min(1, (from + UNIT) / shifted.length), 'matching shifted positions');
-  }
+  await over(
+    shifted,
+    (range) => ask('chance', { ...range, places }),
+    (some, to) => {
+      chance += some;
+      onProgress?.(scored + (1 - scored) * (to / shifted), 'matching shifted positions');
+    },
+  );
   const { offsetsPerSource } = input.criteria.control;
-  const control = controlSummary(offsetsPerSource, shifted.length, chance, matched, count);
-  return { engine, notes: engine.notes, control };
+  const control = controlSummary(offsetsPerSource, shifted, chance, matched, detections);
+  return { learnt, notes: await ask('notes', {}), control };
+}
+
+/** Scores in this thread, giving way to other work between units. */
+export function localPlace<R>(render: Render<R>): ScoringPlace {
+  const desk = scoringDesk(render);
+  return {
+    threads: 1,
+    ask: async (asked) => {
+      await setImmediate();
+      return desk(asked);
+    },
+  };
+}
+
+/** A whole run in this thread: {@link runScoring} for whoever wants the scored detections themselves. */
+export function runEngine(
+  input: EngineInput,
+  take: (scored: ScoredDetection[]) => void | Promise<void>,
+  options: RunOptions = {},
+): Promise<RunResult> {
+  return runScoring(localPlace((scored) => scored), input, take, options); // prettier-ignore
 }

@@ -55,6 +55,7 @@ export interface ScoredDetection {
   position: number;
   catalogueId: string;
   row: number;
+  detection: Detection;
   item: ScoredItem;
   candidates: CandidateRow[];
   neighbours: NeighbourRow[];

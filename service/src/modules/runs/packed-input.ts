@@ -1,5 +1,6 @@
 import { type CatalogueSettings, engineCatalogue } from '../../scoring/engine-catalogue.ts';
-import type { EngineCoverage, EngineInput } from '../../scoring/engine-input.ts';
+import { sharedMemory } from '../../matching/memory.ts';
+import type { EngineCatalogue, EngineCoverage, EngineInput } from '../../scoring/engine-input.ts';
 import { ColumnPackError } from '../../tiles/column-pack.ts';
 import { joinRoles } from '../../tiles/join-roles.ts';
 
@@ -41,21 +42,22 @@ export function packTable(
 }
 
 /**
- * Unpacks the tables: seconds of work for a large survey, so it is done in the thread that scores.
+ * Unpacks a table into memory that threads share: a second of work for a large one, so it is done in a thread.
  *
  * @throws {DamagedTableError} when a stored tile is not what was written
  */
+export function unpackTable({ identity, settings, coverage, memory, tiles }: PackedTable): EngineCatalogue {
+  const blobs = tiles.map(([offset, length]) => new Uint8Array(memory, offset, length));
+  try {
+    return engineCatalogue(identity, settings, joinRoles(blobs, 'file', sharedMemory), coverage);
+  } catch (error) {
+    if (!(error instanceof ColumnPackError)) throw error;
+    throw new DamagedTableError(
+      `The stored rows of ${settings.name} are damaged (${error.message}). Publish the table again and start another run.`,
+    );
+  }
+}
+
 export function unpackInput({ tables, ...rest }: PackedInput): EngineInput {
-  const catalogues = tables.map(({ identity, settings, coverage, memory, tiles }) => {
-    const blobs = tiles.map(([offset, length]) => new Uint8Array(memory, offset, length));
-    try {
-      return engineCatalogue(identity, settings, joinRoles(blobs), coverage);
-    } catch (error) {
-      if (!(error instanceof ColumnPackError)) throw error;
-      throw new DamagedTableError(
-        `The stored rows of ${settings.name} are damaged (${error.message}). Publish the table again and start another run.`,
-      );
-    }
-  });
-  return { ...rest, catalogues };
+  return { ...rest, catalogues: tables.map(unpackTable) };
 }

@@ -1,7 +1,8 @@
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import { Moc } from '@eremite/shared/science/sky/moc';
 import { Injectable } from '@nestjs/common';
-import { type Detection, readDetections } from '../../scoring/detection-table.ts';
+import type { Detection } from '../../scoring/detection-table.ts';
+import { Detections } from '../../scoring/detections.ts';
 import { engineCatalogue } from '../../scoring/engine-catalogue.ts';
 import type { EngineInput } from '../../scoring/engine-input.ts';
 import { neighbourAngleDeg } from '../../scoring/surroundings.ts';
@@ -75,7 +76,7 @@ export class PreviewTables {
       const own = asRoleTable(selectRows(near, Uint32Array.of(near.columns.row.indexOf(row))));
       catalogues.push(engineCatalogue(identity, settings, own, coverage));
     }
-    return readDetections({ ...about, catalogues });
+    return new Detections({ ...about, catalogues }).range(0, catalogues.length);
   }
 }
 

@@ -21,13 +21,10 @@ function score({ input, learnt, wanted }: PreviewTask): PreviewedDetection[] {
   const engine = new Engine(unpackInput(input));
   if (learnt) engine.setLearnt(applicable(learnt, engine));
   const tables = engine.input.catalogues.map(({ id, name, kind }) => ({ catalogueId: id, name, kind }));
-  const places = new Map(
-    engine.detections.map(({ catalogue, row, position }) => [`${tables[catalogue]!.catalogueId}/${row}`, position]),
-  );
   return wanted.map(({ catalogueId, row }) => {
-    const position = places.get(`${catalogueId}/${row}`)!;
+    const position = engine.detections.positionOf(catalogueId, row);
     const [scored] = engine.score(position, position + 1);
-    const detection = engine.detections[position]!;
+    const { detection } = scored!;
     return {
       item: scored!.item,
       detail: scored!.detail(),

@@ -1,12 +1,4 @@
-import type { Learnt } from '../../scoring/engine.ts';
-import type { ControlResult } from '../../scoring/run-engine.ts';
 import type { ScoredItem } from '../../scoring/scored-detection.ts';
-import type { PackedInput } from './packed-input.ts';
-
-/** What the worker thread is started with. */
-export interface RunTask {
-  input: PackedInput;
-}
 
 /** A scored detection as it is stored: JSON as text, so that the main thread need not parse it; evidence packed. */
 export interface StoredVerdict {
@@ -36,17 +28,12 @@ export interface StoredVerdict {
   neighbours: Uint8Array;
 }
 
-export interface RunTotals {
+/** What becomes of a unit of scored detections. */
+export interface StoredUnit {
+  verdicts: StoredVerdict[];
   candidates: number;
   neighbours: number;
 }
-
-/** From the worker. After `verdicts` it waits for one `taken`, so that it never runs ahead of the database. */
-export type RunMessage =
-  | { kind: 'progress'; fraction: number; message: string }
-  | { kind: 'verdicts'; verdicts: StoredVerdict[] }
-  | { kind: 'done'; notes: string[]; control: ControlResult | null; totals: RunTotals; learnt: Learnt }
-  | ({ kind: 'failed' } & ThreadFailure);
 
 /** Why a thread gave up. */
 export interface ThreadFailure {

@@ -1,11 +1,12 @@
-import { Injectable } from '@nestjs/common';
+import { Inject, Injectable } from '@nestjs/common';
+import { ENV, type Env } from '../../config/env.ts';
 import { type BulkColumn, BulkStore, type BulkType } from '../../database/bulk.ts';
 import { JsonText } from '../../database/json-text.ts';
 import type { JobContext, JobHandler } from '../../jobs/job-handler.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { RunInputs } from './run-inputs.ts';
 import type { StoredVerdict } from './run-messages.ts';
-import { type RunOutcome, scoreInThread } from './run-thread.ts';
+import { type RunOutcome, scoreInThreads } from './run-threads.ts';
 import { type RunRow, RunsRepository } from './runs.repository.ts';
 
 interface Payload {
@@ -57,6 +58,7 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
     private readonly inputs: RunInputs,
     private readonly bulk: BulkStore,
     private readonly ledger: LedgerService,
+    @Inject(ENV) private readonly env: Env,
   ) {}
 
   async run({ runId }: Payload, { signal, progress }: JobContext): Promise<{ runId: string }> {
@@ -71,7 +73,8 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
     const lists = input.tables.filter(({ settings }) => settings.kind === 'hi').map(({ identity }) => identity.id);
     for (const { id, catalogueId, row } of await this.runs.detectionIds(lists)) ids.set(`${catalogueId}/${row}`, id);
     const counts: Counts = { detections: 0, starlight: {}, surroundings: {} };
-    const outcome = await scoreInThread(input, {
+    const outcome = await scoreInThreads(input, {
+      threads: this.env.threads,
       signal,
       progress: (fraction, message) => progress(READING + (1 - READING) * fraction * 0.99, message),
       take: (verdicts) => this.#store(runId, verdicts, ids, counts),
