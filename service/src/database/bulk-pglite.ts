@@ -1,7 +1,7 @@
-import { BulkStore, type BulkColumn, type BulkType } from './bulk.ts';
+import { BulkStore, type BulkColumn, type BulkType, type CopyPiece } from './bulk.ts';
+import { copyPieces } from './copy-pieces.ts';
 import { copyFromSql, copyToSql } from './bulk-sql.ts';
 import { CopyDecoder } from './copy-decoder.ts';
-import { sendInPieces } from './copy-pieces.ts';
 import type { PgliteProxy } from './pglite-proxy.ts';
 import { withLiterals } from './sql-literal.ts';
 
@@ -11,19 +11,29 @@ export class PgliteBulkStore extends BulkStore {
     super();
   }
 
-  override async copyInto(
+  override copyInto(
     table: string,
     columns: readonly BulkColumn[],
     rows: AsyncIterable<readonly unknown[][]> | Iterable<readonly unknown[][]>,
   ): Promise<number> {
+    return this.copyPieces(table, columns, copyPieces(columns, rows));
+  }
+
+  override async copyPieces(
+    table: string,
+    columns: readonly BulkColumn[],
+    pieces: AsyncIterable<CopyPiece>,
+  ): Promise<number> {
     const sql = copyFromSql(table, columns, `'/dev/blob'`);
     // The next piece is put together while the database writes the one before.
     let inFlight: Promise<unknown> = Promise.resolve();
-    const sent = await sendInPieces(columns, rows, async (piece) => {
+    let sent = 0;
+    for await (const { rows, bytes } of pieces) {
       await inFlight;
-      inFlight = this.client.copyIn(sql, piece);
+      inFlight = this.client.copyIn(sql, bytes);
       inFlight.catch(() => undefined);
-    });
+      sent += rows;
+    }
     await inFlight;
     return sent;
   }

@@ -1,10 +1,10 @@
 import { pipeline } from 'node:stream/promises';
 import type { Pool } from 'pg';
 import { from as copyFrom, to as copyTo } from 'pg-copy-streams';
-import { BulkStore, type BulkColumn, type BulkType } from './bulk.ts';
+import { BulkStore, type BulkColumn, type BulkType, type CopyPiece } from './bulk.ts';
+import { copyPieces } from './copy-pieces.ts';
 import { copyFromSql, copyToSql } from './bulk-sql.ts';
 import { CopyDecoder } from './copy-decoder.ts';
-import { sendInPieces } from './copy-pieces.ts';
 import { withLiterals } from './sql-literal.ts';
 
 /** Bulk rows through PostgreSQL's copy streams. */
@@ -13,22 +13,33 @@ export class PostgresBulkStore extends BulkStore {
     super();
   }
 
-  override async copyInto(
+  override copyInto(
     table: string,
     columns: readonly BulkColumn[],
     rows: AsyncIterable<readonly unknown[][]> | Iterable<readonly unknown[][]>,
   ): Promise<number> {
+    return this.copyPieces(table, columns, copyPieces(columns, rows));
+  }
+
+  override async copyPieces(
+    table: string,
+    columns: readonly BulkColumn[],
+    pieces: AsyncIterable<CopyPiece>,
+  ): Promise<number> {
     const sql = copyFromSql(table, columns, 'stdin');
-    return sendInPieces(columns, rows, async (piece) => {
+    let sent = 0;
+    for await (const { rows, bytes } of pieces) {
       const client = await this.pool.connect();
       try {
-        await pipeline([piece], client.query(copyFrom(sql)));
+        await pipeline([bytes], client.query(copyFrom(sql)));
         client.release();
       } catch (error) {
         client.release(true);
         throw error;
       }
-    });
+      sent += rows;
+    }
+    return sent;
   }
 
   override async *read(

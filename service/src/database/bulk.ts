@@ -5,6 +5,12 @@ export interface BulkColumn {
   readonly type: BulkType;
 }
 
+/** Rows already in PostgreSQL's binary COPY format, whole in themselves. */
+export interface CopyPiece {
+  readonly rows: number;
+  readonly bytes: Uint8Array<ArrayBuffer>;
+}
+
 /** Large amounts of rows in and out by PostgreSQL's binary COPY, which both databases speak. */
 export abstract class BulkStore {
   /**
@@ -19,6 +25,12 @@ export abstract class BulkStore {
     columns: readonly BulkColumn[],
     rows: AsyncIterable<readonly unknown[][]> | Iterable<readonly unknown[][]>,
   ): Promise<number>;
+
+  /**
+   * The same for rows that were encoded elsewhere, such as in another thread. A piece is spent once it has been taken:
+   * its memory may be given away. The next is asked for while the one before is being written.
+   */
+  abstract copyPieces(table: string, columns: readonly BulkColumn[], pieces: AsyncIterable<CopyPiece>): Promise<number>;
 
   /**
    * Reads rows; bytea comes as Uint8Array, int8 as number, jsonb parsed.

@@ -1,4 +1,4 @@
-import type { BulkColumn, BulkType } from './bulk.ts';
+import type { BulkColumn, BulkType, CopyPiece } from './bulk.ts';
 import { JsonText } from './json-text.ts';
 
 // Source: PostgreSQL documentation, COPY, binary format: signature, flags, length of the header extension.
@@ -39,6 +39,11 @@ export class CopyEncoder {
     this.#room(2);
     this.#view.setInt16(this.#length, -1);
     return this.#bytes.subarray(0, this.#length + 2);
+  }
+
+  /** The same as {@link finish}, with its count of rows. */
+  piece(): CopyPiece {
+    return { rows: this.rows, bytes: this.finish() };
   }
 
   #value(value: unknown, type: BulkType): void {

@@ -1,6 +1,6 @@
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { ErrorPlace } from '../tables/table.ts';
-import type { Tile } from '../tiles/tile.ts';
+import type { TilePiece } from '../tiles/tile-piece.ts';
 import type { Inspection } from './inspect.ts';
 import type { Published, SidelinedCells } from './publish.ts';
 import type { SettingsFault } from './resolved.ts';
@@ -11,6 +11,8 @@ export interface IntakeTask {
   path: string;
   fileName: string;
   settings: IntakeSettings;
+  /** What the tiles are stored under, where it is to publish. */
+  catalogueId?: string;
 }
 
 /** Errors cross threads as data; each kind is told differently. */
@@ -22,7 +24,7 @@ export type IntakeFailure =
 /** From the worker. `tiles` and `sidelined` are answered by a `taken` each, so that it never runs far ahead of the database. */
 export type IntakeMessage =
   | { kind: 'progress'; fraction: number; rows: number }
-  | { kind: 'tiles'; tiles: Tile[] }
+  | { kind: 'tiles'; piece: TilePiece }
   | { kind: 'sidelined'; rows: SidelinedCells[] }
   | { kind: 'inspected'; inspection: Inspection }
   | { kind: 'published'; published: Published }

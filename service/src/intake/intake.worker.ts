@@ -4,6 +4,8 @@ import { TableError } from '../tables/table.ts';
 import { Handovers } from './handovers.ts';
 import { inspect } from './inspect.ts';
 import type { IntakeFailure, IntakeMessage, IntakeTask } from './intake-messages.ts';
+import type { Tile } from '../tiles/tile.ts';
+import { tilePiece } from '../tiles/tile-piece.ts';
 import { publish } from './publish.ts';
 import { SettingsError } from './resolved.ts';
 
@@ -32,9 +34,9 @@ async function work(task: IntakeTask): Promise<void> {
     return;
   }
   const sink = {
-    tiles: (tiles: Extract<IntakeMessage, { kind: 'tiles' }>['tiles']) => {
-      const buffers = tiles.flatMap(({ roles, originals }) => [roles.buffer, originals.buffer] as ArrayBuffer[]);
-      return handOver({ kind: 'tiles', tiles }, buffers);
+    tiles: (tiles: Tile[]) => {
+      const piece = tilePiece(task.catalogueId!, tiles);
+      return handOver({ kind: 'tiles', piece }, [piece.bytes.buffer]);
     },
     sidelined: (rows: Extract<IntakeMessage, { kind: 'sidelined' }>['rows']) => handOver({ kind: 'sidelined', rows }),
   };

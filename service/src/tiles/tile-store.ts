@@ -1,5 +1,5 @@
 import { Inject, Injectable } from '@nestjs/common';
-import { BulkStore } from '../database/bulk.ts';
+import { BulkStore, type CopyPiece } from '../database/bulk.ts';
 import { buildConeIndex } from '../matching/cone-index.ts';
 import { coneSearch, nearestRows } from '../matching/cone-search.ts';
 import { cellsOfCone } from './cells.ts';
@@ -10,7 +10,7 @@ import { joinRoles } from './join-roles.ts';
 import type { RoleTable } from './role-table.ts';
 import { openPack, unpackTight } from './tight-pack.ts';
 import { blockOf, PLACES_CELL, placesOf, type RowPlace } from './row-places.ts';
-import type { Tile } from './tile.ts';
+import { TILE_COLUMNS } from './tile-piece.ts';
 
 /** A row as it stands in the catalogue's file, with its place. */
 export interface StoredRow {
@@ -32,29 +32,12 @@ const READ_BYTES = 48 * 1024 ** 2;
 export class TileStore {
   constructor(@Inject(BulkStore) private readonly bulk: BulkStore) {}
 
-  /** Appends tiles as they come. They are visible at once: the catalogue's state is what hides them. */
-  write(catalogueId: string, tiles: AsyncIterable<readonly Tile[]> | Iterable<readonly Tile[]>): Promise<number> {
-    const columns = [
-      { name: 'catalogue_id', type: 'uuid' },
-      { name: 'cell', type: 'int4' },
-      { name: 'part', type: 'int4' },
-      { name: 'count', type: 'int4' },
-      { name: 'roles', type: 'bytea' },
-      { name: 'originals', type: 'bytea' },
-    ] as const;
-    async function* batches() {
-      for await (const batch of tiles) {
-        yield batch.map(({ cell, part, count, roles, originals }) => [
-          catalogueId,
-          cell,
-          part,
-          count,
-          roles,
-          originals,
-        ]);
-      }
-    }
-    return this.bulk.copyInto('tiles', columns, batches());
+  /**
+   * Appends tiles as they come, in pieces of {@link tilePiece}. They are visible at once: the catalogue's state is what
+   * hides them.
+   */
+  write(pieces: AsyncIterable<CopyPiece>): Promise<number> {
+    return this.bulk.copyPieces('tiles', TILE_COLUMNS, pieces);
   }
 
   /**

@@ -80,7 +80,7 @@ export const verdictSort = z
   .optional();
 
 /** Several words: repeated, or with commas between them. */
-const listOfWords = <const T extends readonly [string, ...string[]]>(words: T) =>
+export const listOfWords = <const T extends readonly [string, ...string[]]>(words: T) =>
   z
     .union([z.string(), z.array(z.string())])
     .transform((value) => (Array.isArray(value) ? value : value.split(',')))
@@ -109,6 +109,8 @@ export const runDifference = z.object({
   to: z.object({ id: z.uuid(), number: z.int() }),
   criteriaChanged: z.array(z.object({ key: z.string(), from: z.unknown(), to: z.unknown() })),
   inputsChanged: z.array(z.string()),
+  /** People's words that one run took up and the other did not: replaced distances, counterparts accepted or rejected. */
+  decisionsChanged: z.array(z.object({ detectionId: z.uuid().nullable(), name: z.string(), change: z.string() })),
   changed: z.array(
     z.object({
       detectionId: z.uuid(),
@@ -116,7 +118,10 @@ export const runDifference = z.object({
       starlight: z.tuple([z.string().nullable(), z.string().nullable()]),
       surroundings: z.tuple([z.string().nullable(), z.string().nullable()]),
       pNone: z.tuple([z.number().nullable(), z.number().nullable()]),
+      /** What moved, in sentences. */
       why: z.array(z.string()),
+      /** Which changed input did it, its own first; those of the whole survey where none is its own. */
+      causes: z.array(z.string()),
     }),
   ),
   unchanged: z.int(),

@@ -172,7 +172,10 @@ export const verdictItem = z.object({
   /** The headline with its qualification: "no starlight found; debris likely". */
   headline: z.string(),
   robustness: robustnessResult.nullable(),
-  settled: z.object({ starlight, surroundings, by: z.string(), note: z.string() }).nullable(),
+  /** The lead's word in force; `stands` is false where its evidence moved since. */
+  settled: z
+    .object({ starlight, surroundings, outcome: z.string(), by: z.string(), note: z.string(), stands: z.boolean() })
+    .nullable(),
   reviews: z.int(),
   overrides: z.int(),
 });

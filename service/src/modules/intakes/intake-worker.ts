@@ -2,11 +2,13 @@ import { Worker } from 'node:worker_threads';
 import { Injectable, type OnModuleDestroy } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
 import { workerUrl } from '../../common/worker-url.ts';
+import type { CopyPiece } from '../../database/bulk.ts';
 import type { Inspection } from '../../intake/inspect.ts';
 import type { IntakeFailure, IntakeMessage, IntakeTask } from '../../intake/intake-messages.ts';
 import type { Published, PublishSink } from '../../intake/publish.ts';
 
-export interface PublishHooks extends PublishSink {
+export interface PublishHooks extends Pick<PublishSink, 'sidelined'> {
+  tiles(piece: CopyPiece): Promise<void>;
   progress(fraction: number, rows: number): void;
   signal: AbortSignal;
 }
@@ -92,7 +94,7 @@ function run(worker: Worker, task: IntakeTask, hooks?: PublishHooks): Promise<Fi
       else if (message.kind === 'failed') end(() => reject(told(message.failure)));
       else if (message.kind === 'progress') hooks?.progress(message.fraction, message.rows);
       else {
-        await (message.kind === 'tiles' ? hooks?.tiles(message.tiles) : hooks?.sidelined(message.rows));
+        await (message.kind === 'tiles' ? hooks?.tiles(message.piece) : hooks?.sidelined(message.rows));
         worker.postMessage('taken');
       }
     };

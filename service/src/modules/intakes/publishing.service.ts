@@ -3,11 +3,10 @@ import type { IntakeColumn, PublishResult } from '@eremite/shared/contracts/inta
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { Inject, Injectable, type OnModuleInit } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
-import { BulkStore } from '../../database/bulk.ts';
+import { BulkStore, type CopyPiece } from '../../database/bulk.ts';
 import type { Published, SidelinedCells } from '../../intake/publish.ts';
 import type { JobContext } from '../../jobs/job-handler.ts';
 import { JobsService } from '../../jobs/jobs.service.ts';
-import type { Tile } from '../../tiles/tile.ts';
 import { TileStore } from '../../tiles/tile-store.ts';
 import { FilesService } from '../files/files.service.ts';
 import { canonicalJson } from '../ledger/ledger-hash.ts';
@@ -97,25 +96,26 @@ export class PublishingService implements OnModuleInit {
 
   /** Reads the file in its thread and writes as it comes; the thread waits whenever the database is behind. */
   private async store(intake: IntakeRow, catalogueId: string, { signal, progress }: JobContext): Promise<Published> {
-    const tiles = new Handover<Tile[]>();
-    const writing = this.tiles.write(catalogueId, tiles);
+    const pieces = new Handover<CopyPiece>();
+    const writing = this.tiles.write(pieces);
     const file = {
       path: this.files.path(intake.fileKey),
       fileName: intake.fileName,
       settings: intake.settings as IntakeSettings,
+      catalogueId,
     };
     try {
       const published = await this.worker.publish(file, {
         signal,
         progress: (fraction, rows) => progress(fraction * READING, `${rows.toLocaleString('en')} rows read`),
-        tiles: (batch) => Promise.race([tiles.put(batch), writing.then(() => undefined)]),
+        tiles: (piece) => Promise.race([pieces.put(piece), writing.then(() => undefined)]),
         sidelined: (rows) => this.storeSidelined(catalogueId, rows),
       });
-      tiles.end();
+      pieces.end();
       await writing;
       return published;
     } catch (error) {
-      tiles.end();
+      pieces.end();
       await writing.catch(() => undefined);
       throw error;
     }

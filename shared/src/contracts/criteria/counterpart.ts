@@ -113,6 +113,13 @@ export const counterpart = z.strictObject({
       'Share of unrelated redshift objects near a detection that are at its velocity, where it cannot be measured.',
     source: 'measured on published assignments; a starting point',
   }),
+  learnVelocities: key(z.boolean().default(true), {
+    title: 'Measure the velocity background',
+    unit: '',
+    description:
+      'With 500 redshifts or more their spread is taken from the catalogues themselves, and with 200 in rings about the detections the share that clusters; in a dense place the local share.',
+    source: OWN,
+  }),
   confusedFluxShare: key(z.number().min(0.01).max(1).default(0.2), {
     title: 'Share of the flux that confuses',
     unit: '',
