@@ -4,7 +4,7 @@ import { defineConfig } from 'vite';
 
 const root = import.meta.dirname;
 const sources = readdirSync(join(root, 'src'), { recursive: true, encoding: 'utf8' });
-const entries = sources.filter((path) => /^(main|plan|worker)\.ts$/.test(path) || path.endsWith('.worker.ts'));
+const entries = sources.filter((path) => /^(main|plan|replay|worker)\.ts$/.test(path) || path.endsWith('.worker.ts'));
 
 /** One flat folder of scripts: entries and worker threads by name, what they share as chunks beside them. */
 export default defineConfig({

@@ -1,21 +1,4 @@
-// npm run plan -- plan.json --out folder: builds when stale, then does the whole job without a server. Paths are
-// relative to where the command was called, which npm tells in INIT_CWD.
-import { spawn } from 'node:child_process';
-import { join } from 'node:path';
-import { install } from './install.mjs';
-import { ROOT } from './paths.mjs';
+// npm run plan -- plan.json --out folder: the whole job without a server.
+import { runBuilt } from './run-built.mjs';
 
-try {
-  install();
-  const { ensureBuilt } = await import('./build.mjs');
-  await ensureBuilt(['service']);
-} catch (error) {
-  console.error(error.message);
-  process.exit(1);
-}
-const child = spawn(process.execPath, [join(ROOT, 'service', 'dist', 'plan.js'), ...process.argv.slice(2)], {
-  cwd: process.env.INIT_CWD ?? process.cwd(),
-  stdio: 'inherit',
-});
-for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => child.kill(signal));
-child.on('close', (code, signal) => process.exit(signal ? 130 : code));
+await runBuilt('plan.js');
