@@ -91,7 +91,7 @@ describe('what an upload looks like', () => {
     const { items } = (await staff.observer.get(`/surveys/${survey.id}/detections`)).body;
     expect(items.map(({ name }: { name: string }) => name)).toEqual(['A2', 'B1', 'B2']);
     const aside = await staff.observer.get(`/catalogues/${id}/sidelined`);
-    expect(aside.body.items).toMatchObject([{ row: 1, line: 2, reason: 'same source as row 2' }]);
+    expect(aside.body.items).toMatchObject([{ row: 1, line: 2, value: 'row 2' }]);
   });
 });
 
@@ -150,5 +150,182 @@ describe('a catalogue fetched in cones around the detections', () => {
     }
     // Inside its cone a detection is searched: the galaxy 4 arcsec off is found.
     expect(items.find(({ name }: { name: string }) => name === 'A').counterpart).toMatchObject({ name: 'g1' });
+  });
+});
+
+/** A form of several files, in the fields the server knows. */
+function form(files: [field: string, name: string, content: string][], settings?: object): FormData {
+  const made = new FormData();
+  if (settings) made.append('settings', JSON.stringify(settings));
+  for (const [field, name, content] of files) made.append(field, new Blob([content]), name);
+  return made;
+}
+
+describe("a journal's data file", () => {
+  const README = [
+    'J/XX/1/1   An invented list                              (Nobody, 2026)',
+    '================================================================================',
+    'Byte-by-byte Description of file: table1.dat',
+    '--------------------------------------------------------------------------------',
+    '   Bytes Format Units   Label     Explanations',
+    '--------------------------------------------------------------------------------',
+    '   1-  3  A3    ---     Name      Name of the source',
+    '   5-  6  I2    h       RAh       Hour of Right Ascension (J2000)',
+    '   8-  9  I2    min     RAm       Minute of Right Ascension (J2000)',
+    '  11- 15  F5.2  s       RAs       Second of Right Ascension (J2000)',
+    '      17  A1    ---     DE-       Sign of the Declination (J2000)',
+    '  18- 19  I2    deg     DEd       Degree of Declination (J2000)',
+    '  21- 22  I2    arcmin  DEm       Arcminute of Declination (J2000)',
+    '  24- 25  I2    arcsec  DEs       Arcsecond of Declination (J2000)',
+    '  27- 30  I4    km/s    cz        ? Velocity',
+    '--------------------------------------------------------------------------------',
+  ].join('\n');
+  const DATA = 'A 1 01 39 30.25 +43 28 30 2464\nB 2 23 59 59.90 -00 00 01     \n';
+
+  it('is read by the ReadMe uploaded with it, and published', async () => {
+    const survey = await newSurvey();
+    const files: [string, string, string][] = [
+      ['readMe', 'ReadMe', README],
+      ['file', 'table1.dat', DATA],
+    ];
+    const { status, body, text } = await staff.lead.request(
+      'POST',
+      `/surveys/${survey.id}/intakes`,
+      form(files, { kind: 'hi' }),
+    );
+    expect(status, text).toBe(201);
+    expect(body).toMatchObject({ format: 'mrt', fileName: 'table1.dat', readMe: 'ReadMe', parts: [], rows: 2 });
+    expect(body.columns[8]).toMatchObject({ name: 'cz', unit: 'km/s', guess: 'velocity' });
+    expect(body.check).toMatchObject({ usable: 2, ready: true });
+    const checked = await staff.lead.patch(`/intakes/${body.id}`, { settings: { ...body.settings, name: 'listed' } });
+    expect(checked.body).toMatchObject({ rows: 2, readMe: 'ReadMe' });
+    const id = await publish(body.id);
+    const { items } = (await staff.observer.get(`/catalogues/${id}/rows`)).body;
+    expect(items[0].cells).toEqual(['A 1', '1', '39', '30.25', '+', '43', '28', '30', '2464']);
+    // Source: 15 (1 + 39/60 + 30.25/3600) and -1/3600 degrees.
+    expect(items[0].raDeg).toBeCloseTo(24.876041666666666, 10);
+    expect(items[1].decDeg).toBeCloseTo(-1 / 3600, 12);
+  });
+
+  it('is refused clearly where the ReadMe describes another file, and a ReadMe alone where its data are missing', async () => {
+    const survey = await newSurvey();
+    const post = (files: [string, string, string][]) =>
+      staff.lead.request('POST', `/surveys/${survey.id}/intakes`, form(files));
+    const two = README.replace('file: table1.dat', 'file: table2.dat');
+    const other = await post([
+      ['readMe', 'ReadMe', `${README}\n${two.slice(two.indexOf('Byte-by-byte'))}`],
+      ['file', 'table7.dat', DATA],
+    ]);
+    expect([other.status, other.body.type]).toEqual([422, 'urn:eremite:error:table-unreadable']);
+    expect(other.body.detail).toMatch(/describes table1.dat, table2.dat, but not table7.dat/);
+    const alone = await post([['file', 'ReadMe', README + '\n(End)\n']]);
+    expect(alone.body.detail).toMatch(/data file/);
+    const bare = await post([['readMe', 'ReadMe', README]]);
+    expect([bare.status, bare.body.errors?.[0]?.pointer]).toEqual([400, '/file']);
+  });
+});
+
+describe('a catalogue of several files', () => {
+  const settings = {
+    kind: 'optical',
+    bands: [{ name: 'r', system: 'AB', depth5Sigma: 23 }],
+    footprint: { type: 'circles', value: [[150, 2, 0.2]] },
+  };
+  const first = 'id,ra_deg,dec_deg,rmag\na1,150,2,18\na2,150.1,2,19\na2,150.1,2,19\n';
+  // The second tile has its columns in another order, names that are numbers, and one row of the overlap.
+  const second = 'rmag,id,dec_deg,ra_deg\n19.01,7,2.00002,150.10001\n20,8,2,150.2\n,,95,1\n';
+  const create = async (surveyId: string, parts: [string, string][], more: object = {}) =>
+    staff.lead.request(
+      'POST',
+      `/surveys/${surveyId}/intakes`,
+      form(
+        parts.map(([name, content]) => ['file', name, content]),
+        { ...settings, ...more },
+      ),
+    );
+
+  it('is one table with its rows numbered on, without what the files have in common', async () => {
+    const survey = await newSurvey();
+    const { status, body, text } = await create(survey.id, [
+      ['tile1.csv', first],
+      ['tile2.csv', second],
+    ]);
+    expect(status, text).toBe(201);
+    expect(body.parts).toMatchObject([
+      { fileName: 'tile1.csv', firstRow: 1, rows: 3 },
+      { fileName: 'tile2.csv', firstRow: 4, rows: 3 },
+    ]);
+    // Two equal rows of one file stay: only what another file has is an overlap.
+    expect(body.check).toMatchObject({ rows: 6, usable: 4, sidelined: 2, ready: true });
+    expect(body.check.questions.map(({ text: said }: { text: string }) => said).join('\n')).toMatch(
+      /One row lies within 0.5 arcsec of a row of an earlier part/,
+    );
+    const id = await publish(body.id);
+    const { body: rows } = await staff.observer.get(`/catalogues/${id}/rows`);
+    expect(rows.items.map(({ row, cells }: { row: number; cells: string[] }) => [row, ...cells])).toEqual([
+      [1, 'a1', '150', '2', '18'],
+      [2, 'a2', '150.1', '2', '19'],
+      [3, 'a2', '150.1', '2', '19'],
+      [5, '8', '150.2', '2', '20'],
+    ]);
+    const { body: aside } = await staff.observer.get(`/catalogues/${id}/sidelined`);
+    expect(aside.items).toMatchObject([
+      { row: 4, line: 2, value: 'row 2', reason: expect.stringMatching(/earlier part/) },
+      { row: 6, line: 4, column: 'dec_deg', value: '95' },
+    ]);
+    const { body: catalogue } = await staff.observer.get(`/catalogues/${id}`);
+    expect(catalogue.parts.map(({ fileName, rows: n }: { fileName: string; rows: number }) => [fileName, n])).toEqual([
+      ['tile1.csv', 3],
+      ['tile2.csv', 3],
+    ]);
+    expect(new Set(catalogue.parts.map(({ sha256 }: { sha256: string }) => sha256)).size).toBe(2);
+  });
+
+  it('grows and shrinks by a part, and can keep its overlaps', async () => {
+    const survey = await newSurvey();
+    const { body } = await create(survey.id, [['tile1.csv', first]]);
+    expect(body.parts).toEqual([]);
+    const add = (files: [string, string][]) =>
+      staff.lead.request(
+        'POST',
+        `/intakes/${body.id}/parts`,
+        form(files.map(([name, content]) => ['file', name, content])),
+      );
+    const grown = await add([['tile2.csv', second]]);
+    expect(grown.status, grown.text).toBe(201);
+    expect(grown.body.check).toMatchObject({ rows: 6, usable: 4 });
+    const all = await staff.lead.patch(`/intakes/${body.id}`, { settings: { ...settings, overlapArcsec: 0 } });
+    expect(all.body.check).toMatchObject({ rows: 6, usable: 5 });
+    const wrong = await add([['stars.csv', 'id,ra_deg,dec_deg,gmag\ns,1,2,3\n']]);
+    expect([wrong.status, wrong.body.type]).toEqual([422, 'urn:eremite:error:table-unreadable']);
+    expect(wrong.body.detail).toMatch(
+      /"stars.csv" does not have the columns of "tile1.csv": it lacks rmag; it also has gmag/,
+    );
+    const shrunk = await staff.lead.delete(`/intakes/${body.id}/parts/1`);
+    expect(shrunk.body).toMatchObject({ parts: [], check: { rows: 3 } });
+    expect((await staff.lead.delete(`/intakes/${body.id}/parts/1`)).status).toBe(404);
+    expect((await staff.reviewer.delete(`/intakes/${body.id}/parts/1`)).status).toBe(403);
+    expect((await staff.stranger.delete(`/intakes/${body.id}/parts/1`)).status).toBe(404);
+  });
+
+  it('says which of its files breaks off, and reads the ones after it', async () => {
+    const survey = await newSurvey();
+    const votable = (rows: string, end = '</TABLEDATA></DATA></TABLE></RESOURCE></VOTABLE>') =>
+      `<?xml version="1.0"?><VOTABLE version="1.4"><RESOURCE><TABLE><FIELD name="ra_deg" datatype="double" unit="deg"/><FIELD name="dec_deg" datatype="double" unit="deg"/><DATA><TABLEDATA>${rows}${end}`;
+    const row = (ra: number) => `<TR><TD>${ra}</TD><TD>2</TD></TR>`;
+    const { body, status, text } = await create(
+      survey.id,
+      [
+        ['a.vot', votable(row(150))],
+        ['b.vot', votable(row(151) + row(152), '<TR><TD>15')],
+        ['c.vot', votable(row(153))],
+      ],
+      { bands: [], columns: { ra: 'ra_deg', dec: 'dec_deg' } },
+    );
+    expect(status, text).toBe(201);
+    expect(body.check).toMatchObject({ rows: 4, usable: 4, ready: false });
+    const [asked] = body.check.questions.filter(({ level }: { level: string }) => level === 'ask');
+    expect(asked.pointer).toBe('/acceptTruncated');
+    expect(asked.text).toMatch(/"b.vot": /);
   });
 });

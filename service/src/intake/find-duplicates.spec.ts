@@ -25,7 +25,15 @@ describe('duplicates in an HI list', () => {
   it("are merged on the lead's word: the better row stays, the other is put aside", async () => {
     const reading = await read(twice, { mergeDuplicates: true });
     expect(Array.from(reading.roles.columns.row)).toEqual([2, 3]);
-    expect(reading.sidelined).toEqual([{ row: 1, line: 2, column: null, value: null, reason: 'same source as row 2' }]);
+    expect(reading.sidelined).toEqual([
+      {
+        row: 1,
+        line: 2,
+        column: null,
+        value: 'row 2',
+        reason: 'The same source is in another row, which is kept',
+      },
+    ]);
     expect(reading.check).toMatchObject({ rows: 3, usable: 2, sidelined: 1 });
     expect(await remarks(twice, { mergeDuplicates: true })).toMatchObject([{ level: 'assumed' }]);
   });

@@ -5,6 +5,7 @@ import { type ByteSource } from '../tables/table.ts';
 import { bandCountsOf } from './band-counts.ts';
 import { type Coverage, coverageOf } from './coverage.ts';
 import { openCatalogue, type OpenCatalogue, type ReadOptions } from './open-catalogue.ts';
+import type { PartRows } from './join-parts.ts';
 import { cellAt } from './sample.ts';
 import { SettingsError } from './resolved.ts';
 import { assertReadable, streamCatalogue } from './stream-catalogue.ts';
@@ -13,6 +14,8 @@ import { assertReadable, streamCatalogue } from './stream-catalogue.ts';
 export interface Inspection {
   format: string;
   tables: Intake['tables'];
+  /** What each file gave, where there are several. */
+  parts: PartRows[];
   columns: IntakeColumn[];
   preview: string[][];
   check: IntakeCheck;
@@ -51,6 +54,7 @@ export async function inspect(
       rows: index === table.index ? check.rows : declaredRows,
       columns: columns.length,
     })),
+    parts: [...catalogue.parts],
     columns: columnsOf(catalogue),
     preview: previewOf(catalogue),
     ...found,

@@ -5,6 +5,11 @@ import type { Inspection } from './inspect.ts';
 import type { Published, SidelinedCells } from './publish.ts';
 import type { SettingsFault } from './resolved.ts';
 
+export interface StoredFile {
+  path: string;
+  fileName: string;
+}
+
 /** What the worker thread is started with. */
 export interface IntakeTask {
   what: 'inspect' | 'publish';
@@ -13,6 +18,10 @@ export interface IntakeTask {
   settings: IntakeSettings;
   /** What the tiles are stored under, where it is to publish. */
   catalogueId?: string;
+  /** The ReadMe that describes a journal's data file. */
+  readMe?: StoredFile;
+  /** Further files of the same catalogue. */
+  parts?: StoredFile[];
 }
 
 /** Errors cross threads as data; each kind is told differently. */

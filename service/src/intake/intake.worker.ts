@@ -29,8 +29,14 @@ async function work(task: IntakeTask): Promise<void> {
     send({ kind: 'progress', fraction, rows });
   };
   const source = await fileSource(task.path, task.fileName);
+  const open = ({ path, fileName }: NonNullable<IntakeTask['readMe']>) => fileSource(path, fileName);
+  const options = {
+    onProgress,
+    ...(task.readMe ? { readMe: await open(task.readMe) } : {}),
+    parts: await Promise.all((task.parts ?? []).map(open)),
+  };
   if (task.what === 'inspect') {
-    send({ kind: 'inspected', inspection: await inspect(source, task.settings, { onProgress }) });
+    send({ kind: 'inspected', inspection: await inspect(source, task.settings, options) });
     return;
   }
   const sink = {
@@ -40,7 +46,7 @@ async function work(task: IntakeTask): Promise<void> {
     },
     sidelined: (rows: Extract<IntakeMessage, { kind: 'sidelined' }>['rows']) => handOver({ kind: 'sidelined', rows }),
   };
-  const published = await publish(source, task.settings, sink, { onProgress });
+  const published = await publish(source, task.settings, sink, options);
   await handovers.allTaken();
   send({ kind: 'published', published });
 }

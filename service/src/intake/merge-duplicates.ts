@@ -51,11 +51,18 @@ export async function duplicatesIn(
   return finder.find();
 }
 
-/** The chunk with its duplicates put aside. */
+const TWICE = 'The same source is in another row, which is kept';
+
+/**
+ * The chunk with its duplicates put aside.
+ *
+ * @param duplicates by row number, with the row that is kept
+ */
 export function withoutDuplicates(
   extracted: ExtractedChunk,
   chunk: RowChunk,
-  duplicates: ReadonlyMap<number, Duplicate>,
+  duplicates: ReadonlyMap<number, Pick<Duplicate, 'of'>>,
+  reason = TWICE,
 ): ExtractedChunk {
   const rows = extracted.roles.columns['row'] as Uint32Array;
   const stays = Uint32Array.from({ length: rows.length }, (_, i) => i).filter((i) => !duplicates.has(rows[i]!));
@@ -65,8 +72,8 @@ export function withoutDuplicates(
     const duplicate = duplicates.get(rows[i]!);
     if (!duplicate) continue;
     const index = extracted.kept[i]!;
-    const reason = `same source as row ${duplicate.of}`;
-    sidelined.push({ index, row: { row: rows[i]!, line: lineOf(chunk, index), column: null, value: null, reason } });
+    const value = `row ${duplicate.of}`;
+    sidelined.push({ index, row: { row: rows[i]!, line: lineOf(chunk, index), column: null, value, reason } });
   }
   sidelined.sort((a, b) => a.row.row - b.row.row);
   return {

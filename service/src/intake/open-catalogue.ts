@@ -10,6 +10,7 @@ import {
   type TableFacts,
 } from '../tables/table.ts';
 import { withReadMoc } from './fits-moc.ts';
+import { joinParts, type PartRows } from './join-parts.ts';
 import { type Resolution, resolveSettings } from './resolve-settings.ts';
 import { type SettingsFault } from './resolved.ts';
 import { type ColumnSample, sampleColumns } from './sample.ts';
@@ -20,6 +21,10 @@ export interface ReadOptions {
   onProgress?: (fraction: number, rows: number) => void;
   /** Stops between chunks; the reason of the signal is thrown. */
   signal?: AbortSignal;
+  /** The ReadMe that describes a journal's data file. */
+  readMe?: ByteSource;
+  /** Further files of the same catalogue (cones, tiles, strips), with the same columns. */
+  parts?: readonly ByteSource[];
 }
 
 /** An opened file with its chosen table looked at and the settings settled. */
@@ -35,6 +40,10 @@ export interface OpenCatalogue {
    * a file that gives no row at all throws its TableError.
    */
   chunks(): AsyncIterable<RowChunk>;
+  /** What each file gave once `chunks` is read, where there are several; empty for a single file. */
+  parts: readonly PartRows[];
+  /** Whether there are several files. */
+  isJoined: boolean;
   /** What the reader met at the end of `chunks`, if the file breaks off. */
   broken(): TableError | undefined;
 }
@@ -48,10 +57,12 @@ export interface OpenCatalogue {
 export async function openCatalogue(
   source: ByteSource | string,
   settings: IntakeSettings,
-  { limits = {}, onProgress, signal }: ReadOptions = {},
+  { limits = {}, onProgress, signal, readMe, parts = [] }: ReadOptions = {},
 ): Promise<OpenCatalogue> {
-  const bytes = counted(typeof source === 'string' ? await fileSource(source) : source);
-  const open = await openTable(bytes.source, limits);
+  const main = typeof source === 'string' ? await fileSource(source) : source;
+  const bytes = counted([main, ...parts]);
+  const [first, ...others] = bytes.sources as [ByteSource, ...ByteSource[]];
+  const open = await openTable(first, limits, readMe ? { readMe } : {});
   const wanted = settings.table ?? 0;
   const table = open.tables[wanted] ?? open.tables[0]!;
   const faults: SettingsFault[] = [];
@@ -59,8 +70,10 @@ export async function openCatalogue(
     const known = open.tables.map(({ index, name }) => `${index} (${name})`).join(', ');
     faults.push({ pointer: '/table', detail: `The file has no table ${wanted}; it has ${known}.` });
   }
+  const joined =
+    others.length > 0 ? await joinParts(open, table, main.name ?? 'the first file', others, limits) : undefined;
   const stated = await withReadMoc(settings, faults);
-  const firstChunk = await first(open, table.index);
+  const firstChunk = await firstOf(open, table.index);
   const samples = sampleColumns(firstChunk, table.columns.length);
   const resolution = resolveSettings(stated, table, samples);
   resolution.faults.unshift(...faults);
@@ -70,7 +83,7 @@ export async function openCatalogue(
     let rows = 0;
     bytes.reset();
     try {
-      for await (const chunk of open.rows(table.index)) {
+      for await (const chunk of joined ? joined.rows() : open.rows(table.index)) {
         signal?.throwIfAborted();
         rows += chunk.rows + (chunk.broken?.length ?? 0);
         yield chunk;
@@ -81,27 +94,42 @@ export async function openCatalogue(
       broken = error;
     }
   }
-  return { open, table, samples, firstChunk, resolution, chunks, broken: () => broken };
+  const given = joined?.given ?? [];
+  return {
+    open,
+    table,
+    samples,
+    firstChunk,
+    resolution,
+    chunks,
+    parts: given,
+    isJoined: joined !== undefined,
+    broken: () => broken,
+  };
 }
 
-async function first(open: OpenTable, table: number): Promise<RowChunk | undefined> {
+async function firstOf(open: OpenTable, table: number): Promise<RowChunk | undefined> {
   for await (const chunk of open.rows(table)) return chunk;
   return undefined;
 }
 
-/** Counts the bytes a reader takes, so that progress is true for any format, compressed or not. */
-function counted(source: ByteSource): { source: ByteSource; reset(): void; fraction(): number } {
-  let taken = 0;
-  async function* stream(start = 0): AsyncIterable<Uint8Array> {
-    taken = Math.max(taken, start);
-    for await (const piece of source.stream(start)) {
-      taken += piece.length;
-      yield piece;
+/** Counts the bytes readers take, so that progress is true for any format, compressed or not. */
+function counted(sources: readonly ByteSource[]) {
+  const taken = sources.map(() => 0);
+  const size = sources.reduce((sum, source) => sum + source.size, 0);
+  const counting = sources.map((source, i): ByteSource => {
+    async function* stream(start = 0): AsyncIterable<Uint8Array> {
+      taken[i] = Math.max(taken[i]!, start);
+      for await (const piece of source.stream(start)) {
+        taken[i]! += piece.length;
+        yield piece;
+      }
     }
-  }
+    return { ...(source.name === undefined ? {} : { name: source.name }), size: source.size, stream };
+  });
   return {
-    source: { ...(source.name === undefined ? {} : { name: source.name }), size: source.size, stream },
-    reset: () => (taken = 0),
-    fraction: () => (source.size === 0 ? 1 : Math.min(1, taken / source.size)),
+    sources: counting,
+    reset: (): void => void taken.fill(0),
+    fraction: (): number => (size === 0 ? 1 : Math.min(1, taken.reduce((sum, bytes) => sum + bytes, 0) / size)),
   };
 }

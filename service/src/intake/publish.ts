@@ -9,6 +9,7 @@ import type { CatalogueFacts } from './catalogue-facts.ts';
 import { coverageOf } from './coverage.ts';
 import { openCatalogue, type ReadOptions } from './open-catalogue.ts';
 import type { ResolvedSettings } from './resolved.ts';
+import type { PartRows } from './join-parts.ts';
 import { cellAt } from './sample.ts';
 import { streamCatalogue } from './stream-catalogue.ts';
 import { originalCells } from './text-cells.ts';
@@ -26,6 +27,8 @@ export interface PublishSink {
 export interface Published {
   resolved: ResolvedSettings;
   check: IntakeCheck;
+  /** What each file gave, where there are several. */
+  parts: PartRows[];
   facts: CatalogueFacts;
   assumed: string[];
   coverage: { type: string; order: number | null; moc: string | null; areaSqDeg: number | null; note: string };
@@ -66,6 +69,7 @@ export async function publish(
   return {
     resolved,
     check,
+    parts: [...catalogue.parts],
     facts,
     assumed: questions.filter(({ level }) => level === 'assumed').map(({ text }) => text),
     coverage: { type, order: moc?.order ?? null, moc: moc?.toAscii() ?? null, areaSqDeg, note },

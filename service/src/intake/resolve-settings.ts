@@ -62,6 +62,7 @@ export function resolveSettings(
     ...(settings.supersedes ? { supersedes: settings.supersedes } : {}),
     ...(settings.acceptTruncated ? { acceptTruncated: true } : {}),
     ...(settings.mergeDuplicates && kind === 'hi' ? { mergeDuplicates: true } : {}),
+    ...(settings.overlapArcsec === undefined ? {} : { overlapArcsec: settings.overlapArcsec }),
     ...(settings.keepApart?.length && kind === 'hi' ? { keepApart: settings.keepApart } : {}),
   };
   for (const { band, column } of columns.magnitudes) {

@@ -7,6 +7,7 @@ import { statedFootprint } from './coverage.ts';
 import { type ExtractedChunk, RoleExtractor } from './extract-roles.ts';
 import type { OpenCatalogue } from './open-catalogue.ts';
 import { DuplicateFinder, duplicateQuestions, duplicatesIn, withoutDuplicates } from './merge-duplicates.ts';
+import { OverlapKeeper } from './overlap-keeper.ts';
 import { SettingsError } from './resolved.ts';
 import { SidelineTally } from './sideline-tally.ts';
 
@@ -43,10 +44,11 @@ export async function streamCatalogue(
   const put = before?.duplicates.filter(({ row }) => !apart.has(row)) ?? [];
   const duplicates = new Map(put.map((duplicate) => [duplicate.row, duplicate]));
   const finder = new DuplicateFinder(resolution.resolved);
+  const overlaps = new OverlapKeeper(catalogue, settings);
   let rows = 0;
   let leftOut = 0;
   for await (const chunk of catalogue.chunks()) {
-    const extracted = withoutDuplicates(extractor.extract(chunk), chunk, duplicates);
+    const extracted = overlaps.without(withoutDuplicates(extractor.extract(chunk), chunk, duplicates), chunk);
     rows += chunk.rows + (chunk.broken?.length ?? 0);
     leftOut += extracted.leftOut;
     for (const { row } of extracted.sidelined) sidelined.add(row);
@@ -58,7 +60,7 @@ export async function streamCatalogue(
   const found = before ?? finder.find();
   const keptApart = found.duplicates.length - put.length;
   const remarks = duplicateQuestions(found.duplicates, merging, keptApart);
-  const questions = [...resolution.questions, ...closing, ...remarks];
+  const questions = [...resolution.questions, ...closing, ...remarks, ...overlaps.questions()];
   const facts = gatherer.facts();
   const check: IntakeCheck = {
     rows,

@@ -16,6 +16,8 @@ export const catalogue = z.object({
   state: z.enum(['publishing', 'published', 'superseded', 'removed']),
   fileName: z.string(),
   sha256: z.string(),
+  /** Files of a catalogue of several; rows are numbered on from file to file. */
+  parts: z.array(z.object({ fileName: z.string(), sha256: z.string(), firstRow: z.int(), rows: z.int() })),
   rows: z.int(),
   sidelined: z.int(),
   withVelocity: z.int(),

@@ -128,6 +128,8 @@ export const intakeSettings = z.strictObject({
   acceptTruncated: z.boolean().optional(),
   /** HI lists: of one source detected twice keep the row of the higher signal-to-noise ratio. */
   mergeDuplicates: z.boolean().optional(),
+  /** Where a catalogue comes in several files: rows of different files this near are one object; 0 keeps them all. */
+  overlapArcsec: z.number().min(0).max(60).optional(),
   /** Rows of an HI list, by number, that are sources of their own though they look like duplicates. */
   keepApart: z.array(rowNumber).max(100_000).optional(),
   /** Catalogue of the same survey and kind whose new version this is; it is used by no further run. */

@@ -49,12 +49,24 @@ export const intakeCheck = z.object({
 });
 export type IntakeCheck = z.output<typeof intakeCheck>;
 
+export const tablePart = z.object({
+  fileName: z.string(),
+  bytes: z.int().nullable(),
+  /** 1-based number of its first row. */
+  firstRow: z.int(),
+  rows: z.int(),
+});
+
 export const intake = z.object({
   id: z.uuid(),
   surveyId: z.uuid(),
   fileName: z.string(),
   bytes: z.int(),
   sha256: z.string(),
+  /** The ReadMe that came with a journal's data file. */
+  readMe: z.string().nullable(),
+  /** Of a catalogue of several files, what each gives: rows are numbered on from file to file. */
+  parts: z.array(tablePart),
   state: z.enum(['staged', 'publishing', 'published', 'discarded']),
   format: z.string(),
   tables: z.array(z.object({ index: z.int(), name: z.string(), rows: z.int().nullable(), columns: z.int() })),

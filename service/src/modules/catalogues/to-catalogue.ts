@@ -19,6 +19,7 @@ export function toCatalogue({
     state: row.state as Catalogue['state'],
     fileName,
     sha256,
+    parts: row.parts as Catalogue['parts'],
     rows,
     sidelined,
     withVelocity,

@@ -81,6 +81,24 @@ export class IntakesController {
     return this.intakes.update(user, intakeId, settings);
   }
 
+  /** Further files of the same catalogue, in the multipart field `file`. */
+  @Post('intakes/:id/parts')
+  @UseInterceptors(UploadInterceptor)
+  @SerializeOptions({ schema: intake })
+  addParts(@CurrentUser() user: SignedInUser, @Param('id', id) intakeId: string, @Upload() upload: UploadedTable) {
+    return this.intakes.addParts(user, intakeId, upload);
+  }
+
+  @Delete('intakes/:id/parts/:part')
+  @SerializeOptions({ schema: intake })
+  removePart(
+    @CurrentUser() user: SignedInUser,
+    @Param('id', id) intakeId: string,
+    @Param('part', { schema: z.coerce.number().int().min(1).max(1000) }) part: number,
+  ) {
+    return this.intakes.removePart(user, intakeId, part);
+  }
+
   @Post('intakes/:id/publish')
   @HttpCode(202)
   @SerializeOptions({ schema: jobAccepted })

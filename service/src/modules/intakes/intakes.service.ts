@@ -9,11 +9,12 @@ import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { JobsService } from '../../jobs/jobs.service.ts';
 import { FilesService } from '../files/files.service.ts';
 import type { Inspection } from '../../intake/inspect.ts';
+import { type Companion, companionsOf, storedFiles } from './companions.ts';
 import { IntakeWorker } from './intake-worker.ts';
 import { type IntakeRow, IntakesRepository } from './intakes.repository.ts';
 import { PUBLISH } from './publishing.service.ts';
 import { headerHash, inspectedValues, storedCheck, toIntake } from './to-intake.ts';
-import type { UploadedTable } from './upload.interceptor.ts';
+import { MOST_PARTS, type UploadedTable } from './upload.interceptor.ts';
 
 /** Uploaded tables on their way to becoming catalogues. */
 @Injectable()
@@ -49,11 +50,11 @@ export class IntakesService {
   async create(
     user: SignedInUser,
     surveyId: string,
-    upload: UploadedTable,
+    upload: Omit<UploadedTable, 'companions'> & { companions?: UploadedTable['companions'] },
     given: IntakeSettings | undefined,
   ): Promise<Intake> {
-    const { key: fileKey, fileName, bytes, sha256 } = upload;
-    const file = { path: this.files.path(fileKey), fileName };
+    const { key: fileKey, fileName, bytes, sha256, companions = [] } = upload;
+    const file = { fileKey, fileName, companions };
     const warnings: string[] = [];
     let settings = given ?? {};
     let inspection = await this.#inspect(surveyId, file, settings);
@@ -74,6 +75,7 @@ export class IntakesService {
       fileKey,
       bytes,
       sha256,
+      companions,
       settings: await this.#complete(surveyId, settings),
       warnings,
       headerHash: hash,
@@ -90,13 +92,54 @@ export class IntakesService {
   async update(user: SignedInUser, id: string, settings: IntakeSettings): Promise<Intake> {
     const row = await this.#row(user, id, 'lead');
     assertStaged(row);
-    const file = { path: this.files.path(row.fileKey), fileName: row.fileName };
-    const inspection = await this.#inspect(row.surveyId, file, settings);
+    const inspection = await this.#inspect(row.surveyId, row, settings);
     const wrong = inspection.faults.filter(({ pointer }) => !isOpenPosition(pointer, settings));
     if (wrong.length) throw new AppError('SETTINGS_INCOMPLETE', wrong.map(({ detail }) => detail).join(' '), wrong);
     const complete = await this.#complete(row.surveyId, settings);
     const values = { settings: complete, headerHash: headerHash(inspection.columns), ...inspectedValues(inspection) };
     const changed = await this.intakes.change(id, 'staged', values);
+    if (!changed) throw new AppError('NOT_READY', 'The table is being published meanwhile.');
+    return toIntake(changed);
+  }
+
+  /**
+   * Adds files to a table as further parts of the same catalogue.
+   *
+   * @throws {AppError} TABLE_UNREADABLE where one has other columns; nothing is added then
+   */
+  async addParts(user: SignedInUser, id: string, upload: UploadedTable): Promise<Intake> {
+    const row = await this.#row(user, id, 'lead');
+    assertStaged(row);
+    const { companions, ...first } = upload;
+    const readMe = companions.find(({ role }) => role === 'readMe');
+    if (readMe) throw new AppError('VALIDATION_FAILED', 'A ReadMe comes with its data file, not with a part.');
+    const all = [...companionsOf(row), { role: 'part' as const, ...first }, ...companions];
+    const parts = all.filter(({ role }) => role === 'part').length + 1;
+    if (parts > MOST_PARTS)
+      throw new AppError('VALIDATION_FAILED', `A catalogue may have at most ${MOST_PARTS} parts, not ${parts}.`);
+    return this.#setCompanions(row, all);
+  }
+
+  /** Takes a part out again; parts are numbered from 1, the file they were added to is 0 and stays. */
+  async removePart(user: SignedInUser, id: string, part: number): Promise<Intake> {
+    const row = await this.#row(user, id, 'lead');
+    assertStaged(row);
+    const parts = companionsOf(row).filter(({ role }) => role === 'part');
+    const gone = parts[part - 1];
+    if (!gone) throw new AppError('NOT_FOUND', `There is no part ${part}.`);
+    const changed = await this.#setCompanions(
+      row,
+      companionsOf(row).filter((one) => one !== gone),
+    );
+    await this.files.remove(gone.key);
+    return changed;
+  }
+
+  async #setCompanions(row: IntakeRow, companions: Companion[]): Promise<Intake> {
+    const { filled } = storedCheck(row);
+    const inspection = await this.#inspect(row.surveyId, { ...row, companions }, filled);
+    const values = { companions, settings: await this.#complete(row.surveyId, filled), ...inspectedValues(inspection) };
+    const changed = await this.intakes.change(row.id, 'staged', values);
     if (!changed) throw new AppError('NOT_READY', 'The table is being published meanwhile.');
     return toIntake(changed);
   }
@@ -126,7 +169,8 @@ export class IntakesService {
     const row = await this.#row(user, id, 'lead');
     assertStaged(row);
     if (!(await this.intakes.change(id, 'staged', { state: 'discarded' }))) assertStaged({ state: 'publishing' });
-    await this.files.remove(row.fileKey);
+    const keys = [row.fileKey, ...companionsOf(row).map(({ key }) => key)];
+    await Promise.all(keys.map((key) => this.files.remove(key)));
   }
 
   /** @throws {AppError} SETTINGS_INCOMPLETE where the catalogue to be superseded is no such one */
@@ -142,10 +186,13 @@ export class IntakesService {
   /** Reads the whole table; what is shown of the settings is as the person wrote them. */
   async #inspect(
     surveyId: string,
-    file: { path: string; fileName: string },
+    file: Pick<IntakeRow, 'fileKey' | 'fileName' | 'companions'>,
     settings: IntakeSettings,
   ): Promise<Inspection> {
-    const inspection = await this.worker.inspect({ ...file, settings: await this.#complete(surveyId, settings) });
+    const inspection = await this.worker.inspect({
+      ...storedFiles(this.files, file),
+      settings: await this.#complete(surveyId, settings),
+    });
     if (settings.footprint?.type === 'cones') inspection.filled.footprint = settings.footprint;
     return inspection;
   }

@@ -12,6 +12,7 @@ import { FilesService } from '../files/files.service.ts';
 import { canonicalJson } from '../ledger/ledger-hash.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { DETECTION_COLUMNS, detectionRows } from './detection-rows.ts';
+import { companionsOf, storedFiles } from './companions.ts';
 import { Handover } from './handover.ts';
 import { IntakeWorker } from './intake-worker.ts';
 import { type IntakeRow, IntakesRepository } from './intakes.repository.ts';
@@ -99,8 +100,7 @@ export class PublishingService implements OnModuleInit {
     const pieces = new Handover<CopyPiece>();
     const writing = this.tiles.write(pieces);
     const file = {
-      path: this.files.path(intake.fileKey),
-      fileName: intake.fileName,
+      ...storedFiles(this.files, intake),
       settings: intake.settings as IntakeSettings,
       catalogueId,
     };
@@ -155,11 +155,14 @@ export class PublishingService implements OnModuleInit {
     published: Published,
     { userId, userName }: Payload,
   ): Promise<void> {
-    const { resolved, check, facts, assumed, coverage } = published;
+    const { resolved, check, facts, assumed, coverage, parts } = published;
     const { surveyId, sha256 } = intake;
+    // A table alone has the hash it always had.
+    const others = companionsOf(intake).map((file) => `${file.sha256}\n`);
     const contentHash = createHash('sha256')
-      .update(`${sha256}\n${canonicalJson(resolved)}`)
+      .update(`${sha256}\n${others.join('')}${canonicalJson(resolved)}`)
       .digest('hex');
+    const hashes = [sha256, ...companionsOf(intake).flatMap((file) => (file.role === 'part' ? [file.sha256] : []))];
     const name = resolved.name || intake.fileName;
     const values = {
       name,
@@ -171,6 +174,7 @@ export class PublishingService implements OnModuleInit {
       settings: resolved,
       bands: resolved.bands,
       assumed,
+      parts: parts.map((part, i) => ({ ...part, sha256: hashes[i]! })),
       coverage,
       reference: resolved.reference,
       publishedAt: new Date(),
@@ -196,6 +200,7 @@ export class PublishingService implements OnModuleInit {
             sidelined: check.sidelined,
             leftOut: check.leftOut,
             sha256,
+            ...(parts.length > 0 ? { parts: parts.length } : {}),
             contentHash,
             assumed,
             ...(supersedes ? { supersedes } : {}),

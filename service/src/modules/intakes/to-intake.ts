@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import type { Intake, IntakeCheck } from '@eremite/shared/contracts/intake';
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { Inspection } from '../../intake/inspect.ts';
+import { companionsOf } from './companions.ts';
 import type { IntakeRow } from './intakes.repository.ts';
 
 /** The check as it is stored: with what else was found, the faults that forbid publishing and the settings with guesses written out. */
@@ -12,6 +13,7 @@ export interface StoredCheck extends IntakeCheck {
   magnitudes?: Intake['magnitudes'];
   coverage?: Intake['coverage'];
   duplicates?: Intake['duplicates'];
+  parts?: Inspection['parts'];
 }
 
 /** The columns of an intake's row that an inspection fills. */
@@ -31,14 +33,18 @@ export const storedCheck = (row: Pick<IntakeRow, 'check'>): StoredCheck => row.c
 
 /** The contract's form of a row. */
 export function toIntake(row: IntakeRow): Intake {
-  const { filled, magnitudes = [], coverage = null, duplicates, ...check } = storedCheck(row);
+  const { filled, magnitudes = [], coverage = null, duplicates, parts = [], ...check } = storedCheck(row);
   const { id, surveyId, fileName, bytes, sha256, format, rows, catalogueId } = row;
+  const companions = companionsOf(row);
+  const sizes = [bytes, ...companions.flatMap((file) => (file.role === 'part' ? [file.bytes] : []))];
   return {
     id,
     surveyId,
     fileName,
     bytes,
     sha256,
+    readMe: companions.find(({ role }) => role === 'readMe')?.fileName ?? null,
+    parts: parts.map((part, i) => ({ ...part, bytes: sizes[i] ?? null })),
     state: row.state as Intake['state'],
     format,
     tables: row.tables as Intake['tables'],
