@@ -4,6 +4,8 @@ import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { say } from '#lib/toaster.ts';
 import { useChangePassword } from '../api/account.ts';
 
+const RULES = 'At least 10 characters. Tokens for scripts stay valid: revoke below those you no longer trust.';
+
 export function PasswordForm() {
   const [current, setCurrent] = useState('');
   const [next, setNext] = useState('');
@@ -33,7 +35,7 @@ export function PasswordForm() {
           onValueChange={setCurrent}
         />
       </FormGroup>
-      <FormGroup label="New password" labelFor="password-next" helperText="At least 10 characters.">
+      <FormGroup label="New password" labelFor="password-next" helperText={RULES}>
         <InputGroup
           id="password-next"
           type="password"
