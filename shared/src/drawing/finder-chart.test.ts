@@ -50,7 +50,7 @@ describe('the finder chart', () => {
     const masks = [{ raDeg: 40, decDeg: 10.01, radiusArcsec: 20, label: 'G 7.1' }];
     expect(finderChartSvg(someEvidence({ masks }))).toContain('G 7.1');
     // A region far away: all of the field is unobserved.
-    const coverages = [{ name: 'NUV', kind: 'ultraviolet', moc: '5/0' }];
+    const coverages = [{ id: 'n', name: 'NUV', kind: 'ultraviolet', moc: '5/0' }];
     const hatched = finderChartSvg(someEvidence({}, { coverages }));
     expect(plain).not.toContain('finder-hatch-ultraviolet');
     expect(hatched).toContain('fill="url(#finder-hatch-ultraviolet)"');

@@ -6,7 +6,9 @@ export type VelocityAgreement = 'concordant' | 'other' | 'none';
 /** One object on the sky panel, the strip and in the tables; `key` is what links them. */
 export interface SkyMark {
   key: string;
-  role: 'candidate' | 'neighbour';
+  /** `field`: a row of a searched table that bears on neither verdict. */
+  role: 'candidate' | 'neighbour' | 'field';
+  catalogueId: string;
   name: string;
   /** Kind of its catalogue: decides the shape. */
   kind: string;
@@ -21,6 +23,7 @@ export interface SkyMark {
   agreement: VelocityAgreement;
 }
 
+/** Key of a row of a catalogue. */
 export const rowKey = (row: { catalogueId: string; rowId: number }): string => `${row.catalogueId}:${row.rowId}`;
 
 /**
@@ -43,11 +46,23 @@ export function toSkyMarks(
   const add = (row: Candidate | Neighbour, role: SkyMark['role'], isStar: boolean) => {
     const key = rowKey(row);
     if (marks.has(key)) return;
-    const { name, kind, raDeg, decDeg, separationArcsec, separationKpc, velocityDifferenceKms, magnitude, band } = row;
+    const {
+      catalogueId,
+      name,
+      kind,
+      raDeg,
+      decDeg,
+      separationArcsec,
+      separationKpc,
+      velocityDifferenceKms,
+      magnitude,
+      band,
+    } = row;
     const agreement = agreementOf(velocityDifferenceKms, windowKms);
     marks.set(key, {
       key,
       role,
+      catalogueId,
       name,
       kind,
       raDeg,

@@ -8,12 +8,15 @@ const MOST_CELLS = 6000;
 
 /** Name and footprint of a catalogue; without a footprint nothing can be said of what it left out. */
 export interface Coverage {
+  /** Id of the catalogue. */
+  id: string;
   name: string;
   kind: string;
   moc: string | null;
 }
 
 export interface UncoveredArea {
+  id: string;
   name: string;
   kind: string;
   /** Outlines of the cells no row can come from, panel coordinates in arcsec. */
@@ -38,7 +41,7 @@ export function uncoveredAreas(
   radiusArcsec: number,
 ): UncoveredArea[] {
   const radius = Math.min(0.4, radiusArcsec * (RAD / 3600));
-  return coverages.flatMap(({ name, kind, moc }) => {
+  return coverages.flatMap(({ id, name, kind, moc }) => {
     if (!moc) return [];
     let region: Moc;
     try {
@@ -57,6 +60,6 @@ export function uncoveredAreas(
         if (outline.every((point) => point !== undefined)) cells.push([...outline, outline[0]!]);
       }
     }
-    return cells.length > 0 ? [{ name, kind, cells }] : [];
+    return cells.length > 0 ? [{ id, name, kind, cells }] : [];
   });
 }

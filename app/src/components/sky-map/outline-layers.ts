@@ -21,6 +21,8 @@ export interface Outlines {
   neighbourRadiusArcsec: number | null;
   masks: { at: PanelPoint; radiusArcsec: number; label: string }[];
   uncovered: UncoveredArea[];
+  /** Beams of other HI detections. */
+  otherBeams: { at: PanelPoint; major: number; minor: number; angleDeg: number }[];
 }
 
 const label = (text: string, colour: string, palette: Palette, offset: [number, number]) =>
@@ -100,6 +102,11 @@ export function outlineFeatures(outlines: Outlines, palette: Palette): Feature[]
       styled(new Circle([0, 0], neighbourRadiusArcsec), new Style({ stroke })),
       rimLabel(neighbourRadiusArcsec, 'neighbours', palette.concordant, palette, -128),
     );
+  }
+  for (const { at, major, minor, angleDeg } of outlines.otherBeams) {
+    const outline = ellipseOutline(major / 2, minor / 2, angleDeg, 48).map(([x, y]) => [x + at[0], y + at[1]]);
+    const stroke = new Stroke({ color: palette.none, width: 1, lineDash: [6, 5] });
+    features.push(styled(new LineString(outline), new Style({ stroke })));
   }
   return features;
 }

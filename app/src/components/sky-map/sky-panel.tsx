@@ -1,14 +1,22 @@
 import { Button, ButtonGroup } from '@blueprintjs/core';
+import { type PanelPoint, rayleighRadius } from '@eremite/shared/drawing/panel-plane';
+import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
 import VectorLayer from 'ol/layer/Vector.js';
 import VectorSource from 'ol/source/Vector.js';
-import { useEffect, useId, useMemo } from 'react';
+import { useEffect, useId, useMemo, useState, type KeyboardEvent } from 'react';
+import { SaveMenu } from '#components/save-menu/save-menu.tsx';
 import { usePreferences } from '#lib/preferences.ts';
-import { Frame } from './frame.tsx';
+import { fileNameOf } from '#lib/save-picture.ts';
+import { Frame, type PanelView } from './frame.tsx';
+import { markFacts } from './mark-label.ts';
+import { measure, measuredText } from './measure.ts';
 import { hatchedFeatures, outlineFeatures, type Outlines } from './outline-layers.ts';
 import { readPalette, type Palette } from './palette.ts';
-import { containsOrigin, rayleighRadius } from '@eremite/shared/drawing/panel-plane';
+import { type PanelLayer, panelLayers } from './panel-layer.ts';
+import { SkyControls } from './sky-controls.tsx';
 import { SkyLegend } from './sky-legend.tsx';
-import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
+import { isShown, useSkySettings } from './sky-settings.ts';
+import { unseenAtCentre } from './unseen-at-centre.ts';
 import { useMarkLayer } from './use-mark-layer.ts';
 import { usePanelView } from './use-panel-view.ts';
 import { useSkyMap } from './use-sky-map.ts';
@@ -21,37 +29,69 @@ interface SkyPanelProps {
   distanceMpc: number | null;
   outlines: Outlines;
   marks: readonly SkyMark[];
+  /** Tables that were searched, in the order of the list of layers. */
+  tables: readonly Omit<PanelLayer, 'objects'>[];
+  /** What of the field is not shown, in words; empty where all of it is. */
+  note?: string;
   hovered: string | null;
   selected: string | null;
   onHover: (key: string | null) => void;
   onSelect: (key: string | null) => void;
+  /** Told how far from the detection the panel looks, arcsec. */
+  onReach?: (radiusArcsec: number) => void;
+  /** Finder chart of what the panel shows, as SVG. */
+  drawFinder?: (view: { centre: PanelPoint; radiusArcsec: number; marks: readonly SkyMark[] }) => string;
 }
 
 /** The sky about one detection: east left, north up, the frame its ruler. The tables beside it list the same objects. */
 export function SkyPanel(props: SkyPanelProps) {
-  const { centre, outlines, marks, distanceMpc, hovered, selected, onHover, onSelect } = props;
+  const { centre, outlines, marks, tables, distanceMpc, hovered, selected, onHover, onSelect, onReach } = props;
   const { target, map } = useSkyMap();
   const view = usePanelView(map);
   const { theme } = usePreferences();
+  const settings = useSkySettings();
   const legend = useId();
   const palette = usePalette(theme);
+  const [measuredFrom, setMeasuredFrom] = useState<SkyMark | null>(null);
+  const shown = useMemo(() => marks.filter((mark) => isShown(mark, settings)), [marks, settings]);
+  const layers = useMemo(() => panelLayers(tables, marks), [tables, marks]);
+  const visible = useMemo(
+    () => ({ ...outlines, uncovered: outlines.uncovered.filter(({ id }) => !settings.hidden.includes(id)) }),
+    [outlines, settings],
+  );
+  const chosen = useMemo(() => shown.find(({ key }) => key === selected), [shown, selected]);
+  const measured =
+    measuredFrom && chosen && chosen.key !== measuredFrom.key
+      ? measuredText(measure(measuredFrom, chosen, distanceMpc))
+      : '';
 
   useEffect(() => {
     if (!map) return;
-    const layers = [
-      new VectorLayer({ source: new VectorSource({ features: hatchedFeatures(outlines, palette) }), zIndex: 1 }),
-      new VectorLayer({ source: new VectorSource({ features: outlineFeatures(outlines, palette) }), zIndex: 2 }),
+    const drawn = [
+      new VectorLayer({ source: new VectorSource({ features: hatchedFeatures(visible, palette) }), zIndex: 1 }),
+      new VectorLayer({ source: new VectorSource({ features: outlineFeatures(visible, palette) }), zIndex: 2 }),
     ];
-    layers.forEach((layer) => map.addLayer(layer));
+    drawn.forEach((layer) => map.addLayer(layer));
     return () =>
-      layers.forEach((layer) => {
+      drawn.forEach((layer) => {
         map.removeLayer(layer);
+        layer.getSource()?.clear();
         layer.dispose();
       });
-  }, [map, outlines, palette]);
-  useMarkLayer({ map, marks, centre, palette, hovered, selected, onHover, onSelect });
+  }, [map, visible, palette]);
+  useMarkLayer({
+    map,
+    marks: shown,
+    centre,
+    theme,
+    hovered,
+    selected,
+    measuredFrom: measuredFrom?.key ?? null,
+    measuredText: measured,
+    onHover,
+    onSelect,
+  });
 
-  const unseen = useMemo(() => unseenAtCentre(outlines), [outlines]);
   const reach = useMemo(() => reaches(outlines), [outlines]);
   /** Shows a circle of a radius in arcsec about the detection. */
   const show = useMemo(
@@ -60,11 +100,32 @@ export function SkyPanel(props: SkyPanelProps) {
   );
   useEffect(() => {
     show(reach.beam);
-  }, [show, reach]);
+    // The reach is that of the detection: a new one is a new panel.
+  }, [show, reach.beam]);
+  const corner = view ? cornerOf(view) : 0;
+  useEffect(() => {
+    if (corner > 0) onReach?.(corner);
+  }, [corner, onReach]);
   const zoom = (factor: number) => {
     const resolution = map?.getView().getResolution();
     if (resolution) map?.getView().setResolution(resolution * factor);
   };
+  const step = (by: 1 | -1) => {
+    const inOrder = [...shown].sort((a, b) => a.separationArcsec - b.separationArcsec);
+    const at = inOrder.findIndex(({ key }) => key === selected);
+    const next = inOrder[at < 0 ? (by > 0 ? 0 : inOrder.length - 1) : at + by];
+    if (next) onSelect(next.key);
+  };
+  const startMeasuring = () => setMeasuredFrom(measuredFrom ? null : (chosen ?? null));
+  const onKeyDown = (event: KeyboardEvent) => {
+    if (event.ctrlKey || event.metaKey || event.altKey) return;
+    const act = { ']': () => step(1), '[': () => step(-1), m: startMeasuring }[event.key];
+    if (!act) return;
+    event.preventDefault();
+    event.stopPropagation();
+    act();
+  };
+  const unseen = useMemo(() => unseenAtCentre(visible.uncovered), [visible]);
   return (
     <figure className="sky-panel">
       <div
@@ -72,7 +133,8 @@ export function SkyPanel(props: SkyPanelProps) {
         className="sky-panel__map"
         tabIndex={0}
         role="group"
-        aria-label={`Sky about ${props.name}: ${marks.length} objects. Arrow keys move, plus and minus zoom; the tables list the same objects.`}
+        onKeyDown={onKeyDown}
+        aria-label={`Sky about ${props.name}: ${shown.length} objects. Arrow keys move, plus and minus zoom, square brackets step through the objects from the middle outwards, M measures from the chosen one; the tables list the same objects.`}
         aria-describedby={legend}
       />
       {view && <Frame view={view} distanceMpc={distanceMpc} />}
@@ -84,19 +146,63 @@ export function SkyPanel(props: SkyPanelProps) {
           {reach.neighbours && <Button size="small" text="neighbours" onClick={() => show(reach.neighbours!)} />}
         </ButtonGroup>
         <ButtonGroup>
+          <Button
+            size="small"
+            text="measure"
+            active={measuredFrom !== null}
+            aria-pressed={measuredFrom !== null}
+            disabled={!chosen && !measuredFrom}
+            title="Distance from the chosen object to the next one you choose"
+            onClick={startMeasuring}
+          />
+          <SkyControls layers={layers} settings={settings} />
+          {props.drawFinder && view && (
+            <SaveMenu
+              label="Save a finder chart"
+              fileName={fileNameOf(`${props.name}-finder`)}
+              draw={() => props.drawFinder!({ centre: view.centre, radiusArcsec: halfHeightOf(view), marks: shown })}
+            />
+          )}
           <Button size="small" text="+" aria-label="Zoom in" onClick={() => zoom(1 / 1.5)} />
           <Button size="small" text="−" aria-label="Zoom out" onClick={() => zoom(1.5)} />
         </ButtonGroup>
       </div>
-      {unseen.length > 0 && <p className="sky-panel__unseen">not observed here: {unseen.join(', ')}</p>}
-      <SkyLegend id={legend} uncovered={outlines.uncovered.map(({ name }) => name)} />
+      <div className="sky-panel__notes">
+        {unseen.length > 0 && <p>not observed here: {unseen.join(', ')}</p>}
+        {(shown.length < marks.length || props.note) && (
+          <p>
+            {shown.length < marks.length && `${shown.length} of ${marks.length} objects pass the filter`}
+            {shown.length < marks.length && props.note && '; '}
+            {props.note}
+          </p>
+        )}
+        {measuredFrom && (
+          <p>
+            from {measuredFrom.name} {measured ? `to ${chosen!.name}: ${measured}` : 'to the next object you choose'}
+          </p>
+        )}
+      </div>
+      <p className="visually-hidden" role="status">
+        {chosen
+          ? `${chosen.name}: ${markFacts(chosen)}${measured ? `. From ${measuredFrom!.name}: ${measured}` : ''}`
+          : ''}
+      </p>
+      <SkyLegend id={legend} uncovered={visible.uncovered.map(({ name }) => name)} />
     </figure>
   );
 }
 
-/** Catalogues whose hatching covers the detection itself. */
-const unseenAtCentre = ({ uncovered }: Outlines) =>
-  uncovered.filter(({ cells }) => cells.some((ring) => containsOrigin(ring))).map(({ name }) => name);
+/** Half the height of the view, arcsec. */
+const halfHeightOf = ({ height, resolution }: PanelView): number => (height / 2) * resolution;
+
+/** How far the furthest corner of the view is from the detection, arcsec, rounded up so that it changes seldom. */
+function cornerOf({ centre, resolution, width, height }: PanelView): number {
+  const far = Math.hypot(
+    Math.abs(centre[0]) + (width / 2) * resolution,
+    Math.abs(centre[1]) + (height / 2) * resolution,
+  );
+  return 2 ** Math.ceil(Math.log2(Math.max(1, far)));
+}
 
 /** Colours of the theme; the document carries the theme before anyone is told that it changed. */
 function usePalette(theme: string): Palette {

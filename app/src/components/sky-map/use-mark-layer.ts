@@ -1,81 +1,94 @@
-import Feature from 'ol/Feature.js';
-import Point from 'ol/geom/Point.js';
-import VectorLayer from 'ol/layer/Vector.js';
-import type OlMap from 'ol/Map.js';
-import VectorSource from 'ol/source/Vector.js';
-import type Style from 'ol/style/Style.js';
-import { useEffect, useRef } from 'react';
-import { markLabel } from './mark-label.ts';
-import { litStyle, markStyle } from './mark-style.ts';
-import type { Palette } from './palette.ts';
-import { toPanel } from '@eremite/shared/drawing/panel-plane';
 import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
+import type { FrameState } from 'ol/Map.js';
+import Layer from 'ol/layer/Layer.js';
+import type OlMap from 'ol/Map.js';
+import { useEffect, useMemo, useRef } from 'react';
+import { drawLit } from './draw-lit.ts';
+import type { PanelView } from './frame.tsx';
+import { MarkField } from './mark-field.ts';
+import { MarkSprites } from './mark-sprites.ts';
+import { resolvedTheme } from './screen-theme.ts';
 
 interface MarkLayerOptions {
   map: OlMap | undefined;
   marks: readonly SkyMark[];
   centre: { raDeg: number; decDeg: number };
-  palette: Palette | undefined;
+  /** Name of the theme: colours are read anew when it changes. */
+  theme: string;
   hovered: string | null;
   selected: string | null;
+  /** The mark a distance is measured from. */
+  measuredFrom: string | null;
+  measuredText: string;
   onHover: (key: string | null) => void;
   onSelect: (key: string | null) => void;
 }
 
-/** Draws the objects and links pointing and choosing with whoever else shows them. */
+/** How near the pointer must come to a mark, CSS pixels. */
+const TOLERANCE = 9;
+
+function viewOf({ viewState, size }: FrameState): PanelView {
+  const [width = 0, height = 0] = size;
+  return { centre: [viewState.center[0]!, viewState.center[1]!], resolution: viewState.resolution, width, height };
+}
+
+/** Draws the objects on a canvas of its own and links pointing and choosing with whoever else shows them. */
 export function useMarkLayer(options: MarkLayerOptions): void {
-  const { map, marks, centre, palette, hovered, selected } = options;
-  const layer = useRef<VectorLayer | null>(null);
-  const lit = useRef({ hovered, selected });
-  const call = useRef(options);
+  const { map, marks, centre, theme, hovered, selected, measuredFrom, measuredText } = options;
+  const layer = useRef<Layer | null>(null);
+  const field = useMemo(() => new MarkField(marks, centre), [marks, centre]);
+  const now = useRef({ ...options, field });
   useEffect(() => {
-    call.current = options;
+    now.current = { ...options, field };
   });
 
   useEffect(() => {
-    if (!map || !palette) return;
-    const features = marks.flatMap((mark) => {
-      const at = toPanel(mark.raDeg, mark.decDeg, centre);
-      if (!at) return [];
-      const feature = new Feature({ geometry: new Point(at), mark });
-      feature.setId(mark.key);
-      return [feature];
+    if (!map) return;
+    const canvas = document.createElement('canvas');
+    canvas.style.position = 'absolute';
+    const colours = resolvedTheme(document.documentElement);
+    const density = window.devicePixelRatio || 1;
+    const sprites = new MarkSprites(colours, density);
+    const created = new Layer({
+      zIndex: 3,
+      render: (frame) => {
+        const view = viewOf(frame);
+        const [width, height] = [Math.round(view.width * density), Math.round(view.height * density)];
+        if (canvas.width !== width || canvas.height !== height) {
+          [canvas.width, canvas.height] = [width, height];
+          [canvas.style.width, canvas.style.height] = [`${view.width}px`, `${view.height}px`];
+        }
+        const context = canvas.getContext('2d');
+        if (!context) return canvas;
+        context.setTransform(density, 0, 0, density, 0, 0);
+        context.clearRect(0, 0, view.width, view.height);
+        now.current.field.draw(context, view, sprites);
+        drawLit(context, view, now.current, colours);
+        return canvas;
+      },
     });
-    const kept = new Map<string, Style>();
-    const style = (feature: { get: (key: string) => unknown }) => {
-      const mark = feature.get('mark') as SkyMark;
-      const own = kept.get(mark.key) ?? markStyle(mark, palette);
-      kept.set(mark.key, own);
-      const chosen = lit.current.selected === mark.key;
-      if (!chosen && lit.current.hovered !== mark.key) return own;
-      return [own, litStyle(mark, markLabel(mark), palette, chosen)];
-    };
-    const created = new VectorLayer({ source: new VectorSource({ features }), style, zIndex: 3, declutter: false });
     layer.current = created;
     map.addLayer(created);
     return () => {
       map.removeLayer(created);
       created.dispose();
+      canvas.width = canvas.height = 0;
       layer.current = null;
     };
-  }, [map, marks, centre, palette]);
+  }, [map, theme]);
 
   useEffect(() => {
-    lit.current = { hovered, selected };
     layer.current?.changed();
-  }, [hovered, selected]);
+  }, [field, hovered, selected, measuredFrom, measuredText]);
 
   useEffect(() => {
     if (!map) return;
-    const under = (pixel: number[]): string | null =>
-      map.forEachFeatureAtPixel(pixel, (feature) => (feature.get('mark') as SkyMark | undefined)?.key, {
-        hitTolerance: 5,
-        layerFilter: (candidate) => candidate === layer.current,
-      }) ?? null;
+    const under = (at: number[]) =>
+      now.current.field.nearest(at[0]!, at[1]!, TOLERANCE * (map.getView().getResolution() ?? 1));
     const move = map.on('pointermove', (event) => {
-      if (!event.dragging) call.current.onHover(under(event.pixel));
+      if (!event.dragging) now.current.onHover(under(event.coordinate));
     });
-    const click = map.on('click', (event) => call.current.onSelect(under(event.pixel)));
+    const click = map.on('click', (event) => now.current.onSelect(under(event.coordinate)));
     return () => [move, click].forEach(({ target, type, listener }) => target.removeEventListener(type, listener));
   }, [map]);
 }

@@ -1,76 +1,109 @@
-import { useMemo } from 'react';
+import { SCREEN } from '@eremite/shared/drawing/drawing-theme';
 import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
+import { stripBackdrop } from '@eremite/shared/drawing/strip-backdrop';
+import { type PlacedMark, stripLayout } from '@eremite/shared/drawing/strip-layout';
+import { stripSummary } from '@eremite/shared/drawing/strip-summary';
+import type { StripZones } from '@eremite/shared/drawing/strip-zones';
+import { useMemo, type KeyboardEvent, type ReactNode } from 'react';
 import { fixed, signed } from '#lib/format/number.ts';
-import { STRIP_MARGIN, stripScale } from './strip-scale.ts';
-import { StripZones, type Zones } from './strip-zones.tsx';
 import './surroundings-strip.css';
 
 interface SurroundingsStripProps {
   marks: readonly SkyMark[];
-  zones: Zones;
+  zones: StripZones;
   hovered: string | null;
   selected: string | null;
   onHover: (key: string | null) => void;
   onSelect: (key: string | null) => void;
+  /** Buttons of the strip. */
+  tools?: ReactNode;
+  /** What stands below it. */
+  children?: ReactNode;
 }
 
 const WIDTH = 560;
-const HEIGHT = 168;
+const HEIGHT = 196;
 
 /** How far and how fast everything is that has a velocity; those without one stand on a shelf below. */
 export function SurroundingsStrip(props: SurroundingsStripProps) {
   const { marks, zones, hovered, selected, onHover, onSelect } = props;
-  const { placed, shelf, scale, outside } = useMemo(() => {
-    const withPlace = marks.filter((mark) => mark.separationKpc !== null);
-    const reach = Math.max(zones.neighbourKms, zones.debrisKms) * 1.35;
-    const made = stripScale(WIDTH, HEIGHT, 1, Math.max(1500, zones.neighbourKpc * 1.5), reach);
-    const fast = withPlace.filter((mark) => mark.velocityDifferenceKms !== null);
-    return {
-      scale: made,
-      placed: fast.filter((mark) => Math.abs(mark.velocityDifferenceKms!) <= reach),
-      outside: fast.filter((mark) => Math.abs(mark.velocityDifferenceKms!) > reach),
-      shelf: withPlace.filter((mark) => mark.velocityDifferenceKms === null),
-    };
-  }, [marks, zones]);
-  const shelfY = HEIGHT - STRIP_MARGIN.bottom + 10;
-  const events = (key: string) => ({
-    onMouseEnter: () => onHover(key),
-    onMouseLeave: () => onHover(null),
-    onClick: () => onSelect(key),
-  });
-  const lit = (key: string) => (selected === key ? ' is-selected' : hovered === key ? ' is-hovered' : '');
+  const layout = useMemo(() => stripLayout(marks, zones, { width: WIDTH, height: HEIGHT }), [marks, zones]);
+  const backdrop = useMemo(() => ({ __html: stripBackdrop(layout, SCREEN) }), [layout]);
+  const shelf = layout.placed.filter(({ where }) => where === 'shelf').length;
+  const onKeyDown = (event: KeyboardEvent) => {
+    if ((event.key !== ']' && event.key !== '[') || event.ctrlKey || event.metaKey) return;
+    event.preventDefault();
+    event.stopPropagation();
+    const inOrder = layout.placed.filter(({ where }) => where !== 'shelf').sort((a, b) => a.kpc - b.kpc);
+    const at = inOrder.findIndex(({ mark }) => mark.key === selected);
+    const next = event.key === ']' ? inOrder[at + 1] : inOrder[at < 0 ? inOrder.length - 1 : at - 1];
+    if (next) onSelect(next.mark.key);
+  };
   return (
     <figure className="strip">
-      <svg
-        viewBox={`0 0 ${WIDTH} ${HEIGHT}`}
-        role="img"
-        aria-label={`Surroundings: ${placed.length} objects with a velocity within the strip, ${outside.length} beyond it, ${shelf.length} without one. The neighbour table lists them.`}
+      {props.tools && <div className="strip__tools">{props.tools}</div>}
+      <div
+        tabIndex={0}
+        role="group"
+        onKeyDown={onKeyDown}
+        aria-label={`Surroundings strip. ${stripSummary(layout)}. Square brackets step through the objects with a velocity; the tables list them.`}
       >
-        <StripZones scale={scale} zones={zones} />
-        {shelf.map((mark) => (
-          <path
-            key={mark.key}
-            className={`strip__shelf${lit(mark.key)}`}
-            d={`M${scale.x(mark.separationKpc!).toFixed(1)} ${shelfY - 4}v8`}
-            {...events(mark.key)}
-          />
-        ))}
-        {placed.map((mark) => (
-          <circle
-            key={mark.key}
-            className={`strip__mark strip__mark--${mark.agreement}${lit(mark.key)}`}
-            cx={scale.x(mark.separationKpc!)}
-            cy={scale.y(mark.velocityDifferenceKms!)}
-            r={hovered === mark.key || selected === mark.key ? 6 : 4}
-            {...events(mark.key)}
-          >
-            <title>{`${mark.name}: ${fixed(mark.separationKpc, 1)} kpc, ${signed(mark.velocityDifferenceKms, 0)} km/s`}</title>
-          </circle>
-        ))}
-        <text className="strip__note" x={WIDTH - STRIP_MARGIN.right} y={shelfY - 8} textAnchor="end">
-          {`no velocity: ${shelf.length}${outside.length ? ` · beyond in velocity: ${outside.length}` : ''}`}
-        </text>
-      </svg>
+        <svg viewBox={`0 0 ${WIDTH} ${HEIGHT}`} aria-hidden="true">
+          <g dangerouslySetInnerHTML={backdrop} />
+          {layout.placed.map((one) => (
+            <StripMark
+              key={one.mark.key}
+              placed={one}
+              state={selected === one.mark.key ? ' is-selected' : hovered === one.mark.key ? ' is-hovered' : ''}
+              onHover={onHover}
+              onSelect={onSelect}
+            />
+          ))}
+          <text x={layout.right} y={layout.floor - 4} textAnchor="end">
+            no velocity: {shelf}
+          </text>
+        </svg>
+      </div>
+      {props.children}
     </figure>
+  );
+}
+
+interface StripMarkProps {
+  placed: PlacedMark;
+  state: string;
+  onHover: (key: string | null) => void;
+  onSelect: (key: string | null) => void;
+}
+
+function StripMark({ placed: { mark, kpc, x, y, where }, state, onHover, onSelect }: StripMarkProps) {
+  const events = {
+    onMouseEnter: () => onHover(mark.key),
+    onMouseLeave: () => onHover(null),
+    onClick: () => onSelect(mark.key),
+  };
+  const velocity =
+    mark.velocityDifferenceKms === null ? 'no velocity' : `${signed(mark.velocityDifferenceKms, 0)} km/s`;
+  const title = <title>{`${mark.name}: ${fixed(kpc, kpc < 100 ? 1 : 0)} kpc, ${velocity}`}</title>;
+  if (where === 'shelf') {
+    return (
+      <path className={`strip__shelf${state}`} d={`M${x.toFixed(1)} ${y - 4}v8`} {...events}>
+        {title}
+      </path>
+    );
+  }
+  const classes = `strip__mark strip__mark--${mark.agreement}${state}`;
+  if (where === 'inside') {
+    return (
+      <circle className={classes} cx={x} cy={y} r={state ? 6 : 4} {...events}>
+        {title}
+      </circle>
+    );
+  }
+  const tip = where === 'above' ? -5 : 5;
+  return (
+    <path className={classes} d={`M${(x - 3.5).toFixed(1)} ${y.toFixed(1)}l3.5 ${tip}l3.5 ${-tip}Z`} {...events}>
+      {title}
+    </path>
   );
 }

@@ -4,19 +4,17 @@ import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import type { TeamRole } from '@eremite/shared/contracts/words';
 import { useQuery } from '@tanstack/react-query';
 import { useMemo, useState } from 'react';
-import { SkyPanel } from '#components/sky-map/sky-panel.tsx';
-import { SurroundingsStrip } from '#components/surroundings-strip/surroundings-strip.tsx';
+import { LimitsChart } from '#components/limits-chart/limits-chart.tsx';
 import { overridesQuery, reviewsQuery } from '../api/decisions.ts';
 import { chosenCandidate, useDecisions } from '../hooks/use-decisions.ts';
 import { useShortlisting } from '../hooks/use-shortlisting.ts';
-import { usePanelData } from '../hooks/use-panel-data.ts';
 import { CommandsBar, type Command } from './commands-bar.tsx';
 import { DecisionDialogs } from './decision-dialogs.tsx';
 import { DetectionHead } from './detection-head.tsx';
 import { DoubtList } from './doubt-list.tsx';
 import { EvidenceTabs } from './evidence-tabs.tsx';
 import { Grounds } from './grounds.tsx';
-import { DepthTable } from './limit-table.tsx';
+import { SkyEvidence } from './sky-evidence.tsx';
 import { VerdictSummary } from './verdict-summary.tsx';
 
 interface DetectionViewProps {
@@ -38,7 +36,6 @@ export function DetectionView(props: DetectionViewProps) {
   const id = detail.verdict.detectionId;
   const [hovered, setHovered] = useState<string | null>(null);
   const [selected, setSelected] = useState<string | null>(null);
-  const panel = usePanelData(detail, settings, catalogues);
   const decisions = useDecisions(detail, role, onNext);
   const shortlisting = useShortlisting(surveyId, detail);
   const { data: reviews } = useQuery(reviewsQuery(id));
@@ -141,17 +138,7 @@ export function DetectionView(props: DetectionViewProps) {
             detail={detail}
             onDistance={decisions.mayDecide ? () => decisions.ask({ what: 'distance' }) : undefined}
           />
-          <SkyPanel
-            name={detail.verdict.name}
-            centre={panel.centre}
-            distanceMpc={detail.distance.angularMpc}
-            outlines={panel.outlines}
-            marks={panel.marks}
-            {...link}
-          />
-          {detail.distance.angularMpc !== null && (
-            <SurroundingsStrip marks={panel.marks} zones={panel.zones} {...link} />
-          )}
+          <SkyEvidence detail={detail} settings={settings} catalogues={catalogues} {...link} />
         </div>
         <div className="det__evidence">
           <VerdictSummary detail={detail} />
@@ -160,7 +147,7 @@ export function DetectionView(props: DetectionViewProps) {
             <section aria-labelledby="silence">
               <h3 id="silence">What silence is worth here</h3>
               {detail.limits.length > 0 ? (
-                <DepthTable limits={detail.limits} />
+                <LimitsChart detail={detail} />
               ) : (
                 <p className="muted">No catalogue with a band was searched.</p>
               )}

@@ -6,7 +6,7 @@ import { DataTable } from '#components/data-table/data-table.tsx';
 import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { chosenCandidate, type Decisions } from '../hooks/use-decisions.ts';
 import { History } from './history.tsx';
-import { LimitTable } from './limit-table.tsx';
+import { DepthTable, LimitTable } from './limit-table.tsx';
 import { candidateColumns, neighbourColumns } from './object-columns.tsx';
 import { Robustness } from './robustness.tsx';
 
@@ -83,7 +83,14 @@ export function EvidenceTabs(props: EvidenceTabsProps) {
         />
       ),
     ],
-    ['limits', `Limits ${limits.length}`, <LimitTable key="limits" limits={limits} />],
+    [
+      'limits',
+      `Limits ${limits.length}`,
+      <div key="limits" className="stack">
+        <DepthTable limits={limits} />
+        <LimitTable limits={limits} />
+      </div>,
+    ],
     ['stability', 'Stability', <Robustness key="stability" detail={detail} />],
     [
       'history',
