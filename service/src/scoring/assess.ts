@@ -107,6 +107,7 @@ export function assessStarlight(
     priorSource: source,
     reliability,
     probabilities,
+    velocity: model.velocity,
     starlight,
     best,
     dominating,

@@ -1,4 +1,4 @@
-import { DEFAULT_VELOCITY_MODEL, type VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
+import type { VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
 import type { LearntPrior } from '@eremite/shared/science/counterpart/learn-prior';
 import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
 import { neighbourSearch } from '../matching/neighbour-search.ts';
@@ -29,6 +29,7 @@ import {
   type NeighbourRow,
   type SurroundingsContext,
 } from './surroundings.ts';
+import { RedshiftField, velocityModelOf, velocityNotes } from './velocity-background.ts';
 import { rateRows, type WeighingModel } from './weigh-objects.ts';
 
 /** Kinds of tables in which a counterpart is looked for. */
@@ -65,6 +66,7 @@ export class Engine {
   private readonly surroundings: SurroundingsContext;
   private readonly overrideOf: OverrideOf | null;
   private readonly shares: CoveredShares;
+  private readonly redshifts: RedshiftField;
   learnt: Learnt;
 
   constructor(readonly input: EngineInput) {
@@ -88,17 +90,10 @@ export class Engine {
     };
     this.overrideOf = overridesBy(input);
     this.shares = new CoveredShares(this.detections.length, this.catalogues.length);
-    this.learnt = { relation: null, priors: [], velocity: this.velocityModel(), notes: [] };
-  }
-
-  private velocityModel(): VelocityModel {
-    const { counterpart } = this.input.criteria;
-    return {
-      ...DEFAULT_VELOCITY_MODEL,
-      clusteredFraction: counterpart.concordantClustering,
-      badFraction: counterpart.badRedshiftFloor,
-      discordantKms: counterpart.discordantKms,
-    };
+    this.redshifts = new RedshiftField(criteria.counterpart.learnVelocities ? this.searched : []);
+    const pupils = this.detections.pick(this.places(0, Math.ceil(this.detections.length / this.step)));
+    const velocity = this.redshifts.measure(velocityModelOf(criteria), pupils);
+    this.learnt = { relation: null, priors: [], velocity, notes: [] };
   }
 
   private context(relation: GasStarRelation | null, priors: readonly LearntPrior[]): AssessmentContext {
@@ -136,12 +131,21 @@ export class Engine {
   ): StarlightAssessment[] {
     const candidates = this.candidatesOf(range, overrideOf);
     const masks = this.masks.of(range);
-    return candidates.map((rows, i) => assessStarlight(range[i]!, rows, masks[i]!, context));
+    const velocities = this.redshifts.localModels(context.model.velocity, range);
+    return candidates.map((rows, i) => {
+      const model = { ...context.model, velocity: velocities[i]! };
+      return assessStarlight(range[i]!, rows, masks[i]!, { ...context, model });
+    });
   }
 
   /** A run learns from every so-many-th detection, so that there are at most {@link MOST_PUPILS}. */
   private get step(): number {
     return Math.max(1, Math.ceil(this.detections.length / MOST_PUPILS));
+  }
+
+  /** Places of the pupils [from, to). */
+  private places(from: number, to: number): number[] {
+    return Array.from({ length: to - from }, (_, i) => (from + i) * this.step);
   }
 
   /** How many detections a run learns from; 0 where it does not want to or has too few. */
@@ -154,8 +158,7 @@ export class Engine {
   /** What the pupils [from, to) teach under a relation; null for that of the criteria. */
   lessons(from: number, to: number, relation: GasStarRelation | null): Lesson[] {
     const context = this.context(relation, []);
-    const positions = Array.from({ length: to - from }, (_, i) => (from + i) * this.step);
-    return this.assess(this.detections.pick(positions), context).map((assessment) =>
+    return this.assess(this.detections.pick(this.places(from, to)), context).map((assessment) =>
       lessonOf(assessment, context.model.relation),
     );
   }
@@ -174,7 +177,7 @@ export class Engine {
 
   /** Sentences about the run as a whole: what the tables leave open and what was learnt. */
   get notes(): string[] {
-    const notes = [...this.learnt.notes];
+    const notes = [...this.learnt.notes, ...velocityNotes(this.learnt.velocity)];
     for (const { input, areaFromRows } of this.searched) {
       if (areaFromRows)
         notes.push(`${input.name}: ${input.coverageNote} Densities are taken over the cells its rows occupy.`);

@@ -101,8 +101,18 @@ export function nearestFlip(angularMpc: number, { verdict, pool }: SurroundingsR
   return best && `It would be accompanied by ${neighbourName(best)} were it nearer than ${mpc(best.insideBelowMpc)}.`;
 }
 
+/** Share of the redshifts at the velocity of the gas by clustering from which a place is said to be dense. Our choice. */
+const DENSE_PLACE = 0.5;
+
 /** What the numbers rest on: distance, position, data that are missing. */
-export function dataGrounds({ detection, prior, priorSource, reliability, candidates }: StarlightAssessment): Ground[] {
+export function dataGrounds({
+  detection,
+  prior,
+  priorSource,
+  reliability,
+  candidates,
+  velocity,
+}: StarlightAssessment): Ground[] {
   const grounds: Ground[] = [];
   const say = (about: Ground['about'], text: string, method: string | null = null) =>
     grounds.push({ about, weight: 'note', text, method });
@@ -133,13 +143,31 @@ export function dataGrounds({ detection, prior, priorSource, reliability, candid
   if (Number.isNaN(reliability))
     say('data', 'No reliability of the line is given: it is taken as real.', 'reliability');
   if (!(detection.fluxJyKms > 0))
-    say('data', 'No HI flux is given: the expected counterpart is known only roughly.', 'expected');
+    say(
+      'data',
+      'No HI flux above zero is given: the expected counterpart is known only roughly, and no mass is stated.',
+      'expected',
+    );
+  if (!(detection.width50Kms > 0) && Number.isFinite(detection.czKms))
+    say(
+      'data',
+      'No line width is given: galaxies within 150 km/s count as inside the line, and interference is tested at the line centre only.',
+      'confusion',
+    );
+  if (Number.isNaN(detection.signalToNoise) && Number.isNaN(reliability))
+    say('data', 'No signal-to-noise ratio is given: a spurious line cannot be tested.', 'reliability');
   if (Number.isNaN(detection.ebvMag)) say('data', 'No reddening is given: extinction is taken as zero.', 'extinction');
   else if (detection.ebvSource !== '')
     say(
       'data',
       `The detection gives no reddening: E(B-V) ${detection.ebvMag.toFixed(2)} mag is the median of the rows of ${detection.ebvSource} within 10 arcmin.`,
       'extinction',
+    );
+  if (velocity.clusteredFraction >= DENSE_PLACE)
+    say(
+      'data',
+      `A dense place: ${percent(velocity.clusteredFraction)} of the redshifts about it share the velocity of the gas, so that one that does says less.`,
+      'velocity',
     );
   const absurd = candidates.filter(
     ({ czKms, usableCzKms }) => Number.isNaN(usableCzKms) && Number.isFinite(czKms),

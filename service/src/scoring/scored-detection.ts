@@ -1,5 +1,6 @@
 import type { Doubt as ContractDoubt, Ground, VerdictDetail, VerdictItem } from '@eremite/shared/contracts/verdict';
 import type { Hypotheses } from '@eremite/shared/science/counterpart/exclusive';
+import type { VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
 import type { Starlight } from '@eremite/shared/science/counterpart/starlight';
 import type { CandidateRow } from './candidate-row.ts';
 import type { Detection } from './detection-table.ts';
@@ -32,6 +33,8 @@ export interface Assessment {
   /** Reliability of the line used; NaN where none was given and 1 is taken. */
   reliability: number;
   probabilities: Hypotheses;
+  /** How redshifts of unrelated objects are spread about this detection. */
+  velocity: VelocityModel;
   starlight: Starlight;
   /** Most probable object, and the one that dominates, if any. */
   best: WeighedObject | null;

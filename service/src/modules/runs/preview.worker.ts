@@ -1,4 +1,5 @@
 import { parentPort } from 'node:worker_threads';
+import type { VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
 import { Engine, type Learnt } from '../../scoring/engine.ts';
 import { packCandidates, packNeighbours, readCandidates, readNeighbours } from '../../scoring/evidence.ts';
 import { unpackInput } from './packed-input.ts';
@@ -35,7 +36,25 @@ function score({ input, learnt, wanted }: PreviewTask): PreviewedDetection[] {
 }
 
 /** What an earlier run learnt, as far as the criteria want it learnt; what follows from the criteria stays theirs. */
-function applicable({ relation, priors }: Learnt, { learnt, input }: Engine): Learnt {
-  const { learnMagnitudes, learnPrior } = input.criteria.counterpart;
-  return { ...learnt, relation: learnMagnitudes ? relation : null, priors: learnPrior ? priors : [] };
+function applicable({ relation, priors, velocity }: Learnt, { learnt, input }: Engine): Learnt {
+  const { learnMagnitudes, learnPrior, learnVelocities } = input.criteria.counterpart;
+  return {
+    ...learnt,
+    relation: learnMagnitudes ? relation : null,
+    priors: learnPrior ? priors : [],
+    velocity: learnVelocities ? withMeasured(learnt.velocity, velocity) : learnt.velocity,
+  };
+}
+
+/** The velocity model of the criteria with what a run measured; the few tables read here would measure too little. */
+function withMeasured(
+  model: VelocityModel,
+  { histogram, ringObjects, clusteredFraction }: VelocityModel,
+): VelocityModel {
+  const { histogram: _, ringObjects: __, ...base } = model;
+  return {
+    ...base,
+    ...(histogram ? { histogram } : {}),
+    ...(ringObjects ? { ringObjects, clusteredFraction } : {}),
+  };
 }

@@ -1,4 +1,5 @@
 import { DomainError } from '../domain-error.ts';
+import { densityAt, type VelocityHistogram } from './velocity-background.ts';
 
 /** How redshifts of unrelated objects are spread, and how far redshifts are trusted. */
 export interface VelocityModel {
@@ -12,6 +13,15 @@ export interface VelocityModel {
   badFraction: number;
   /** A difference beyond it rules out, km/s. */
   discordantKms: number;
+  /** Spread of the survey's own redshifts, in place of `backgroundDensity`, where it could be measured. */
+  histogram?: VelocityHistogram;
+  /** Redshift objects in rings about detections from which `clusteredFraction` was measured; 0 or missing: it is the setting. */
+  ringObjects?: number;
+}
+
+/** Chance density of unrelated redshifts at a velocity by a model, per km/s. */
+export function unrelatedDensity({ histogram, backgroundDensity }: VelocityModel, czKms: number): number {
+  return histogram && Number.isFinite(czKms) ? densityAt(histogram, czKms) : backgroundDensity;
 }
 
 /** Common practice, with the starting points measured on published assignments. */
