@@ -95,7 +95,14 @@ describe('settling', () => {
     expect((await settle(screened.lead, ' ')).body.errors[0].pointer).toBe('/note');
     const settled = await settle(screened.lead, 'one galaxy and its knot');
     expect(settled.status, settled.text).toBe(204);
-    const expected = { starlight: 'starlit', surroundings: 'alone', by: 'A lead', note: 'one galaxy and its knot' };
+    const expected = {
+      starlight: 'starlit',
+      surroundings: 'alone',
+      by: 'A lead',
+      note: 'one galaxy and its knot',
+      outcome: 'verdict',
+      stands: true,
+    };
     const item = (await verdictsOf(screened.observer, screened.run.id))['S06']!;
     expect(item.settled).toEqual(expected);
     expect(item.starlight).toBe('contested');
@@ -144,7 +151,7 @@ describe('the docket', () => {
     expect((await docket(screened.reviewer, '?assigned=me')).total).toBe(0);
     // S03 is reviewed already, S07 and S08 are not; only the lead is told.
     const progress = await screened.lead.get(`/surveys/${screened.surveyId}/assignments`);
-    expect(progress.body.items).toEqual([{ userId, name: 'A reviewer', assigned: 3, reviewed: 1 }]);
+    expect(progress.body.items).toEqual([{ userId, name: 'A reviewer', assigned: 3, reviewed: 1, returned: 0 }]);
     expect((await screened.reviewer.get(`/surveys/${screened.surveyId}/assignments`)).status).toBe(403);
     const overview = await second.client.get(`/surveys/${screened.surveyId}/overview`);
     expect(overview.body.awaitingMe).toBe(2);
@@ -166,9 +173,14 @@ describe('the docket', () => {
     expect(foreign.status).toBe(404);
   });
 
-  it('starts anew with the newest run', async () => {
-    await aRun(screened.lead, screened.surveyId, screened.criteria.id);
-    // Reviews belong to the run they looked at.
-    expect((await docket(second.client)).total).toBe(12);
+  it('keeps what was reviewed where the evidence stands in the newest run', async () => {
+    const run = await aRun(screened.lead, screened.surveyId, screened.criteria.id);
+    expect((await docket(second.client)).total).toBe(11);
+    expect((await verdictsOf(screened.lead, run.id))['S03']!.reviews).toBe(2);
+    const { items } = await reviewsOf(screened.reviewer, 'S03');
+    expect(items.map((item: { carriedTo: number; runNumber: number }) => [item.runNumber, item.carriedTo])).toEqual([
+      [1, 2],
+      [1, 2],
+    ]);
   });
 });

@@ -1,10 +1,9 @@
 import { listOf } from '@eremite/shared/contracts/list';
-import { docketItem } from '@eremite/shared/contracts/review';
+import { docketItem, type DocketItem } from '@eremite/shared/contracts/docket';
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
-import type { z } from 'zod';
 import { call } from '#lib/api-client.ts';
 
-export type DocketItem = z.output<typeof docketItem>;
+export type { DocketItem };
 
 /** Detections waiting for review, in the order they should be looked at. */
 export const docketQuery = (surveyId: string, search: string) =>

@@ -1,5 +1,6 @@
 import { createReadStream } from 'node:fs';
 import { criteriaSettings } from '@eremite/shared/contracts/criteria';
+import { createOverrideRequest, createReviewRequest, settleRequest } from '@eremite/shared/contracts/review';
 import type { VerdictItem } from '@eremite/shared/contracts/verdict';
 import type { TeamRole } from '@eremite/shared/contracts/words';
 import { Injectable } from '@nestjs/common';
@@ -10,8 +11,10 @@ import { AuthService } from '../auth/auth.service.ts';
 import { CriteriaService } from '../criteria/criteria.service.ts';
 import { FilesService } from '../files/files.service.ts';
 import { IntakesService } from '../intakes/intakes.service.ts';
-import { ReviewsService } from '../reviews/reviews.service.ts';
+import { AssignmentsService } from '../reviews/assignments.service.ts';
 import { OverridesService } from '../reviews/overrides.service.ts';
+import { ReviewsService } from '../reviews/reviews.service.ts';
+import { SettlementsService } from '../reviews/settlements.service.ts';
 import { RunsService } from '../runs/runs.service.ts';
 import { VerdictsService } from '../runs/verdicts.service.ts';
 import { ShortlistsService } from '../shortlists/shortlists.service.ts';
@@ -39,6 +42,8 @@ export class DemoService implements DemoFiller {
     private readonly runs: RunsService,
     private readonly verdicts: VerdictsService,
     private readonly reviews: ReviewsService,
+    private readonly settlements: SettlementsService,
+    private readonly assignments: AssignmentsService,
     private readonly overrides: OverridesService,
     private readonly shortlists: ShortlistsService,
     private readonly jobs: JobsService,
@@ -100,25 +105,26 @@ export class DemoService implements DemoFiller {
   async #review(lead: SignedInUser, reviewer: SignedInUser, surveyId: string, runId: string): Promise<void> {
     const docket = (await this.verdicts.page(runId, {}, { limit: 60, sort: 'docket' })).items;
     const detectionIds = docket.map((item) => item.detectionId);
-    await this.reviews.assign(lead, surveyId, { detectionIds, userId: reviewer.id }, true);
+    await this.assignments.assign(lead, surveyId, { detectionIds, userId: reviewer.id }, true);
     const dark = docket.filter((item) => item.starlight === 'dark');
     const word = ({ starlight, surroundings }: VerdictItem) => ({ runId, starlight, surroundings });
     for (const item of dark.slice(0, 3))
-      await this.reviews.create(reviewer, item.detectionId, { ...word(item), note: '' });
+      await this.reviews.create(reviewer, item.detectionId, createReviewRequest.parse(word(item)));
     const nearlyDark = docket.find((item) => item.starlight === 'nearly dark');
     if (nearlyDark) {
       const note = 'Faint but plain in both bands; its light is that of a diffuse dwarf.';
-      await this.reviews.create(reviewer, nearlyDark.detectionId, { ...word(nearlyDark), starlight: 'starlit', note });
-      await this.reviews.settle(lead, nearlyDark.detectionId, {
-        ...word(nearlyDark),
-        note: 'Ordinary in shape, not in its gas-to-light ratio; nearly dark stands.',
-      });
+      const departure = createReviewRequest.parse({ ...word(nearlyDark), starlight: 'starlit', note });
+      await this.reviews.create(reviewer, nearlyDark.detectionId, departure);
+      const settled = 'Ordinary in shape, not in its gas-to-light ratio; nearly dark stands.';
+      const settling = settleRequest.parse({ ...word(nearlyDark), note: settled });
+      await this.settlements.settle(lead, nearlyDark.detectionId, settling);
     }
     const contested = docket.find((item) => item.starlight === 'contested' && item.counterpart);
     if (contested?.counterpart) {
       const { catalogueId, rowId } = contested.counterpart;
       const note = 'Red and smooth: a background galaxy. The bluer one beside it is the likelier host.';
-      await this.overrides.create(reviewer, contested.detectionId, { catalogueId, rowId, action: 'reject', note });
+      const rejection = createOverrideRequest.parse({ catalogueId, rowId, action: 'reject', note });
+      await this.overrides.create(reviewer, contested.detectionId, rejection);
     }
     const entries = dark
       .filter((item) => item.surroundings === 'alone')

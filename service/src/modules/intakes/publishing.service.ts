@@ -3,6 +3,7 @@ import type { IntakeColumn, PublishResult } from '@eremite/shared/contracts/inta
 import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { Inject, Injectable, type OnModuleInit } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
+import { SurveyHooks } from '../../common/survey-hooks.ts';
 import { BulkStore, type CopyPiece } from '../../database/bulk.ts';
 import type { Published, SidelinedCells } from '../../intake/publish.ts';
 import type { JobContext } from '../../jobs/job-handler.ts';
@@ -40,6 +41,7 @@ export class PublishingService implements OnModuleInit {
     @Inject(BulkStore) private readonly bulk: BulkStore,
     private readonly ledger: LedgerService,
     private readonly jobs: JobsService,
+    private readonly hooks: SurveyHooks,
   ) {}
 
   onModuleInit(): void {
@@ -69,6 +71,7 @@ export class PublishingService implements OnModuleInit {
       if (published.resolved.kind === 'hi') await this.storeDetections(intake.surveyId, catalogueId);
       context.signal.throwIfAborted();
       await this.show(intake, catalogueId, published, payload);
+      await this.hooks.published(intake.surveyId, catalogueId);
       return { catalogueId, rows: published.check.usable, sidelined: published.check.sidelined };
     } catch (error) {
       await this.intakes.sweep(intake.id);

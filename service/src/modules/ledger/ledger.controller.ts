@@ -1,35 +1,103 @@
-import { ledgerEntry } from '@eremite/shared/contracts/ledger';
-import { listOf, listQuery, type ListQuery } from '@eremite/shared/contracts/list';
-import { Controller, Get, Param, Query, SerializeOptions } from '@nestjs/common';
+import {
+  ledgerEntry,
+  ledgerExportQuery,
+  ledgerFacets,
+  ledgerQuery,
+  ledgerVerification,
+  type LedgerExportQuery,
+  type LedgerQuery,
+} from '@eremite/shared/contracts/ledger';
+import { listOf } from '@eremite/shared/contracts/list';
+import { Controller, Get, Headers, Param, Query, Res, SerializeOptions } from '@nestjs/common';
+import type { Response } from 'express';
 import { z } from 'zod';
 import { AccessService } from '../../common/access.ts';
 import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
+import { sendPieces } from '../runs/send-table.ts';
+import { ledgerCsv, ledgerJsonLines } from './ledger-file.ts';
+import { LedgerFeed } from './ledger-feed.ts';
+import { LedgerRepository } from './ledger.repository.ts';
 import { LedgerService } from './ledger.service.ts';
+import { streamEvents } from './stream-events.ts';
 
-const verification = z.object({ entries: z.int(), intact: z.boolean(), brokenAt: z.int().nullable() });
+const inSurvey = { schema: z.uuid() };
 
-@Controller('surveys/:surveyId/ledger')
+@Controller('surveys/:surveyId')
 export class LedgerController {
   constructor(
     private readonly access: AccessService,
     private readonly ledger: LedgerService,
+    private readonly lines: LedgerRepository,
+    private readonly feed: LedgerFeed,
   ) {}
 
-  @Get()
+  @Get('ledger')
   @SerializeOptions({ schema: listOf(ledgerEntry) })
   async list(
     @CurrentUser() user: SignedInUser,
-    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
-    @Query({ schema: listQuery }) query: ListQuery,
+    @Param('surveyId', inSurvey) surveyId: string,
+    @Query({ schema: ledgerQuery }) query: LedgerQuery,
   ) {
-    const { role } = await this.access.survey(user, surveyId, 'read');
-    return this.ledger.list(surveyId, query, role === 'reviewer' ? user.id : undefined);
+    return this.ledger.list(surveyId, query, await this.blindTo(user, surveyId));
   }
 
-  @Get('verification')
-  @SerializeOptions({ schema: verification })
-  async verify(@CurrentUser() user: SignedInUser, @Param('surveyId', { schema: z.uuid() }) surveyId: string) {
+  @Get('ledger/verification')
+  @SerializeOptions({ schema: ledgerVerification })
+  async verify(@CurrentUser() user: SignedInUser, @Param('surveyId', inSurvey) surveyId: string) {
     await this.access.survey(user, surveyId, 'read');
     return this.ledger.verify(surveyId);
+  }
+
+  /** Who and what there is to filter by. */
+  @Get('ledger/facets')
+  @SerializeOptions({ schema: ledgerFacets })
+  async facets(@CurrentUser() user: SignedInUser, @Param('surveyId', inSurvey) surveyId: string) {
+    return this.ledger.facets(surveyId, await this.blindTo(user, surveyId));
+  }
+
+  /** The lines as a file. A reviewer's leaves out what others' reviews came to, so that its hashes cannot all be checked. */
+  @Get('ledger/export')
+  async export(
+    @CurrentUser() user: SignedInUser,
+    @Param('surveyId', inSurvey) surveyId: string,
+    @Query({ schema: ledgerExportQuery }) query: LedgerExportQuery,
+    @Res() response: Response,
+  ): Promise<void> {
+    const lines = this.ledger.whole(surveyId, query, await this.blindTo(user, surveyId));
+    const isCsv = query.format === 'csv';
+    const file = {
+      type: isCsv ? 'text/csv; charset=utf-8' : 'application/jsonl; charset=utf-8',
+      fileName: `ledger.${query.format}`,
+    };
+    await sendPieces(response, file, isCsv ? ledgerCsv(lines) : ledgerJsonLines(lines));
+  }
+
+  /** What is done in the survey, as it is done: server-sent events, which go on from `Last-Event-ID`. */
+  @Get('events')
+  async events(
+    @CurrentUser() user: SignedInUser,
+    @Param('surveyId', inSurvey) surveyId: string,
+    @Res() response: Response,
+    @Headers('last-event-id') lastEventId?: string,
+  ): Promise<void> {
+    const isBlind = (await this.blindTo(user, surveyId)) !== undefined;
+    const last = /^\d{1,9}$/.test(lastEventId ?? '') ? Number(lastEventId) : undefined;
+    const isOpen = () =>
+      this.access.survey(user, surveyId, 'read').then(
+        () => true,
+        () => false,
+      );
+    await streamEvents(
+      { lines: this.lines, feed: this.feed },
+      { surveyId, after: last, isBlind, isOpen },
+      user,
+      response,
+    );
+  }
+
+  /** The account where it is one from whom others' reviews are kept back. */
+  private async blindTo(user: SignedInUser, surveyId: string): Promise<string | undefined> {
+    const { role } = await this.access.survey(user, surveyId, 'read');
+    return role === 'reviewer' ? user.id : undefined;
   }
 }

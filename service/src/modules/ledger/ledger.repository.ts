@@ -1,9 +1,16 @@
 import { Inject, Injectable } from '@nestjs/common';
 import { ledger } from '@eremite/schema';
-import { asc, count, desc, eq, sql } from 'drizzle-orm';
+import type { LedgerQuery } from '@eremite/shared/contracts/ledger';
+import { and, asc, count, desc, eq, gt, gte, inArray, notInArray, or, type SQL, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
 export type LedgerRow = typeof ledger.$inferSelect;
+export type LedgerFilter = Partial<Omit<LedgerQuery, 'limit' | 'cursor' | 'sort'>> & {
+  /** A reviewer for whom what others' reviews came to does not exist. */
+  blindTo?: string | undefined;
+  /** The actions that are hidden from her. */
+  hidden?: readonly string[];
+};
 
 @Injectable()
 export class LedgerRepository {
@@ -28,19 +35,69 @@ export class LedgerRepository {
     await db.insert(ledger).values(row);
   }
 
+  #where(surveyId: string, filter: LedgerFilter): SQL {
+    const { actor, action, search, detectionId, since, until, blindTo, hidden = [] } = filter;
+    // One must not find out by filtering what one is not told: hidden notes are not searched, hidden actions not matched.
+    const open = blindTo ? or(notInArray(ledger.action, [...hidden]), eq(ledger.actorId, blindTo)) : undefined;
+    const like = `%${(search ?? '').replace(/[\\%_]/g, '\\$&')}%`;
+    return and(
+      eq(ledger.surveyId, surveyId),
+      actor ? eq(ledger.actor, actor) : undefined,
+      action ? and(eq(ledger.action, action), open) : undefined,
+      search ? or(sql`${ledger.subject} ilike ${like}`, and(sql`${ledger.note} ilike ${like}`, open)) : undefined,
+      detectionId ? sql`${ledger.detail}->>'detectionId' = ${detectionId}` : undefined,
+      since ? gte(ledger.at, new Date(`${since}T00:00:00Z`)) : undefined,
+      until ? sql`${ledger.at} < ${until}::date + 1` : undefined,
+    )!;
+  }
+
   /** Lines of a survey, newest first or oldest first. */
-  async page(surveyId: string, order: 'newest' | 'oldest', limit: number, offset: number, db = this.db) {
+  async page(
+    surveyId: string,
+    order: 'newest' | 'oldest',
+    limit: number,
+    offset: number,
+    filter: LedgerFilter = {},
+    db = this.db,
+  ) {
     return db
       .select()
       .from(ledger)
-      .where(eq(ledger.surveyId, surveyId))
+      .where(this.#where(surveyId, filter))
       .orderBy(order === 'newest' ? desc(ledger.number) : asc(ledger.number))
       .limit(limit)
       .offset(offset);
   }
 
-  async count(surveyId: string, db = this.db): Promise<number> {
-    const [row] = await db.select({ total: count() }).from(ledger).where(eq(ledger.surveyId, surveyId));
+  async count(surveyId: string, filter: LedgerFilter = {}, db = this.db): Promise<number> {
+    const [row] = await db.select({ total: count() }).from(ledger).where(this.#where(surveyId, filter));
     return Number(row?.total ?? 0);
+  }
+
+  /** Lines after a number, oldest first. */
+  after(surveyId: string, number: number, limit: number, db = this.db): Promise<LedgerRow[]> {
+    return db
+      .select()
+      .from(ledger)
+      .where(and(eq(ledger.surveyId, surveyId), gt(ledger.number, number)))
+      .orderBy(asc(ledger.number))
+      .limit(limit);
+  }
+
+  /** Number of the last line of each survey. */
+  async lastNumbers(surveyIds: readonly string[], db = this.db): Promise<Map<string, number>> {
+    const rows = await db
+      .select({ surveyId: ledger.surveyId, last: sql<number>`max(${ledger.number})::int` })
+      .from(ledger)
+      .where(inArray(ledger.surveyId, [...surveyIds]))
+      .groupBy(ledger.surveyId);
+    return new Map(rows.map((row) => [row.surveyId, row.last]));
+  }
+
+  async facets(surveyId: string, db = this.db) {
+    const of = (column: typeof ledger.actor | typeof ledger.action) =>
+      db.selectDistinct({ value: column }).from(ledger).where(eq(ledger.surveyId, surveyId)).orderBy(asc(column));
+    const [actors, actions] = [await of(ledger.actor), await of(ledger.action)];
+    return { actors: actors.map(({ value }) => value), actions: actions.map(({ value }) => value) };
   }
 }

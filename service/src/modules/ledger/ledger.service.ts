@@ -1,10 +1,11 @@
-import type { LedgerEntry } from '@eremite/shared/contracts/ledger';
-import type { List, ListQuery } from '@eremite/shared/contracts/list';
+import type { LedgerEntry, LedgerExportQuery, LedgerQuery } from '@eremite/shared/contracts/ledger';
+import type { List } from '@eremite/shared/contracts/list';
 import { Injectable } from '@nestjs/common';
 import { offsetOf, pageByOffset } from '../../common/paging.ts';
 import type { Database } from '../../database/database.ts';
+import { LedgerFeed } from './ledger-feed.ts';
 import { canonicalJson, ledgerHash } from './ledger-hash.ts';
-import { LedgerRepository } from './ledger.repository.ts';
+import { type LedgerRow, LedgerRepository } from './ledger.repository.ts';
 
 export interface LedgerAppend {
   readonly surveyId: string;
@@ -22,14 +23,33 @@ export interface LedgerVerification {
   readonly intact: boolean;
   /** The first line whose hash does not fit. */
   readonly brokenAt: number | null;
+  readonly lastHash: string;
 }
 
 /** What a reviewer does: blind reviewers are not told what it came to. */
-export const REVIEW_ACTIONS: ReadonlySet<string> = new Set(['agreed with a verdict', 'departed from a verdict']);
+export const REVIEW_ACTIONS: ReadonlySet<string> = new Set([
+  'agreed with a verdict',
+  'departed from a verdict',
+  'took a review back',
+  'accepted a counterpart',
+  'rejected a counterpart',
+  'took an override back',
+  'cleared a doubt',
+  'confirmed a doubt',
+  'took a word on a doubt back',
+  'remarked',
+  'asked a colleague',
+]);
+/** What she is told in its place. */
+export const MASKED_ACTION = 'reviewed a verdict';
+const EXPORT_BLOCK = 1000;
 
 @Injectable()
 export class LedgerService {
-  constructor(private readonly lines: LedgerRepository) {}
+  constructor(
+    private readonly lines: LedgerRepository,
+    private readonly feed: LedgerFeed,
+  ) {}
 
   /**
    * Writes a line. Give the transaction that makes the change, so that both happen or neither does.
@@ -54,6 +74,7 @@ export class LedgerService {
       previousHash: last?.hash ?? '',
     };
     await this.lines.insert({ ...line, hash: ledgerHash(line) }, db);
+    this.feed.wake(entry.surveyId);
   }
 
   /**
@@ -61,27 +82,36 @@ export class LedgerService {
    *
    * @param blindTo a reviewer, who is told that others reviewed but not what they said: reviewers stay blind to each other
    */
-  async list(surveyId: string, query: ListQuery, blindTo?: string): Promise<List<LedgerEntry>> {
+  async list(surveyId: string, query: LedgerQuery, blindTo?: string): Promise<List<LedgerEntry>> {
     const offset = offsetOf(query.cursor);
     const order = query.sort === 'number' ? 'oldest' : 'newest';
+    const filter = { ...query, blindTo, hidden: [...REVIEW_ACTIONS] };
     const [rows, total] = await Promise.all([
-      this.lines.page(surveyId, order, query.limit, offset),
-      this.lines.count(surveyId),
+      this.lines.page(surveyId, order, query.limit, offset, filter),
+      this.lines.count(surveyId, filter),
     ]);
-    const items = rows.map(({ number, at, actor, actorId, action, subject, note, detail, hash }) => {
-      const hidden = blindTo !== undefined && actorId !== blindTo && REVIEW_ACTIONS.has(action);
-      return {
-        number,
-        at: at.toISOString(),
-        actor,
-        action: hidden ? 'reviewed a verdict' : action,
-        subject,
-        note: hidden ? '' : note,
-        detail: hidden ? {} : (detail as Record<string, unknown>),
-        hash,
-      };
-    });
-    return pageByOffset(items, total, offset);
+    return pageByOffset(
+      rows.map((row) => toEntry(row, blindTo)),
+      total,
+      offset,
+    );
+  }
+
+  /** Whole lines from the first on, with all that their hashes cover; hidden ones are left as they are told. */
+  async *whole(surveyId: string, query: LedgerExportQuery, blindTo?: string): AsyncGenerator<LedgerRow> {
+    const filter = { ...query, blindTo, hidden: [...REVIEW_ACTIONS] };
+    for (let offset = 0; ; offset += EXPORT_BLOCK) {
+      const rows = await this.lines.page(surveyId, 'oldest', EXPORT_BLOCK, offset, filter);
+      for (const row of rows)
+        yield isHidden(row, blindTo) ? { ...row, ...MASK, subject: row.subject.split(':')[0]! } : row;
+      if (rows.length < EXPORT_BLOCK) return;
+    }
+  }
+
+  async facets(surveyId: string, blindTo?: string) {
+    const { actors, actions } = await this.lines.facets(surveyId);
+    const told = blindTo ? [...actions.filter((action) => !REVIEW_ACTIONS.has(action))] : actions;
+    return { actors, actions: told };
   }
 
   /** Recomputes the chain from the first line on. */
@@ -93,10 +123,34 @@ export class LedgerService {
       for (const row of rows) {
         entries += 1;
         const fits = row.number === entries && row.previousHash === previousHash && row.hash === ledgerHash(row);
-        if (!fits) return { entries: await this.lines.count(surveyId), intact: false, brokenAt: row.number };
+        if (!fits) {
+          const all = await this.lines.count(surveyId);
+          return { entries: all, intact: false, brokenAt: row.number, lastHash: previousHash };
+        }
         previousHash = row.hash;
       }
-      if (rows.length < 1000) return { entries, intact: true, brokenAt: null };
+      if (rows.length < 1000) return { entries, intact: true, brokenAt: null, lastHash: previousHash };
     }
   }
+}
+
+const MASK = { action: MASKED_ACTION, note: '', detail: {} };
+const isHidden = ({ actorId, action }: LedgerRow, blindTo: string | undefined): boolean =>
+  blindTo !== undefined && actorId !== blindTo && REVIEW_ACTIONS.has(action);
+
+function toEntry(row: LedgerRow, blindTo: string | undefined): LedgerEntry {
+  const { number, at, actor, action, subject, note, detail, hash } = row;
+  const line = {
+    number,
+    at: at.toISOString(),
+    actor,
+    action,
+    subject,
+    note,
+    detail: detail as LedgerEntry['detail'],
+    hash,
+  };
+  if (!isHidden(row, blindTo)) return line;
+  // The object of an override stands after the colon of its subject.
+  return { ...line, ...MASK, subject: subject.split(':')[0]! };
 }

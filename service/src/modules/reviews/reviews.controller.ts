@@ -1,35 +1,34 @@
 import { listOf, listQuery, type ListQuery } from '@eremite/shared/contracts/list';
 import {
-  assignmentsRequest,
-  createOverrideRequest,
   createReviewRequest,
-  override,
   review,
-  reviewerProgress,
+  settlement,
   settleRequest,
   withdrawRequest,
-  type CreateOverrideRequest,
   type CreateReviewRequest,
   type SettleRequest,
 } from '@eremite/shared/contracts/review';
-import { Body, Controller, Delete, Get, HttpCode, Param, Post, Query, SerializeOptions } from '@nestjs/common';
+import { Body, Controller, Delete, Get, Headers, HttpCode, Param, Post, Query, SerializeOptions } from '@nestjs/common';
 import { z } from 'zod';
 import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
-import { OverridesService } from './overrides.service.ts';
 import { ReviewsService } from './reviews.service.ts';
+import { SettlementsService } from './settlements.service.ts';
 
+const uuid = z.uuid();
+
+/** What reviewers say of a verdict, and the lead's word that ends it. */
 @Controller()
 export class ReviewsController {
   constructor(
     private readonly reviews: ReviewsService,
-    private readonly overrides: OverridesService,
+    private readonly settlements: SettlementsService,
   ) {}
 
   @Get('detections/:id/reviews')
   @SerializeOptions({ schema: listOf(review) })
   list(
     @CurrentUser() user: SignedInUser,
-    @Param('id', { schema: z.uuid() }) id: string,
+    @Param('id', { schema: uuid }) id: string,
     @Query({ schema: listQuery }) query: ListQuery,
   ) {
     return this.reviews.list(user, id, query);
@@ -39,80 +38,45 @@ export class ReviewsController {
   @SerializeOptions({ schema: review })
   create(
     @CurrentUser() user: SignedInUser,
-    @Param('id', { schema: z.uuid() }) id: string,
+    @Param('id', { schema: uuid }) id: string,
     @Body({ schema: createReviewRequest }) request: CreateReviewRequest,
   ) {
     return this.reviews.create(user, id, request);
   }
 
+  /** Takes one's own review back. */
+  @Delete('reviews/:id')
+  @HttpCode(204)
+  withdraw(@CurrentUser() user: SignedInUser, @Param('id', { schema: uuid }) id: string) {
+    return this.reviews.withdraw(user, id);
+  }
+
+  @Get('detections/:id/settlements')
+  @SerializeOptions({ schema: z.object({ settlement: settlement.nullable() }) })
+  settlement(@CurrentUser() user: SignedInUser, @Param('id', { schema: uuid }) id: string) {
+    return this.settlements.get(user, id);
+  }
+
+  /** `If-Match` names the settlement that was seen; another lead's is not overwritten without it. */
   @Post('detections/:id/settlements')
   @HttpCode(204)
   settle(
     @CurrentUser() user: SignedInUser,
-    @Param('id', { schema: z.uuid() }) id: string,
+    @Param('id', { schema: uuid }) id: string,
     @Body({ schema: settleRequest }) request: SettleRequest,
+    @Headers('if-match') ifMatch?: string,
   ) {
-    return this.reviews.settle(user, id, request);
+    return this.settlements.settle(user, id, request, ifMatch);
   }
 
-  @Get('detections/:id/overrides')
-  @SerializeOptions({ schema: listOf(override) })
-  listOverrides(
+  /** Opens a settled detection again. */
+  @Delete('detections/:id/settlements')
+  @HttpCode(204)
+  reopen(
     @CurrentUser() user: SignedInUser,
-    @Param('id', { schema: z.uuid() }) id: string,
-    @Query({ schema: listQuery }) query: ListQuery,
-  ) {
-    return this.overrides.list(user, id, query);
-  }
-
-  @Post('detections/:id/overrides')
-  @SerializeOptions({ schema: override })
-  override(
-    @CurrentUser() user: SignedInUser,
-    @Param('id', { schema: z.uuid() }) id: string,
-    @Body({ schema: createOverrideRequest }) request: CreateOverrideRequest,
-  ) {
-    return this.overrides.create(user, id, request);
-  }
-
-  @Delete('overrides/:id')
-  @SerializeOptions({ schema: override })
-  withdraw(
-    @CurrentUser() user: SignedInUser,
-    @Param('id', { schema: z.uuid() }) id: string,
+    @Param('id', { schema: uuid }) id: string,
     @Body({ schema: withdrawRequest }) request: { note: string },
   ) {
-    return this.overrides.withdraw(user, id, request.note);
-  }
-
-  /** How far each reviewer is with what was assigned. */
-  @Get('surveys/:surveyId/assignments')
-  @SerializeOptions({ schema: listOf(reviewerProgress) })
-  assignments(
-    @CurrentUser() user: SignedInUser,
-    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
-    @Query({ schema: listQuery }) query: ListQuery,
-  ) {
-    return this.reviews.progress(user, surveyId, query);
-  }
-
-  @Post('surveys/:surveyId/assignments')
-  @HttpCode(204)
-  assign(
-    @CurrentUser() user: SignedInUser,
-    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
-    @Body({ schema: assignmentsRequest }) request: z.output<typeof assignmentsRequest>,
-  ) {
-    return this.reviews.assign(user, surveyId, request, true);
-  }
-
-  @Delete('surveys/:surveyId/assignments')
-  @HttpCode(204)
-  unassign(
-    @CurrentUser() user: SignedInUser,
-    @Param('surveyId', { schema: z.uuid() }) surveyId: string,
-    @Body({ schema: assignmentsRequest }) request: z.output<typeof assignmentsRequest>,
-  ) {
-    return this.reviews.assign(user, surveyId, request, false);
+    return this.settlements.reopen(user, id, request.note);
   }
 }

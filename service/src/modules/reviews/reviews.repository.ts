@@ -1,21 +1,26 @@
-import {
-  assignments,
-  catalogues,
-  detections,
-  memberships,
-  overrides,
-  reviews,
-  runs,
-  settlements,
-  users,
-} from '@eremite/schema';
+import { bindings, detections, returns, reviews, runs, settlements, users } from '@eremite/schema';
 import { Inject, Injectable } from '@nestjs/common';
-import { alias } from 'drizzle-orm/pg-core';
-import { and, asc, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
+import { and, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
-const withdrawer = alias(users, 'withdrawer');
+export type ReviewRow = Awaited<ReturnType<ReviewsRepository['list']>>[number];
+const columns = {
+  id: reviews.id,
+  detectionId: reviews.detectionId,
+  runId: reviews.runId,
+  runNumber: runs.number,
+  reviewerId: reviews.reviewerId,
+  reviewer: users.name,
+  starlight: reviews.starlight,
+  surroundings: reviews.surroundings,
+  outcome: reviews.outcome,
+  note: reviews.note,
+  blind: reviews.blind,
+  carriedFrom: reviews.carriedFrom,
+  createdAt: reviews.createdAt,
+};
 
+/** Reviews and settlements. */
 @Injectable()
 export class ReviewsRepository {
   constructor(@Inject(DATABASE) private readonly db: Database) {}
@@ -29,38 +34,47 @@ export class ReviewsRepository {
     return row;
   }
 
-  async detectionsOf(surveyId: string, ids: readonly string[], db = this.db) {
-    return db
-      .select({ id: detections.id })
-      .from(detections)
-      .where(and(eq(detections.surveyId, surveyId), inArray(detections.id, [...ids])));
+  /** Holds a detection until the transaction ends, so that two who decide at once take turns. */
+  async lock(detectionId: string, db: Database): Promise<void> {
+    await db.select({ id: detections.id }).from(detections).where(eq(detections.id, detectionId)).for('update');
   }
 
-  async catalogue(id: string, db = this.db) {
-    const [row] = await db.select().from(catalogues).where(eq(catalogues.id, id));
-    return row;
+  /** The detection and those of earlier versions of its table that it is known to be. */
+  async lineage(detectionId: string, db = this.db): Promise<string[]> {
+    const rows = await db.execute<{ id: string }>(sql`
+      with recursive line(id) as (
+        select ${detectionId}::uuid
+        union
+        select b.detection_id from ${bindings} b join line on b.successor_id = line.id
+        where b.kind = 'detection' and b.state in ('sure', 'answered')
+      ) select id from line`);
+    return (rows as unknown as { rows: { id: string }[] }).rows.map(({ id }) => id);
   }
 
-  /** Current reviews of a detection, newest first. */
-  list(detectionId: string, db = this.db) {
+  #select(db: Database) {
     return db
-      .select({
-        id: reviews.id,
-        detectionId: reviews.detectionId,
-        runId: reviews.runId,
-        runNumber: runs.number,
-        reviewerId: reviews.reviewerId,
-        reviewer: users.name,
-        starlight: reviews.starlight,
-        surroundings: reviews.surroundings,
-        note: reviews.note,
-        createdAt: reviews.createdAt,
-      })
+      .select(columns)
+      .from(reviews)
+      .innerJoin(users, eq(users.id, reviews.reviewerId))
+      .innerJoin(runs, eq(runs.id, reviews.runId));
+  }
+
+  /** Reviews in force of some detections, carried ones among them, newest first. */
+  list(detectionIds: readonly string[], db = this.db) {
+    return this.#select(db)
+      .where(and(inArray(reviews.detectionId, [...detectionIds]), isNull(reviews.supersededAt)))
+      .orderBy(desc(reviews.createdAt), desc(runs.number));
+  }
+
+  async find(id: string, db = this.db) {
+    const [row] = await db
+      .select({ ...columns, supersededAt: reviews.supersededAt, surveyId: detections.surveyId, name: detections.name })
       .from(reviews)
       .innerJoin(users, eq(users.id, reviews.reviewerId))
       .innerJoin(runs, eq(runs.id, reviews.runId))
-      .where(and(eq(reviews.detectionId, detectionId), isNull(reviews.supersededAt)))
-      .orderBy(desc(reviews.createdAt));
+      .innerJoin(detections, eq(detections.id, reviews.detectionId))
+      .where(eq(reviews.id, id));
+    return row;
   }
 
   /** A reviewer's later word on the same run takes the place of the earlier one, which is kept. */
@@ -76,127 +90,103 @@ export class ReviewsRepository {
     return row!.id;
   }
 
-  async settle(values: typeof settlements.$inferInsert, db: Database): Promise<void> {
-    const current = and(eq(settlements.detectionId, values.detectionId), isNull(settlements.supersededAt));
-    await db.update(settlements).set({ supersededAt: new Date() }).where(current);
-    await db.insert(settlements).values(values);
+  /** Takes a review and what was carried of it back; the word it had replaced on the run, if any, holds again. */
+  async withdraw(row: { id: string; detectionId: string; runId: string; reviewerId: string }, db: Database) {
+    const now = new Date();
+    const gone = await db
+      .update(reviews)
+      .set({ supersededAt: now, withdrawnAt: now })
+      .where(and(sql`(${reviews.id} = ${row.id} or ${reviews.carriedFrom} = ${row.id})`, isNull(reviews.supersededAt)))
+      .returning({ id: reviews.id });
+    if (gone.length === 0) return false;
+    const [earlier] = await db
+      .select({ id: reviews.id })
+      .from(reviews)
+      .where(
+        and(
+          eq(reviews.detectionId, row.detectionId),
+          eq(reviews.runId, row.runId),
+          eq(reviews.reviewerId, row.reviewerId),
+          isNull(reviews.withdrawnAt),
+        ),
+      )
+      .orderBy(desc(reviews.supersededAt))
+      .limit(1);
+    if (earlier) await db.update(reviews).set({ supersededAt: null }).where(eq(reviews.id, earlier.id));
+    return true;
   }
 
-  #overrides(db: Database) {
+  /** What came back of some detections in a run. */
+  returnsOf(runId: string, detectionIds: readonly string[], db = this.db) {
     return db
+      .select()
+      .from(returns)
+      .where(and(eq(returns.runId, runId), inArray(returns.detectionId, [...detectionIds])));
+  }
+
+  async settlement(detectionId: string, db = this.db) {
+    const [row] = await db
       .select({
-        id: overrides.id,
-        detectionId: overrides.detectionId,
-        surveyId: detections.surveyId,
-        detectionName: detections.name,
-        catalogueId: overrides.catalogueId,
-        rowId: overrides.row,
-        objectName: overrides.objectName,
-        action: overrides.action,
-        note: overrides.note,
+        id: settlements.id,
+        detectionId: settlements.detectionId,
+        runNumber: runs.number,
+        starlight: settlements.starlight,
+        surroundings: settlements.surroundings,
+        outcome: settlements.outcome,
+        note: settlements.note,
+        moved: settlements.moved,
         by: users.name,
-        createdById: overrides.createdBy,
-        createdAt: overrides.createdAt,
-        withdrawnAt: overrides.withdrawnAt,
-        withdrawnBy: withdrawer.name,
-        withdrawnNote: overrides.withdrawnNote,
+        settledBy: settlements.settledBy,
+        createdAt: settlements.createdAt,
+        carriedFrom: settlements.carriedFrom,
       })
-      .from(overrides)
-      .innerJoin(detections, eq(detections.id, overrides.detectionId))
-      .innerJoin(users, eq(users.id, overrides.createdBy))
-      .leftJoin(withdrawer, eq(withdrawer.id, overrides.withdrawnBy));
-  }
-
-  overridesOf(detectionId: string, db = this.db) {
-    return this.#overrides(db).where(eq(overrides.detectionId, detectionId)).orderBy(desc(overrides.createdAt));
-  }
-
-  async override(id: string, db = this.db) {
-    const [row] = await this.#overrides(db).where(eq(overrides.id, id));
+      .from(settlements)
+      .innerJoin(users, eq(users.id, settlements.settledBy))
+      .innerJoin(runs, eq(runs.id, settlements.runId))
+      .where(and(eq(settlements.detectionId, detectionId), isNull(settlements.supersededAt)));
     return row;
   }
 
-  async insertOverride(values: typeof overrides.$inferInsert, db: Database): Promise<string> {
-    const [row] = await db.insert(overrides).values(values).returning({ id: overrides.id });
+  async settle(values: typeof settlements.$inferInsert, db: Database): Promise<string> {
+    await this.unsettle(values.detectionId, db);
+    const [row] = await db.insert(settlements).values(values).returning({ id: settlements.id });
     return row!.id;
   }
 
-  /** Withdraws what is in force on the same pair, so that the new word stands alone. */
-  async withdrawPair(
-    detectionId: string,
-    catalogueId: string,
-    row: number,
-    by: string,
-    note: string,
-    db: Database,
-  ): Promise<void> {
-    const pair = and(
-      eq(overrides.detectionId, detectionId),
-      eq(overrides.catalogueId, catalogueId),
-      eq(overrides.row, row),
-      isNull(overrides.withdrawnAt),
-    );
-    await db.update(overrides).set({ withdrawnAt: new Date(), withdrawnBy: by, withdrawnNote: note }).where(pair);
+  /** Ends the settlement in force, if any. */
+  async unsettle(detectionId: string, db: Database): Promise<void> {
+    const current = and(eq(settlements.detectionId, detectionId), isNull(settlements.supersededAt));
+    await db.update(settlements).set({ supersededAt: new Date() }).where(current);
   }
 
-  async withdraw(id: string, by: string, note: string, db: Database): Promise<boolean> {
-    const rows = await db
-      .update(overrides)
-      .set({ withdrawnAt: new Date(), withdrawnBy: by, withdrawnNote: note })
-      .where(and(eq(overrides.id, id), isNull(overrides.withdrawnAt)))
-      .returning({ id: overrides.id });
-    return rows.length > 0;
-  }
-
-  async member(teamId: string, userId: string, db = this.db) {
-    const [row] = await db
-      .select({ role: memberships.role, name: users.name })
-      .from(memberships)
-      .innerJoin(users, eq(users.id, memberships.userId))
-      .where(and(eq(memberships.teamId, teamId), eq(memberships.userId, userId)));
-    return row;
-  }
-
-  async assign(detectionIds: readonly string[], userId: string, db: Database): Promise<void> {
-    const rows = detectionIds.map((detectionId) => ({ detectionId, userId }));
-    for (let from = 0; from < rows.length; from += 1000) {
-      await db
-        .insert(assignments)
-        .values(rows.slice(from, from + 1000))
-        .onConflictDoNothing();
-    }
-  }
-
-  async unassign(detectionIds: readonly string[], userId: string, db: Database): Promise<void> {
-    await db
-      .delete(assignments)
-      .where(and(inArray(assignments.detectionId, [...detectionIds]), eq(assignments.userId, userId)));
-  }
-
-  /** Detections assigned to each reviewer of a survey, and how many of them he has reviewed on the latest finished run. */
-  progress(surveyId: string, db = this.db) {
-    const latest = sql`(select r.id from ${runs} r where r.survey_id = ${surveyId} and r.state = 'done' order by r.number desc limit 1)`;
-    const done = sql`exists (select 1 from ${reviews} v where v.detection_id = ${assignments.detectionId} and v.reviewer_id = ${assignments.userId} and v.run_id = ${latest} and v.superseded_at is null)`;
-    return db
-      .select({
-        userId: assignments.userId,
-        name: users.name,
-        assigned: sql<number>`count(*)::int`,
-        reviewed: sql<number>`(count(*) filter (where ${done}))::int`,
-      })
-      .from(assignments)
-      .innerJoin(detections, eq(detections.id, assignments.detectionId))
-      .innerJoin(users, eq(users.id, assignments.userId))
-      .where(eq(detections.surveyId, surveyId))
-      .groupBy(assignments.userId, users.name)
-      .orderBy(asc(users.name));
-  }
-
-  assignedOf(detectionId: string, db = this.db) {
-    return db
-      .select({ userId: assignments.userId })
-      .from(assignments)
-      .where(eq(assignments.detectionId, detectionId))
-      .orderBy(asc(assignments.createdAt));
+  /** Pairs of blind words on the same detection of the same run, for the agreement of reviewers. */
+  async blindPairs(surveyId: string, db = this.db) {
+    // The last word a reviewer gave blind on a run: what she says after seeing the other's does not count.
+    const { rows } = (await db.execute(sql`
+      with words as (
+        select distinct on (v.detection_id, v.run_id, v.reviewer_id)
+          v.detection_id, v.run_id, v.reviewer_id, u.name, v.starlight, v.surroundings, v.outcome
+        from ${reviews} v join ${detections} d on d.id = v.detection_id join ${users} u on u.id = v.reviewer_id
+        where d.survey_id = ${surveyId} and v.blind and v.carried_from is null and v.withdrawn_at is null
+        order by v.detection_id, v.run_id, v.reviewer_id, v.created_at desc
+      )
+      select a.reviewer_id as "firstId", a.name as "first", b.reviewer_id as "secondId", b.name as "second",
+        a.starlight as "starlightA", b.starlight as "starlightB",
+        a.surroundings as "surroundingsA", b.surroundings as "surroundingsB", a.outcome as "outcomeA", b.outcome as "outcomeB"
+      from words a join words b on a.detection_id = b.detection_id and a.run_id = b.run_id and a.reviewer_id < b.reviewer_id
+      order by a.name, b.name, a.detection_id`)) as unknown as { rows: Record<BlindPairKey, string>[] };
+    return rows;
   }
 }
+
+type BlindPairKey =
+  | 'firstId'
+  | 'first'
+  | 'secondId'
+  | 'second'
+  | 'starlightA'
+  | 'starlightB'
+  | 'surroundingsA'
+  | 'surroundingsB'
+  | 'outcomeA'
+  | 'outcomeB';

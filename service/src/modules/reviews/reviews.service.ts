@@ -1,136 +1,149 @@
+import type { Attachment } from '@eremite/shared/contracts/attachment';
+import type { Moved } from '@eremite/shared/contracts/evidence-moved';
 import type { List, ListQuery } from '@eremite/shared/contracts/list';
-import type { CreateReviewRequest, Review, ReviewerProgress, SettleRequest } from '@eremite/shared/contracts/review';
-import type { TeamRole } from '@eremite/shared/contracts/words';
+import type { CreateReviewRequest, Review } from '@eremite/shared/contracts/review';
 import { Injectable } from '@nestjs/common';
-import { AccessService, type Need } from '../../common/access.ts';
 import { AppError } from '../../common/app-error.ts';
 import { pageOf } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { VerdictsService } from '../runs/verdicts.service.ts';
-import { ReviewsRepository } from './reviews.repository.ts';
+import { AttachmentsService } from './attachments.service.ts';
+import { CarryOverService } from './carry-over.service.ts';
+import { DetectionAccess } from './detection-access.ts';
+import { type ReviewRow, ReviewsRepository } from './reviews.repository.ts';
 
-/** What people say of a verdict: reviews of reviewers, the lead's settled word. */
+/** What reviewers say of a verdict. */
 @Injectable()
 export class ReviewsService {
   constructor(
     private readonly reviews: ReviewsRepository,
     private readonly verdicts: VerdictsService,
-    private readonly access: AccessService,
+    private readonly access: DetectionAccess,
+    private readonly carrying: CarryOverService,
+    private readonly attachments: AttachmentsService,
     private readonly ledger: LedgerService,
   ) {}
 
-  /** The detection, if the account may do what it needs with its survey. */
-  async detection(user: SignedInUser, id: string, need: Need) {
-    const detection = await this.reviews.detection(id);
-    if (!detection) throw new AppError('NOT_FOUND', 'There is no such detection.');
-    const { role, survey } = await this.access.survey(user, detection.surveyId, need);
-    return { detection, role, survey };
-  }
-
   /** Reviews that the account may see: a reviewer sees the others' only after giving one (blind to each other until then). */
   async list(user: SignedInUser, detectionId: string, query: ListQuery): Promise<List<Review>> {
-    const { role } = await this.detection(user, detectionId, 'read');
-    const rows = await this.reviews.list(detectionId);
-    return pageOf(await this.#visible(rows, user, role), query);
+    const { detection, role } = await this.access.detection(user, detectionId, 'read');
+    const rows = await this.reviews.list(await this.reviews.lineage(detectionId));
+    return pageOf(await this.#describe(visible(rows, user, role), user, detection), query);
   }
 
-  async #visible(
-    rows: Awaited<ReturnType<ReviewsRepository['list']>>,
-    user: SignedInUser,
-    role: TeamRole,
-  ): Promise<Review[]> {
-    const mine = new Set(rows.filter((row) => row.reviewerId === user.id).map((row) => row.runId));
-    const open = rows.filter((row) => role !== 'reviewer' || mine.has(row.runId));
+  async create(user: SignedInUser, detectionId: string, request: CreateReviewRequest): Promise<Review> {
+    const { detection, role } = await this.access.detection(user, detectionId, 'review');
+    const { attachmentIds, ...word } = request;
+    const computed = await this.access.computed(detection.surveyId, word.runId, detectionId);
+    const agrees = word.outcome === 'verdict' && sameWords(computed, word);
+    if (!agrees && word.note === '') throw needsNote(word.outcome, computed);
+    const lineage = await this.reviews.lineage(detectionId);
+    const id = await this.reviews.transaction(async (tx) => {
+      await this.reviews.lock(detectionId, tx);
+      const rows = await this.reviews.list(lineage, tx);
+      const blind = visible(rows, user, role).every((row) => row.reviewerId === user.id);
+      const before = rows.find((row) => row.reviewerId === user.id && row.runId === word.runId);
+      const id = await this.reviews.insert({ detectionId, reviewerId: user.id, blind, ...word }, tx);
+      await this.attachments.attach(user, detectionId, id, attachmentIds, tx);
+      const { starlight, surroundings, outcome, runId } = word;
+      const detail = {
+        detectionId,
+        reviewId: id,
+        runId,
+        starlight,
+        surroundings,
+        outcome,
+        computed,
+        blind,
+        before: before ? wordsOf(before) : null,
+        after: wordsOf(word),
+        ...(attachmentIds.length > 0 && { attachmentIds }),
+      };
+      const action = agrees ? 'agreed with a verdict' : 'departed from a verdict';
+      await this.ledger.append(
+        { surveyId: detection.surveyId, actor: user, action, subject: detection.name, note: word.note, detail },
+        tx,
+      );
+      await this.carrying.catchUp(detection.surveyId, id, tx);
+      return id;
+    });
+    const rows = visible(await this.reviews.list(lineage), user, role);
+    return (await this.#describe(rows, user, detection)).find((review) => review.id === id)!;
+  }
+
+  /** Takes one's own word back; what it had replaced on the run holds again. */
+  async withdraw(user: SignedInUser, id: string): Promise<void> {
+    const row = await this.reviews.find(id);
+    if (!row) throw new AppError('NOT_FOUND', 'There is no such review.');
+    await this.access.detection(user, row.detectionId, 'review');
+    if (row.reviewerId !== user.id) throw new AppError('NOT_ALLOWED', 'Only its author may take a review back.');
+    await this.reviews.transaction(async (tx) => {
+      if (!(await this.reviews.withdraw(row, tx))) throw new AppError('CONFLICT', 'It was taken back already.');
+      const { surveyId, detectionId, runId } = row;
+      const detail = { detectionId, reviewId: id, runId, before: wordsOf(row), after: null };
+      await this.ledger.append({ surveyId, actor: user, action: 'took a review back', subject: row.name, detail }, tx);
+    });
+  }
+
+  async #describe(rows: ReviewRow[], user: SignedInUser, detection: { id: string; surveyId: string }) {
+    const { given, carried } = apart(rows, detection.id);
+    const files = await this.attachments.of(given.map(({ id }) => id));
+    const latest = await this.verdicts.latestRun(detection.surveyId);
+    const returned = latest ? await this.reviews.returnsOf(latest.id, [detection.id]) : [];
     return Promise.all(
-      open.map(async ({ reviewerId, createdAt, ...row }) => {
+      given.map(async ({ reviewerId, createdAt, carriedFrom, ...row }): Promise<Review> => {
         const computed = await this.verdicts.computed(row.runId, row.detectionId);
+        const root = carriedFrom ?? row.id;
+        const to = carried.filter((entry) => entry.carriedFrom === root).map((entry) => entry.runNumber);
+        const back = returned.find((entry) => entry.reviewId === root);
         return {
           ...row,
           mine: reviewerId === user.id,
-          agrees: computed?.starlight === row.starlight && computed.surroundings === row.surroundings,
+          agrees: row.outcome === 'verdict' && computed !== undefined && sameWords(computed, row),
           createdAt: createdAt.toISOString(),
+          carriedTo: to.length > 0 ? Math.max(...to) : null,
+          returned: back && latest ? { runNumber: latest.number, moved: back.moved as Moved[] } : null,
+          attachments: files.get(row.id) ?? ([] as Attachment[]),
         } as Review;
       }),
     );
   }
+}
 
-  async create(user: SignedInUser, detectionId: string, request: CreateReviewRequest): Promise<Review> {
-    const { detection, role } = await this.detection(user, detectionId, 'review');
-    const computed = await this.#computed(detection.surveyId, request.runId, detectionId);
-    const agrees = computed.starlight === request.starlight && computed.surroundings === request.surroundings;
-    if (!agrees && request.note === '') {
-      const detail = `The computed verdict is ${computed.starlight}, ${computed.surroundings}; say in a note why you depart from it.`;
-      throw new AppError('VALIDATION_FAILED', detail, [
-        { pointer: '/note', detail: 'a note is needed to depart from the computed verdict' },
-      ]);
-    }
-    const id = await this.reviews.transaction(async (tx) => {
-      const id = await this.reviews.insert({ detectionId, reviewerId: user.id, ...request }, tx);
-      const action = agrees ? 'agreed with a verdict' : 'departed from a verdict';
-      const { starlight, surroundings, runId } = request;
-      const detail = { reviewId: id, runId, starlight, surroundings, computed };
-      await this.ledger.append(
-        { surveyId: detection.surveyId, actor: user, action, subject: detection.name, note: request.note, detail },
-        tx,
-      );
-      return id;
-    });
-    return (await this.#visible(await this.reviews.list(detectionId), user, role)).find((review) => review.id === id)!;
-  }
+/** Of the rows in force, those that an account may see; carried rows count as having spoken, for they are one's own words. */
+function visible(rows: readonly ReviewRow[], user: SignedInUser, role: string): ReviewRow[] {
+  if (role !== 'reviewer') return [...rows];
+  const spokenOn = new Set(rows.filter((row) => row.reviewerId === user.id).map((row) => row.runId));
+  const roots = new Set(rows.filter((row) => spokenOn.has(row.runId)).map((row) => row.carriedFrom ?? row.id));
+  return rows.filter((row) => spokenOn.has(row.runId) || roots.has(row.id));
+}
 
-  async settle(user: SignedInUser, detectionId: string, request: SettleRequest): Promise<void> {
-    const { detection } = await this.detection(user, detectionId, 'lead');
-    const computed = await this.#computed(detection.surveyId, request.runId, detectionId);
-    await this.reviews.transaction(async (tx) => {
-      await this.reviews.settle({ detectionId, settledBy: user.id, ...request }, tx);
-      const detail = {
-        runId: request.runId,
-        starlight: request.starlight,
-        surroundings: request.surroundings,
-        computed,
-      };
-      const entry = { surveyId: detection.surveyId, actor: user, action: 'settled a verdict', subject: detection.name };
-      await this.ledger.append({ ...entry, note: request.note, detail }, tx);
-    });
-  }
+/** The words that were given, and the rows that only carry one of them on. */
+function apart(rows: readonly ReviewRow[], detectionId: string): { given: ReviewRow[]; carried: ReviewRow[] } {
+  const ids = new Set(rows.map(({ id }) => id));
+  const isCopy = (row: ReviewRow) => row.carriedFrom !== null && ids.has(row.carriedFrom);
+  return {
+    given: rows.filter((row) => !isCopy(row) && (row.carriedFrom === null || row.detectionId === detectionId)),
+    carried: rows.filter((row) => row.carriedFrom !== null),
+  };
+}
 
-  async #computed(surveyId: string, runId: string, detectionId: string) {
-    const computed = await this.verdicts.computed(runId, detectionId, surveyId);
-    if (!computed) throw new AppError('NOT_FOUND', 'That run has no verdict on this detection.');
-    return computed;
-  }
+const sameWords = (a: { starlight: string; surroundings: string }, b: { starlight: string; surroundings: string }) =>
+  a.starlight === b.starlight && a.surroundings === b.surroundings;
+const wordsOf = (row: { starlight: string; surroundings: string; outcome: string; note: string }) => ({
+  starlight: row.starlight,
+  surroundings: row.surroundings,
+  outcome: row.outcome,
+  note: row.note,
+});
 
-  /** How far each reviewer is; says nothing of what was decided. */
-  async progress(user: SignedInUser, surveyId: string, query: ListQuery): Promise<List<ReviewerProgress>> {
-    await this.access.survey(user, surveyId, 'lead');
-    return pageOf(await this.reviews.progress(surveyId), query);
-  }
-
-  /** Puts detections on a reviewer's docket, or takes them off. */
-  async assign(
-    user: SignedInUser,
-    surveyId: string,
-    request: { detectionIds: string[]; userId: string },
-    on: boolean,
-  ): Promise<void> {
-    const { survey } = await this.access.survey(user, surveyId, 'lead');
-    const member = await this.reviews.member(survey.teamId, request.userId);
-    if (!member || member.role === 'observer') {
-      throw new AppError('VALIDATION_FAILED', 'Only a lead or a reviewer of the team can be given detections.', [
-        { pointer: '/userId', detail: 'not a reviewer of this team' },
-      ]);
-    }
-    const known = await this.reviews.detectionsOf(surveyId, request.detectionIds);
-    if (known.length !== new Set(request.detectionIds).size)
-      throw new AppError('NOT_FOUND', 'Some of these detections are not of this survey.');
-    await this.reviews.transaction(async (tx) => {
-      await this.reviews[on ? 'assign' : 'unassign'](request.detectionIds, request.userId, tx);
-      const action = on ? 'assigned detections' : 'took detections back';
-      await this.ledger.append(
-        { surveyId, actor: user, action, subject: `${known.length} for ${member.name}`, detail: { ...request } },
-        tx,
-      );
-    });
-  }
+function needsNote(outcome: string, computed: { starlight: string; surroundings: string }): AppError {
+  const detail =
+    outcome === 'verdict'
+      ? `The computed verdict is ${computed.starlight}, ${computed.surroundings}; say in a note why you depart from it.`
+      : `Say in a note why your answer is "${outcome}".`;
+  return new AppError('VALIDATION_FAILED', detail, [
+    { pointer: '/note', detail: 'a note is needed to depart from the computed verdict' },
+  ]);
 }

@@ -54,10 +54,15 @@ export function whyChanged(from: VerdictSummary, to: VerdictSummary): string[] {
   return why;
 }
 
-/** Detections whose verdict words differ, or whose P(none) moved by more than a hundredth. */
+/**
+ * Detections whose verdict words differ, or whose P(none) moved by more than a hundredth.
+ *
+ * @param causesOf which changed inputs can have moved a detection
+ */
 export function compareVerdicts(
   from: readonly VerdictSummary[],
   to: readonly VerdictSummary[],
+  causesOf: (detectionId: string) => string[] = () => [],
 ): Pick<Difference, 'changed' | 'unchanged'> {
   const before = new Map(from.map((row) => [row.detectionId, row]));
   const after = new Map(to.map((row) => [row.detectionId, row]));
@@ -77,6 +82,7 @@ export function compareVerdicts(
         surroundings: [a?.surroundings ?? null, b?.surroundings ?? null],
         pNone: [a?.pNone ?? null, b?.pNone ?? null],
         why: a && b ? whyChanged(a, b) : [a ? 'not in the later run' : 'not in the earlier run'],
+        causes: causesOf(id),
       });
     }
   }

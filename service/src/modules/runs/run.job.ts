@@ -2,6 +2,7 @@ import { Inject, Injectable } from '@nestjs/common';
 import { ENV, type Env } from '../../config/env.ts';
 import { type BulkColumn, BulkStore, type BulkType } from '../../database/bulk.ts';
 import { JsonText } from '../../database/json-text.ts';
+import { SurveyHooks } from '../../common/survey-hooks.ts';
 import type { JobContext, JobHandler } from '../../jobs/job-handler.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { RunInputs } from './run-inputs.ts';
@@ -58,6 +59,7 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
     private readonly inputs: RunInputs,
     private readonly bulk: BulkStore,
     private readonly ledger: LedgerService,
+    private readonly hooks: SurveyHooks,
     @Inject(ENV) private readonly env: Env,
   ) {}
 
@@ -121,6 +123,7 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
         },
         tx,
       );
+      await this.hooks.runFinishing({ id: run.id, surveyId: run.surveyId, number: run.number, actor }, tx);
     });
   }
 

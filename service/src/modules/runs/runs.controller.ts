@@ -10,7 +10,7 @@ import {
   type VerdictsQuery,
 } from '@eremite/shared/contracts/run';
 import { surveyOverview } from '@eremite/shared/contracts/survey';
-import { docketItem, docketQuery } from '@eremite/shared/contracts/review';
+import { docketItem, docketQuery } from '@eremite/shared/contracts/docket';
 import { verdictDetail, verdictItem } from '@eremite/shared/contracts/verdict';
 import { Body, Controller, Get, HttpCode, Param, Post, Query, Res, SerializeOptions } from '@nestjs/common';
 import type { Response } from 'express';

@@ -167,7 +167,7 @@ export class RunsRepository {
   /** (catalogue, row) to id of the detections of some tables. */
   detectionIds(catalogueIds: readonly string[], db = this.db) {
     return db
-      .select({ id: detections.id, catalogueId: detections.catalogueId, row: detections.row })
+      .select({ id: detections.id, catalogueId: detections.catalogueId, row: detections.row, name: detections.name })
       .from(detections)
       .where(inArray(detections.catalogueId, [...catalogueIds]));
   }

@@ -8,12 +8,14 @@ import { AccessService } from '../../common/access.ts';
 import { AppError } from '../../common/app-error.ts';
 import { pageOf } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
+import { SurveyHooks } from '../../common/survey-hooks.ts';
 import { JobsService } from '../../jobs/jobs.service.ts';
 import { SCORING_VERSION } from '../../scoring/version.ts';
 import { CriteriaService } from '../criteria/criteria.service.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
+import { decisionChanges } from './decision-changes.ts';
 import { changedKeys, compareVerdicts, type VerdictSummary } from './difference.ts';
-import { RunInputs } from './run-inputs.ts';
+import { RunInputs, type StoredDecisions } from './run-inputs.ts';
 import { RunJob } from './run.job.ts';
 import { type RunRow, RunsRepository } from './runs.repository.ts';
 import { VerdictsRepository } from './verdicts.repository.ts';
@@ -30,6 +32,7 @@ export class RunsService implements OnModuleInit {
     private readonly inputs: RunInputs,
     private readonly access: AccessService,
     private readonly ledger: LedgerService,
+    private readonly hooks: SurveyHooks,
   ) {}
 
   onModuleInit(): void {
@@ -94,6 +97,7 @@ export class RunsService implements OnModuleInit {
       rows,
       sha256: contentHash,
     }));
+    await this.hooks.runStarting(surveyId);
     const decisions = await this.inputs.decisionsNow(survey, tables);
     const inputHash = hashOf({
       criteria: criteria.settings,
@@ -136,19 +140,52 @@ export class RunsService implements OnModuleInit {
     if (to.surveyId !== from.surveyId) throw new AppError('NOT_FOUND', 'The two runs are of different surveys.');
     const settings = async (run: Run) => (await this.criteria.get(user, run.criteriaId)).settings as CriteriaSettings;
     const summaries = async (run: Run) => (await this.verdicts.summary(run.id)) as VerdictSummary[];
-    const before = new Map(from.inputs.map((input) => [input.sha256, input.name]));
-    const after = new Map(to.inputs.map((input) => [input.sha256, input.name]));
+    const inputsChanged = changedInputs(from.inputs, to.inputs);
+    const criteriaChanged = changedKeys(await settings(from), await settings(to));
+    const decisionsChanged = await this.#decisionsChanged(from.id, to.id);
+    const ofAll = [
+      ...criteriaChanged.map(({ key }) => `criterion ${key}`),
+      ...inputsChanged.map((change) => `table ${change}`),
+      ...decisionsChanged.filter(({ detectionId }) => detectionId === null).map(({ change }) => change),
+    ];
+    const own = new Map<string, string[]>();
+    for (const { detectionId, change } of decisionsChanged)
+      if (detectionId) own.set(detectionId, [...(own.get(detectionId) ?? []), change]);
+    // What was changed for one detection moves the others only through what the run learns from the survey.
+    const learnt = ofAll.length === 0 && own.size > 0 ? ['words on other detections, through what the run learnt'] : [];
+    const causesOf = (id: string) => [...(own.get(id) ?? []), ...(ofAll.length > 0 || own.has(id) ? ofAll : learnt)];
     return {
       from: { id: from.id, number: from.number },
       to: { id: to.id, number: to.number },
-      criteriaChanged: changedKeys(await settings(from), await settings(to)),
-      inputsChanged: [
-        ...[...after].filter(([hash]) => !before.has(hash)).map(([, name]) => `new: ${name}`),
-        ...[...before].filter(([hash]) => !after.has(hash)).map(([, name]) => `gone: ${name}`),
-      ],
-      ...compareVerdicts(await summaries(from), await summaries(to)),
+      criteriaChanged,
+      inputsChanged,
+      decisionsChanged,
+      ...compareVerdicts(await summaries(from), await summaries(to), causesOf),
     };
   }
+
+  async #decisionsChanged(fromId: string, toId: string): Promise<z.output<typeof runDifference>['decisionsChanged']> {
+    const [from, to] = [(await this.runs.find(fromId))!, (await this.runs.find(toId))!];
+    const changes = decisionChanges(from.decisions as StoredDecisions, to.decisions as StoredDecisions);
+    const lists = [...new Set(changes.flatMap(({ catalogueId }) => catalogueId ?? []))];
+    const rows = lists.length > 0 ? await this.runs.detectionIds(lists) : [];
+    const found = new Map(rows.map((row) => [`${row.catalogueId}/${row.row}`, row]));
+    return changes.map(({ catalogueId, row, change }) => {
+      const detection = found.get(`${catalogueId}/${row}`);
+      return { detectionId: detection?.id ?? null, name: detection?.name ?? '', change };
+    });
+  }
+}
+
+type Inputs = Run['inputs'];
+/** Tables that only one of two runs read, by their content. */
+function changedInputs(from: Inputs, to: Inputs): string[] {
+  const before = new Map(from.map((input) => [input.sha256, input.name]));
+  const after = new Map(to.map((input) => [input.sha256, input.name]));
+  return [
+    ...[...after].filter(([hash]) => !before.has(hash)).map(([, name]) => `new: ${name}`),
+    ...[...before].filter(([hash]) => !after.has(hash)).map(([, name]) => `gone: ${name}`),
+  ];
 }
 
 function hashOf(value: unknown): string {

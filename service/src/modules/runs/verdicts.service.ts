@@ -1,6 +1,7 @@
 import type { List } from '@eremite/shared/contracts/list';
 import type { VerdictsQuery } from '@eremite/shared/contracts/run';
-import type { VerdictDetail, VerdictItem } from '@eremite/shared/contracts/verdict';
+import type { Run } from '@eremite/shared/contracts/run';
+import type { Doubt, VerdictDetail, VerdictItem } from '@eremite/shared/contracts/verdict';
 import type { StarlightVerdict, SurroundingsVerdict } from '@eremite/shared/contracts/words';
 import { Injectable } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
@@ -40,7 +41,7 @@ export class VerdictsService {
     ]);
     const said = await this.verdicts.said(rows.map((row) => row.detectionId));
     return pageByOffset(
-      rows.map((row) => withSaid(row.item as VerdictItem, row.detectionId, said)),
+      rows.map((row) => withSaid(row.item as VerdictItem, row.detectionId, runId, said)),
       total,
       offset,
     );
@@ -63,7 +64,8 @@ export class VerdictsService {
       const ids = detectionIds.slice(from, from + 1000);
       const rows = await this.verdicts.page(runId, { detectionIds: ids }, { limit: ids.length, offset: 0 });
       const said = await this.verdicts.said(ids);
-      for (const row of rows) found.set(row.detectionId, withSaid(row.item as VerdictItem, row.detectionId, said));
+      for (const row of rows)
+        found.set(row.detectionId, withSaid(row.item as VerdictItem, row.detectionId, runId, said));
     }
     return found;
   }
@@ -78,6 +80,17 @@ export class VerdictsService {
     const row = await this.verdicts.find(runId, detectionId);
     const item = row?.item as VerdictItem | undefined;
     return item && { starlight: item.starlight, surroundings: item.surroundings };
+  }
+
+  /** The newest finished run of a survey. */
+  latestRun(surveyId: string): Promise<Run | undefined> {
+    return this.runs.latestDone(surveyId);
+  }
+
+  /** A doubt as a run judged it, whatever its grade. */
+  async doubt(runId: string, detectionId: string, name: string): Promise<Doubt | undefined> {
+    const row = await this.verdicts.find(runId, detectionId);
+    return (row?.detail as VerdictDetail | undefined)?.doubts.find((doubt) => doubt.name === name);
   }
 
   /** Everything behind one verdict. */
@@ -100,7 +113,7 @@ export class VerdictsService {
       runId,
       runNumber: run.number,
       criteriaNumber: run.criteriaNumber,
-      verdict: withSaid(row.item as VerdictItem, detectionId, said),
+      verdict: withSaid(row.item as VerdictItem, detectionId, runId, said),
       candidates,
       neighbours: readNeighbours(row.neighbours, run.inputs),
     };
@@ -108,7 +121,7 @@ export class VerdictsService {
 }
 
 /** The stored item with what people said of the detection since. */
-function withSaid(item: VerdictItem, detectionId: string, said: Said): VerdictItem {
+function withSaid(item: VerdictItem, detectionId: string, runId: string, said: Said): VerdictItem {
   const settled = said.settled.find((entry) => entry.detectionId === detectionId);
   return {
     ...item,
@@ -116,11 +129,13 @@ function withSaid(item: VerdictItem, detectionId: string, said: Said): VerdictIt
       ? {
           starlight: settled.starlight as StarlightVerdict,
           surroundings: settled.surroundings as SurroundingsVerdict,
+          outcome: settled.outcome,
           by: settled.by,
           note: settled.note,
+          stands: settled.moved === null,
         }
       : null,
-    reviews: said.reviews.filter((entry) => entry.detectionId === detectionId).length,
+    reviews: said.reviews.filter((entry) => entry.detectionId === detectionId && entry.runId === runId).length,
     overrides: said.overrides.filter((entry) => entry.detectionId === detectionId).length,
   };
 }

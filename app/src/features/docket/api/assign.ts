@@ -1,5 +1,6 @@
+import { docketItem } from '@eremite/shared/contracts/docket';
 import { listOf } from '@eremite/shared/contracts/list';
-import { docketItem, reviewerProgress } from '@eremite/shared/contracts/review';
+import { reviewerProgress } from '@eremite/shared/contracts/review';
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { act, call } from '#lib/api-client.ts';
 import { searchString } from '#lib/search-string.ts';
