@@ -1,7 +1,8 @@
 import type { Field } from '@eremite/shared/contracts/field';
 import type { SurveyPlots } from '@eremite/shared/contracts/plot';
+import type { WhatIf } from '@eremite/shared/contracts/what-if';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { aScreenedSurvey } from '../support/builders/small-survey.ts';
+import { aScreenedSurvey, SETTINGS } from '../support/builders/small-survey.ts';
 import { aStaffedSurvey } from '../support/builders.ts';
 import { startApp, type TestApp } from '../support/start-app.ts';
 
@@ -63,6 +64,68 @@ describe('the field of a detection', () => {
   });
 });
 
+describe('what if the distance were another', () => {
+  const whatIfOf = async (name: string) => {
+    const { detectionId } = screened.items[name]!;
+    const answer = await screened.observer.get(`/runs/${screened.run.id}/detections/${detectionId}/what-if`);
+    expect(answer.status, answer.text).toBe(200);
+    return answer.body as WhatIf;
+  };
+
+  it('is answered from a third of the distance in use to three times it, in order', async () => {
+    const { points } = await whatIfOf('S01');
+    const { distance } = (
+      await screened.lead.get(`/runs/${screened.run.id}/detections/${screened.items['S01']!.detectionId}`)
+    ).body;
+    expect(points[0]!.angularMpc).toBeCloseTo(distance.angularMpc / 3, 6);
+    expect(points.at(-1)!.angularMpc).toBeCloseTo(distance.angularMpc * 3, 6);
+    const mpc = points.map(({ angularMpc }) => angularMpc);
+    expect(mpc).toEqual([...mpc].sort((a, b) => a - b));
+  });
+
+  it('says what a run would say had that distance been entered', async () => {
+    const { points, distanceFraction } = await whatIfOf('S07');
+    const { detectionId } = screened.items['S07']!;
+    for (const k of [5, Math.floor(points.length / 2), points.length - 6]) {
+      const point = points[k]!;
+      const distance = {
+        distanceMpc: point.angularMpc,
+        errorMpc: distanceFraction! * point.angularMpc,
+        source: 'a test',
+        note: 'to compare',
+      };
+      const patched = await screened.lead.patch(`/detections/${detectionId}`, distance);
+      expect(patched.status, patched.text).toBe(200);
+      const request = { settings: SETTINGS, detectionIds: [detectionId] };
+      const { verdict } = (await screened.lead.post(`/surveys/${screened.surveyId}/preview`, request)).body.items[0];
+      expect({ ...point, nearest: null }).toEqual({
+        distanceMpc: expect.closeTo(verdict.distanceMpc, 9),
+        angularMpc: point.angularMpc,
+        searchRadiusArcsec: expect.any(Number),
+        logHiMass: expect.closeTo(verdict.logHiMass, 9),
+        starlight: verdict.starlight,
+        pNone: expect.closeTo(verdict.pNone, 9),
+        pMissed: expect.closeTo(verdict.pMissed, 9),
+        power: expect.closeTo(verdict.power, 9),
+        surroundings: verdict.surroundings,
+        pAlone: verdict.pAlone === null ? null : expect.closeTo(verdict.pAlone, 9),
+        nearest: null,
+      });
+      expect(point.nearest?.separationKpc).toBeCloseTo(verdict.nearest.separationKpc, 6);
+    }
+  });
+
+  it('looks closer where a verdict changes', async () => {
+    const { points } = await whatIfOf('S07');
+    const changes = points.slice(1).filter((point, i) => point.surroundings !== points[i]!.surroundings);
+    for (const after of changes) {
+      const before = points[points.indexOf(after) - 1]!;
+      // 48 steps over a factor of nine, each in eight: 0.57 per cent.
+      expect(after.angularMpc / before.angularMpc).toBeLessThan(1.006);
+    }
+  });
+});
+
 describe('the plots of a run', () => {
   it('hold a point a detection, with the numbers of its verdict', async () => {
     const { body, status, text } = await screened.observer.get(`/runs/${screened.run.id}/plots`);
@@ -97,7 +160,11 @@ describe('the plots of a run', () => {
 it('no picture is served to another team', async () => {
   const stranger = await aStaffedSurvey(app);
   const { detectionId } = screened.items['S01']!;
-  for (const part of ['plots', `detections/${detectionId}/field?radiusArcsec=60`]) {
+  for (const part of [
+    'plots',
+    `detections/${detectionId}/what-if`,
+    `detections/${detectionId}/field?radiusArcsec=60`,
+  ]) {
     expect((await stranger.lead.get(`/runs/${screened.run.id}/${part}`)).status, part).toBe(404);
   }
 });

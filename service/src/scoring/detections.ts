@@ -41,6 +41,18 @@ export class Detections {
     return this.pick([position])[0]!;
   }
 
+  /** One detection at each of some distances, as though they had been measured. */
+  moved(position: number, distances: readonly { distanceMpc: number; errorMpc: number | null }[]): Detection[] {
+    const { catalogue, index, row } = this.place(position);
+    const { id: catalogueId } = this.input.catalogues[catalogue]!;
+    const moved = distances.map((distance) => {
+      const replaced = new Map([[`${catalogueId}/${row}`, { catalogueId, row, source: 'supposed', ...distance }]]);
+      return readDetection(this.input, this.input.catalogues[catalogue]!, catalogue, index, position, replaced);
+    });
+    this.reddening.fill(moved);
+    return moved;
+  }
+
   /** Places of all detections, degrees. */
   places(): { raDeg: Float64Array; decDeg: Float64Array } {
     const raDeg = new Float64Array(this.length);
@@ -64,8 +76,14 @@ export class Detections {
   }
 
   private read(position: number): Detection {
-    const list = this.lists.findLast(({ first }) => first <= position)!;
-    const catalogue = this.input.catalogues[list.catalogue]!;
-    return readDetection(this.input, catalogue, list.catalogue, position - list.first, position, this.replaced);
+    const { catalogue, index } = this.place(position);
+    const table = this.input.catalogues[catalogue]!;
+    return readDetection(this.input, table, catalogue, index, position, this.replaced);
+  }
+
+  private place(position: number): { catalogue: number; index: number; row: number } {
+    const { catalogue, first } = this.lists.findLast((list) => list.first <= position)!;
+    const index = position - first;
+    return { catalogue, index, row: this.input.catalogues[catalogue]!.roles.columns.row[index]! };
   }
 }

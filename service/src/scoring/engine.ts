@@ -243,9 +243,19 @@ export class Engine {
 
   /** Scores detections [from, to). */
   score(from: number, to: number): ScoredDetection[] {
+    return this.scoreRange(this.detections.range(from, to), this.shares);
+  }
+
+  /** One detection as it would be scored at each of some distances, had they been measured: nothing else changes. */
+  scoreAt(position: number, distances: readonly { distanceMpc: number; errorMpc: number | null }[]): ScoredDetection[] {
+    const moved = this.detections.moved(position, distances).map((detection, i) => ({ ...detection, position: i }));
+    return this.scoreRange(moved, new CoveredShares(moved.length, this.catalogues.length));
+  }
+
+  private scoreRange(range: readonly Detection[], shares: CoveredShares): ScoredDetection[] {
     const { criteria } = this.input;
-    const context = this.context(this.learnt.relation, this.learnt.priors);
-    const assessed = this.assess(this.detections.range(from, to), context);
+    const context = { ...this.context(this.learnt.relation, this.learnt.priors), shares };
+    const assessed = this.assess(range, context);
     const around = this.neighboursOf(assessed);
     const far = this.farNearest(assessed, around);
     return assessed.map((starlight, i) => {

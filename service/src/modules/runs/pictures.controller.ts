@@ -1,4 +1,5 @@
 import { field, fieldQuery } from '@eremite/shared/contracts/field';
+import { whatIf } from '@eremite/shared/contracts/what-if';
 import { plotsQuery, surveyPlots } from '@eremite/shared/contracts/plot';
 import { Controller, Get, Param, Query, Res, SerializeOptions } from '@nestjs/common';
 import type { Response } from 'express';
@@ -7,6 +8,7 @@ import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
 import { FieldService } from './field.service.ts';
 import { PlotsService } from './plots.service.ts';
 import { sendTable } from './send-table.ts';
+import { WhatIfService } from './what-if.service.ts';
 
 const uuid = { schema: z.uuid() };
 
@@ -16,6 +18,7 @@ export class PicturesController {
   constructor(
     private readonly fields: FieldService,
     private readonly plots: PlotsService,
+    private readonly whatIfs: WhatIfService,
   ) {}
 
   @Get('detections/:detectionId/field')
@@ -27,6 +30,17 @@ export class PicturesController {
     @Query({ schema: fieldQuery }) { radiusArcsec }: z.output<typeof fieldQuery>,
   ) {
     return this.fields.get(user, id, detectionId, radiusArcsec);
+  }
+
+  /** The verdict at other distances. */
+  @Get('detections/:detectionId/what-if')
+  @SerializeOptions({ schema: whatIf })
+  whatIf(
+    @CurrentUser() user: SignedInUser,
+    @Param('id', uuid) id: string,
+    @Param('detectionId', uuid) detectionId: string,
+  ) {
+    return this.whatIfs.distances(user, id, detectionId);
   }
 
   @Get('plots')

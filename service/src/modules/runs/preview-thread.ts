@@ -1,9 +1,12 @@
 import { Worker } from 'node:worker_threads';
+import type { WhatIf } from '@eremite/shared/contracts/what-if';
 import { Injectable, type OnModuleDestroy } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
 import { workerUrl } from '../../common/worker-url.ts';
-import type { PreviewedDetection, PreviewMessage, PreviewTask } from './preview-messages.ts';
+import type { PreviewedDetection, PreviewMessage, PreviewTask, SupposeTask } from './preview-messages.ts';
 import { errorOf } from './thread-failure.ts';
+
+type Supposed = Pick<WhatIf, 'points' | 'neighbours'>;
 
 /** A preview is for looking at once; what takes longer is a run's work. */
 const LONGEST_MS = 30_000;
@@ -16,7 +19,16 @@ export class PreviewThread implements OnModuleDestroy {
 
   /** @throws {AppError} RUN_FAILED; SELECTS_EVERYTHING when it takes too long */
   score(task: PreviewTask): Promise<PreviewedDetection[]> {
-    const turn = this.#last.then(() => this.#score(task));
+    return this.#inTurn(task);
+  }
+
+  /** The same for one detection at other distances. */
+  suppose(task: SupposeTask): Promise<Supposed> {
+    return this.#inTurn(task);
+  }
+
+  #inTurn<T>(task: PreviewTask | SupposeTask): Promise<T> {
+    const turn = this.#last.then(() => this.#ask<T>(task));
     this.#last = turn.catch(() => undefined);
     return turn;
   }
@@ -25,10 +37,10 @@ export class PreviewThread implements OnModuleDestroy {
     await this.#worker?.terminate();
   }
 
-  #score(task: PreviewTask): Promise<PreviewedDetection[]> {
+  #ask<T>(task: PreviewTask | SupposeTask): Promise<T> {
     const worker = (this.#worker ??= this.#start());
     worker.ref();
-    return new Promise<PreviewedDetection[]>((resolve, reject) => {
+    return new Promise<T>((resolve, reject) => {
       const drop = (error: AppError) => {
         this.#worker = undefined;
         void worker.terminate();
@@ -38,7 +50,7 @@ export class PreviewThread implements OnModuleDestroy {
       const timer = setTimeout(() => drop(new AppError('SELECTS_EVERYTHING', slow)), LONGEST_MS);
       const onMessage = (message: PreviewMessage) => {
         if (message.kind === 'failed') reject(errorOf(message));
-        else resolve(JSON.parse(message.results) as PreviewedDetection[]);
+        else resolve(JSON.parse(message.results) as T);
         end();
       };
       const onError = (error: Error) => {

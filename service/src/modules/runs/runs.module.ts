@@ -19,6 +19,7 @@ import { RunsRepository } from './runs.repository.ts';
 import { RunsService } from './runs.service.ts';
 import { VerdictsRepository } from './verdicts.repository.ts';
 import { VerdictsService } from './verdicts.service.ts';
+import { WhatIfService } from './what-if.service.ts';
 
 @Module({
   imports: [LedgerModule, CriteriaModule, SurveysModule],
@@ -29,6 +30,7 @@ import { VerdictsService } from './verdicts.service.ts';
     EvidenceService,
     FieldService,
     PlotsService,
+    WhatIfService,
     DocketService,
     OverviewService,
     PreviewService,
