@@ -102,13 +102,15 @@ export class RoleExtractor {
   }
 
   private numbers(chunk: RowChunk, recipe: NumberRecipe, target: string, cz: Float64Array | undefined): Float64Array {
-    const values = this.cells(chunk, recipe);
+    const cells = this.cells(chunk, recipe);
     const { rule } = recipe.conversion;
-    if (target === 'positionErrorArcsec') return values.map((error) => sigmaOfError(error, this.resolved.errorMeaning));
+    if (target === 'positionErrorArcsec') return cells.map((error) => sigmaOfError(error, this.resolved.errorMeaning));
+    const isRadioWidth = target.startsWith('width') && this.resolved.velocity.convention === 'radio';
+    if (rule === undefined && !isRadioWidth) return cells;
+    const values = cells.slice();
     if (rule === 'lineWidthFromFrequency') toOpticalWidths(values, 'frequency', cz);
     else if (rule === 'fluxFromFrequency') toVelocityFlux(values, cz);
-    else if (target.startsWith('width') && this.resolved.velocity.convention === 'radio')
-      toOpticalWidths(values, 'radio', cz);
+    else if (isRadioWidth) toOpticalWidths(values, 'radio', cz);
     return values;
   }
 
@@ -122,7 +124,7 @@ export class RoleExtractor {
     let cz: Float64Array | undefined;
     for (const [recipe, what] of sources) {
       if (!recipe) continue;
-      const values = toBarycentricCz(this.cells(chunk, recipe), what, frame, raDeg, decDeg);
+      const values = toBarycentricCz(this.cells(chunk, recipe).slice(), what, frame, raDeg, decDeg);
       const first = cz;
       cz = first ? first.map((value, i) => (Number.isNaN(value) ? values[i]! : value)) : values;
     }

@@ -42,7 +42,8 @@ export const lineOf = (chunk: RowChunk, i: number): number | null => chunk.lines
 const SENTINEL = /^-?9+(\.[09]*)?$|^0$|^-1$|^-?32768$|e\+?[12356]\d$/;
 
 /**
- * Numbers of one column of a chunk, in the canonical unit, NaN where missing. Cells that are no number, or no value
+ * Numbers of one column of a chunk, in the canonical unit, NaN where missing; the chunk's own where they are that
+ * already, so that they must not be changed. Cells that are no number, or no value
  * of the role, are missing too and counted in the tally. The rule of a curved conversion is applied here except where
  * it needs other columns.
  *
@@ -56,8 +57,23 @@ export function numberCells(
   limits?: Uint8Array,
 ): Float64Array {
   const data = chunk.columns[recipe.index]!;
+  if (data.kind === 'number' && fits(data, chunk.rows, recipe, marks)) return data.values;
   const raw = rawNumbers(chunk, data, recipe, marks, tally, limits);
   return converted(chunk, raw, recipe, tally);
+}
+
+/** Whether every cell is a plain number of the role in its canonical unit, or empty. */
+function fits(
+  { values, odd }: Extract<ColumnData, { kind: 'number' }>,
+  rows: number,
+  { conversion, range }: NumberRecipe,
+  marks: MissingMarks,
+): boolean {
+  if (odd?.size || values.length !== rows || marks.numbers.length > 0) return false;
+  if (conversion.factor !== 1 || conversion.rule !== undefined) return false;
+  const [low, high] = range;
+  for (let i = 0; i < rows; i++) if (values[i]! < low || values[i]! > high) return false;
+  return true;
 }
 
 function rawNumbers(

@@ -101,6 +101,7 @@ function readAxis(
   const data = chunk.columns[axis.index]!;
   const isRa = says === 'right ascension';
   const [low, high] = isRa ? [-180, 360] : [-90, 90];
+  const least = isRa ? 0 : low;
   const fault = (i: number, value: string, reason: string) => {
     out[i] = NaN;
     if (!faults.has(i)) faults.set(i, { column: axis.column, value, reason });
@@ -138,7 +139,11 @@ function readAxis(
   }
   for (let i = 0; i < chunk.rows; i++) {
     const value = data.values[i]!;
-    if (!Number.isNaN(value)) {
+    const inside = value * axis.factor;
+    if (inside >= least && inside < high && marks.numbers.length === 0) {
+      decimals?.add(value);
+      out[i] = inside;
+    } else if (!Number.isNaN(value)) {
       if (marks.numbers.includes(value)) fault(i, String(value), MISSING(says));
       else decimal(i, value);
     } else text(i, data.odd?.get(i) ?? '');

@@ -13,6 +13,7 @@ const equalBytes = (a: ArrayBufferView, b: ArrayBufferView): boolean =>
   a.byteLength === b.byteLength && Buffer.compare(bytesOf(a), bytesOf(b)) === 0;
 
 function equal(a: Column, b: Column): boolean {
+  if (a === b) return true;
   if ('kind' in a) return 'kind' in b && equalBytes(a.offsets, b.offsets) && equalBytes(a.bytes, b.bytes);
   return !('kind' in b) && a.constructor === b.constructor && equalBytes(a, b);
 }

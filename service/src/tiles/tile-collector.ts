@@ -3,6 +3,7 @@ import type { Column, PackedColumns } from './column-pack.ts';
 import { alike } from './original-cells.ts';
 import { packOriginals, sameColumns } from './original-pack.ts';
 import { RowPlaces } from './row-places.ts';
+import { Scratch } from './scratch.ts';
 import { scatterColumn } from './scatter-columns.ts';
 import { packTight } from './tight-pack.ts';
 import type { Tile } from './tile.ts';
@@ -19,6 +20,7 @@ export class TileCollector {
   private heldBytes = 0;
   private readonly parts = new Uint32Array(TILE_CELLS);
   private readonly places = new RowPlaces();
+  private readonly scratch = new Scratch();
 
   constructor(private readonly bufferBytes = 48 * 1024 ** 2) {}
 
@@ -56,8 +58,9 @@ export class TileCollector {
     );
     const starts = startsOf(cells);
     const places = placesOf(cells, starts);
-    const roles = sorted(taken(held.map((piece) => piece.roles)), places);
-    const apart = sorted(taken(originals, same), places);
+    this.scratch.reset();
+    const roles = sorted(taken(held.map((piece) => piece.roles)), places, this.scratch);
+    const apart = sorted(taken(originals, same), places, this.scratch);
     for (let i = 0; i < cells.length; i++) {
       const cell = cells[i]!;
       const within = places[i]! - starts[cell]!;
@@ -122,10 +125,10 @@ function taken(
   return byName;
 }
 
-function sorted(pieces: Map<string, Column[]>, places: Uint32Array): PackedColumns {
+function sorted(pieces: Map<string, Column[]>, places: Uint32Array, scratch: Scratch): PackedColumns {
   const columns: Record<string, Column> = {};
   for (const [name, list] of pieces) {
-    columns[name] = scatterColumn(list, places);
+    columns[name] = scatterColumn(list, places, scratch);
     pieces.delete(name);
   }
   return { rows: places.length, columns };
