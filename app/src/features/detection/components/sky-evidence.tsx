@@ -1,16 +1,22 @@
+import { Button } from '@blueprintjs/core';
 import type { Catalogue } from '@eremite/shared/contracts/catalogue';
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import { finderChartSvg } from '@eremite/shared/drawing/finder-chart';
+import { toSkyMarks } from '@eremite/shared/drawing/sky-mark';
 import { stripZones } from '@eremite/shared/drawing/strip-zones';
 import { surroundingsStripSvg } from '@eremite/shared/drawing/surroundings-strip';
 import { useCallback, useMemo, type ComponentProps } from 'react';
+import { Loading } from '#components/feedback/loading.tsx';
+import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { SaveMenu } from '#components/save-menu/save-menu.tsx';
 import { SkyPanel } from '#components/sky-map/sky-panel.tsx';
 import { SurroundingsStrip } from '#components/surroundings-strip/surroundings-strip.tsx';
 import { fileNameOf } from '#lib/save-picture.ts';
 import { useFieldMarks } from '../hooks/use-field-marks.ts';
 import { useOutlines, useSearched, useVerdictMarks } from '../hooks/use-panel-data.ts';
+import { useWhatIf } from '../hooks/use-what-if.ts';
+import { WhatIfPanel } from './what-if.tsx';
 
 interface SkyEvidenceProps {
   detail: VerdictDetail;
@@ -23,15 +29,41 @@ interface SkyEvidenceProps {
 }
 
 type DrawFinder = NonNullable<ComponentProps<typeof SkyPanel>['drawFinder']>;
+const DEGREE_ARCSEC = 3600;
 
-/** What is seen of one detection: its sky, and its surroundings in separation and velocity. */
+/** What is seen of one detection: its sky, and its surroundings in separation and velocity; at other distances too. */
 export function SkyEvidence({ detail, settings, catalogues, ...link }: SkyEvidenceProps) {
   const { name } = detail.verdict;
   const { centre, marks, windowKms } = useVerdictMarks(detail, settings);
   const { tables, coverages } = useSearched(catalogues);
+  const whatIf = useWhatIf(detail);
+  const { supposed, answer, point } = whatIf;
   const sky = useFieldMarks(detail, marks, windowKms);
-  const outlines = useOutlines(detail, coverages, sky.field);
-  const zones = useMemo(() => settings && stripZones(detail, settings), [detail, settings]);
+  const nominal = useOutlines(detail, coverages, sky.field);
+  const distanceMpc = supposed?.angularMpc ?? detail.distance.angularMpc;
+  const outlines = useMemo(() => {
+    if (!supposed || !settings) return nominal;
+    const radius = settings.surroundings.radiusMpc / supposed.angularMpc;
+    return {
+      ...nominal,
+      searchRadiusArcsec: supposed.searchRadiusArcsec,
+      neighbourRadiusArcsec: (radius * 180 * DEGREE_ARCSEC) / Math.PI,
+    };
+  }, [nominal, supposed, settings]);
+  const skyMarks = useMemo(() => atDistance(sky.marks, distanceMpc), [sky.marks, distanceMpc]);
+  const stripMarks = useMemo(
+    () => (answer ? toSkyMarks(detail.candidates, answer.neighbours, windowKms) : marks),
+    [answer, detail, marks, windowKms],
+  );
+  const zones = useMemo(() => {
+    if (!settings) return undefined;
+    const shown = point ? { ...detail, searchRadiusArcsec: point.searchRadiusArcsec } : detail;
+    return stripZones(
+      shown,
+      settings,
+      supposed?.angularMpc ?? (detail.distance.angularMpc === null ? point?.angularMpc : undefined),
+    );
+  }, [detail, settings, point, supposed]);
   const { selected } = link;
   const drawFinder = useCallback<DrawFinder>(
     (view) =>
@@ -41,34 +73,79 @@ export function SkyEvidence({ detail, settings, catalogues, ...link }: SkyEviden
       ),
     [detail, settings, coverages, selected],
   );
+  const drawStrip = () =>
+    surroundingsStripSvg(
+      { detail, settings: settings!, marks: stripMarks },
+      { width: 720, height: 270, ...(zones ? { atMpc: zones.atMpc } : {}) },
+    );
+  const ask = (
+    <Button
+      size="small"
+      text="what if the distance were…"
+      active={whatIf.isOn}
+      aria-pressed={whatIf.isOn}
+      onClick={whatIf.toggle}
+    />
+  );
+  const below = whatIf.isOn && (
+    <>
+      <ProblemCallout error={whatIf.error} />
+      {whatIf.isFetching && !answer && <Loading what="Judging at other distances" />}
+      {answer && point && (
+        <WhatIfPanel answer={answer} nominalMpc={detail.distance.angularMpc} point={point} onPoint={whatIf.choose} />
+      )}
+    </>
+  );
   return (
     <>
       <SkyPanel
         name={name}
         centre={centre}
-        distanceMpc={detail.distance.angularMpc}
+        distanceMpc={distanceMpc}
         outlines={outlines}
-        marks={sky.marks}
+        marks={skyMarks}
         tables={tables}
         note={sky.note}
         onReach={sky.onReach}
         {...(settings ? { drawFinder } : {})}
         {...link}
       />
-      {zones && settings && (
+      {zones ? (
         <SurroundingsStrip
-          marks={marks}
+          marks={stripMarks}
           zones={zones}
           tools={
-            <SaveMenu
-              label="Save the surroundings strip"
-              fileName={fileNameOf(`${name}-surroundings`)}
-              draw={() => surroundingsStripSvg({ detail, settings }, { width: 720, height: 270 })}
-            />
+            <>
+              {ask}
+              <SaveMenu
+                label="Save the surroundings strip"
+                fileName={fileNameOf(`${name}-surroundings`)}
+                draw={drawStrip}
+              />
+            </>
           }
           {...link}
-        />
+        >
+          {below}
+        </SurroundingsStrip>
+      ) : (
+        <div className="strip">
+          <div className="strip__tools">
+            <span className="muted small grow">Without a usable distance no projected separation can be told.</span>
+            {ask}
+          </div>
+          {below}
+        </div>
       )}
     </>
   );
 }
+
+/** Marks with their projected separation at a distance (angular-diameter, Mpc). */
+const atDistance = <M extends { separationArcsec: number }>(marks: readonly M[], mpc: number | null) => {
+  const kpcPerArcsec = mpc === null ? null : (mpc * 1000 * Math.PI) / (180 * DEGREE_ARCSEC);
+  return marks.map((mark) => ({
+    ...mark,
+    separationKpc: kpcPerArcsec === null ? null : mark.separationArcsec * kpcPerArcsec,
+  }));
+};
