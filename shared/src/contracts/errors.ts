@@ -19,6 +19,7 @@ export const ERROR_CATALOGUE = {
   TOO_LARGE: { status: 413, title: 'The file is larger than this installation accepts' },
   TOO_MANY_REQUESTS: { status: 429, title: 'Too many requests; wait a moment' },
   RUN_FAILED: { status: 500, title: 'The scoring could not be finished' },
+  ARCHIVE_CHANGED: { status: 422, title: 'The archive is not what was frozen' },
   LINK_EXPIRED: { status: 410, title: 'The link has expired or was revoked' },
   STARTING: { status: 503, title: 'Eremite is still starting; try again in a moment' },
   INTERNAL: { status: 500, title: 'Something went wrong here' },

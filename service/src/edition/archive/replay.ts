@@ -1,4 +1,3 @@
-import { createHash } from 'node:crypto';
 import { createReadStream } from 'node:fs';
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
@@ -21,13 +20,12 @@ import { ArchiveError } from './archive-error.ts';
 import { differenceOf } from './difference-of.ts';
 import { type ReadManifest, RESULTS, type ResultLine } from './manifest.ts';
 import { hashOf, readArchive } from './read-archive.ts';
+import { sha256 } from './sha256.ts';
 
 /** Differences told one by one; the rest is counted. */
 const TOLD = 50;
 /** Share of the work that reading takes, for the progress. */
 const READING = 0.4;
-
-export const sha256 = (content: string | Uint8Array): string => createHash('sha256').update(content).digest('hex');
 
 /**
  * Repeats an edition from the inputs in its archive: reads its tables anew, scores anew, and compares every verdict with
