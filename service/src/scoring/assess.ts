@@ -9,6 +9,7 @@ import { galaxiesInBeam, gasToLightLimit, gasToLightOf } from './gas-and-light.t
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
 import type { Assessment, StarMask } from './scored-detection.ts';
 import { weighSilence } from './silence.ts';
+import { starlightThresholds } from './thresholds.ts';
 import { groupObjects, weighObjects, type WeighingModel } from './weigh-objects.ts';
 import { ExpectationCache } from './expectation-cache.ts';
 
@@ -56,19 +57,46 @@ export function assessStarlight(
   weighObjects(detection, objects, expectations, model, catalogues, shares);
   const silence = weighSilence(detection, catalogues, masks, expectations, criteria, shares);
   const { prior, source } = priorFor(detection, priors, criteria);
-  const { reliability } = detection;
-  const r = reliability >= 0 && reliability <= 1 ? reliability : 1;
-  const weights = objects.map(({ weight }) => weight);
-  let probabilities: Hypotheses = exclusiveProbabilities(weights, prior, silence.power ?? 0, r);
-  const accepted = objects.find(({ override }) => override === 'accept') ?? null;
-  if (accepted) {
-    probabilities = {
-      none: 0,
-      missed: 0,
-      spurious: 0,
-      objects: objects.map((object) => (object === accepted ? 1 : 0)),
-    };
-  }
+  return conclude(
+    {
+      detection,
+      candidates,
+      objects,
+      expectations,
+      silence,
+      masks,
+      prior,
+      priorSource: source,
+      reliability: detection.reliability,
+      velocity: model.velocity,
+      accepted: objects.find(({ override }) => override === 'accept') ?? null,
+      claims: [],
+    },
+    criteria,
+  );
+}
+
+/** What is weighed before anything is concluded from it. */
+export type Weighed = Pick<
+  StarlightAssessment,
+  | 'detection'
+  | 'candidates'
+  | 'objects'
+  | 'expectations'
+  | 'silence'
+  | 'masks'
+  | 'prior'
+  | 'priorSource'
+  | 'reliability'
+  | 'velocity'
+  | 'accepted'
+  | 'claims'
+>;
+
+/** Probabilities and the starlight verdict from the weights of the objects. Sets the probability of each row. */
+export function conclude(weighed: Weighed, criteria: CriteriaSettings): StarlightAssessment {
+  const { detection, objects, silence, prior, reliability, accepted } = weighed;
+  const probabilities = probabilitiesOf(weighed);
   objects.forEach((object, j) => {
     for (const row of object.rows) row.probability = probabilities.objects[j]!;
   });
@@ -84,36 +112,51 @@ export function assessStarlight(
     power: silence.power,
     galaxiesInBeam: accepted ? 0 : inBeam.length,
     discordant: objects.map((object) => object.discordant && object !== accepted),
+    claimedAway: isClaimedAway(weighed, criteria),
     gasToLight: ratio,
   };
-  const thresholds = {
-    ...criteria.absence,
-    ...criteria.counterpart,
-    // A person who accepts a counterpart has looked: the power of the silence does not matter.
-    minimumPower: accepted ? 0 : criteria.absence.minimumPower,
-  };
+  const usual = starlightThresholds(criteria);
+  // A person who accepts a counterpart has looked: the power of the silence does not matter.
+  const thresholds = accepted ? { ...usual, minimumPower: 0 } : usual;
   const starlight = starlightVerdict(accepted ? { ...evidence, power: silence.power ?? 0 } : evidence, thresholds);
   const dominates = dominatingObject(evidence, thresholds);
   const dominating = dominates < 0 ? null : objects[dominates]!;
   const limit = dominating ? NaN : gasToLightLimit(detection, silence.best, criteria);
   return {
-    detection,
-    candidates,
-    objects,
-    expectations,
-    silence,
-    masks,
+    ...weighed,
     prior,
-    priorSource: source,
     reliability,
     probabilities,
-    velocity: model.velocity,
     starlight,
     best,
     dominating,
-    accepted,
     inBeam,
     gasToLight: dominating ? ratio : limit,
     gasToLightIsLimit: !dominating,
   };
 }
+
+function probabilitiesOf({ objects, prior, silence, reliability, accepted }: Weighed): Hypotheses {
+  if (accepted) {
+    return {
+      none: 0,
+      missed: 0,
+      spurious: 0,
+      objects: objects.map((object) => (object === accepted ? 1 : 0)),
+    };
+  }
+  const r = reliability >= 0 && reliability <= 1 ? reliability : 1;
+  const weights = objects.map(({ weight }) => weight);
+  return exclusiveProbabilities(weights, prior, silence.power ?? 0, r);
+}
+
+/** Whether a galaxy that would have been the counterpart went to another detection. */
+export const isClaimedAway = (
+  { claims, accepted }: Pick<StarlightAssessment, 'claims' | 'accepted'>,
+  { counterpart }: CriteriaSettings,
+): boolean =>
+  !accepted &&
+  claims.some(
+    ({ alone, here, there }) =>
+      alone >= counterpart.minimumProbability && here < counterpart.minimumProbability && there > here,
+  );

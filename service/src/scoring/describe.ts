@@ -66,6 +66,9 @@ export function describeItem(assessment: Assessment, doubts: Doubt[], criteria: 
   };
 }
 
+/** A probability without the last digit of rounding. */
+const within = (p: number): number => Math.min(1, Math.max(0, p));
+
 /** Published base rates at which P(none) is shown besides the prior used. */
 const OTHER_PRIORS = [0.97, 0.986, 0.995];
 
@@ -97,6 +100,16 @@ export function describeDetail(assessment: Assessment, doubts: Doubt[], criteria
     neighbourRadiusArcsec: known ? (criteria.surroundings.radiusMpc / detection.angularMpc / DEGREE) * 3600 : null,
     limits: silence.bands.map((band) => bandLimit(detection, band, criteria)),
     doubts,
+    claims: assessment.claims.map(({ object: { face }, by, separationArcsec, alone, here, there }) => ({
+      galaxy: rowName(face.catalogue, face.index),
+      catalogueId: face.catalogue.input.id,
+      rowId: face.catalogue.input.roles.columns.row[face.index]!,
+      detection: by.name,
+      separationArcsec,
+      alone: within(alone),
+      here: within(here),
+      there: within(there),
+    })),
     aloneFactors: surroundings.factors && {
       noneKnown: surroundings.factors.noneKnown,
       noneUnseen: surroundings.factors.noneUnseen,

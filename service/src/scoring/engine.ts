@@ -5,6 +5,7 @@ import { neighbourSearch } from '../matching/neighbour-search.ts';
 import { pairSearch } from '../matching/pair-search.ts';
 import { assessStarlight, type AssessmentContext, type StarlightAssessment } from './assess.ts';
 import { type CandidateRow, makeCandidate, type OverrideOf } from './candidate-row.ts';
+import { Claims } from './claims.ts';
 import { CoveredShares } from './covered-share.ts';
 import { type ShiftedPlaces, shiftedPlaces } from './control-run.ts';
 import { describeDetail, describeItem } from './describe.ts';
@@ -67,6 +68,7 @@ export class Engine {
   private readonly overrideOf: OverrideOf | null;
   private readonly shares: CoveredShares;
   private readonly redshifts: RedshiftField;
+  private readonly claims: Claims;
   learnt: Learnt;
 
   constructor(readonly input: EngineInput) {
@@ -94,6 +96,9 @@ export class Engine {
     const pupils = this.detections.pick(this.places(0, Math.ceil(this.detections.length / this.step)));
     const velocity = this.redshifts.measure(velocityModelOf(criteria), pupils);
     this.learnt = { relation: null, priors: [], velocity, notes: [] };
+    this.claims = new Claims(this.detections, criteria, (range) =>
+      this.assess(range, this.context(this.learnt.relation, this.learnt.priors)),
+    );
   }
 
   private context(relation: GasStarRelation | null, priors: readonly LearntPrior[]): AssessmentContext {
@@ -243,19 +248,30 @@ export class Engine {
 
   /** Scores detections [from, to). */
   score(from: number, to: number): ScoredDetection[] {
-    return this.scoreRange(this.detections.range(from, to), this.shares);
+    const range = this.detections.range(from, to);
+    return this.scoreRange(
+      range,
+      this.shares,
+      range.map(({ position }) => position),
+    );
   }
 
   /** One detection as it would be scored at each of some distances, had they been measured: nothing else changes. */
   scoreAt(position: number, distances: readonly { distanceMpc: number; errorMpc: number | null }[]): ScoredDetection[] {
     const moved = this.detections.moved(position, distances).map((detection, i) => ({ ...detection, position: i }));
-    return this.scoreRange(moved, new CoveredShares(moved.length, this.catalogues.length));
+    const shares = new CoveredShares(moved.length, this.catalogues.length);
+    return moved.flatMap((detection) => this.scoreRange([detection], shares, [position]));
   }
 
-  private scoreRange(range: readonly Detection[], shares: CoveredShares): ScoredDetection[] {
+  /** @param positions of the range in the input order, for the detections that claim the same galaxies */
+  private scoreRange(
+    range: readonly Detection[],
+    shares: CoveredShares,
+    positions: readonly number[],
+  ): ScoredDetection[] {
     const { criteria } = this.input;
     const context = { ...this.context(this.learnt.relation, this.learnt.priors), shares };
-    const assessed = this.assess(range, context);
+    const assessed = this.claims.solve(this.assess(range, context), positions);
     const around = this.neighboursOf(assessed);
     const far = this.farNearest(assessed, around);
     return assessed.map((starlight, i) => {

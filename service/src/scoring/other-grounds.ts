@@ -195,6 +195,14 @@ const SERIOUS_WORDS: Record<string, string> = {
   distance: 'no reliable distance',
 };
 
+function contestedWords({ best, claims }: StarlightAssessment): string {
+  if (best?.discordant) return 'the likeliest host has another velocity';
+  if (claims.some(({ here, there, alone }) => there > here && alone >= 0.5)) {
+    return 'the likeliest host is claimed by another detection';
+  }
+  return 'several possible hosts, none dominating';
+}
+
 /** The headline with its qualification. */
 export function headlineOf(assessment: StarlightAssessment, doubts: readonly Doubt[]): string {
   const name = assessment.dominating
@@ -204,9 +212,7 @@ export function headlineOf(assessment: StarlightAssessment, doubts: readonly Dou
     dark: 'no starlight found',
     'nearly dark': `very little starlight for so much gas: ${name}`,
     starlit: `starlight found: ${name}`,
-    contested: assessment.best?.discordant
-      ? 'the likeliest host has another velocity'
-      : 'several possible hosts, none dominating',
+    contested: contestedWords(assessment),
     confused: `${assessment.inBeam.length} galaxies at this velocity in the beam`,
     'cannot tell': 'starlight cannot be told here',
   }[assessment.starlight];

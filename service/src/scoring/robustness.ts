@@ -11,6 +11,7 @@ import { aloneProbability } from '@eremite/shared/science/surroundings/alone-pro
 import { type Surroundings, surroundingsVerdict } from '@eremite/shared/science/surroundings/surroundings-verdict';
 import { extinction } from '@eremite/shared/science/photometry/extinction';
 import type { z } from 'zod';
+import { isClaimedAway } from './assess.ts';
 import { detectionSettings } from './detection-settings.ts';
 import { type BandExpectation, expectIn, type Perturbation } from './expectation.ts';
 import { nearestFlip } from './other-grounds.ts';
@@ -18,6 +19,7 @@ import type { Detection } from './detection-table.ts';
 import { type PreparedBand, rowName } from './prepared-catalogue.ts';
 import type { Assessment } from './scored-detection.ts';
 import { drawnDistances, isAccompaniedAt, LEAST_DRAW, neighbourAt, type SurroundingsContext } from './surroundings.ts';
+import { starlightThresholds } from './thresholds.ts';
 import type { WeighingModel } from './weigh-objects.ts';
 
 export type RobustnessResult = z.output<typeof robustnessResult>;
@@ -100,7 +102,8 @@ function starlightRedrawn(assessment: Assessment, model: WeighingModel): (draw: 
   });
   const weights = objects.map(({ weight }) => weight);
   const discordant = objects.map((object) => object.discordant);
-  const thresholds = { ...criteria.absence, ...criteria.counterpart };
+  const claimedAway = isClaimedAway(assessment, criteria);
+  const thresholds = starlightThresholds(criteria);
   return (draw) => {
     const perturbed: Perturbation = {
       distanceFactor: draw.distanceFactor,
@@ -135,6 +138,7 @@ function starlightRedrawn(assessment: Assessment, model: WeighingModel): (draw: 
         power,
         galaxiesInBeam: assessment.inBeam.length,
         discordant,
+        claimedAway,
         gasToLight: assessment.gasToLightIsLimit ? NaN : assessment.gasToLight * draw.fluxFactor,
       },
       thresholds,

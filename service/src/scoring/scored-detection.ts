@@ -20,6 +20,18 @@ export interface StarMask {
   northArcsec: number;
 }
 
+/** A galaxy that another detection claims too. */
+export interface Claim {
+  object: WeighedObject;
+  /** The other detection, and how far it is. */
+  by: Detection;
+  separationArcsec: number;
+  /** Probability of the galaxy here if this detection were alone, here, and there, one galaxy to one detection. */
+  alone: number;
+  here: number;
+  there: number;
+}
+
 /** Everything found out about one detection before it is put into words. */
 export interface Assessment {
   detection: Detection;
@@ -40,6 +52,8 @@ export interface Assessment {
   best: WeighedObject | null;
   dominating: WeighedObject | null;
   accepted: WeighedObject | null;
+  /** Galaxies that other detections claim too. */
+  claims: Claim[];
   inBeam: BeamGalaxy[];
   gasToLight: number;
   gasToLightIsLimit: boolean;

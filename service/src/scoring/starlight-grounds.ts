@@ -33,6 +33,7 @@ export function starlightGrounds(assessment: StarlightAssessment, criteria: Crit
     if (object.override === 'reject') say('note', `${nameOf(object)} was rejected by a person and left out.`);
   }
   if (!accepted) discordantFirst(assessment, say);
+  sayClaims(assessment, say);
   if (starlight === 'confused') sayConfused(assessment, say);
   if (starlight === 'contested') sayContested(assessment, say);
   if (dominating) sayDominating(assessment, dominating, criteria, say);
@@ -86,6 +87,21 @@ function discordantFirst(assessment: StarlightAssessment, say: Say): void {
       'counterpart',
     );
   });
+}
+
+/** Galaxies that other detections claim too, those lost first. */
+function sayClaims({ claims, detection }: StarlightAssessment, say: Say): void {
+  const ranked = [...claims].sort((a, b) => b.there - b.here - (a.there - a.here));
+  for (const { object, by, separationArcsec, alone, here, there } of ranked.slice(0, 3)) {
+    const differs = (by.czKms - detection.czKms) / (1 + detection.redshift);
+    const velocity = Number.isFinite(differs) ? ` and ${signedKms(differs)}` : '';
+    const tail = there > here ? ' This gas may be a tail or a cloud of it.' : '';
+    say(
+      there > here ? 'against' : 'note',
+      `${nameOf(object)} is claimed by ${by.name} too, ${arcsec(separationArcsec)}${velocity} away. Solved together, one galaxy to one detection, its probability is ${probability(here)} here (${probability(alone)} by itself) and ${probability(there)} there.${tail}`,
+      'counterpart',
+    );
+  }
 }
 
 function describe(assessment: StarlightAssessment, object: WeighedObject): string {

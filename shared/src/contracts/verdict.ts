@@ -202,6 +202,21 @@ export const verdictDetail = z.object({
   neighbours: z.array(neighbour),
   limits: z.array(bandLimit),
   doubts: z.array(doubt),
+  /** Galaxies that other detections claim too: probability of each if this detection were alone, here, and there. */
+  claims: z
+    .array(
+      z.object({
+        galaxy: z.string(),
+        catalogueId: z.string(),
+        rowId: z.int(),
+        detection: z.string(),
+        separationArcsec: z.number(),
+        alone: probability,
+        here: probability,
+        there: probability,
+      }),
+    )
+    .default([]),
   /** P(no neighbour) in its three factors. */
   aloneFactors: z.object({ noneKnown: probability, noneUnseen: probability, covered: probability }).nullable(),
   /** P(none) at other priors. */

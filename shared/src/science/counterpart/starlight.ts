@@ -28,6 +28,10 @@ export interface StarlightEvidence {
   galaxiesInBeam: number;
   /** Whether the velocity of each object disagrees: such an object never makes a detection starlit by itself. */
   discordant: readonly boolean[];
+  /** By itself the detection would have a counterpart, but that galaxy belongs to another detection. */
+  claimedAway?: boolean;
+  /** The catalogue holds more faint objects here than chance allows: a galaxy may be there in pieces. */
+  inPieces?: boolean;
   /** M_HI / L_r with the most probable object as counterpart; NaN where unknown. */
   gasToLight: number;
 }
@@ -60,8 +64,10 @@ export function dominatingObject(evidence: StarlightEvidence, limits: StarlightT
  * 1. `confused`: two or more galaxies at the gas velocity inside the beam; no dark claim is possible until resolved.
  * 2. `nearly dark`: one object dominates and M_HI / L_r is over the limit; with too little power, `cannot tell`.
  * 3. `starlit`: one object dominates; shallow data do not matter to it.
- * 4. `contested`: objects together pass the least probability, none dominates.
- * 5. `dark`: P(none) and P(none) + P(missed) are high enough and the power suffices.
+ * 4. `contested`: objects together pass the least probability, none dominates; or the likeliest galaxy belongs to another
+ *    detection, of which this gas may be a part.
+ * 5. `dark`: P(none) and P(none) + P(missed) are high enough, the power suffices, and no excess of faint objects hints at a
+ *    galaxy in pieces.
  * 6. `cannot tell`.
  */
 export function starlightVerdict(evidence: StarlightEvidence, limits: StarlightThresholds): Starlight {
@@ -73,8 +79,8 @@ export function starlightVerdict(evidence: StarlightEvidence, limits: StarlightT
     return powerful ? 'nearly dark' : 'cannot tell';
   }
   const together = probabilities.objects.reduce((sum, p) => sum + p, 0);
-  if (together >= limits.minimumProbability) return 'contested';
+  if (together >= limits.minimumProbability || evidence.claimedAway) return 'contested';
   const none = probabilities.none;
   const isDark = none >= limits.darkProbability && none + probabilities.missed >= limits.noneOrMissedProbability;
-  return isDark && powerful ? 'dark' : 'cannot tell';
+  return isDark && powerful && !evidence.inPieces ? 'dark' : 'cannot tell';
 }
