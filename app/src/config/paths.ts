@@ -14,8 +14,10 @@ export const paths = {
   shortlist: (surveyId: string) => `${survey(surveyId)}/shortlist`,
   catalogues: (surveyId: string) => `${survey(surveyId)}/catalogues`,
   catalogue: (surveyId: string, catalogueId: string) => `${survey(surveyId)}/catalogues/${catalogueId}`,
-  intakes: (surveyId: string) => `${survey(surveyId)}/intake`,
-  intake: (surveyId: string, intakeId: string) => `${survey(surveyId)}/intake/${intakeId}`,
+  /** With a catalogue: to bring in its next version. */
+  intakes: (surveyId: string, supersedes?: string) =>
+    `${survey(surveyId)}/intake${supersedes ? `?supersedes=${supersedes}` : ''}`,
+  intake: (surveyId: string, intakeId: string, search = '') => `${survey(surveyId)}/intake/${intakeId}${search}`,
   criteria: (surveyId: string) => `${survey(surveyId)}/criteria`,
   criteriaNumber: (surveyId: string, criteriaId: string) => `${survey(surveyId)}/criteria/${criteriaId}`,
   newCriteria: (surveyId: string, from?: string) => `${survey(surveyId)}/criteria/new${from ? `?from=${from}` : ''}`,

@@ -1,15 +1,15 @@
 import { Button } from '@blueprintjs/core';
 import { useQuery, useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
 import { useState } from 'react';
-import { useNavigate, useParams, type LoaderFunctionArgs } from 'react-router-dom';
+import { Link, useNavigate, useParams, type LoaderFunctionArgs } from 'react-router-dom';
+import { CoverageMap } from '#components/coverage-map/coverage-map.tsx';
 import { NoteDialog } from '#components/dialogs/note-dialog.tsx';
+import { MagnitudeHistogram } from '#components/magnitude-histogram/magnitude-histogram.tsx';
 import { Panel } from '#components/panel/panel.tsx';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { magnitudesQuery, useRemoveCatalogue } from '#features/catalogues/api/catalogue-data.ts';
 import { CatalogueFacts } from '#features/catalogues/components/catalogue-facts.tsx';
 import { CatalogueRows } from '#features/catalogues/components/catalogue-rows.tsx';
-import { CoverageMap } from '#features/catalogues/components/coverage-map.tsx';
-import { MagnitudeHistogram } from '#features/catalogues/components/magnitude-histogram.tsx';
 import { SidelinedRows } from '#features/catalogues/components/sidelined-rows.tsx';
 import { paths } from '#config/paths.ts';
 import { catalogueQuery } from '#lib/queries/catalogues.ts';
@@ -40,9 +40,19 @@ export function Component() {
       <div className="page__head" style={{ marginBottom: 0 }}>
         <div>
           <h1>{catalogue.name}</h1>
+          {catalogue.state === 'superseded' && (
+            <p className="page__lede">
+              Superseded by a newer version: kept for the runs that read it, used by no further one.
+            </p>
+          )}
         </div>
-        {mayLead(survey.role) && catalogue.usedByRuns === 0 && (
-          <Button intent="danger" text="Remove" onClick={() => setAsking(true)} />
+        {mayLead(survey.role) && (
+          <div className="row">
+            {catalogue.state === 'published' && (
+              <Link to={paths.intakes(survey.id, catalogue.id)}>Bring in a new version</Link>
+            )}
+            {catalogue.usedByRuns === 0 && <Button intent="danger" text="Remove" onClick={() => setAsking(true)} />}
+          </div>
         )}
       </div>
       <div className="catalogue-grid">
@@ -70,7 +80,7 @@ export function Component() {
         <CatalogueRows catalogue={catalogue} />
       </Panel>
       <Panel title="Sidelined rows">
-        <SidelinedRows catalogueId={catalogue.id} />
+        <SidelinedRows catalogue={catalogue} />
       </Panel>
       <NoteDialog
         isOpen={asking}
@@ -83,7 +93,10 @@ export function Component() {
         onClose={() => setAsking(false)}
         onConfirm={() => remove.mutate(catalogue.id, { onSuccess: gone })}
       >
-        <p>Its rows are removed from the survey. No run uses it, so no verdict changes.</p>
+        <p>
+          Its rows are removed from the survey. No run uses it, so no verdict changes; its file stays in the intake and
+          can be published again.
+        </p>
       </NoteDialog>
     </div>
   );

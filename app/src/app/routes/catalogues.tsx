@@ -5,7 +5,7 @@ import { DataTable, type Column } from '#components/data-table/data-table.tsx';
 import { EmptyState } from '#components/feedback/empty-state.tsx';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { paths } from '#config/paths.ts';
-import { count, fixed, NO_VALUE } from '#lib/format/number.ts';
+import { count, fixed, NO_VALUE, significant } from '#lib/format/number.ts';
 import { day } from '#lib/format/time.ts';
 import { cataloguesQuery } from '#lib/queries/catalogues.ts';
 import { mayLead } from '#lib/role.ts';
@@ -47,7 +47,12 @@ const columns = (surveyId: string): Column<Catalogue>[] => [
   { key: 'rows', header: 'Rows', cell: ({ rows }) => count(rows) },
   { key: 'velocity', header: 'With velocity', cell: ({ withVelocity }) => count(withVelocity) },
   { key: 'sidelined', header: 'Sidelined', cell: ({ sidelined }) => count(sidelined) },
-  { key: 'area', header: 'Covered', unit: 'deg²', cell: ({ coverage }) => fixed(coverage.areaSqDeg, 1) },
+  {
+    key: 'area',
+    header: 'Covered',
+    unit: 'deg²',
+    cell: ({ coverage }) => (coverage.areaSqDeg === null ? NO_VALUE : significant(coverage.areaSqDeg, 3)),
+  },
   { key: 'runs', header: 'Runs', cell: ({ usedByRuns }) => usedByRuns },
   { key: 'at', header: 'Published', align: 'left', cell: ({ publishedAt }) => day(publishedAt) },
 ];

@@ -1,7 +1,7 @@
 import type { Job } from '@eremite/shared/contracts/job';
 import { publishResult } from '@eremite/shared/contracts/intake';
 import { useQueryClient, useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
-import { Link, useNavigate, useParams, type LoaderFunctionArgs } from 'react-router-dom';
+import { Link, useNavigate, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router-dom';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { intakeQuery } from '#features/intake/api/intakes.ts';
 import { IntakeWizard } from '#features/intake/components/intake-wizard.tsx';
@@ -49,6 +49,7 @@ export function Component() {
       <IntakeWizard
         key={intake.id}
         intake={intake}
+        supersedes={useSearchParams()[0].get('supersedes') ?? undefined}
         onPublished={published}
         onDiscarded={() => void navigate(paths.intakes(survey.id))}
       />

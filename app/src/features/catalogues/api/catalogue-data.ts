@@ -20,10 +20,18 @@ export const rowsQuery = (catalogueId: string, cursor: string | null) =>
     placeholderData: keepPreviousData,
   });
 
-export const sidelinedQuery = (catalogueId: string) =>
+export const PAGE_OF_SIDELINED = 100;
+
+export const sidelinedQuery = (catalogueId: string, cursor: string | null) =>
   queryOptions({
-    queryKey: ['catalogue', catalogueId, 'sidelined'],
-    queryFn: ({ signal }) => call(listOf(sidelinedRow), `/catalogues/${catalogueId}/sidelined?limit=200`, { signal }),
+    queryKey: ['catalogue', catalogueId, 'sidelined', cursor],
+    queryFn: ({ signal }) =>
+      call(
+        listOf(sidelinedRow),
+        `/catalogues/${catalogueId}/sidelined${searchString({ limit: PAGE_OF_SIDELINED, cursor })}`,
+        { signal },
+      ),
+    placeholderData: keepPreviousData,
   });
 
 export function useRemoveCatalogue(surveyId: string) {

@@ -1,5 +1,5 @@
 import type { Catalogue } from '@eremite/shared/contracts/catalogue';
-import { count, fixed } from '#lib/format/number.ts';
+import { count, fixed, significant } from '#lib/format/number.ts';
 import { moment } from '#lib/format/time.ts';
 
 /** What is known of a published table, and what was assumed of it. */
@@ -31,7 +31,7 @@ export function CatalogueFacts({ catalogue: c }: { catalogue: Catalogue }) {
       <dd>
         {c.coverage.type}
         {c.coverage.areaSqDeg !== null && (
-          <span className="num">, {fixed(c.coverage.areaSqDeg, 1)} square degrees</span>
+          <span className="num">, {significant(c.coverage.areaSqDeg, 3)} square degrees</span>
         )}
         {c.coverage.note && <span className="muted"> {c.coverage.note}</span>}
       </dd>
@@ -55,17 +55,34 @@ export function CatalogueFacts({ catalogue: c }: { catalogue: Catalogue }) {
       )}
       <dt>File</dt>
       <dd>
-        {c.fileName}{' '}
-        <span className="mono small muted" title={c.sha256}>
-          sha256 {c.sha256.slice(0, 16)}
-        </span>
+        {c.parts.length > 0 ? (
+          <ul className="plain-list">
+            {c.parts.map(({ fileName, sha256, firstRow, rows }) => (
+              <li key={firstRow + fileName}>
+                {fileName}{' '}
+                <span className="num small muted">
+                  rows {count(firstRow)} to {count(firstRow + rows - 1)}, sha256 {sha256.slice(0, 16)}
+                </span>
+              </li>
+            ))}
+          </ul>
+        ) : (
+          <>
+            {c.fileName}{' '}
+            <span className="mono small muted" title={c.sha256}>
+              sha256 {c.sha256.slice(0, 16)}
+            </span>
+          </>
+        )}
       </dd>
       <dt>Published</dt>
       <dd>{moment(c.publishedAt)}</dd>
       <dt>Used by</dt>
       <dd>
         <span className="num">{c.usedByRuns}</span> {c.usedByRuns === 1 ? 'run' : 'runs'}
-        {c.usedByRuns > 0 && <span className="muted"> and kept for them: it cannot be removed</span>}
+        {c.usedByRuns > 0 && (
+          <span className="muted"> and kept for them: it cannot be removed, but a new version can take its place</span>
+        )}
       </dd>
     </dl>
   );

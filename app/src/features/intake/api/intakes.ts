@@ -17,12 +17,19 @@ export const intakeQuery = (intakeId: string) =>
     queryFn: ({ signal }) => call(intake, `/intakes/${intakeId}`, { signal }),
   });
 
+export interface Upload {
+  files: readonly File[];
+  readMe?: File | undefined;
+}
+
 export function useUpload(surveyId: string) {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (file: File) => {
+    /** One table, or several files of one; with the ReadMe of a journal's data file. */
+    mutationFn: ({ files, readMe }: Upload) => {
       const form = new FormData();
-      form.append('file', file, file.name);
+      if (readMe) form.append('readMe', readMe, readMe.name);
+      for (const file of files) form.append('file', file, file.name);
       return call(intake, `/surveys/${surveyId}/intakes`, { method: 'POST', form });
     },
     onSuccess: (made) => {
@@ -40,6 +47,30 @@ export function useSaveSettings(intakeId: string) {
     scope: { id: `intake-${intakeId}` },
     mutationFn: (settings: IntakeSettings) =>
       call(intake, `/intakes/${intakeId}`, { method: 'PATCH', json: { settings } }),
+    onSuccess: (answer: Intake) => client.setQueryData(intakeQuery(intakeId).queryKey, answer),
+  });
+}
+
+/** Further files of the same catalogue. */
+export function useAddParts(intakeId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    scope: { id: `intake-${intakeId}` },
+    mutationFn: (files: readonly File[]) => {
+      const form = new FormData();
+      for (const file of files) form.append('file', file, file.name);
+      return call(intake, `/intakes/${intakeId}/parts`, { method: 'POST', form });
+    },
+    onSuccess: (answer: Intake) => client.setQueryData(intakeQuery(intakeId).queryKey, answer),
+  });
+}
+
+/** Takes a file out again, by its number; the first file is 0 and stays. */
+export function useRemovePart(intakeId: string) {
+  const client = useQueryClient();
+  return useMutation({
+    scope: { id: `intake-${intakeId}` },
+    mutationFn: (part: number) => call(intake, `/intakes/${intakeId}/parts/${part}`, { method: 'DELETE' }),
     onSuccess: (answer: Intake) => client.setQueryData(intakeQuery(intakeId).queryKey, answer),
   });
 }

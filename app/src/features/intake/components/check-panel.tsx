@@ -1,12 +1,24 @@
-import { Tag } from '@blueprintjs/core';
-import type { IntakeCheck } from '@eremite/shared/contracts/intake';
+import { Checkbox, Tag } from '@blueprintjs/core';
+import type { Intake } from '@eremite/shared/contracts/intake';
+import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { count } from '#lib/format/number.ts';
+import type { Change } from '../hooks/use-intake-draft.ts';
+import { goToSetting } from './go-to-setting.ts';
+import { partOf } from './part-of.ts';
 
 const LEVELS = { ask: 'Say', assumed: 'Assumed', warning: 'Note' } as const;
 const INTENTS = { ask: 'danger', assumed: 'warning', warning: 'none' } as const;
 
 /** What would become of the rows as things stand, and what is still open. Counted over the whole table. */
-export function CheckPanel({ check, isChecking }: { check: IntakeCheck; isChecking: boolean }) {
+interface CheckPanelProps {
+  intake: Intake;
+  draft: IntakeSettings;
+  change: Change;
+  isChecking: boolean;
+}
+
+export function CheckPanel({ intake, draft, change, isChecking }: CheckPanelProps) {
+  const { check } = intake;
   const order = ['ask', 'warning', 'assumed'];
   const questions = [...check.questions].sort((a, b) => order.indexOf(a.level) - order.indexOf(b.level));
   return (
@@ -31,7 +43,10 @@ export function CheckPanel({ check, isChecking }: { check: IntakeCheck; isChecki
             <ul className="check-rows">
               {first.map((row) => (
                 <li key={`${row.row}:${row.column}`}>
-                  <span className="num">{row.line === null ? `row ${row.row}` : `line ${row.line}`}</span>
+                  <span className="num">
+                    {row.line === null ? `row ${row.row}` : `line ${row.line}`}
+                    {intake.parts.length > 1 && ` of ${partOf(intake.parts, row.row)}`}
+                  </span>
                   {row.column && <span className="mono"> {row.column}</span>}
                   {row.value !== null && <span className="mono"> “{row.value}”</span>}
                 </li>
@@ -43,7 +58,21 @@ export function CheckPanel({ check, isChecking }: { check: IntakeCheck; isChecki
           <ul className="check-questions">
             {questions.map(({ level, text, pointer }) => (
               <li key={pointer + text}>
-                <Tag intent={INTENTS[level]}>{LEVELS[level]}</Tag> {text}
+                <Tag intent={INTENTS[level]}>{LEVELS[level]}</Tag> {text}{' '}
+                {pointer === '/acceptTruncated' ? (
+                  <Checkbox
+                    className="check-questions__answer"
+                    checked={draft.acceptTruncated === true}
+                    label="Take the rows before the break"
+                    onChange={({ currentTarget }) => change({ acceptTruncated: currentTarget.checked || undefined })}
+                  />
+                ) : (
+                  level !== 'warning' && (
+                    <button type="button" className="link-button" onClick={() => goToSetting(pointer)}>
+                      go there
+                    </button>
+                  )
+                )}
               </li>
             ))}
           </ul>

@@ -25,7 +25,13 @@ export function ColumnRoles({ intake, draft, change }: ColumnRolesProps) {
       ...(role && draft.units?.[role] !== undefined ? { units: withUnit(draft.units, role, undefined) } : {}),
     });
   return (
-    <div className="data-table__scroll column-roles" tabIndex={0} role="region" aria-label="Columns and their roles">
+    <div
+      className="data-table__scroll column-roles"
+      tabIndex={0}
+      role="region"
+      aria-label="Columns and their roles"
+      data-pointer="/columns"
+    >
       <table className="data-table">
         <thead>
           <tr>
@@ -54,7 +60,7 @@ export function ColumnRoles({ intake, draft, change }: ColumnRolesProps) {
                 <td className="is-left" title={[column.description, column.ucd].filter(Boolean).join(' · ')}>
                   {column.name}
                 </td>
-                <td className="is-left">
+                <td className="is-left" data-pointer={role ? `/units/${role}` : undefined}>
                   {role && takesUnit(role) ? (
                     <UnitCell
                       key={`${role} ${draft.units?.[role] ?? ''}`}

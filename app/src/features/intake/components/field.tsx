@@ -3,6 +3,8 @@ import { useId, useState } from 'react';
 
 interface ChoiceFieldProps<T extends string> {
   label: string;
+  /** Which setting it is, so that a question can lead to it. */
+  pointer?: string;
   help?: string;
   value: T | undefined;
   choices: Record<T, string>;
@@ -14,6 +16,7 @@ interface ChoiceFieldProps<T extends string> {
 /** One of a few; may be left unsaid, which is then stated as an assumption. */
 export function ChoiceField<T extends string>({
   label,
+  pointer,
   help,
   value,
   choices,
@@ -22,26 +25,29 @@ export function ChoiceField<T extends string>({
 }: ChoiceFieldProps<T>) {
   const id = useId();
   return (
-    <FormGroup label={label} labelFor={id} helperText={help}>
-      <HTMLSelect
-        id={id}
-        fill
-        value={value ?? ''}
-        onChange={(event) => onChange((event.target.value || undefined) as T | undefined)}
-      >
-        <option value="">{unsaid}</option>
-        {(Object.entries(choices) as [T, string][]).map(([key, words]) => (
-          <option key={key} value={key}>
-            {words}
-          </option>
-        ))}
-      </HTMLSelect>
-    </FormGroup>
+    <div data-pointer={pointer}>
+      <FormGroup label={label} labelFor={id} helperText={help}>
+        <HTMLSelect
+          id={id}
+          fill
+          value={value ?? ''}
+          onChange={(event) => onChange((event.target.value || undefined) as T | undefined)}
+        >
+          <option value="">{unsaid}</option>
+          {(Object.entries(choices) as [T, string][]).map(([key, words]) => (
+            <option key={key} value={key}>
+              {words}
+            </option>
+          ))}
+        </HTMLSelect>
+      </FormGroup>
+    </div>
   );
 }
 
 interface NumberFieldProps {
   label: string;
+  pointer?: string;
   unit?: string;
   help?: string;
   value: number | null | undefined;
@@ -51,49 +57,57 @@ interface NumberFieldProps {
 }
 
 /** A number that may be absent. What cannot be read as a number is not sent. */
-export function NumberField({ label, unit, help, value, min, max, onChange }: NumberFieldProps) {
+export function NumberField({ label, pointer, unit, help, value, min, max, onChange }: NumberFieldProps) {
   const id = useId();
-  const [text, setText] = useState(value === null || value === undefined ? '' : String(value));
+  const [typed, setText] = useState(value === null || value === undefined ? '' : String(value));
+  // A value set from elsewhere, as a suggested depth, takes the place of what was typed.
+  const text = value != null && Number(typed) !== value ? String(value) : typed;
   return (
-    <FormGroup label={label} labelInfo={unit} labelFor={id} helperText={help}>
-      <InputGroup
-        id={id}
-        type="number"
-        step="any"
-        {...(min === undefined ? {} : { min })}
-        {...(max === undefined ? {} : { max })}
-        value={text}
-        onValueChange={(next) => {
-          setText(next);
-          const number = Number(next);
-          if (next === '') onChange(undefined);
-          else if (Number.isFinite(number)) onChange(number);
-        }}
-      />
-    </FormGroup>
+    <div data-pointer={pointer}>
+      <FormGroup label={label} labelInfo={unit} labelFor={id} helperText={help}>
+        <InputGroup
+          id={id}
+          type="number"
+          step="any"
+          {...(min === undefined ? {} : { min })}
+          {...(max === undefined ? {} : { max })}
+          value={text}
+          onValueChange={(next) => {
+            setText(next);
+            const number = Number(next);
+            if (next === '') onChange(undefined);
+            else if (Number.isFinite(number)) onChange(number);
+          }}
+        />
+      </FormGroup>
+    </div>
   );
 }
 
 interface TextFieldProps {
   label: string;
+  /** Which setting it is, so that a question can lead to it. */
+  pointer?: string;
   help?: string;
   value: string | undefined;
   onChange: (value: string) => void;
 }
 
-export function TextField({ label, help, value, onChange }: TextFieldProps) {
+export function TextField({ label, pointer, help, value, onChange }: TextFieldProps) {
   const id = useId();
   const [text, setText] = useState(value ?? '');
   return (
-    <FormGroup label={label} labelFor={id} helperText={help}>
-      <InputGroup
-        id={id}
-        value={text}
-        onValueChange={(next) => {
-          setText(next);
-          onChange(next);
-        }}
-      />
-    </FormGroup>
+    <div data-pointer={pointer}>
+      <FormGroup label={label} labelFor={id} helperText={help}>
+        <InputGroup
+          id={id}
+          value={text}
+          onValueChange={(next) => {
+            setText(next);
+            onChange(next);
+          }}
+        />
+      </FormGroup>
+    </div>
   );
 }

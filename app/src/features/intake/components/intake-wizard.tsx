@@ -9,22 +9,34 @@ import { BandFields } from './band-fields.tsx';
 import { CheckPanel } from './check-panel.tsx';
 import { ColumnRoles } from './column-roles.tsx';
 import { ChoiceField, TextField } from './field.tsx';
+import { DuplicatesPanel } from './duplicates-panel.tsx';
+import { FootprintFields } from './footprint-fields.tsx';
 import { MeaningFields } from './meaning-fields.tsx';
+import { PartsFields } from './parts-fields.tsx';
 import { PublishPanel } from './publish-panel.tsx';
 import { RestFields } from './rest-fields.tsx';
-import { KIND_WORDS } from './role-words.ts';
+import { KIND_HELP, KIND_WORDS } from './role-words.ts';
+import { VersionField } from './version-field.tsx';
 import './intake.css';
 
 interface IntakeWizardProps {
   intake: Intake;
+  /** Catalogue whose next version is being brought in. */
+  supersedes?: string | undefined;
   onPublished: (job: Job) => void;
   onDiscarded: () => void;
 }
 
 /** Everything the table needs said of it, in the order one would say it, with the outcome always in sight. */
-export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardProps) {
-  const { draft, change, isChecking, error } = useIntakeDraft(intake);
+export function IntakeWizard({ intake, supersedes, onPublished, onDiscarded }: IntakeWizardProps) {
+  const { draft, change, isChecking, error } = useIntakeDraft(intake, supersedes);
+  const isSettled = !isChecking && error === null;
   const several = intake.tables.length > 1;
+  const hasDepth = draft.kind !== 'hi' && draft.kind !== 'groups';
+  // Lists of stars and groups say where things are, never where nothing is.
+  const hasFootprint = hasDepth && draft.kind !== 'stars';
+  const twice = draft.kind === 'hi' && intake.duplicates.count > 0;
+  const lastStep = hasFootprint ? 6 : hasDepth || twice ? 5 : 4;
   const tables = Object.fromEntries(
     intake.tables.map(({ index, name, rows, columns }) => [
       String(index),
@@ -52,6 +64,8 @@ export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardP
             <ChoiceField
               label="What it lists"
               value={draft.kind}
+              pointer="/kind"
+              {...(draft.kind && KIND_HELP[draft.kind] ? { help: KIND_HELP[draft.kind] } : {})}
               choices={KIND_WORDS}
               onChange={(kind) => change({ kind })}
             />
@@ -61,7 +75,14 @@ export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardP
               value={draft.name}
               onChange={(name) => change({ name })}
             />
+            <VersionField intake={intake} draft={draft} change={change} />
           </div>
+          {intake.readMe && (
+            <p className="small">
+              Described by <span className="mono">{intake.readMe}</span>, which came with it.
+            </p>
+          )}
+          <PartsFields intake={intake} draft={draft} change={change} isSettled={isSettled} />
           <WideTable
             label="First rows of the table"
             columns={intake.columns.map(({ name, unit }) => ({ name, note: unit }))}
@@ -74,27 +95,29 @@ export function IntakeWizard({ intake, onPublished, onDiscarded }: IntakeWizardP
         <Step number={3} title="What the numbers mean">
           <MeaningFields draft={draft} change={change} />
         </Step>
-        {draft.kind !== 'hi' && draft.kind !== 'groups' && (
+        {hasDepth && (
           <Step number={4} title="How deep it reaches">
             <BandFields intake={intake} draft={draft} change={change} />
           </Step>
         )}
-        <Step
-          number={draft.kind !== 'hi' && draft.kind !== 'groups' ? 5 : 4}
-          title="Where it looked, and what to leave out"
-        >
+        {twice && (
+          <Step number={4} title="Sources that are in it twice">
+            <DuplicatesPanel intake={intake} draft={draft} change={change} />
+          </Step>
+        )}
+        {hasFootprint && (
+          <Step number={5} title="Where it looked">
+            <FootprintFields intake={intake} draft={draft} change={change} isChecking={isChecking} />
+          </Step>
+        )}
+        <Step number={lastStep} title="What to leave out, and where it comes from">
           <RestFields intake={intake} draft={draft} change={change} />
         </Step>
       </div>
       <aside className="intake__side stack" aria-label="Outcome">
-        <CheckPanel check={intake.check} isChecking={isChecking} />
+        <CheckPanel intake={intake} draft={draft} change={change} isChecking={isChecking} />
         <ProblemCallout error={error} title="These settings do not fit" />
-        <PublishPanel
-          intake={intake}
-          isUnsettled={isChecking || error !== null}
-          onPublished={onPublished}
-          onDiscarded={onDiscarded}
-        />
+        <PublishPanel intake={intake} isUnsettled={!isSettled} onPublished={onPublished} onDiscarded={onDiscarded} />
       </aside>
     </div>
   );

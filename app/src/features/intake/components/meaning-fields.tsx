@@ -33,30 +33,35 @@ export function MeaningFields({ draft, change }: { draft: IntakeSettings; change
     <div className="columns field-grid">
       <ChoiceField
         label="Frame of the positions"
+        pointer="/frame"
         value={draft.frame}
         choices={FRAMES}
         onChange={(frame) => change({ frame })}
       />
       <ChoiceField
         label="Velocity convention"
+        pointer="/velocity"
         value={velocity?.convention}
         choices={CONVENTIONS}
         onChange={(convention) => change({ velocity: { ...velocity, convention } })}
       />
       <ChoiceField
         label="Velocity frame"
+        pointer="/velocity/frame"
         value={velocity?.frame}
         choices={VELOCITY_FRAMES}
         onChange={(frame) => change({ velocity: { ...velocity, frame } })}
       />
       <ChoiceField
         label="Meaning of the position error"
+        pointer="/errorMeaning"
         value={draft.errorMeaning}
         choices={ERRORS}
         onChange={(errorMeaning) => change({ errorMeaning })}
       />
       <NumberField
         label="Position error"
+        pointer="/positionErrorArcsec"
         unit="arcsec"
         help="For all rows, where the table has no column for it."
         value={draft.positionErrorArcsec}
@@ -67,6 +72,7 @@ export function MeaningFields({ draft, change }: { draft: IntakeSettings; change
         <>
           <NumberField
             label="Beam, major axis"
+            pointer="/beamArcsec"
             unit="arcsec FWHM"
             value={beam?.major}
             min={0}
@@ -89,6 +95,7 @@ export function MeaningFields({ draft, change }: { draft: IntakeSettings; change
       )}
       <ChoiceField
         label="Kind of the distance column"
+        pointer="/distanceKind"
         value={draft.distanceKind}
         choices={{ angular: 'as given, for projection', luminosity: 'luminosity distance' }}
         onChange={(distanceKind) => change({ distanceKind })}

@@ -57,3 +57,10 @@ export const KIND_WORDS = {
   stars: 'bright stars (masks)',
   groups: 'groups and clusters',
 } as const;
+
+/** What a kind of table is for, where its name does not say it. */
+export const KIND_HELP: Partial<Record<keyof typeof KIND_WORDS, string>> = {
+  stars: 'Each star hides a patch of sky that grows with its brightness: what lies there counts as not seen.',
+  groups: 'Positions and velocities of groups and clusters, for the surroundings.',
+  continuum: 'Radio sources, for hydroxyl and continuum doubts.',
+};

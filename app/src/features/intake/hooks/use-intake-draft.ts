@@ -9,7 +9,7 @@ const PAUSE_MS = 500;
  * The settings as they are being edited; each change is checked on the whole table a moment after it is made.
  * `isChecking` holds from the change on, so that nothing is published under settings that are no longer shown.
  */
-export function useIntakeDraft(intake: Intake) {
+export function useIntakeDraft(intake: Intake, supersedes?: string) {
   const [draft, setDraft] = useState<IntakeSettings>(intake.settings);
   const [isWaiting, setWaiting] = useState(false);
   const save = useSaveSettings(intake.id);
@@ -20,7 +20,15 @@ export function useIntakeDraft(intake: Intake) {
     clearTimeout(timer.current);
     timer.current = undefined;
     setWaiting(false);
-    mutate(latest.current);
+    mutate(latest.current, {
+      onSuccess: ({ settings }) => {
+        // A region sent as a FITS file comes back as text, and need not be sent again with every change.
+        const { value } = latest.current.footprint ?? {};
+        if (typeof value !== 'object' || value === null || !('fits' in value)) return;
+        latest.current = { ...latest.current, footprint: settings.footprint };
+        setDraft(latest.current);
+      },
+    });
   }, [mutate]);
   const change = useCallback(
     (patch: Partial<IntakeSettings>) => {
@@ -34,6 +42,12 @@ export function useIntakeDraft(intake: Intake) {
     },
     [send],
   );
+  // Said once by the page that led here; from then on it is a setting like any other.
+  const told = useRef(supersedes);
+  useEffect(() => {
+    if (told.current !== undefined && latest.current.supersedes === undefined) change({ supersedes: told.current });
+    told.current = undefined;
+  }, [change]);
   // Leaving the page a moment after a change must not lose it.
   useEffect(
     () => () => {

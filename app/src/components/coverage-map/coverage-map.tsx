@@ -1,6 +1,7 @@
-import { cellBoundary } from '@eremite/shared/science/sky/healpix';
+import { cellBoundary, cellSide } from '@eremite/shared/science/sky/healpix';
 import { Moc } from '@eremite/shared/science/sky/moc';
 import { useMemo } from 'react';
+import './coverage-map.css';
 import { graticule } from '#components/sky-chart/graticule.ts';
 import { chooseProjection } from '#components/sky-chart/project-sky.ts';
 
@@ -11,8 +12,8 @@ interface Outline {
   corners: { raDeg: number; decDeg: number }[];
 }
 
-/** Cells of the region, coarsened until few enough to draw. */
-function outlines(text: string): Outline[] {
+/** Cells of the region, coarsened until few enough to draw, and their side in degrees. */
+function outlines(text: string): { cells: Outline[]; sideDeg: number } {
   const region = Moc.parse(text);
   const cells: Outline[] = [];
   const order = (() => {
@@ -32,13 +33,20 @@ function outlines(text: string): Outline[] {
       });
     }
   }
-  return cells;
+  return { cells, sideDeg: cellSide(order) / RAD };
 }
 
-/** Where a catalogue looked. */
+const sizeOf = (sideDeg: number) =>
+  sideDeg >= 1
+    ? `${sideDeg.toFixed(1)}°`
+    : sideDeg >= 1 / 60
+      ? `${(sideDeg * 60).toFixed(1)}′`
+      : `${(sideDeg * 3600).toFixed(0)}″`;
+
+/** Where a catalogue looked: its cells between meridians and parallels, north up, east left. */
 export function CoverageMap({ moc }: { moc: string }) {
   const drawn = useMemo(() => {
-    const cells = outlines(moc);
+    const { cells, sideDeg } = outlines(moc);
     const corners = cells.flatMap((cell) => cell.corners);
     const projection = chooseProjection(corners);
     const shapes = cells.map((cell) => cell.corners.map(({ raDeg, decDeg }) => projection.place(raDeg, decDeg)));
@@ -59,23 +67,46 @@ export function CoverageMap({ moc }: { moc: string }) {
       width: high(xs) - low(xs) + span * 0.12,
       height: high(ys) - low(ys) + span * 0.12,
     };
-    return { kept, box, lines: graticule(projection, span / RAD) };
+    return { kept, box, sideDeg, lines: graticule(projection, span / RAD) };
   }, [moc]);
-  const { box, kept, lines } = drawn;
+  const { box, kept, lines, sideDeg } = drawn;
+  // Text of about 11 pixels in a map some 420 wide.
+  const letter = box.width / 38;
   const path = (points: readonly (readonly [number, number])[]) =>
     points.map(([x, y], i) => `${i ? 'L' : 'M'}${x.toFixed(5)} ${(-y).toFixed(5)}`).join('');
   return (
-    <svg
-      className="coverage-map"
-      viewBox={`${box.x} ${box.y} ${box.width} ${box.height}`}
-      role="img"
-      aria-label={`Coverage: ${kept.length} cells, north up, east left`}
-    >
-      {lines.map(({ points, label }) => (
-        <path key={label + String(points.length)} className="coverage-map__line" d={path(points)} />
-      ))}
-      <path className="coverage-map__cells" d={kept.map((shape) => `${path(shape)}Z`).join('')} />
-    </svg>
+    <figure className="coverage-figure">
+      <svg
+        className="coverage-map"
+        viewBox={`${box.x} ${box.y} ${box.width} ${box.height}`}
+        role="img"
+        aria-label={`Coverage: ${kept.length} cells, north up, east left`}
+      >
+        {lines.map(({ points, label }) => (
+          <path key={label + String(points.length)} className="coverage-map__line" d={path(points)} />
+        ))}
+        <path className="coverage-map__cells" d={kept.map((shape) => `${path(shape)}Z`).join('')} />
+        {lines.map(({ points, label }) => {
+          const first = points.find(
+            ([x, y]) => x > box.x && x < box.x + box.width * 0.9 && -y > box.y + letter && -y < box.y + box.height,
+          );
+          return first ? (
+            <text
+              key={`${label} ${points.length}`}
+              x={first[0] + letter / 4}
+              y={-first[1] - letter / 4}
+              fontSize={letter}
+              aria-hidden="true"
+            >
+              {label}
+            </text>
+          ) : null;
+        })}
+      </svg>
+      <figcaption className="muted small">
+        Drawn in cells of <span className="num">{sizeOf(sideDeg)}</span>; north is up, east left.
+      </figcaption>
+    </figure>
   );
 }
 

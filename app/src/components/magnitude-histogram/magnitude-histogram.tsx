@@ -1,10 +1,10 @@
 import * as Plot from '@observablehq/plot';
-import type { CatalogueMagnitudes } from '@eremite/shared/contracts/catalogue';
+import type { BandCounts } from '@eremite/shared/contracts/band-counts';
 import { useEffect, useRef } from 'react';
 import { count, fixed } from '#lib/format/number.ts';
 
-/** Counts of one band against magnitude, logarithmic, with the depth that was stated. */
-export function MagnitudeHistogram({ band }: { band: CatalogueMagnitudes['bands'][number] }) {
+/** Counts of one band against magnitude, logarithmic, with the depth that was stated and the one the counts suggest. */
+export function MagnitudeHistogram({ band }: { band: BandCounts }) {
   const host = useRef<HTMLDivElement>(null);
   useEffect(() => {
     const bins = band.counts.map((rows, i) => ({
@@ -14,8 +14,9 @@ export function MagnitudeHistogram({ band }: { band: CatalogueMagnitudes['bands'
     }));
     const chart = Plot.plot({
       width: 420,
-      height: 180,
+      height: 192,
       marginLeft: 46,
+      marginTop: 32,
       style: {
         background: 'transparent',
         fontFamily: 'var(--mono)',
@@ -30,6 +31,18 @@ export function MagnitudeHistogram({ band }: { band: CatalogueMagnitudes['bands'
           bins.filter(({ rows }) => rows > 0),
           { x1: 'from', x2: 'to', y1: 0.8, y2: 'rows', fill: 'var(--lit)', insetLeft: 0.5, insetRight: 0.5 },
         ),
+        ...(band.suggestedDepth === null
+          ? []
+          : [
+              Plot.ruleX([band.suggestedDepth.magnitude], { stroke: 'var(--text)', strokeDasharray: '1 3' }),
+              Plot.text([band.suggestedDepth.magnitude], {
+                x: (depth: number) => depth,
+                frameAnchor: 'top',
+                dy: band.depth5Sigma === null ? -6 : -17,
+                text: () => 'turn-over',
+                fill: 'var(--text)',
+              }),
+            ]),
         ...(band.depth5Sigma === null
           ? []
           : [
@@ -49,7 +62,12 @@ export function MagnitudeHistogram({ band }: { band: CatalogueMagnitudes['bands'
     host.current?.replaceChildren(chart);
     return () => chart.remove();
   }, [band]);
-  const depth = band.depth5Sigma === null ? 'no depth stated' : `5-sigma depth ${fixed(band.depth5Sigma, 1)}`;
+  const stated = band.depth5Sigma === null ? 'no depth stated' : `5-sigma depth ${fixed(band.depth5Sigma, 1)}`;
+  const turnover = band.suggestedDepth;
+  const found = turnover
+    ? `the counts turn over at ${fixed(turnover.magnitude, 1)} ± ${fixed(turnover.uncertainty, 1)}`
+    : 'the counts show no turn-over';
+  const depth = `${stated}; ${found}`;
   return (
     <figure>
       <div

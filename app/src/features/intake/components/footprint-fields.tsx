@@ -1,0 +1,78 @@
+import type { Intake } from '@eremite/shared/contracts/intake';
+import type { FOOTPRINT_TYPES } from '@eremite/shared/contracts/intake-settings';
+import { type IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import { CoverageMap } from '#components/coverage-map/coverage-map.tsx';
+import { significant } from '#lib/format/number.ts';
+import type { Change } from '../hooks/use-intake-draft.ts';
+import { ChoiceField, NumberField } from './field.tsx';
+import { FootprintText } from './footprint-text.tsx';
+
+const FOOTPRINTS: Record<(typeof FOOTPRINT_TYPES)[number], string> = {
+  unknown: 'unknown',
+  rows: 'where the rows are',
+  moc: 'a MOC',
+  circles: 'circles',
+  cones: 'cones around the detections',
+  polygons: 'polygons',
+  'all-sky': 'the whole sky',
+};
+const FIRST_CONE_ARCSEC = 120;
+
+interface FootprintFieldsProps {
+  intake: Intake;
+  draft: IntakeSettings;
+  change: Change;
+  isChecking: boolean;
+}
+
+/** Where the table has looked, said in one of several ways, and drawn as it will be published. */
+export function FootprintFields({ intake, draft, change, isChecking }: FootprintFieldsProps) {
+  const { type, value } = draft.footprint ?? {};
+  const { coverage } = intake;
+  const written = type === 'moc' || type === 'circles' || type === 'polygons' ? type : undefined;
+  const start = (next: typeof type) =>
+    next && { type: next, ...(next === 'cones' ? { value: { radiusArcsec: FIRST_CONE_ARCSEC } } : {}) };
+  return (
+    <div className="footprint-fields" data-pointer="/footprint">
+      <div>
+        <ChoiceField
+          label="Footprint"
+          help="What was observed; outside it silence says nothing."
+          unsaid="not stated: from the rows, if they can tell"
+          value={type}
+          choices={FOOTPRINTS}
+          onChange={(next) => change({ footprint: start(next) })}
+        />
+        {type === 'cones' && (
+          <NumberField
+            label="Radius of the cones"
+            unit="arcsec"
+            help="As it was asked of the archive. Neighbours and shifted positions outside the cones cannot be told."
+            value={(value as { radiusArcsec?: number } | undefined)?.radiusArcsec}
+            min={0}
+            onChange={(radiusArcsec) => change({ footprint: { type, value: { radiusArcsec } } })}
+          />
+        )}
+        {written && (
+          <FootprintText
+            key={written}
+            type={written}
+            value={value}
+            onChange={(next) => change({ footprint: { type: written, value: next } })}
+          />
+        )}
+      </div>
+      <div style={{ opacity: isChecking ? 0.6 : 1 }}>
+        {coverage?.moc && <CoverageMap moc={coverage.moc} />}
+        {coverage && (
+          <p className={coverage.moc ? 'small' : 'small facts__open'}>
+            {coverage.areaSqDeg !== null && (
+              <span className="num">{significant(coverage.areaSqDeg, 3)} square degrees: </span>
+            )}
+            {coverage.moc ? coverage.note : `No region: ${coverage.note}`}
+          </p>
+        )}
+      </div>
+    </div>
+  );
+}
