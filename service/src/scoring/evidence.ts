@@ -22,7 +22,11 @@ interface Placed {
   separationArcsec: number;
 }
 
-const numbers = <T>(rows: readonly T[], of: (row: T) => number) => Float64Array.from(rows, of);
+function numbers<T>(rows: readonly T[], of: (row: T) => number): Float64Array {
+  const column = new Float64Array(rows.length);
+  for (let i = 0; i < column.length; i++) column[i] = of(rows[i]!);
+  return column;
+}
 
 function common(rows: readonly Placed[]): Record<string, Column> {
   return {

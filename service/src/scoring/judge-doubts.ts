@@ -179,7 +179,10 @@ function bestCovered({ silence }: StarlightAssessment): number {
 }
 
 const sidelobeSource = (row: NeighbourRow) => ({
-  name: rowName(row.catalogue, row.index),
+  // Decoded only where the source is named.
+  get name() {
+    return rowName(row.catalogue, row.index);
+  },
   separationArcmin: row.separationArcsec / 60,
   velocityDifferenceKms: row.velocityDifferenceKms,
   fluxJyKms: row.fluxJyKms,
@@ -227,10 +230,19 @@ function debrisDoubt(
   { pool, reach }: SurroundingsResult,
   { doubts, counterpart }: CriteriaSettings,
 ): Doubt {
+  const { possibleDebrisKpc, possibleDebrisKms } = doubts;
+  const distanceOf = (row: NeighbourRow) => numberRole(row.catalogue.input.roles, 'distanceMpc')?.[row.index] ?? NaN;
+  // Rows beyond the wider zone cannot matter, and there are many of them.
+  const near = pool.filter((row) => {
+    if (!(Math.abs(row.velocityDifferenceKms) <= possibleDebrisKms)) return false;
+    const stated = distanceOf(row);
+    const kpc = (stated > 0 ? stated : detection.angularMpc) * 1000 * row.separationArcsec * ARCSECOND;
+    return kpc <= possibleDebrisKpc * (1 + 1e-9);
+  });
   return debris(
     {
-      neighbours: pool.map((row) => {
-        const stated = numberRole(row.catalogue.input.roles, 'distanceMpc')?.[row.index] ?? NaN;
+      neighbours: near.map((row) => {
+        const stated = distanceOf(row);
         // A neighbour without a distance of its own is taken at that of the detection: they share a velocity.
         const distanceMpc = stated > 0 ? stated : detection.angularMpc;
         const modulus = 5 * Math.log10(distanceMpc) + 25;
@@ -254,7 +266,7 @@ function debrisDoubt(
     },
     {
       strong: { radiusKpc: doubts.strongDebrisKpc, windowKms: doubts.strongDebrisKms },
-      possible: { radiusKpc: doubts.possibleDebrisKpc, windowKms: doubts.possibleDebrisKms },
+      possible: { radiusKpc: possibleDebrisKpc, windowKms: possibleDebrisKms },
       minLogHiMass: Math.log10(doubts.debrisGasMass),
       minLogStellarMass: Math.log10(doubts.debrisStellarMass),
     },

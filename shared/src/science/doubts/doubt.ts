@@ -46,7 +46,7 @@ export type DoubtRule = Pick<Doubt, 'name' | 'rule' | 'source'>;
  * @param unit unit of the number
  */
 export function doubt(rule: DoubtRule, grade: DoubtGrade, sentence: string, value = NaN, unit?: string): Doubt {
-  const result: Doubt = { ...rule, grade, sentence };
+  const result: Doubt = { name: rule.name, rule: rule.rule, source: rule.source, grade, sentence };
   if (Number.isFinite(value)) {
     result.value = value;
     if (unit !== undefined) result.unit = unit;

@@ -1,6 +1,6 @@
 import { DomainError } from '../domain-error.ts';
 import { erfc } from '../robustness/error-function.ts';
-import { extendedLimit } from './extended-depth.ts';
+import { extendedLimit, extendedLoss } from './extended-depth.ts';
 import type { PointDepth } from './extended-depth.ts';
 import type { SizePrior } from './size-prior.ts';
 
@@ -77,16 +77,18 @@ export function expectedDetection(
   settings = DEFAULT_DETECTION,
 ): number {
   check(settings);
-  const core = Math.hypot(expected.scatterMag, settings.rollOffMag);
-  const tail = Math.hypot(expected.tailScatterMag, settings.rollOffMag);
+  const { magnitudeAb, scatterMag, tailFraction, tailScatterMag } = expected;
+  const core = Math.hypot(scatterMag, settings.rollOffMag);
+  const tail = Math.hypot(tailScatterMag, settings.rollOffMag);
   let total = 0;
   for (const { weight, median, scatterDex } of sizes) {
+    const loss = extendedLoss(depth, median);
     for (let k = 0; k < NODES.length; k++) {
-      const radius = median * 10 ** (scatterDex * NODES[k]!);
-      const limit = extendedLimit(depth, radius, settings.penaltyMag);
+      // A radius ten times larger loses 2.5 mag, so that the loss is linear in the nodes.
+      const limit = depth.limitMag - Math.max(0, loss + 2.5 * scatterDex * NODES[k]!) - settings.penaltyMag;
+      const inCore = below(limit, magnitudeAb, core);
       const found =
-        (1 - expected.tailFraction) * below(limit, expected.magnitudeAb, core) +
-        expected.tailFraction * below(limit, expected.magnitudeAb, tail);
+        tailFraction > 0 ? (1 - tailFraction) * inCore + tailFraction * below(limit, magnitudeAb, tail) : inCore;
       total += weight * WEIGHTS[k]! * found;
     }
   }

@@ -36,10 +36,19 @@ export function extendedLimit(depth: PointDepth, effectiveRadiusArcsec: number, 
       `extendedLimit: got depth ${depth.limitMag}, r_e ${effectiveRadiusArcsec} arcsec, penalty ${penaltyMag} mag`,
     );
   }
-  const area = pointSourceArea(depth.fwhmArcsec);
-  // log of the square root; a source smaller than the image quality is a point source.
-  const loss = 1.25 * Math.log10((Math.PI * effectiveRadiusArcsec ** 2) / area) + HALF_LIGHT_MAG;
-  return depth.limitMag - Math.max(0, loss) - penaltyMag;
+  return depth.limitMag - Math.max(0, extendedLoss(depth, effectiveRadiusArcsec)) - penaltyMag;
+}
+
+/**
+ * What a galaxy's extent costs against a point source, mag; below zero for one smaller than the image quality, which is a
+ * point source and loses nothing. It grows by 2.5 mag for each factor of ten in radius.
+ *
+ * @throws {DomainError} if depth or image quality is not usable
+ */
+export function extendedLoss({ limitMag, fwhmArcsec }: PointDepth, effectiveRadiusArcsec: number): number {
+  if (!Number.isFinite(limitMag)) throw new DomainError(`extendedLoss: got depth ${limitMag}`);
+  // The logarithm is of the square root of the area.
+  return 1.25 * Math.log10((Math.PI * effectiveRadiusArcsec ** 2) / pointSourceArea(fwhmArcsec)) + HALF_LIGHT_MAG;
 }
 
 /** Mean surface brightness inside r_e of a galaxy at its extended limit, mag per square arcsec. */

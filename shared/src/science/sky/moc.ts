@@ -150,7 +150,7 @@ export class Moc {
    * @returns fraction, 0..1; exactly 0 or 1 where cells prove it, else with a standard error below 0.5/√samples
    */
   coveredFraction(lon: number, lat: number, radius: number, samples = 1024): number {
-    const outline = this.coneHold(lon, lat, radius);
+    const outline = this.holdsCone(lon, lat, radius);
     if (outline !== 'some') return outline === 'all' ? 1 : 0;
     let inside = 0;
     const points = capPoints(lon, lat, radius, samples);
@@ -158,8 +158,11 @@ export class Moc {
     return inside / samples;
   }
 
-  /** Whether a cone lies wholly in the region or wholly outside; `some` where coarse cells cannot prove either. */
-  private coneHold(lon: number, lat: number, radius: number): 'all' | 'some' | 'none' {
+  /**
+   * Whether a cone lies wholly in the region or wholly outside; `some` where coarse cells cannot prove either. Radians.
+   * @throws {DomainError} for arguments out of range
+   */
+  holdsCone(lon: number, lat: number, radius: number): 'all' | 'some' | 'none' {
     const wanted = Math.floor(Math.log2(1.02 / Math.max(radius / 3, cellSide(this.order))));
     const order = Math.min(this.order, Math.max(0, wanted));
     const width = 4 ** (this.order - order);
