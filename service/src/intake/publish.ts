@@ -2,6 +2,7 @@ import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import type { IntakeCheck, SidelinedRow } from '@eremite/shared/contracts/intake';
 import type { ByteSource, RowChunk } from '../tables/table.ts';
 import type { PackedColumns } from '../tiles/column-pack.ts';
+import { formsName } from '../tiles/original-cells.ts';
 import { selectRows } from '../tiles/column-rows.ts';
 import type { Tile } from '../tiles/tile.ts';
 import { TileCollector } from '../tiles/tile-collector.ts';
@@ -12,7 +13,7 @@ import type { ResolvedSettings } from './resolved.ts';
 import type { PartRows } from './join-parts.ts';
 import { cellAt } from './sample.ts';
 import { streamCatalogue } from './stream-catalogue.ts';
-import { originalCells } from './text-cells.ts';
+import { originalCells, originalForms } from './text-cells.ts';
 
 /** A row put aside with its original cells, or with the text of a row that could not be split into cells. */
 export interface SidelinedCells extends SidelinedRow {
@@ -92,12 +93,15 @@ async function handOut(tiles: Iterable<Tile>, sink: PublishSink): Promise<void> 
   if (batch.length > 0) await sink.tiles(batch);
 }
 
-/** Columns by their number, since names may be anything. */
+/** Columns by their number, since names may be anything, and beside them how their numbers were written. */
 function originalTable(chunk: RowChunk): PackedColumns {
-  return {
-    rows: chunk.rows,
-    columns: Object.fromEntries(chunk.columns.map((_, i) => [`c${i}`, originalCells(chunk, i)])),
-  };
+  const columns: PackedColumns['columns'] = {};
+  for (let i = 0; i < chunk.columns.length; i++) {
+    columns[`c${i}`] = originalCells(chunk, i);
+    const forms = originalForms(chunk, i);
+    if (forms) columns[formsName(`c${i}`)] = forms;
+  }
+  return { rows: chunk.rows, columns };
 }
 
 /** Positions of all rows, as two arrays that grow. */

@@ -1,3 +1,4 @@
+import { SHORTEST, writtenText } from '../tables/columns/written-form.ts';
 import type { ColumnData, RowChunk } from '../tables/table.ts';
 
 /** What the first rows show of one column. */
@@ -18,13 +19,10 @@ export interface ColumnSample {
 const SEXAGESIMAL = /^\s*[+\-\u2212]?\d{1,3}\s*[:h d°]\s*\d{1,2}(\.\d+)?(\s*[:m '′]\s*\d{1,2}(\.\d+)?)?\s*[s"″]?\s*$/;
 const decoder = new TextDecoder();
 
-/** Reads the text of a cell of any column; '' where missing. */
+/** The text of a cell of any column as it was written; '' where missing. */
 export function cellAt(data: ColumnData, i: number): string {
   if (data.kind === 'text') return decoder.decode(data.bytes.subarray(data.offsets[i], data.offsets[i + 1]));
-  const odd = data.odd?.get(i);
-  if (odd !== undefined) return odd;
-  const value = data.values[i]!;
-  return Number.isNaN(value) ? '' : Object.is(value, -0) ? '-0' : String(value);
+  return data.odd?.get(i) ?? data.spelled?.get(i) ?? writtenText(data.values[i]!, data.forms?.[i] ?? SHORTEST);
 }
 
 /** Looks at the columns of the first chunk, at most `most` rows of it. */

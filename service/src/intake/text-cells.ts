@@ -17,11 +17,17 @@ export function nameCells(chunk: RowChunk, index: number): TextColumn {
   return textColumn(Array.from({ length: chunk.rows }, (_, i) => cellAt(data, i)));
 }
 
-/** The original cells of a chunk as a packed table: numbers as Float64, or as text where a cell is not plain. */
+/** The original cells of a column of a chunk: numbers as Float64, or as text where a cell is not plain. */
 export function originalCells(chunk: RowChunk, index: number): Float64Array | TextColumn {
   const data = chunk.columns[index]!;
-  if (data.kind === 'number' && !(data.odd && data.odd.size > 0)) {
+  if (data.kind === 'number' && !data.odd?.size && !data.spelled?.size) {
     return data.values.length === chunk.rows ? data.values : data.values.slice(0, chunk.rows);
   }
   return nameCells(chunk, index);
+}
+
+/** How the numbers of a column were written, a byte a cell; undefined where all are as their shortest digits. */
+export function originalForms(chunk: RowChunk, index: number): Uint8Array | undefined {
+  const data = chunk.columns[index]!;
+  return data.kind === 'number' && data.forms ? data.forms.subarray(0, chunk.rows) : undefined;
 }

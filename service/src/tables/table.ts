@@ -34,10 +34,17 @@ export interface TableFacts {
 /**
  * One column of one chunk. In `number`, missing is NaN and infinities never occur; `odd` keeps, by row index within
  * the chunk, the literal text of cells that are not plain numbers (their value is NaN) or whose digits a double
- * cannot hold (value rounded). In `text`, cell i is UTF-8 `bytes[offsets[i] .. offsets[i + 1]]`; empty is missing.
+ * cannot hold (value rounded). `forms` tells how the others were written (see columns/written-form.ts), and `spelled`
+ * keeps the text of those that no form gives back; a reader of binary numbers has neither. In `text`, cell i is UTF-8 `bytes[offsets[i] .. offsets[i + 1]]`; empty is missing.
  */
 export type ColumnData =
-  | { kind: 'number'; values: Float64Array; odd?: Map<number, string> }
+  | {
+      kind: 'number';
+      values: Float64Array;
+      odd?: Map<number, string>;
+      forms?: Uint8Array;
+      spelled?: Map<number, string>;
+    }
   | { kind: 'text'; offsets: Uint32Array; bytes: Uint8Array };
 
 /** A row that could not be split into cells. It takes a row number but no place in the columns. */

@@ -1,7 +1,8 @@
 import type { ColumnData } from '../table.ts';
 import { cellText } from './cell-text.ts';
 import { isMissingWord } from './missing-marks.ts';
-import { parsePlainNumber } from './plain-number.ts';
+import { formOfLast, parsePlainNumber } from './plain-number.ts';
+import { SHORTEST, SPELLED, type WrittenForm, wordForm } from './written-form.ts';
 
 /** 2^53 rounded down: whole numbers beyond it may lose digits in a double. */
 const SAFE = 9e15;
@@ -20,6 +21,8 @@ export interface NumberColumnOptions {
 export class NumberColumn {
   private values: Float64Array;
   private odd: Map<number, string> | undefined;
+  private forms: Uint8Array | undefined;
+  private spelled: Map<number, string> | undefined;
   private readonly nullValue: number;
   private readonly decimal: number;
 
@@ -41,8 +44,11 @@ export class NumberColumn {
     const value = start === end ? NaN : parsePlainNumber(bytes, start, end, this.decimal);
     const second = bytes[start + 1]!;
     const identifier = bytes[start] === 48 && end - start > 2 && second >= 48 && second <= 57;
-    if (value < SAFE && value > -SAFE && value !== this.nullValue && !identifier) this.values[row] = value;
-    else if (start === end) this.values[row] = NaN;
+    if (value < SAFE && value > -SAFE && value !== this.nullValue && !identifier) {
+      this.values[row] = value;
+      const form = formOfLast();
+      if (form !== SHORTEST) this.write(row, form, bytes, start, end);
+    } else if (start === end) this.values[row] = NaN;
     else this.putOddCell(row, value, cellText(bytes, start, end));
   }
 
@@ -74,22 +80,47 @@ export class NumberColumn {
   take(rows: number): ColumnData {
     const values = rows === this.capacity ? this.values : this.values.slice(0, rows);
     if (rows === this.capacity) this.values = new Float64Array(this.capacity);
-    const odd = this.odd;
-    this.odd = undefined;
-    return odd === undefined ? { kind: 'number', values } : { kind: 'number', values, odd };
+    const { odd, forms, spelled } = this;
+    this.odd = this.forms = this.spelled = undefined;
+    return {
+      kind: 'number',
+      values,
+      ...(odd && { odd }),
+      ...(forms && { forms: rows === this.capacity ? forms : forms.slice(0, rows) }),
+      ...(spelled && { spelled }),
+    };
+  }
+
+  private write(row: number, form: WrittenForm, bytes: Buffer, start: number, end: number): void {
+    (this.forms ??= new Uint8Array(this.capacity))[row] = form;
+    if (form === SPELLED) (this.spelled ??= new Map()).set(row, cellText(bytes, start, end));
+  }
+
+  private spell(row: number, form: WrittenForm, text: string): void {
+    if (form === SHORTEST) return;
+    (this.forms ??= new Uint8Array(this.capacity))[row] = form;
+    if (form === SPELLED) (this.spelled ??= new Map()).set(row, text);
   }
 
   private putOddCell(row: number, value: number, text: string): void {
-    if (text === this.options.nullMark || value === this.nullValue || isMissingWord(text)) this.values[row] = NaN;
-    else if (Number.isFinite(value)) {
+    if (text === this.options.nullMark || value === this.nullValue) this.values[row] = NaN;
+    else if (isMissingWord(text)) {
+      this.values[row] = NaN;
+      this.spell(row, wordForm(text), text);
+    } else if (Number.isFinite(value)) {
       const losesDigits =
         !this.options.isFloat && /^[+-]?\d+$/.test(text) && (/^0\d\d/.test(text) || !Number.isSafeInteger(value));
       if (losesDigits) this.keep(row, value, text);
-      else this.values[row] = value;
+      else {
+        this.values[row] = value;
+        this.spell(row, formOfLast(), text);
+      }
     } else {
       const read = this.rescue(text);
-      if (Number.isFinite(read)) this.putNumber(row, read);
-      else this.keep(row, NaN, text);
+      if (Number.isFinite(read)) {
+        this.putNumber(row, read);
+        this.spell(row, SPELLED, text);
+      } else this.keep(row, NaN, text);
     }
   }
 
