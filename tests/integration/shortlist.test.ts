@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { aScreenedSurvey, ledgerOf } from '../support/builders/small-survey.ts';
+import { aScreenedSurvey, ledgerOf, settle } from '../support/builders/small-survey.ts';
 import { startApp, type TestApp } from '../support/start-app.ts';
 
 let app: TestApp;
@@ -7,6 +7,7 @@ let screened: Awaited<ReturnType<typeof aScreenedSurvey>>;
 beforeAll(async () => {
   app = await startApp();
   screened = await aScreenedSurvey(app);
+  for (const name of ['S08', 'S09', 'S10', 'S11', 'S12']) await settle(screened, name);
 });
 afterAll(() => app.close());
 const path = () => `/surveys/${screened.surveyId}/shortlist`;
@@ -65,6 +66,49 @@ describe('the shortlist', () => {
     const unknown = await put([entry('S08'), { detectionId: screened.surveyId }]);
     expect([unknown.status, unknown.body.errors[0].pointer]).toEqual([400, '/entries/1/detectionId']);
     expect((await put([], undefined, screened.surveyId)).status).toBe(404);
+  });
+
+  it('refuses what is not settled, and says why of each', async () => {
+    const refused = await put([entry('S12'), entry('S01'), entry('S02')]);
+    expect(refused.status).toBe(409);
+    expect(refused.body.detail).toMatch(/takes settled detections\. S01: not settled.*and 1 more/);
+    expect(refused.body.errors.map(({ pointer }: { pointer: string }) => pointer)).toEqual([
+      '/entries/1/detectionId',
+      '/entries/2/detectionId',
+    ]);
+    await settle(screened, 'S02', { outcome: 'not real' });
+    expect((await put([entry('S02')])).body.detail).toMatch(/S02: settled as not real/);
+  });
+
+  it('proposes by a rule what is settled, best first, and names what is not settled yet', async () => {
+    const { lead, observer, run } = screened;
+    const rule = {
+      runId: run.id,
+      starlight: ['dark'],
+      surroundings: ['alone', 'cannot tell', 'accompanied'],
+      worstDoubt: 'serious',
+    };
+    const { status, body, text } = await observer.post(`${path()}/proposals`, rule);
+    expect(status, text).toBe(200);
+    expect(body.entries.map(({ name }: { name: string }) => name).sort()).toEqual(['S08', 'S09', 'S10', 'S11', 'S12']);
+    const values = body.entries.map(({ priority }: { priority: { value: number } }) => priority.value);
+    expect(values).toEqual([...values].sort((a, b) => b - a));
+    expect(body.entries[0].reason).toMatch(/^P\(none\) 0\.\d\d; P\(no neighbour\)/);
+    expect(body.refused.map(({ name }: { name: string }) => name)).toEqual(['S07']);
+    expect(body.refused[0].why).toMatch(/not settled/);
+    const strict = await lead.post(`${path()}/proposals`, { ...rule, minPNone: 1, minStability: 1 });
+    expect(strict.body.entries).toEqual([]);
+    const seen = { name: 'dome', latitudeDeg: -80, longitudeDeg: 0, semester: '2026B' };
+    const south = await lead.post(`${path()}/proposals`, { ...rule, observe: seen });
+    expect(south.body.entries.every(({ hours }: { hours: number }) => hours === 0)).toBe(true);
+  });
+
+  it('tells the dark hours of what is on the list', async () => {
+    const query = 'latitudeDeg=28&longitudeDeg=-17&semester=2026B';
+    const { body } = await screened.observer.get(`${path()}/observability?${query}`);
+    expect(body.items[0]).toMatchObject({ name: expect.any(String), hours: expect.any(Number) });
+    expect(body.items[0].hours).toBeGreaterThan(10);
+    expect((await screened.observer.get(`${path()}/observability?${query.replace('28', '128')}`)).status).toBe(400);
   });
 
   it('exports as CSV and VOTable in its order, with reasons and the caution', async () => {

@@ -131,6 +131,18 @@ export async function verdictsOf(client: Client, runId: string): Promise<Record<
   return Object.fromEntries((body.items as VerdictItem[]).map((item) => [item.name, item]));
 }
 
+/** The lead's last word on a detection: as computed, unless said otherwise. */
+export async function settle(
+  { lead, items, run }: Pick<Awaited<ReturnType<typeof aScreenedSurvey>>, 'lead' | 'items' | 'run'>,
+  name: string,
+  given: object = {},
+): Promise<void> {
+  const { detectionId, starlight, surroundings } = items[name]!;
+  const word = { runId: run.id, starlight, surroundings, note: 'Looked at; it stands.', ...given };
+  const answer = await lead.post(`/detections/${detectionId}/settlements`, word);
+  if (answer.status >= 300) throw new Error(`settling ${name} answered ${answer.status}: ${answer.text}`);
+}
+
 /** Actions of the ledger, newest first. */
 export async function ledgerOf(client: Client, surveyId: string) {
   const { body } = await client.get(`/surveys/${surveyId}/ledger`);

@@ -6,6 +6,7 @@ import { FilesModule } from '../files/files.module.ts';
 import { IntakesModule } from '../intakes/intakes.module.ts';
 import { ReviewsModule } from '../reviews/reviews.module.ts';
 import { RunsModule } from '../runs/runs.module.ts';
+import { EditionsModule } from '../editions/editions.module.ts';
 import { ShortlistsModule } from '../shortlists/shortlists.module.ts';
 import { SurveysModule } from '../surveys/surveys.module.ts';
 import { TeamsModule } from '../teams/teams.module.ts';
@@ -22,6 +23,7 @@ import { DemoService } from './demo.service.ts';
     RunsModule,
     ReviewsModule,
     ShortlistsModule,
+    EditionsModule,
   ],
   providers: [DemoService, { provide: DEMO_FILLER, useExisting: DemoService }],
   exports: [DEMO_FILLER],

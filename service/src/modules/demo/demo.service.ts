@@ -17,6 +17,7 @@ import { ReviewsService } from '../reviews/reviews.service.ts';
 import { SettlementsService } from '../reviews/settlements.service.ts';
 import { RunsService } from '../runs/runs.service.ts';
 import { VerdictsService } from '../runs/verdicts.service.ts';
+import { EditionsService } from '../editions/editions.service.ts';
 import { ShortlistsService } from '../shortlists/shortlists.service.ts';
 import { SurveysService } from '../surveys/surveys.service.ts';
 import { TeamsRepository } from '../teams/teams.repository.ts';
@@ -46,6 +47,7 @@ export class DemoService implements DemoFiller {
     private readonly assignments: AssignmentsService,
     private readonly overrides: OverridesService,
     private readonly shortlists: ShortlistsService,
+    private readonly editions: EditionsService,
     private readonly jobs: JobsService,
   ) {}
 
@@ -126,13 +128,26 @@ export class DemoService implements DemoFiller {
       const rejection = createOverrideRequest.parse({ catalogueId, rowId, action: 'reject', note });
       await this.overrides.create(reviewer, contested.detectionId, rejection);
     }
-    const entries = dark
-      .filter((item) => item.surroundings === 'alone')
-      .map((item) => ({
-        detectionId: item.detectionId,
-        reason: `P(none) ${item.pNone.toFixed(2)}, alone to M_r -17.`,
-        nullResult: 'Nothing to 29 mag per square arcsec would leave no room for an ordinary dwarf.',
-      }));
-    if (entries.length > 0) await this.shortlists.put(lead, surveyId, { runId, entries }, undefined);
+    const listed = dark.filter((item) => item.surroundings === 'alone');
+    if (listed.length > 0) await this.#handOn(lead, surveyId, runId, listed);
+  }
+
+  /** Settles what is dark and alone, puts it on the shortlist and freezes a first edition. */
+  async #handOn(lead: SignedInUser, surveyId: string, runId: string, listed: readonly VerdictItem[]): Promise<void> {
+    for (const { detectionId, starlight, surroundings } of listed) {
+      const note =
+        'Nothing in any band of the deep imaging inside the search; the depth is enough. The verdict stands.';
+      const settling = settleRequest.parse({ runId, starlight, surroundings, note });
+      await this.settlements.settle(lead, detectionId, settling);
+    }
+    const entries = listed.map((item) => ({
+      detectionId: item.detectionId,
+      reason: `P(none) ${item.pNone.toFixed(2)}, alone to M_r -17.`,
+      nullResult: 'Nothing to 29 mag per square arcsec would leave no room for an ordinary dwarf.',
+    }));
+    await this.shortlists.put(lead, surveyId, { runId, entries }, undefined);
+    const note = 'First list for deep imaging in the coming semester.';
+    const { jobId } = await this.editions.create(lead, surveyId, { note }, undefined);
+    await this.#done(jobId!);
   }
 }
