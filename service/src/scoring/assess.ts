@@ -7,7 +7,7 @@ import type { CoveredShares } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import { galaxiesInBeam, gasToLightLimit, gasToLightOf } from './gas-and-light.ts';
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
-import type { Assessment, StarMask } from './scored-detection.ts';
+import type { Assessment, SkyMask } from './scored-detection.ts';
 import { weighSilence } from './silence.ts';
 import { starlightThresholds } from './thresholds.ts';
 import { groupObjects, weighObjects, type WeighingModel } from './weigh-objects.ts';
@@ -48,7 +48,7 @@ export type StarlightAssessment = Omit<Assessment, 'surroundings'>;
 export function assessStarlight(
   detection: Detection,
   candidates: CandidateRow[],
-  masks: StarMask[],
+  masks: SkyMask[],
   { model, catalogues, priors, shares }: AssessmentContext,
 ): StarlightAssessment {
   const { criteria } = model;
@@ -71,6 +71,7 @@ export function assessStarlight(
       velocity: model.velocity,
       accepted: objects.find(({ override }) => override === 'accept') ?? null,
       claims: [],
+      pieces: null,
     },
     criteria,
   );
@@ -91,6 +92,7 @@ export type Weighed = Pick<
   | 'velocity'
   | 'accepted'
   | 'claims'
+  | 'pieces'
 >;
 
 /** Probabilities and the starlight verdict from the weights of the objects. Sets the probability of each row. */
@@ -113,6 +115,7 @@ export function conclude(weighed: Weighed, criteria: CriteriaSettings): Starligh
     galaxiesInBeam: accepted ? 0 : inBeam.length,
     discordant: objects.map((object) => object.discordant && object !== accepted),
     claimedAway: isClaimedAway(weighed, criteria),
+    inPieces: isInPieces(weighed, criteria),
     gasToLight: ratio,
   };
   const usual = starlightThresholds(criteria);
@@ -160,3 +163,7 @@ export const isClaimedAway = (
     ({ alone, here, there }) =>
       alone >= counterpart.minimumProbability && here < counterpart.minimumProbability && there > here,
   );
+
+/** Whether faint objects crowd here more than chance allows. */
+export const isInPieces = ({ pieces }: Pick<StarlightAssessment, 'pieces'>, { absence }: CriteriaSettings): boolean =>
+  pieces !== null && pieces.chance < absence.piecesChance;

@@ -18,11 +18,12 @@ import { judgeDoubts } from './judge-doubts.ts';
 import { learnPriors, learntNotes, type Lesson, lessonOf } from './learning.ts';
 import { MissedTable } from './missed-table.ts';
 import { buildNeighbourPool, type NeighbourPool } from './neighbour-pool.ts';
+import { lookForPieces } from './look-for-pieces.ts';
 import { type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
 import { redshiftReaches } from './redshift-reach.ts';
 import { judgeStability } from './robustness.ts';
 import type { Assessment, ScoredDetection } from './scored-detection.ts';
-import { StarMasks } from './star-masks.ts';
+import { SkyMasks } from './sky-masks.ts';
 import {
   judgeSurroundings,
   makeNeighbour,
@@ -63,7 +64,7 @@ export class Engine {
   readonly catalogues: PreparedCatalogue[];
   private readonly searched: PreparedCatalogue[];
   private readonly pool: NeighbourPool;
-  private readonly masks: StarMasks;
+  private readonly masks: SkyMasks;
   private readonly surroundings: SurroundingsContext;
   private readonly overrideOf: OverrideOf | null;
   private readonly shares: CoveredShares;
@@ -79,7 +80,7 @@ export class Engine {
     );
     this.searched = this.catalogues.filter(({ input: { kind } }) => COUNTERPART_KINDS.includes(kind));
     this.pool = buildNeighbourPool(this.catalogues);
-    this.masks = new StarMasks(criteria.absence.starMask ? this.catalogues : []);
+    this.masks = new SkyMasks(this.catalogues, criteria);
     this.surroundings = {
       criteria,
       h0: survey.h0,
@@ -271,7 +272,7 @@ export class Engine {
   ): ScoredDetection[] {
     const { criteria } = this.input;
     const context = { ...this.context(this.learnt.relation, this.learnt.priors), shares };
-    const assessed = this.claims.solve(this.assess(range, context), positions);
+    const assessed = lookForPieces(this.claims.solve(this.assess(range, context), positions), criteria);
     const around = this.neighboursOf(assessed);
     const far = this.farNearest(assessed, around);
     return assessed.map((starlight, i) => {

@@ -11,7 +11,7 @@ import { aloneProbability } from '@eremite/shared/science/surroundings/alone-pro
 import { type Surroundings, surroundingsVerdict } from '@eremite/shared/science/surroundings/surroundings-verdict';
 import { extinction } from '@eremite/shared/science/photometry/extinction';
 import type { z } from 'zod';
-import { isClaimedAway } from './assess.ts';
+import { isClaimedAway, isInPieces } from './assess.ts';
 import { detectionSettings } from './detection-settings.ts';
 import { type BandExpectation, expectIn, type Perturbation } from './expectation.ts';
 import { nearestFlip } from './other-grounds.ts';
@@ -103,6 +103,7 @@ function starlightRedrawn(assessment: Assessment, model: WeighingModel): (draw: 
   const weights = objects.map(({ weight }) => weight);
   const discordant = objects.map((object) => object.discordant);
   const claimedAway = isClaimedAway(assessment, criteria);
+  const inPieces = isInPieces(assessment, criteria);
   const thresholds = starlightThresholds(criteria);
   return (draw) => {
     const perturbed: Perturbation = {
@@ -139,6 +140,7 @@ function starlightRedrawn(assessment: Assessment, model: WeighingModel): (draw: 
         galaxiesInBeam: assessment.inBeam.length,
         discordant,
         claimedAway,
+        inPieces,
         gasToLight: assessment.gasToLightIsLimit ? NaN : assessment.gasToLight * draw.fluxFactor,
       },
       thresholds,

@@ -10,14 +10,28 @@ import type { NeighbourRow, SurroundingsResult } from './surroundings.ts';
 import type { ExpectationCache } from './expectation-cache.ts';
 import type { WeighedObject } from './weighed-object.ts';
 
-/** A bright star whose mask touches the search circle. */
-export interface StarMask {
+/** A bright star or a large galaxy that hides part of the search circle. */
+export interface SkyMask {
   raDeg: number;
   decDeg: number;
   radiusArcsec: number;
   label: string;
   eastArcsec: number;
   northArcsec: number;
+}
+
+/** Faint objects about a detection that shows no galaxy. */
+export interface Pieces {
+  catalogue: string;
+  radiusArcsec: number;
+  count: number;
+  /** By the ring about it. */
+  expected: number;
+  /** Chance of so many or more where nothing is there. */
+  chance: number;
+  band: string;
+  /** Of all of them together. */
+  magnitude: number;
 }
 
 /** A galaxy that another detection claims too. */
@@ -39,7 +53,7 @@ export interface Assessment {
   objects: WeighedObject[];
   expectations: ExpectationCache;
   silence: Silence;
-  masks: StarMask[];
+  masks: SkyMask[];
   prior: number;
   priorSource: string;
   /** Reliability of the line used; NaN where none was given and 1 is taken. */
@@ -54,6 +68,8 @@ export interface Assessment {
   accepted: WeighedObject | null;
   /** Galaxies that other detections claim too. */
   claims: Claim[];
+  /** Faint objects where a galaxy might lie in pieces; null where nobody looked, for no claim rests on it. */
+  pieces: Pieces | null;
   inBeam: BeamGalaxy[];
   gasToLight: number;
   gasToLightIsLimit: boolean;

@@ -2,7 +2,7 @@ import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import type { Ground } from '@eremite/shared/contracts/verdict';
 import { mahalanobisSquared } from '@eremite/shared/science/counterpart/position-error';
 import { numberRole } from '../tiles/role-table.ts';
-import type { StarlightAssessment } from './assess.ts';
+import { isInPieces, type StarlightAssessment } from './assess.ts';
 import { arcsec, kms, mag, percent, powerFigure, probability, probabilityUnder, ratio, signedKms } from './figures.ts';
 import { rowName } from './prepared-catalogue.ts';
 import type { WeighedObject } from './weighed-object.ts';
@@ -46,6 +46,7 @@ export function starlightGrounds(assessment: StarlightAssessment, criteria: Crit
     );
     say('for', powerSentence(assessment), 'absence');
   }
+  sayPieces(assessment, criteria, say);
   if (starlight === 'cannot tell') sayCannotTell(assessment, criteria, say);
   if (starlight !== 'dark' && starlight !== 'cannot tell') {
     if (silence.power === null) say('note', untested(assessment), 'absence');
@@ -87,6 +88,21 @@ function discordantFirst(assessment: StarlightAssessment, say: Say): void {
       'counterpart',
     );
   });
+}
+
+/** Whether faint objects crowd where no galaxy is seen. */
+function sayPieces(assessment: StarlightAssessment, criteria: CriteriaSettings, say: Say): void {
+  const { pieces } = assessment;
+  if (!pieces) return;
+  const { count, radiusArcsec, expected, chance, catalogue, band, magnitude } = pieces;
+  const objects = `${catalogue} holds ${count} faint object${count === 1 ? '' : 's'} within ${arcsec(radiusArcsec)} where ${expected.toFixed(1)} are expected of the ring about it`;
+  if (isInPieces(assessment, criteria))
+    say(
+      'for',
+      `A galaxy may be there in pieces: ${objects} (chance ${probability(chance)}); together ${band} = ${mag(magnitude)}. Look at the image.`,
+      'absence',
+    );
+  else say(assessment.starlight === 'dark' ? 'for' : 'note', `No crowd of faint pieces: ${objects}.`, 'absence');
 }
 
 /** Galaxies that other detections claim too, those lost first. */
@@ -227,7 +243,7 @@ function sayCannotTell(assessment: StarlightAssessment, criteria: CriteriaSettin
       (best.covered !== null && best.covered < 0.999
         ? `only ${percent(best.covered)} of the search circle is covered`
         : best.unmasked < 0.999
-          ? `a bright star hides ${percent(1 - best.unmasked)} of the place`
+          ? `a bright star or a large galaxy hides ${percent(1 - best.unmasked)} of the place`
           : `such a galaxy would be detected with probability ${probability(best.detected ?? 0)} in ${best.band.name} of ${best.catalogue.input.name}`);
     say(
       'for',

@@ -70,4 +70,18 @@ export const absence = z.strictObject({
     description: 'Where the survey has a star list: radius 1630 x 1.396^-G arcsec for G < 13.',
     source: 'Legacy Surveys bright-star relation',
   }),
+  galaxyMaskRadii: key(z.number().min(0).max(10).default(2), {
+    title: 'Mask large galaxies to',
+    unit: 'half-light radii',
+    description:
+      'Galaxies of 10 arcsec or more hide what lies behind them; not those that may be the counterpart. 0 switches it off.',
+    source: 'common practice: one isophotal radius, about two half-light radii of a disc',
+  }),
+  piecesChance: key(z.number().min(0).max(0.1).default(0.003), {
+    title: 'Chance of a crowd of faint objects',
+    unit: '',
+    description:
+      'Where the catalogue holds more faint objects than this chance allows, a galaxy may be there in pieces and nothing is called dark. 0 switches it off.',
+    source: OWN,
+  }),
 });
