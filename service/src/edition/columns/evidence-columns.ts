@@ -34,7 +34,7 @@ const PLACE: Column<Placed>[] = [
   ),
   number('separation_kpc', 'kpc', 'Projected at the distance of the gas', ({ entry }) => entry.separationKpc, {
     decimals: 2,
-    ucd: 'phys.distance',
+    ucd: 'pos.distance',
     label: 'sep_kpc',
   }),
   number('cz_kms', 'km/s', 'Velocity, optical convention, barycentric', ({ entry }) => entry.velocityKms, {

@@ -113,7 +113,7 @@ const SURROUNDINGS: Column[] = [
     'kpc',
     'Its projected separation at the distance of the gas',
     ({ item }) => item.nearest?.separationKpc ?? null,
-    { decimals: 1, ucd: 'phys.distance' },
+    { decimals: 1, ucd: 'pos.distance' },
   ),
   number(
     'nearest_dv_kms',

@@ -30,7 +30,9 @@ export class Pen {
     const { document } = this;
     const { x, y, width } = box;
     const need = this.height(content, width, { face, size });
-    const height = Math.min(need, box.height ?? need);
+    // One line is always set, however small the box: its last leading may stick out.
+    const line = this.height('x', width, { face, size });
+    const height = Math.min(need, Math.max(line, box.height ?? need));
     const shown = need > height + 0.1 ? this.#cut(content, width, height, { face, size }) : content;
     const runs = this.fonts.runs(face, shown);
     document.fillColor(colour).fontSize(size);

@@ -71,14 +71,14 @@ export function methodsSentences(head: EditionHead, entries: number): Sentence[]
 
 function inputSentences({ survey, number, run, criteria, inputs, software }: EditionHead): Sentence[] {
   const named = (input: EditionHead['inputs'][number]): string => {
-    const reference = input.reference ? `; ${input.reference}` : '';
+    const reference = input.reference ? `; ${input.reference.trim().replace(/\.$/, '')}` : '';
     return `${input.name} (${input.kind}, ${input.rows} rows, sha256 ${input.sha256.slice(0, 12)}${reference})`;
   };
   const lists = inputs.filter(({ kind }) => kind === 'hi').map(named);
   const others = inputs.filter(({ kind }) => kind !== 'hi').map(named);
   return [
     say(
-      `We screened the ${run.detections} HI detections of ${survey.name}, ${lists.join(', ')}, for stellar counterparts and neighbours with Eremite ${software.version} (${run.scoringVersion}; edition ${number}, run ${run.number}, criteria ${criteria.number}, input hash ${run.inputHash.slice(0, 12)})`,
+      `We screened the ${run.detections} HI detections of ${survey.name}, from ${lists.join(' and ')}, for stellar counterparts and neighbours with Eremite ${software.version} (${run.scoringVersion}; edition ${number}, run ${run.number}, criteria ${criteria.number}, input hash ${run.inputHash.slice(0, 12)})`,
     ),
     others.length > 0 ? say(`The comparison tables were ${others.join(', ')}`) : say('No comparison table was used'),
   ];
