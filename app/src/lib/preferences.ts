@@ -1,15 +1,26 @@
 import { useSyncExternalStore } from 'react';
+import { COMMAND_IDS, type KeyMap } from './keys/commands.ts';
 
 /** What one person prefers in this browser. */
 export interface Preferences {
   theme: 'dark' | 'light';
   /** Single-key commands of the docket. */
   shortcuts: boolean;
+  /** Keys that were set otherwise. */
+  keys: KeyMap;
 }
 
 const KEY = 'eremite.preferences';
-const DEFAULTS: Preferences = { theme: 'dark', shortcuts: true };
+const DEFAULTS: Preferences = { theme: 'dark', shortcuts: true, keys: {} };
 const listeners = new Set<() => void>();
+
+/** Only keys of commands that exist: what an older version kept must not break the page. */
+function knownKeys(kept: unknown): KeyMap {
+  const keys = (typeof kept === 'object' && kept !== null ? kept : {}) as Record<string, unknown>;
+  return Object.fromEntries(
+    COMMAND_IDS.flatMap((id) => (typeof keys[id] === 'string' ? [[id, keys[id] as string] as const] : [])),
+  );
+}
 
 function read(): Preferences {
   try {
@@ -17,6 +28,7 @@ function read(): Preferences {
     return {
       theme: kept.theme === 'light' ? 'light' : DEFAULTS.theme,
       shortcuts: kept.shortcuts ?? DEFAULTS.shortcuts,
+      keys: knownKeys(kept.keys),
     };
   } catch {
     return DEFAULTS;

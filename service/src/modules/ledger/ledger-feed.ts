@@ -17,6 +17,7 @@ export class LedgerFeed implements OnModuleDestroy {
   readonly #known = new Map<string, number>();
   #timer: NodeJS.Timeout | undefined;
   #looking = false;
+  #stopped = false;
 
   constructor(private readonly lines: LedgerRepository) {}
 
@@ -39,7 +40,13 @@ export class LedgerFeed implements OnModuleDestroy {
     if (this.#listeners.has(surveyId)) this.#schedule(COMMIT_MS);
   }
 
+  /** The service is stopping: streams end, and their readers ask again elsewhere. */
+  get isStopped(): boolean {
+    return this.#stopped;
+  }
+
   onModuleDestroy(): void {
+    this.#stopped = true;
     clearTimeout(this.#timer);
     const all = [...this.#listeners.values()].flatMap((listeners) => [...listeners]);
     this.#listeners.clear();

@@ -21,6 +21,7 @@ import { LedgerService } from './ledger.service.ts';
 import { streamEvents } from './stream-events.ts';
 
 const inSurvey = { schema: z.uuid() };
+const eventsQuery = z.object({ after: z.coerce.number().int().min(0).optional() });
 
 @Controller('surveys/:surveyId')
 export class LedgerController {
@@ -72,16 +73,17 @@ export class LedgerController {
     await sendPieces(response, file, isCsv ? ledgerCsv(lines) : ledgerJsonLines(lines));
   }
 
-  /** What is done in the survey, as it is done: server-sent events, which go on from `Last-Event-ID`. */
+  /** What is done in the survey, as it is done: server-sent events, which go on from `Last-Event-ID` or `after`. */
   @Get('events')
   async events(
     @CurrentUser() user: SignedInUser,
     @Param('surveyId', inSurvey) surveyId: string,
+    @Query({ schema: eventsQuery }) query: z.output<typeof eventsQuery>,
     @Res() response: Response,
     @Headers('last-event-id') lastEventId?: string,
   ): Promise<void> {
     const isBlind = (await this.blindTo(user, surveyId)) !== undefined;
-    const last = /^\d{1,9}$/.test(lastEventId ?? '') ? Number(lastEventId) : undefined;
+    const last = /^\d{1,9}$/.test(lastEventId ?? '') ? Number(lastEventId) : query.after;
     const isOpen = () =>
       this.access.survey(user, surveyId, 'read').then(
         () => true,

@@ -46,7 +46,7 @@ export async function streamEvents(
     wake();
   });
   try {
-    while (open) {
+    while (open && !feed.isStopped) {
       if (grown) {
         grown = false;
         if (!(await isOpen())) break;

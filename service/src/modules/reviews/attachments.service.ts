@@ -68,10 +68,10 @@ export class AttachmentsService {
   }
 
   /** Files of some notes. */
-  async of(subjectIds: readonly string[]): Promise<Map<string, Attachment[]>> {
+  async of(subjectIds: readonly string[], db?: Database): Promise<Map<string, Attachment[]>> {
     const found = new Map<string, Attachment[]>();
     if (subjectIds.length === 0) return found;
-    for (const row of await this.attachments.of(subjectIds)) {
+    for (const row of await this.attachments.of(subjectIds, db)) {
       const list = found.get(row.subjectId!) ?? [];
       found.set(row.subjectId!, [...list, toContract(row)]);
     }

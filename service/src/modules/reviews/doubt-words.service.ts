@@ -5,6 +5,7 @@ import { AppError } from '../../common/app-error.ts';
 import { requireSeen } from '../../common/etag.ts';
 import { pageOf } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
+import type { Database } from '../../database/database.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { VerdictsService } from '../runs/verdicts.service.ts';
 import { AttachmentsService } from './attachments.service.ts';
@@ -42,7 +43,7 @@ export class DoubtWordsService {
       const before = await this.words.inForce(detectionId, word.doubt, tx);
       if (before) {
         if (ifMatch !== undefined || before.createdById !== user.id)
-          requireSeen(ifMatch, before.id, (await this.#toContracts([before], user))[0]);
+          requireSeen(ifMatch, before.id, (await this.#toContracts([before], user, tx))[0]);
         await this.words.withdraw(before.id, user.id, `superseded: ${word.note}`, tx);
       }
       const id = await this.words.insert({ ...word, detectionId, grade: judged.grade, createdBy: user.id }, tx);
@@ -78,8 +79,11 @@ export class DoubtWordsService {
     return (await this.#toContracts([(await this.words.find(id))!], user))[0]!;
   }
 
-  async #toContracts(rows: readonly DoubtWordRow[], user: SignedInUser): Promise<DoubtWord[]> {
-    const files = await this.attachments.of(rows.map(({ id }) => id));
+  async #toContracts(rows: readonly DoubtWordRow[], user: SignedInUser, db?: Database): Promise<DoubtWord[]> {
+    const files = await this.attachments.of(
+      rows.map(({ id }) => id),
+      db,
+    );
     return rows.map(
       ({ surveyId: _, detectionName: __, createdById, ...row }) =>
         ({

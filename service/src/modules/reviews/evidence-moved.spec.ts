@@ -53,10 +53,18 @@ describe('the evidence a word was given on', () => {
   });
 
   it('does not hang on which of the unlikely objects leads, but on a likely one', () => {
-    const other = (probability: number) => ({ ...item().counterpart!, name: 'another', probability });
+    const other = (probability: number, separationArcsec = 12) => ({
+      ...item().counterpart!,
+      name: 'another',
+      probability,
+      separationArcsec,
+    });
     expect(evidenceMoved(item(), item({ counterpart: other(0.03) }))).toEqual([]);
     expect(evidenceMoved(item(), item({ counterpart: other(0.4) }))).toMatchObject([
       { what: 'best object', from: 'faint one', to: 'another' },
     ]);
+    // The same place under another name: a new version of the table renamed it.
+    expect(evidenceMoved(item(), item({ counterpart: other(0.4, 30.1) }))).toEqual([]);
+    expect(evidenceMoved(item(), item({ nearest: { ...item().nearest!, name: 'renamed giant' } }))).toEqual([]);
   });
 });

@@ -13,6 +13,7 @@ const STANDS = {
   /** Relative: distance, flux, projected separation of the nearest neighbour. */
   relative: 0.01,
   positionArcsec: 1,
+  objectArcsec: 0.3,
   velocityKms: 1,
 } as const;
 /** An object less likely than this in both is no part of the evidence: which of the unlikely ones leads is chance. */
@@ -62,6 +63,15 @@ const doubtsOf = ({ doubts }: Compared): string =>
     .sort()
     .join(', ') || 'none';
 
+/** A source that was only renamed, or a twin at the very same separation, is no other evidence. */
+const sameObject = ({ counterpart: a }: Compared, { counterpart: b }: Compared): boolean =>
+  a !== null && b !== null && Math.abs(a.separationArcsec - b.separationArcsec) <= STANDS.objectArcsec;
+const sameNeighbour = (a: Compared['nearest'], b: Compared['nearest']): boolean =>
+  a !== null &&
+  b !== null &&
+  Math.abs(a.separationKpc - b.separationKpc) <= a.separationKpc * STANDS.relative &&
+  Math.abs(a.velocityDifferenceKms - b.velocityDifferenceKms) <= STANDS.velocityKms;
+
 /** What moved between the evidence a word was given on and that of a later run; empty where the word stands. */
 export function evidenceMoved(from: Compared, to: Compared): Moved[] {
   const relative = (value: number | null) => Math.abs(value ?? 0) * STANDS.relative;
@@ -78,9 +88,11 @@ export function evidenceMoved(from: Compared, to: Compared): Moved[] {
     ...number('P(none)', '', 2, from.pNone, to.pNone, STANDS.probability),
     ...number('P(missed)', '', 2, from.pMissed, to.pMissed, STANDS.probability),
     ...number('power', '', 3, from.power, to.power, STANDS.power),
-    ...(both ? word('best object', from.counterpart?.name ?? 'none', to.counterpart?.name ?? 'none') : []),
+    ...(both && !sameObject(from, to)
+      ? word('best object', from.counterpart?.name ?? 'none', to.counterpart?.name ?? 'none')
+      : []),
     ...number('P(no neighbour)', '', 2, from.pAlone, to.pAlone, STANDS.probability),
-    ...word('nearest neighbour', from.nearest?.name ?? 'none', to.nearest?.name ?? 'none'),
+    ...(sameNeighbour(before, after) ? [] : word('nearest neighbour', before?.name ?? 'none', after?.name ?? 'none')),
     ...(before && after && before.name === after.name
       ? number(
           'separation of the nearest neighbour',

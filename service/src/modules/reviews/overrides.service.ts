@@ -7,6 +7,7 @@ import { pageOf } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { TileStore } from '../../tiles/tile-store.ts';
 import { CataloguesService } from '../catalogues/catalogues.service.ts';
+import type { Database } from '../../database/database.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { AttachmentsService } from './attachments.service.ts';
 import { DetectionAccess, seen } from './detection-access.ts';
@@ -62,7 +63,7 @@ export class OverridesService {
       const pair = { detectionId, catalogueId, row };
       const before = await this.overrides.inForce(pair, tx);
       if (before && (ifMatch !== undefined || before.createdById !== user.id)) {
-        requireSeen(ifMatch, before.id, (await this.#toContracts([before], user))[0]);
+        requireSeen(ifMatch, before.id, (await this.#toContracts([before], user, tx))[0]);
       }
       await this.overrides.withdrawPair(pair, user.id, `superseded: ${note}`, tx);
       const where = { raDeg: place?.raDeg ?? null, decDeg: place?.decDeg ?? null };
@@ -106,8 +107,11 @@ export class OverridesService {
     return (await this.#toContracts([(await this.overrides.find(id))!], user))[0]!;
   }
 
-  async #toContracts(rows: readonly OverrideRow[], user: SignedInUser): Promise<Override[]> {
-    const files = await this.attachments.of(rows.map(({ id }) => id));
+  async #toContracts(rows: readonly OverrideRow[], user: SignedInUser, db?: Database): Promise<Override[]> {
+    const files = await this.attachments.of(
+      rows.map(({ id }) => id),
+      db,
+    );
     return rows.map(
       ({ surveyId: _, detectionName: __, createdById, carriedFrom, ...row }) =>
         ({

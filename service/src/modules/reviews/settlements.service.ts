@@ -4,6 +4,7 @@ import { Injectable } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
 import { requireSeen } from '../../common/etag.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
+import type { Database } from '../../database/database.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
 import { AttachmentsService } from './attachments.service.ts';
 import { CarryOverService } from './carry-over.service.ts';
@@ -44,7 +45,7 @@ export class SettlementsService {
       await this.reviews.lock(detectionId, tx);
       const before = await this.reviews.settlement(detectionId, tx);
       if (before && (ifMatch !== undefined || before.settledBy !== user.id)) {
-        requireSeen(ifMatch, before.id, await this.#toContract(before, user));
+        requireSeen(ifMatch, before.id, await this.#toContract(before, user, tx));
       }
       const id = await this.reviews.settle({ detectionId, settledBy: user.id, ...word }, tx);
       await this.attachments.attach(user, detectionId, id, attachmentIds, tx);
@@ -76,8 +77,8 @@ export class SettlementsService {
     });
   }
 
-  async #toContract({ settledBy, createdAt, moved, carriedFrom: _, ...row }: Row, user: SignedInUser) {
-    const files = await this.attachments.of([row.id]);
+  async #toContract({ settledBy, createdAt, moved, carriedFrom: _, ...row }: Row, user: SignedInUser, db?: Database) {
+    const files = await this.attachments.of([row.id], db);
     return {
       ...row,
       mine: settledBy === user.id,

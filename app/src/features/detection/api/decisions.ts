@@ -1,59 +1,61 @@
 import { detection, type updateDetectionRequest } from '@eremite/shared/contracts/detection';
 import { listOf } from '@eremite/shared/contracts/list';
-import {
-  override,
-  review,
-  type createOverrideRequest,
-  type createReviewRequest,
-  type settleRequest,
-} from '@eremite/shared/contracts/review';
-import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
-import type { z } from 'zod';
+import { notePhrases } from '@eremite/shared/contracts/note';
+import { remark } from '@eremite/shared/contracts/remark';
+import { doubtWord, override, review, settlement } from '@eremite/shared/contracts/review';
+import { queryOptions, useMutation, useQueryClient, type QueryClient } from '@tanstack/react-query';
+import { z } from 'zod';
 import { act, call } from '#lib/api-client.ts';
 
-export const reviewsQuery = (detectionId: string) =>
+const ofDetection = <T extends z.ZodType>(detectionId: string, what: string, item: T) =>
   queryOptions({
-    queryKey: ['detection', detectionId, 'reviews'],
-    queryFn: ({ signal }) => call(listOf(review), `/detections/${detectionId}/reviews`, { signal }),
+    queryKey: ['detection', detectionId, what],
+    queryFn: ({ signal }) => call(listOf(item), `/detections/${detectionId}/${what}?limit=500`, { signal }),
+    staleTime: 60_000,
   });
 
-export const overridesQuery = (detectionId: string) =>
+export const reviewsQuery = (id: string) => ofDetection(id, 'reviews', review);
+export const overridesQuery = (id: string) => ofDetection(id, 'overrides', override);
+export const doubtWordsQuery = (id: string) => ofDetection(id, 'doubt-words', doubtWord);
+export const remarksQuery = (id: string) => ofDetection(id, 'remarks', remark);
+export const settlementQuery = (id: string) =>
   queryOptions({
-    queryKey: ['detection', detectionId, 'overrides'],
-    queryFn: ({ signal }) => call(listOf(override), `/detections/${detectionId}/overrides`, { signal }),
+    queryKey: ['detection', id, 'settlements'],
+    queryFn: ({ signal }) =>
+      call(z.object({ settlement: settlement.nullable() }), `/detections/${id}/settlements`, { signal }),
+    staleTime: 60_000,
+  });
+
+export const notePhrasesQuery = (surveyId: string) =>
+  queryOptions({
+    queryKey: ['survey', surveyId, 'note-phrases'],
+    queryFn: ({ signal }) => call(notePhrases, `/surveys/${surveyId}/note-phrases`, { signal }),
+    staleTime: 300_000,
   });
 
 /** After a decision all that shows it is asked for anew: this detection, the lists, the docket. */
-function useDecision<T, R>(detectionId: string, decide: (value: T) => Promise<R>) {
+export const askAnew = (client: QueryClient, detectionId: string) =>
+  Promise.all([
+    client.invalidateQueries({ queryKey: ['detection', detectionId] }),
+    client.invalidateQueries({
+      predicate: ({ queryKey }) =>
+        (queryKey[0] === 'run' && (queryKey[2] === 'verdicts' || queryKey[3] === detectionId)) ||
+        queryKey[2] === 'docket' ||
+        queryKey[2] === 'overview',
+    }),
+  ]);
+
+function useAct<T>(detectionId: string, work: (value: T) => Promise<unknown>) {
   const client = useQueryClient();
-  return useMutation({
-    mutationFn: decide,
-    onSuccess: () =>
-      Promise.all([
-        client.invalidateQueries({ queryKey: ['detection', detectionId] }),
-        client.invalidateQueries({ predicate: ({ queryKey }) => queryKey[0] === 'run' || queryKey[2] === 'docket' }),
-        client.invalidateQueries({ predicate: ({ queryKey }) => queryKey[2] === 'overview' }),
-      ]),
-  });
+  return useMutation({ mutationFn: work, onSettled: () => askAnew(client, detectionId) });
 }
 
-export const useReview = (id: string) =>
-  useDecision(id, (json: z.input<typeof createReviewRequest>) =>
-    call(review, `/detections/${id}/reviews`, { method: 'POST', json }),
-  );
-export const useOverride = (id: string) =>
-  useDecision(id, (json: z.input<typeof createOverrideRequest>) =>
-    call(override, `/detections/${id}/overrides`, { method: 'POST', json }),
-  );
-export const useWithdraw = (id: string) =>
-  useDecision(id, ({ overrideId, note }: { overrideId: string; note: string }) =>
-    act(`/overrides/${overrideId}`, { method: 'DELETE', json: { note } }),
-  );
-export const useSettle = (id: string) =>
-  useDecision(id, (json: z.input<typeof settleRequest>) =>
-    act(`/detections/${id}/settlements`, { method: 'POST', json }),
+/** Takes something back by its path: a review, an override, a word on a doubt. */
+export const useTakeBack = (id: string) =>
+  useAct(id, ({ path, note }: { path: string; note?: string }) =>
+    act(path, { method: 'DELETE', ...(note !== undefined && { json: { note } }) }),
   );
 export const useSetDistance = (id: string) =>
-  useDecision(id, (json: z.input<typeof updateDetectionRequest>) =>
+  useAct(id, (json: z.input<typeof updateDetectionRequest>) =>
     call(detection, `/detections/${id}`, { method: 'PATCH', json }),
   );

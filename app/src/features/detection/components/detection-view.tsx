@@ -2,24 +2,26 @@ import type { Catalogue } from '@eremite/shared/contracts/catalogue';
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import type { TeamRole } from '@eremite/shared/contracts/words';
-import { useQuery } from '@tanstack/react-query';
-import { useMemo, useState } from 'react';
+import { useState } from 'react';
 import { LimitsChart } from '#components/limits-chart/limits-chart.tsx';
-import { overridesQuery, reviewsQuery } from '../api/decisions.ts';
 import { chosenCandidate, useDecisions } from '../hooks/use-decisions.ts';
+import { useCommands } from '../hooks/use-commands.ts';
+import { useSaid } from '../hooks/use-said.ts';
 import { useShortlisting } from '../hooks/use-shortlisting.ts';
-import { CommandsBar, type Command } from './commands-bar.tsx';
+import { CommandsBar } from './commands-bar.tsx';
 import { DecisionDialogs } from './decision-dialogs.tsx';
 import { DetectionHead } from './detection-head.tsx';
 import { DoubtList } from './doubt-list.tsx';
 import { EvidenceTabs } from './evidence-tabs.tsx';
 import { Grounds } from './grounds.tsx';
+import { Notices } from './notices.tsx';
 import { SkyEvidence } from './sky-evidence.tsx';
 import { VerdictSummary } from './verdict-summary.tsx';
 
 interface DetectionViewProps {
   detail: VerdictDetail;
   surveyId: string;
+  teamId: string;
   role: TeamRole;
   settings: CriteriaSettings | undefined;
   catalogues: readonly Catalogue[] | undefined;
@@ -28,6 +30,8 @@ interface DetectionViewProps {
   onNext: () => void;
   onPrevious: () => void;
   onBack: () => void;
+  onReturn: (detectionId: string) => void;
+  newerRun: { number: number; to: string } | undefined;
 }
 
 /** One detection with all that speaks for and against it, and the means to decide. */
@@ -38,97 +42,22 @@ export function DetectionView(props: DetectionViewProps) {
   const [selected, setSelected] = useState<string | null>(null);
   const decisions = useDecisions(detail, role, onNext);
   const shortlisting = useShortlisting(surveyId, detail);
-  const { data: reviews } = useQuery(reviewsQuery(id));
-  const { data: overrides } = useQuery(overridesQuery(id));
+  const said = useSaid(id);
   const link = { hovered, selected, onHover: setHovered, onSelect: setSelected };
   const chosen = chosenCandidate(detail, selected);
 
-  const commands = useMemo(() => {
-    const { mayDecide, maySettle, isPending, agree, ask, asking } = decisions;
-    const off = isPending || asking !== null;
-    const all: (Command | false)[] = [
-      mayDecide && {
-        combo: 'enter',
-        keyName: 'Enter',
-        label: 'agree',
-        group: 'Decide',
-        disabled: off,
-        run: () => agree(),
-      },
-      mayDecide && {
-        combo: 'o',
-        keyName: 'O',
-        label: 'override…',
-        group: 'Decide',
-        disabled: off,
-        run: () => ask({ what: 'review' }),
-      },
-      mayDecide && {
-        combo: 'n',
-        keyName: 'N',
-        label: 'agree with a note…',
-        group: 'Decide',
-        disabled: off,
-        run: () => ask({ what: 'note' }),
-      },
-      maySettle && {
-        combo: 's',
-        keyName: 'S',
-        label: 'settle…',
-        group: 'Decide',
-        disabled: off,
-        run: () => ask({ what: 'settle' }),
-      },
-      maySettle && {
-        combo: 'l',
-        keyName: 'L',
-        label: shortlisting.isOn ? 'off the shortlist' : 'shortlist',
-        group: 'Decide',
-        disabled: off || shortlisting.isPending,
-        run: shortlisting.toggle,
-      },
-      mayDecide && {
-        combo: 'c',
-        keyName: 'C',
-        label: 'make the chosen object the counterpart…',
-        group: 'Decide',
-        hidden: true,
-        disabled: off || !chosen,
-        run: () => chosen && ask({ what: 'accept', candidate: chosen }),
-      },
-      mayDecide && {
-        combo: 'x',
-        keyName: 'X',
-        label: 'reject the chosen object…',
-        group: 'Decide',
-        hidden: true,
-        disabled: off || !chosen,
-        run: () => chosen && ask({ what: 'reject', candidate: chosen }),
-      },
-      { combo: 'k', keyName: 'K', label: 'previous', group: 'Move', disabled: off, run: onPrevious },
-      { combo: 'j', keyName: 'J', label: 'next', group: 'Move', disabled: off, run: onNext },
-      {
-        combo: 'arrowleft',
-        keyName: '←',
-        label: 'previous detection',
-        group: 'Move',
-        hidden: true,
-        disabled: off,
-        run: onPrevious,
-      },
-      {
-        combo: 'arrowright',
-        keyName: '→',
-        label: 'next detection',
-        group: 'Move',
-        hidden: true,
-        disabled: off,
-        run: onNext,
-      },
-      { combo: 'u', keyName: 'U', label: 'up to the list', group: 'Move', hidden: true, disabled: off, run: onBack },
-    ];
-    return all.filter((command): command is Command => command !== false);
-  }, [decisions, shortlisting, chosen, onNext, onPrevious, onBack]);
+  const commands = useCommands({
+    detail,
+    decisions,
+    shortlisting,
+    chosen,
+    onChoose: setSelected,
+    onTab,
+    onNext,
+    onPrevious,
+    onBack,
+    onReturn: props.onReturn,
+  });
 
   return (
     <>
@@ -141,6 +70,7 @@ export function DetectionView(props: DetectionViewProps) {
           <SkyEvidence detail={detail} settings={settings} catalogues={catalogues} {...link} />
         </div>
         <div className="det__evidence">
+          <Notices detail={detail} said={said} newerRun={props.newerRun} />
           <VerdictSummary detail={detail} />
           <Grounds verdict={detail.verdict} />
           <div className="det__twin">
@@ -152,21 +82,17 @@ export function DetectionView(props: DetectionViewProps) {
                 <p className="muted">No catalogue with a band was searched.</p>
               )}
             </section>
-            <DoubtList doubts={detail.doubts} />
+            <DoubtList
+              doubts={detail.doubts}
+              words={said.doubtWords}
+              onDecide={decisions.mayDecide ? (doubt) => decisions.ask({ what: 'doubt', doubt }) : undefined}
+            />
           </div>
-          <EvidenceTabs
-            detail={detail}
-            decisions={decisions}
-            reviews={reviews?.items ?? []}
-            overrides={overrides?.items ?? []}
-            tab={tab}
-            onTab={onTab}
-            {...link}
-          />
+          <EvidenceTabs detail={detail} decisions={decisions} said={said} tab={tab} onTab={onTab} {...link} />
         </div>
       </div>
       <CommandsBar commands={commands} />
-      <DecisionDialogs detail={detail} decisions={decisions} />
+      <DecisionDialogs detail={detail} surveyId={surveyId} teamId={props.teamId} decisions={decisions} said={said} />
     </>
   );
 }

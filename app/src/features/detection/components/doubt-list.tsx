@@ -1,11 +1,29 @@
+import { Button } from '@blueprintjs/core';
+import type { DoubtWord } from '@eremite/shared/contracts/review';
 import type { Doubt } from '@eremite/shared/contracts/verdict';
 import { DoubtMark } from '#components/doubt-mark/doubt-mark.tsx';
 import { Prose } from '#components/prose/prose.tsx';
 
 const ORDER = ['serious', 'watch', 'not testable here', 'clear'];
 
+interface DoubtListProps {
+  doubts: readonly Doubt[];
+  /** What people said of them. */
+  words: readonly DoubtWord[];
+  /** Opens the question of one; absent for those who may not. */
+  onDecide?: ((doubt: Doubt) => void) | undefined;
+}
+
 /** What could fake the result: what stands first, what was cleared folded away. */
-export function DoubtList({ doubts }: { doubts: readonly Doubt[] }) {
+export function DoubtList({ doubts, words, onDecide }: DoubtListProps) {
+  const item = (doubt: Doubt) => (
+    <DoubtItem
+      key={doubt.name}
+      doubt={doubt}
+      word={words.find((entry) => entry.doubt === doubt.name && entry.withdrawnAt === null)}
+      onDecide={onDecide}
+    />
+  );
   const sorted = [...doubts].sort((a, b) => ORDER.indexOf(a.grade) - ORDER.indexOf(b.grade));
   const cleared = sorted.filter(({ grade }) => grade === 'clear');
   const standing = sorted.filter(({ grade }) => grade !== 'clear');
@@ -27,13 +45,34 @@ export function DoubtList({ doubts }: { doubts: readonly Doubt[] }) {
   );
 }
 
-const item = ({ name, grade, sentence, rule, source }: Doubt) => (
-  <li key={name} title={`${rule} (${source})`}>
-    <DoubtMark grade={grade} />
+interface DoubtItemProps {
+  doubt: Doubt;
+  word: DoubtWord | undefined;
+  onDecide: DoubtListProps['onDecide'];
+}
+const DoubtItem = ({ doubt, word, onDecide }: DoubtItemProps) => (
+  <li title={`${doubt.rule} (${doubt.source})`}>
+    <DoubtMark grade={doubt.grade} />
     <span>
-      <b>{name}</b> <span className={`doubt-list__grade doubt-list__grade--${grade.split(' ')[0]}`}>{grade}</span>
+      <b>{doubt.name}</b>{' '}
+      <span className={`doubt-list__grade doubt-list__grade--${doubt.grade.split(' ')[0]}`}>{doubt.grade}</span>
+      {word && (
+        <span className="doubt-list__word" title={word.note}>
+          {' '}
+          {word.word} by {word.mine ? 'you' : word.by}
+        </span>
+      )}
+      {onDecide && doubt.grade !== 'clear' && (
+        <Button
+          size="small"
+          variant="minimal"
+          text="decide"
+          aria-label={`Clear or confirm ${doubt.name}`}
+          onClick={() => onDecide(doubt)}
+        />
+      )}
       <span className="doubt-list__sentence">
-        <Prose text={sentence} />
+        <Prose text={doubt.sentence} />
       </span>
     </span>
   </li>

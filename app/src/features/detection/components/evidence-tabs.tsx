@@ -1,11 +1,10 @@
 import { Button, Tab, Tabs } from '@blueprintjs/core';
-import type { Override, Review } from '@eremite/shared/contracts/review';
 import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import { useMemo, type ReactNode } from 'react';
 import { DataTable } from '#components/data-table/data-table.tsx';
 import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { chosenCandidate, type Decisions } from '../hooks/use-decisions.ts';
-import { History } from './history.tsx';
+import { History, type Said } from './history.tsx';
 import { DepthTable, LimitTable } from './limit-table.tsx';
 import { candidateColumns, neighbourColumns } from './object-columns.tsx';
 import { Robustness } from './robustness.tsx';
@@ -13,8 +12,7 @@ import { Robustness } from './robustness.tsx';
 interface EvidenceTabsProps {
   detail: VerdictDetail;
   decisions: Decisions;
-  reviews: readonly Review[];
-  overrides: readonly Override[];
+  said: Said;
   tab: string;
   onTab: (tab: string) => void;
   hovered: string | null;
@@ -25,7 +23,7 @@ interface EvidenceTabsProps {
 
 /** The tables behind the verdict; their rows are the marks on the panel. */
 export function EvidenceTabs(props: EvidenceTabsProps) {
-  const { detail, decisions, reviews, overrides, hovered, selected, onHover, onSelect } = props;
+  const { detail, decisions, said, hovered, selected, onHover, onSelect } = props;
   const { candidates, neighbours, limits } = detail;
   const forCandidates = useMemo(() => candidateColumns(onSelect), [onSelect]);
   const forNeighbours = useMemo(() => neighbourColumns(onSelect), [onSelect]);
@@ -94,12 +92,11 @@ export function EvidenceTabs(props: EvidenceTabsProps) {
     ['stability', 'Stability', <Robustness key="stability" detail={detail} />],
     [
       'history',
-      `History ${reviews.length + overrides.length}`,
+      `History ${countOf(said)}`,
       <History
         key="history"
-        reviews={reviews}
-        overrides={overrides}
-        onWithdraw={decisions.mayDecide ? (override) => decisions.ask({ what: 'withdraw', override }) : undefined}
+        said={said}
+        onTakeBack={decisions.mayDecide ? (path, of) => decisions.ask({ what: 'takeBack', path, of }) : undefined}
       />,
     ],
   ];
@@ -111,3 +108,6 @@ export function EvidenceTabs(props: EvidenceTabsProps) {
     </Tabs>
   );
 }
+
+const countOf = ({ reviews, overrides, doubtWords, remarks, settlement }: Said): number =>
+  reviews.length + overrides.length + doubtWords.length + remarks.length + (settlement ? 1 : 0);

@@ -1,4 +1,5 @@
 import { FormGroup, HTMLSelect } from '@blueprintjs/core';
+import type { ReviewOutcome } from '@eremite/shared/contracts/review';
 import {
   STARLIGHT_VERDICTS,
   SURROUNDINGS_VERDICTS,
@@ -6,54 +7,95 @@ import {
   type SurroundingsVerdict,
 } from '@eremite/shared/contracts/words';
 import { useState } from 'react';
-import { NoteDialog } from '#components/dialogs/note-dialog.tsx';
+import { DecisionDialog, type DecisionDialogProps } from './decision-dialog.tsx';
 
-interface VerdictDialogProps {
-  title: string;
-  doIt: string;
+const OUTCOMES: readonly { value: ReviewOutcome; label: string }[] = [
+  { value: 'verdict', label: 'a verdict' },
+  { value: 'not real', label: 'not a real line' },
+  { value: 'not extragalactic', label: 'not extragalactic' },
+  { value: 'needs an HI spectrum', label: 'ask for a confirming HI spectrum' },
+];
+
+export interface Words {
   starlight: StarlightVerdict;
   surroundings: SurroundingsVerdict;
-  isOpen: boolean;
-  isPending: boolean;
-  error: unknown;
-  onClose: () => void;
-  onConfirm: (decision: { starlight: StarlightVerdict; surroundings: SurroundingsVerdict; note: string }) => void;
+  outcome: ReviewOutcome;
 }
 
-/** Another verdict than the computed one, with the reason that must go with it. */
-export function VerdictDialog(props: VerdictDialogProps) {
-  const [starlight, setStarlight] = useState(props.starlight);
-  const [surroundings, setSurroundings] = useState(props.surroundings);
+interface VerdictDialogProps extends Omit<DecisionDialogProps, 'onConfirm' | 'children'> {
+  computed: Omit<Words, 'outcome'>;
+  outcome: ReviewOutcome;
+  /** Whether the computed words may be sent as they are. */
+  mayAgree: boolean;
+  onConfirm: (words: Words, note: string, attachmentIds: string[], over?: string) => void;
+}
+
+/** Another verdict than the computed one, or an answer in place of one, with the reason that must go with it. */
+export function VerdictDialog({ computed, outcome: first, mayAgree, onConfirm, ...dialog }: VerdictDialogProps) {
+  const [words, setWords] = useState<Words>({ ...computed, outcome: first });
+  const isVerdict = words.outcome === 'verdict';
+  const agrees = isVerdict && words.starlight === computed.starlight && words.surroundings === computed.surroundings;
   return (
-    <NoteDialog
-      isOpen={props.isOpen}
-      title={props.title}
-      doIt={props.doIt}
-      isPending={props.isPending}
-      error={props.error}
-      onClose={props.onClose}
-      onConfirm={(note) => props.onConfirm({ starlight, surroundings, note })}
+    <DecisionDialog
+      {...dialog}
+      isBlocked={agrees && !mayAgree}
+      onConfirm={(note, attachmentIds, over) => onConfirm(words, note, attachmentIds, over)}
     >
-      <div className="columns" style={{ gridTemplateColumns: '1fr 1fr' }}>
-        <FormGroup label="Starlight" labelFor="decide-starlight">
-          <HTMLSelect
-            id="decide-starlight"
-            fill
-            value={starlight}
-            onChange={(event) => setStarlight(event.target.value as StarlightVerdict)}
-            options={[...STARLIGHT_VERDICTS]}
-          />
-        </FormGroup>
-        <FormGroup label="Surroundings" labelFor="decide-surroundings">
-          <HTMLSelect
-            id="decide-surroundings"
-            fill
-            value={surroundings}
-            onChange={(event) => setSurroundings(event.target.value as SurroundingsVerdict)}
-            options={[...SURROUNDINGS_VERDICTS]}
-          />
-        </FormGroup>
+      <div className="columns" style={{ gridTemplateColumns: 'repeat(auto-fit, minmax(150px, 1fr))' }}>
+        <Choice
+          id="decide-outcome"
+          label="Answer"
+          value={words.outcome}
+          options={OUTCOMES}
+          onChange={(outcome) => setWords((old) => ({ ...old, outcome }))}
+        />
+        {isVerdict && (
+          <>
+            <Choice
+              id="decide-starlight"
+              label="Starlight"
+              value={words.starlight}
+              options={STARLIGHT_VERDICTS.map(asOption)}
+              onChange={(starlight) => setWords((old) => ({ ...old, starlight }))}
+            />
+            <Choice
+              id="decide-surroundings"
+              label="Surroundings"
+              value={words.surroundings}
+              options={SURROUNDINGS_VERDICTS.map(asOption)}
+              onChange={(surroundings) => setWords((old) => ({ ...old, surroundings }))}
+            />
+          </>
+        )}
       </div>
-    </NoteDialog>
+      {agrees && !mayAgree && (
+        <p className="muted" role="status">
+          This is the computed verdict: change a word, or close and agree with a note.
+        </p>
+      )}
+    </DecisionDialog>
+  );
+}
+
+const asOption = <T extends string>(value: T) => ({ value, label: value });
+
+interface ChoiceProps<T extends string> {
+  id: string;
+  label: string;
+  value: T;
+  options: readonly { value: T; label: string }[];
+  onChange: (value: T) => void;
+}
+function Choice<T extends string>({ id, label, value, options, onChange }: ChoiceProps<T>) {
+  return (
+    <FormGroup label={label} labelFor={id}>
+      <HTMLSelect
+        id={id}
+        fill
+        value={value}
+        onChange={(event) => onChange(event.target.value as T)}
+        options={[...options]}
+      />
+    </FormGroup>
   );
 }

@@ -1,74 +1,152 @@
-import type { Override } from '@eremite/shared/contracts/review';
-import type { Candidate, VerdictDetail } from '@eremite/shared/contracts/verdict';
+import { review, settlement, override, doubtWord, type Override } from '@eremite/shared/contracts/review';
+import type { Candidate, Doubt, VerdictDetail } from '@eremite/shared/contracts/verdict';
 import type { TeamRole } from '@eremite/shared/contracts/words';
-import { useState } from 'react';
+import { useMutation, useQueryClient, useSuspenseQuery } from '@tanstack/react-query';
+import { useCallback, useState } from 'react';
 import { rowKey } from '@eremite/shared/drawing/sky-mark';
+import { ApiError } from '#lib/api-error.ts';
+import { dropDraft } from '#lib/drafts.ts';
+import { outbox } from '#lib/outbox/use-outbox.ts';
+import { meQuery } from '#lib/queries/me.ts';
 import { mayLead, mayReview } from '#lib/role.ts';
 import { complain, say } from '#lib/toaster.ts';
-import { useOverride, useReview, useSettle, useWithdraw } from '../api/decisions.ts';
+import { askAnew, useTakeBack } from '../api/decisions.ts';
+import { recall, remember } from './last-decision.ts';
 
 /** Which question is open, if any. */
 export type Asking =
-  | { what: 'review' | 'settle' | 'note' | 'distance' }
+  | { what: 'review' | 'noGalaxy' | 'askSpectrum' | 'settle' | 'note' | 'distance' | 'ask' }
   | { what: 'accept' | 'reject'; candidate: Candidate }
-  | { what: 'withdraw'; override: Override }
+  | { what: 'doubt'; doubt: Doubt }
+  | { what: 'takeBack'; path: string; of: string }
   | null;
+
+/** A decision as it is sent. */
+export interface Decision {
+  path: 'reviews' | 'settlements' | 'overrides' | 'doubt-words' | 'remarks';
+  json: Record<string, unknown>;
+  /** In words, for the list of what waits. */
+  what: string;
+  /** Said when it is done. */
+  done: string;
+  /** Whether one goes on to the next detection. */
+  advances?: boolean;
+  draft?: string;
+}
+
+/** Someone else's word that was in the way, as the refusal brought it. */
+export interface Collision {
+  id: string;
+  by: string;
+  words: string;
+  note: string;
+}
 
 /** The decisions on one detection: what may be asked, what is being asked, and what doing it does. */
 export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () => void) {
   const id = detail.verdict.detectionId;
+  const { data: me } = useSuspenseQuery(meQuery());
+  const client = useQueryClient();
   const [asking, setAsking] = useState<Asking>(null);
-  const review = useReview(id);
-  const settle = useSettle(id);
-  const override = useOverride(id);
-  const withdraw = useWithdraw(id);
-  const close = () => {
+  const takeBack = useTakeBack(id);
+  const send = useMutation({
+    networkMode: 'always',
+    mutationFn: ({ decision: { path, json, what }, ifMatch }: { decision: Decision; ifMatch?: string }) =>
+      outbox.submit({
+        key: crypto.randomUUID(),
+        userId: me.id,
+        path: `/detections/${id}/${path}`,
+        json,
+        what,
+        at: new Date().toISOString(),
+        ...(ifMatch && { ifMatch }),
+      }),
+    onSettled: () => void askAnew(client, id),
+  });
+  const close = useCallback(() => {
     setAsking(null);
-    [review, settle, override, withdraw].forEach((mutation) => mutation.reset());
-  };
-  const done = (words: string) => {
-    close();
-    void say(words);
-  };
-  const computed = {
-    runId: detail.runId,
-    starlight: detail.verdict.starlight,
-    surroundings: detail.verdict.surroundings,
-  };
+    send.reset();
+    takeBack.reset();
+  }, [send, takeBack]);
+  const decide = (decision: Decision, ifMatch?: string) =>
+    send.mutate(
+      { decision, ...(ifMatch && { ifMatch }) },
+      {
+        onSuccess: (result) => {
+          if (decision.draft) dropDraft(decision.draft);
+          close();
+          const made = result.state === 'sent' ? review.safeParse(result.answer) : undefined;
+          if (decision.path === 'reviews' && made?.success)
+            remember({ userId: me.id, reviewId: made.data.id, detectionId: id, name: detail.verdict.name });
+          void say(
+            result.state === 'sent' ? decision.done : `${decision.what}: kept, it is sent when the service is back.`,
+          );
+          if (decision.advances) onDone();
+        },
+        onError: (error) => {
+          if (!asking) void complain(error);
+        },
+      },
+    );
   return {
     asking,
     ask: setAsking,
     close,
     mayDecide: mayReview(role),
     maySettle: mayLead(role),
-    isPending: review.isPending || settle.isPending || override.isPending || withdraw.isPending,
-    error: review.error ?? settle.error ?? override.error ?? withdraw.error,
-    agree: (note = '') =>
-      review.mutate(
-        { ...computed, note },
+    isPending: send.isPending || takeBack.isPending,
+    error: send.error ?? takeBack.error,
+    collision: collisionOf(send.error),
+    decide,
+    takeBack: (path: string, note: string) =>
+      takeBack.mutate({ path, note }, { onSuccess: () => (close(), void say('Taken back.')) }),
+    /** Takes the last review of this sitting back, wherever it was given, and answers on which detection it was. */
+    undo: (onUndone: (detectionId: string) => void) => {
+      const last = recall(me.id);
+      if (!last) return void say('There is nothing to undo.');
+      takeBack.mutate(
+        { path: `/reviews/${last.reviewId}` },
         {
           onSuccess: () => {
-            done(`You agreed: ${computed.starlight}, ${computed.surroundings}.`);
-            onDone();
+            remember(null);
+            void askAnew(client, last.detectionId);
+            void say(`Your decision on ${last.name} is taken back.`);
+            onUndone(last.detectionId);
           },
           onError: (error) => void complain(error),
         },
-      ),
-    review: (decision: Pick<typeof computed, 'starlight' | 'surroundings'> & { note: string }) =>
-      review.mutate({ ...decision, runId: detail.runId }, { onSuccess: () => done('Your verdict is kept.') }),
-    settle: (decision: Pick<typeof computed, 'starlight' | 'surroundings'> & { note: string }) =>
-      settle.mutate({ ...decision, runId: detail.runId }, { onSuccess: () => done('Settled.') }),
-    override: (action: 'accept' | 'reject', { catalogueId, rowId, name }: Candidate, note: string) =>
-      override.mutate(
-        { catalogueId, rowId, action, note },
-        { onSuccess: () => done(`${name} is ${action}ed from the next run on.`) },
-      ),
-    withdraw: ({ id: overrideId }: Override, note: string) =>
-      withdraw.mutate({ overrideId, note }, { onSuccess: () => done('The override is withdrawn.') }),
+      );
+    },
   };
 }
 
 export type Decisions = ReturnType<typeof useDecisions>;
+
+/** Whose word stood in the way, where a decision was refused for that. */
+function collisionOf(error: unknown): Collision | null {
+  if (!(error instanceof ApiError) || error.status !== 412) return null;
+  const { current } = error.problem;
+  const settled = settlement.safeParse(current);
+  if (settled.success) {
+    const { id, by, note, starlight, surroundings, outcome } = settled.data;
+    return { id, by, note, words: outcome === 'verdict' ? `${starlight}, ${surroundings}` : outcome };
+  }
+  const overridden = override.safeParse(current);
+  if (overridden.success) {
+    const { id, by, note, action, objectName } = overridden.data;
+    return { id, by, note, words: `${objectName} ${action}ed as counterpart` };
+  }
+  const doubted = doubtWord.safeParse(current);
+  if (!doubted.success) return null;
+  const { id, by, note, word, doubt } = doubted.data;
+  return { id, by, note, words: `${doubt} ${word}` };
+}
+
+/** Where what is typed for a question is kept until it is sent. */
+export const draftOf = (detectionId: string, what: string): string => `${detectionId}.${what}`;
+
+/** What an override takes back: its path. */
+export const overridePath = ({ id }: Override): string => `/overrides/${id}`;
 
 /** The candidate that is chosen on the panel or in the table. */
 export const chosenCandidate = (detail: VerdictDetail, selected: string | null): Candidate | undefined =>

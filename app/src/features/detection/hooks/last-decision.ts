@@ -1,0 +1,27 @@
+/** The last review given in this sitting, for undoing it after the page has moved on. */
+export interface LastDecision {
+  readonly userId: string;
+  readonly reviewId: string;
+  readonly detectionId: string;
+  readonly name: string;
+}
+const KEY = 'eremite.last-decision';
+
+export function remember(decision: LastDecision | null): void {
+  try {
+    if (decision) sessionStorage.setItem(KEY, JSON.stringify(decision));
+    else sessionStorage.removeItem(KEY);
+  } catch {
+    // Without it there is nothing to undo by key; the history still takes back.
+  }
+}
+
+/** @param userId another person's is not undone */
+export function recall(userId: string): LastDecision | null {
+  try {
+    const kept = JSON.parse(sessionStorage.getItem(KEY) ?? 'null') as LastDecision | null;
+    return kept?.userId === userId ? kept : null;
+  } catch {
+    return null;
+  }
+}
