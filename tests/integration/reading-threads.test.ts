@@ -2,11 +2,12 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { IntakeWorker } from '@eremite/service/modules/intakes/intake-worker.ts';
+import { DEFAULT_LIMITS } from '@eremite/service/tables/table.ts';
 import { afterAll, describe, expect, it } from 'vitest';
 
 describe('the threads that read tables', () => {
   const folder = mkdtempSync(join(tmpdir(), 'eremite-test-'));
-  const threads = new IntakeWorker();
+  const threads = new IntakeWorker({ tableLimits: DEFAULT_LIMITS });
   afterAll(async () => {
     await threads.onModuleDestroy();
     rmSync(folder, { recursive: true, force: true });

@@ -6,6 +6,7 @@ describe('the environment', () => {
 
   it('has a default for everything', () => {
     expect(readEnv()).toMatchObject({ port: 4870, demo: true, databaseUrl: undefined, maxUploadBytes: 4 * 2 ** 30 });
+    expect(readEnv().tableLimits).toEqual({ maxBytes: 20 * 2 ** 30, maxColumns: 5000, maxCellLength: 2 ** 20 });
   });
 
   it('names every variable at fault at once', () => {

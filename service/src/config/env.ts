@@ -39,6 +39,9 @@ const variables = z.object({
   EREMITE_METRICS_TOKEN: optional(z.string().min(16, 'at least 16 characters')),
   EREMITE_LOG_LEVEL: z.enum(['trace', 'debug', 'info', 'warn', 'error', 'silent']).default('info'),
   EREMITE_MAX_UPLOAD: bytes.prefault('4GiB'),
+  EREMITE_MAX_UNPACKED: bytes.prefault('20GiB'),
+  EREMITE_MAX_COLUMNS: z.coerce.number().int().min(1).max(100_000).default(5000),
+  EREMITE_MAX_CELL: bytes.prefault('1MiB'),
   EREMITE_JOB_WORKERS: z.coerce.number().int().min(0).max(64).default(2),
   EREMITE_THREADS: z.coerce.number().int().min(1).max(256).optional(),
   EREMITE_TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),
@@ -67,6 +70,8 @@ export interface Env {
   readonly metricsToken: string | undefined;
   readonly logLevel: string;
   readonly maxUploadBytes: number;
+  /** Of a table that is read. */
+  readonly tableLimits: { readonly maxBytes: number; readonly maxColumns: number; readonly maxCellLength: number };
   readonly jobWorkers: number;
   /** Threads of a run. */
   readonly threads: number;
@@ -118,6 +123,11 @@ export function readEnv(overrides: Partial<Env> = {}): Env {
     metricsToken: value.EREMITE_METRICS_TOKEN,
     logLevel: value.EREMITE_LOG_LEVEL,
     maxUploadBytes: value.EREMITE_MAX_UPLOAD,
+    tableLimits: {
+      maxBytes: value.EREMITE_MAX_UNPACKED,
+      maxColumns: value.EREMITE_MAX_COLUMNS,
+      maxCellLength: value.EREMITE_MAX_CELL,
+    },
     jobWorkers: value.EREMITE_JOB_WORKERS,
     threads: value.EREMITE_THREADS ?? readThreads(),
     trustProxy: value.EREMITE_TRUST_PROXY,

@@ -1,6 +1,6 @@
-import { parentPort } from 'node:worker_threads';
+import { parentPort, workerData } from 'node:worker_threads';
 import { fileSource } from '../tables/bytes/byte-source.ts';
-import { TableError } from '../tables/table.ts';
+import { type ReaderLimits, TableError } from '../tables/table.ts';
 import { Handovers } from './handovers.ts';
 import { inspect } from './inspect.ts';
 import type { IntakeFailure, IntakeMessage, IntakeTask } from './intake-messages.ts';
@@ -14,6 +14,7 @@ import { SettingsError } from './resolved.ts';
 const port = parentPort!;
 const send = (message: IntakeMessage, transfer: ArrayBuffer[] = []): void => port.postMessage(message, transfer);
 const REPORT_MS = 100;
+const limits = workerData as Partial<ReaderLimits>;
 const handovers = new Handovers();
 
 async function handOver(message: IntakeMessage, transfer: ArrayBuffer[] = []): Promise<void> {
@@ -32,6 +33,7 @@ async function work(task: IntakeTask): Promise<void> {
   const open = ({ path, fileName }: NonNullable<IntakeTask['readMe']>) => fileSource(path, fileName);
   const options = {
     onProgress,
+    limits,
     ...(task.readMe ? { readMe: await open(task.readMe) } : {}),
     parts: await Promise.all((task.parts ?? []).map(open)),
   };

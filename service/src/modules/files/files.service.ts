@@ -44,7 +44,8 @@ export class FilesService implements OnModuleInit {
     const file = await open(part, 'wx');
     try {
       try {
-        for await (const chunk of stream as AsyncIterable<Buffer>) {
+        // Destroyed half read, the stream would raise an error of its own, which hid the one thrown here.
+        for await (const chunk of stream.iterator({ destroyOnReturn: false }) as AsyncIterable<Buffer>) {
           bytes += chunk.length;
           if (bytes > maxBytes)
             throw new AppError('TOO_LARGE', `This installation accepts files up to ${maxBytes} bytes.`);
@@ -58,6 +59,7 @@ export class FilesService implements OnModuleInit {
       await rename(part, join(this.#folder, key));
       await this.#syncFolder();
     } catch (error) {
+      stream.resume();
       await rm(part, { force: true });
       throw error;
     }

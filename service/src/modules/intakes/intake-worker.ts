@@ -1,7 +1,8 @@
 import { Worker } from 'node:worker_threads';
-import { Injectable, type OnModuleDestroy } from '@nestjs/common';
+import { Inject, Injectable, type OnModuleDestroy } from '@nestjs/common';
 import { AppError } from '../../common/app-error.ts';
 import { workerUrl } from '../../common/worker-url.ts';
+import { ENV, type Env } from '../../config/env.ts';
 import type { CopyPiece } from '../../database/bulk.ts';
 import type { Inspection } from '../../intake/inspect.ts';
 import type { IntakeFailure, IntakeMessage, IntakeTask } from '../../intake/intake-messages.ts';
@@ -24,6 +25,8 @@ export class IntakeWorker implements OnModuleDestroy {
   private readonly waiting: (() => void)[] = [];
   /** Threads that wait for a table; starting one takes as long as reading a small table. */
   private idle: Worker[] = [];
+
+  constructor(@Inject(ENV) private readonly env: Pick<Env, 'tableLimits'>) {}
 
   /** @throws {AppError} TABLE_UNREADABLE */
   async inspect(file: Omit<IntakeTask, 'what'>): Promise<Inspection> {
@@ -68,7 +71,7 @@ export class IntakeWorker implements OnModuleDestroy {
   }
 
   private start(): Worker {
-    const worker = new Worker(workerUrl('intake'));
+    const worker = new Worker(workerUrl('intake'), { workerData: this.env.tableLimits });
     worker.once('exit', () => (this.idle = this.idle.filter((other) => other !== worker)));
     // Without a listener an error in an idle thread would end the process.
     worker.on('error', () => undefined);

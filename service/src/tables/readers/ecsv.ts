@@ -25,7 +25,12 @@ export async function openEcsv(content: Content, limits: ReaderLimits): Promise<
   }
   if (head.columns.length > limits.maxColumns) {
     const message = `The head names ${head.columns.length} columns, more than the limit of ${limits.maxColumns}.`;
-    throw new TableError('too-many-columns', message, 'Keep only the columns that are needed.', { line: 1 });
+    throw new TableError(
+      'too-many-columns',
+      message,
+      'Keep only the columns that are needed, or have the limit on columns raised.',
+      { line: 1 },
+    );
   }
   const delimiter = head.delimiter === ' ' ? 'blank' : (head.delimiter as Delimiter);
   if (![',', ';', '\t', '|', 'blank'].includes(delimiter)) {

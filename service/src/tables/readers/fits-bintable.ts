@@ -97,7 +97,12 @@ export class BinTableFiller implements RowFiller {
     }
     if (bytes > this.limits.maxCellLength) {
       const message = `${name} holds ${bytes} bytes, more than the limit of ${this.limits.maxCellLength}.`;
-      return new TableError('cell-too-long', message, 'Leave that column out.', place);
+      return new TableError(
+        'cell-too-long',
+        message,
+        'Leave that column out, or have the limit on cells raised.',
+        place,
+      );
     }
     const heap = this.heaps.get(column)!;
     const found = await heap.locate(offset, bytes);

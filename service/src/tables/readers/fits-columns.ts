@@ -36,7 +36,7 @@ export function readFitsColumns(hdu: FitsHdu, limits: ReaderLimits, notes: strin
     throw new TableError(
       'too-many-columns',
       `HDU ${number} has ${width} columns, more than the limit of ${limits.maxColumns}.`,
-      'Keep only the columns that are needed.',
+      'Keep only the columns that are needed, or have the limit on columns raised.',
       { column: limits.maxColumns + 1 },
     );
   }

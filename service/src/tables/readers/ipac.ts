@@ -41,9 +41,14 @@ export async function openIpac(content: Content, limits: ReaderLimits): Promise<
   const edges = [...names].flatMap((letter, i) => (letter === '|' ? [i] : []));
   if (edges.length - 1 > limits.maxColumns) {
     const message = `The header has ${edges.length - 1} columns, more than the limit of ${limits.maxColumns}.`;
-    throw new TableError('too-many-columns', message, 'Keep only the columns that are needed.', {
-      line: dataLine - bars.length,
-    });
+    throw new TableError(
+      'too-many-columns',
+      message,
+      'Keep only the columns that are needed, or have the limit on columns raised.',
+      {
+        line: dataLine - bars.length,
+      },
+    );
   }
   const starts = edges.slice(0, -1).map((edge) => edge + 1);
   const ends = edges.slice(1);

@@ -72,7 +72,11 @@ async function openDescribed(
   }
   if (columns.length > limits.maxColumns) {
     const message = `The description has ${columns.length} columns, more than the limit of ${limits.maxColumns}.`;
-    throw new TableError('too-many-columns', message, 'Keep only the columns that are needed.');
+    throw new TableError(
+      'too-many-columns',
+      message,
+      'Keep only the columns that are needed, or have the limit on columns raised.',
+    );
   }
   if (detectEncoding(content.head).startsWith('utf-16')) {
     const message = 'The table is UTF-16, but its columns are counted in bytes.';

@@ -54,7 +54,7 @@ export async function sniffLayout(content: Content, limits: ReaderLimits): Promi
     throw new TableError(
       'too-many-columns',
       `Line ${line} has ${names.length} columns, more than the limit of ${limits.maxColumns}.`,
-      'Keep only the columns that are needed.',
+      'Keep only the columns that are needed, or have the limit on columns raised.',
       { line, column: limits.maxColumns + 1 },
     );
   }

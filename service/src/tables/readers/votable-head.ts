@@ -133,7 +133,7 @@ function readTable(
     throw new TableError(
       'too-many-columns',
       `Table ${index + 1} has ${elements.length} columns, more than the limit of ${limits.maxColumns}.`,
-      'Keep only the columns that are needed.',
+      'Keep only the columns that are needed, or have the limit on columns raised.',
       { column: limits.maxColumns + 1 },
     );
   }
