@@ -16,6 +16,7 @@ export function createRouter(client: QueryClient) {
       HydrateFallback: Loading,
       children: [
         { path: '/sign-in', ...page(() => import('./routes/sign-in.tsx')) },
+        { path: '/shared/:linkToken', ...page(() => import('./routes/shared.tsx')) },
         { path: '/accept-invitation', ...page(() => import('./routes/accept-invitation.tsx')) },
         {
           path: '/',
@@ -36,9 +37,12 @@ export function createRouter(client: QueryClient) {
                 { index: true, ...page(() => import('./routes/overview.tsx')) },
                 { path: 'detections', ...page(() => import('./routes/detections.tsx')) },
                 { path: 'detections/:detectionId', ...page(() => import('./routes/detection.tsx')) },
+                { path: 'plots', ...page(() => import('./routes/plots.tsx')) },
                 { path: 'docket', ...page(() => import('./routes/docket.tsx')) },
                 { path: 'docket/:detectionId', ...page(() => import('./routes/detection.tsx')) },
                 { path: 'shortlist', ...page(() => import('./routes/shortlist.tsx')) },
+                { path: 'editions', ...page(() => import('./routes/editions.tsx')) },
+                { path: 'editions/:editionId', ...page(() => import('./routes/edition.tsx')) },
                 { path: 'catalogues', ...page(() => import('./routes/catalogues.tsx')) },
                 { path: 'catalogues/:catalogueId', ...page(() => import('./routes/catalogue.tsx')) },
                 { path: 'intake', ...page(() => import('./routes/intakes.tsx')) },

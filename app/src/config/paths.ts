@@ -8,10 +8,13 @@ export const paths = {
   detections: (surveyId: string, search = '') => `${survey(surveyId)}/detections${search}`,
   detection: (surveyId: string, detectionId: string, search = '') =>
     `${survey(surveyId)}/detections/${detectionId}${search}`,
+  plots: (surveyId: string, search = '') => `${survey(surveyId)}/plots${search}`,
   docket: (surveyId: string) => `${survey(surveyId)}/docket`,
   docketDetection: (surveyId: string, detectionId: string, search = '') =>
     `${survey(surveyId)}/docket/${detectionId}${search}`,
   shortlist: (surveyId: string) => `${survey(surveyId)}/shortlist`,
+  editions: (surveyId: string) => `${survey(surveyId)}/editions`,
+  edition: (surveyId: string, editionId: string) => `${survey(surveyId)}/editions/${editionId}`,
   catalogues: (surveyId: string) => `${survey(surveyId)}/catalogues`,
   catalogue: (surveyId: string, catalogueId: string) => `${survey(surveyId)}/catalogues/${catalogueId}`,
   /** With a catalogue: to bring in its next version. */

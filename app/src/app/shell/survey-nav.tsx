@@ -9,8 +9,10 @@ const groups = (id: string) => [
     links: [
       { to: paths.survey(id), text: 'Overview', end: true },
       { to: paths.detections(id), text: 'Detections' },
+      { to: paths.plots(id), text: 'Plots' },
       { to: paths.docket(id), text: 'Docket' },
       { to: paths.shortlist(id), text: 'Shortlist' },
+      { to: paths.editions(id), text: 'Editions' },
     ],
   },
   {
