@@ -13,8 +13,9 @@ export interface LimitsOptions {
 const ROW = 34;
 const TOP = 16;
 const BOTTOM = 34;
-const LEFT = 112;
+const LEFT = 116;
 const RIGHT = 74;
+const LONGEST_NAME = 22;
 
 /** What the chart shows, a sentence a band: for those who cannot see it. */
 export function limitsSummary(limits: readonly BandLimit[]): string {
@@ -71,6 +72,9 @@ export function limitsChartSvg({ detail }: Pick<DrawnEvidence, 'detail'>, option
   );
 }
 
+/** A name that fits beside its row. */
+const shortened = (name: string): string => (name.length > LONGEST_NAME ? `${name.slice(0, LONGEST_NAME - 1)}…` : name);
+
 /** Magnitudes shown: all expectations to two sigma and all depths, with a margin. */
 function span(limits: readonly BandLimit[]): [number, number] {
   const values = limits.flatMap(({ expectedMagnitude, expectedScatterMag, depthPoint, depthExtended }) => [
@@ -94,7 +98,13 @@ function bandRow(
   const { band, system, expectedMagnitude: expected, expectedScatterMag: scatter, depthPoint, completeness } = limit;
   const tone = limit.testable ? theme.amber : theme.muted;
   const parts = [
-    textAt(LEFT - 10, y + 4, `${band} ${system}`, {
+    textAt(LEFT - 10, y + 12, shortened(limit.catalogueName), {
+      'font-size': 9.5,
+      'font-family': theme.prose,
+      'text-anchor': 'end',
+      fill: theme.muted,
+    }),
+    textAt(LEFT - 10, y - 1, `${band} ${system}`, {
       'font-size': 12,
       'font-family': theme.mono,
       'text-anchor': 'end',

@@ -19,6 +19,7 @@ export interface StripLayout {
   x: (kpc: number) => number;
   /** @param kms velocity difference, km/s; clamped to the strip */
   y: (kms: number) => number;
+  /** Marks as far out as the strip reaches. */
   placed: PlacedMark[];
 }
 
@@ -56,11 +57,12 @@ export function stripLayout(
   const x = (kpc: number) => MARGIN.left + across * clamp(Math.log10(Math.max(kpc, 1e-6) / FROM_KPC) / span);
   const y = (kms: number) => MARGIN.top + down * (1 - clamp((kms + reachKms) / (2 * reachKms)));
   const shelfY = floor + 10;
-  const placed = marks.map((mark): PlacedMark => {
+  const placed = marks.flatMap((mark): PlacedMark[] => {
     const kpc = mark.separationArcsec * zones.kpcPerArcsec;
+    if (kpc > toKpc) return [];
     const dv = mark.velocityDifferenceKms;
     const where = dv === null ? 'shelf' : dv > reachKms ? 'above' : dv < -reachKms ? 'below' : 'inside';
-    return { mark, kpc, x: x(kpc), y: dv === null ? shelfY : y(dv), where };
+    return [{ mark, kpc, x: x(kpc), y: dv === null ? shelfY : y(dv), where }];
   });
   return {
     width,

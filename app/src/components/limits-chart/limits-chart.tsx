@@ -21,7 +21,10 @@ export function LimitsChart({ detail }: { detail: DrawnDetail }) {
           <i className="limits-chart__depth" aria-hidden="true" /> 5-σ depth for a point
         </span>
         <span>
-          <i className="limits-chart__size" aria-hidden="true" /> for galaxies of that r<sub>e</sub>
+          <i className="limits-chart__size" aria-hidden="true" />
+          <span>
+            for galaxies of that r<sub>e</sub>
+          </span>
         </span>
         <SaveMenu
           label="Save the limits chart"

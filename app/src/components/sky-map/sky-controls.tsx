@@ -97,7 +97,9 @@ const Limit = ({ label, unit, value, step, onChange }: LimitProps) => (
     <NumericInput
       size="small"
       min={0}
+      buttonPosition="none"
       stepSize={step}
+      majorStepSize={step * 4}
       minorStepSize={null}
       placeholder="no limit"
       defaultValue={value ?? ''}

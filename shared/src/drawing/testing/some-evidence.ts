@@ -128,6 +128,7 @@ export function someEvidence(change: Partial<DrawnDetail> = {}, rest: Partial<Dr
       aloneFactors: null,
       priors: [],
       masks: [],
+      claims: [],
       ...change,
     },
     settings: criteriaSettings.parse({}),

@@ -37,19 +37,19 @@ export function SkyEvidence({ detail, settings, catalogues, ...link }: SkyEviden
   const { centre, marks, windowKms } = useVerdictMarks(detail, settings);
   const { tables, coverages } = useSearched(catalogues);
   const whatIf = useWhatIf(detail);
-  const { supposed, answer, point } = whatIf;
+  const { supposedMpc, answer, point } = whatIf;
   const sky = useFieldMarks(detail, marks, windowKms);
   const nominal = useOutlines(detail, coverages, sky.field);
-  const distanceMpc = supposed?.angularMpc ?? detail.distance.angularMpc;
+  const distanceMpc = supposedMpc ?? detail.distance.angularMpc;
   const outlines = useMemo(() => {
-    if (!supposed || !settings) return nominal;
-    const radius = settings.surroundings.radiusMpc / supposed.angularMpc;
+    if (supposedMpc === undefined || !point || !settings) return nominal;
+    const radius = settings.surroundings.radiusMpc / supposedMpc;
     return {
       ...nominal,
-      searchRadiusArcsec: supposed.searchRadiusArcsec,
+      searchRadiusArcsec: point.searchRadiusArcsec,
       neighbourRadiusArcsec: (radius * 180 * DEGREE_ARCSEC) / Math.PI,
     };
-  }, [nominal, supposed, settings]);
+  }, [nominal, supposedMpc, point, settings]);
   const skyMarks = useMemo(() => atDistance(sky.marks, distanceMpc), [sky.marks, distanceMpc]);
   const stripMarks = useMemo(
     () => (answer ? toSkyMarks(detail.candidates, answer.neighbours, windowKms) : marks),
@@ -58,12 +58,8 @@ export function SkyEvidence({ detail, settings, catalogues, ...link }: SkyEviden
   const zones = useMemo(() => {
     if (!settings) return undefined;
     const shown = point ? { ...detail, searchRadiusArcsec: point.searchRadiusArcsec } : detail;
-    return stripZones(
-      shown,
-      settings,
-      supposed?.angularMpc ?? (detail.distance.angularMpc === null ? point?.angularMpc : undefined),
-    );
-  }, [detail, settings, point, supposed]);
+    return stripZones(shown, settings, distanceMpc ?? point?.angularMpc);
+  }, [detail, settings, point, distanceMpc]);
   const { selected } = link;
   const drawFinder = useCallback<DrawFinder>(
     (view) =>
@@ -92,7 +88,13 @@ export function SkyEvidence({ detail, settings, catalogues, ...link }: SkyEviden
       <ProblemCallout error={whatIf.error} />
       {whatIf.isFetching && !answer && <Loading what="Judging at other distances" />}
       {answer && point && (
-        <WhatIfPanel answer={answer} nominalMpc={detail.distance.angularMpc} point={point} onPoint={whatIf.choose} />
+        <WhatIfPanel
+          answer={answer}
+          nominalMpc={detail.distance.angularMpc}
+          atMpc={distanceMpc ?? point.angularMpc}
+          point={point}
+          onSuppose={whatIf.suppose}
+        />
       )}
     </>
   );

@@ -9,38 +9,38 @@ interface WhatIfPanelProps {
   answer: WhatIf;
   /** Distance in use (angular-diameter), Mpc; null where there is none. */
   nominalMpc: number | null;
+  /** Distance that is supposed (angular-diameter), Mpc. */
+  atMpc: number;
+  /** What was judged nearest to it. */
   point: WhatIfPoint;
-  onPoint: (point: WhatIfPoint) => void;
+  onSuppose: (mpc: number) => void;
 }
 
-const STEPS = 600;
+/** Steps of the slider: 0.7 per cent each over a factor of nine. */
+const STEPS = 300;
 
 /** A slider over distances, with where each verdict holds, and what the server would say at the distance chosen. */
-export function WhatIfPanel({ answer, nominalMpc, point, onPoint }: WhatIfPanelProps) {
+export function WhatIfPanel({ answer, nominalMpc, atMpc, point, onSuppose }: WhatIfPanelProps) {
   const { points } = answer;
   const [nearest, furthest] = [points[0]!.angularMpc, points.at(-1)!.angularMpc];
   const share = (mpc: number) => Math.log(mpc / nearest) / Math.log(furthest / nearest);
   const starlight = useMemo(() => verdictSpans(points, (one) => one.starlight), [points]);
   const surroundings = useMemo(() => verdictSpans(points, (one) => one.surroundings), [points]);
-  const pick = (step: number) => {
-    const wanted = Math.log(nearest) + (step / STEPS) * Math.log(furthest / nearest);
-    const off = ({ angularMpc }: WhatIfPoint) => Math.abs(Math.log(angularMpc) - wanted);
-    onPoint(points.reduce((best, one) => (off(one) < off(best) ? one : best)));
-  };
+  const mpcOf = (step: number) => nearest * (furthest / nearest) ** (step / STEPS);
   return (
     <div className="what-if">
       <label className="what-if__slider">
         <span>
-          If the distance were <b className="num">{fixed(point.angularMpc, 1)} Mpc</b>
+          If the distance were <b className="num">{fixed(atMpc, 1)} Mpc</b>
           {nominalMpc !== null && <span className="muted"> (in use: {fixed(nominalMpc, 1)})</span>}
         </span>
         <input
           type="range"
           min={0}
           max={STEPS}
-          value={Math.round(share(point.angularMpc) * STEPS)}
-          onChange={(event) => pick(Number(event.currentTarget.value))}
-          aria-valuetext={`${fixed(point.angularMpc, 1)} megaparsecs: ${point.starlight}, ${point.surroundings}`}
+          value={Math.round(share(atMpc) * STEPS)}
+          onChange={(event) => onSuppose(mpcOf(Number(event.currentTarget.value)))}
+          aria-valuetext={`${fixed(atMpc, 1)} megaparsecs: ${point.starlight}, ${point.surroundings}`}
         />
       </label>
       {nominalMpc !== null && (

@@ -7,11 +7,11 @@ import { whatIfQuery } from '../api/what-if.ts';
 /** Supposes another distance: the answer of the server for all of them, and the one that is looked at. */
 export function useWhatIf({ runId, verdict, distance }: VerdictDetail) {
   const [isOn, setOn] = useState(false);
-  const [chosen, setChosen] = useState<WhatIfPoint | null>(null);
+  const [chosen, setChosen] = useState<number | null>(null);
   const { data, error, isFetching } = useQuery({ ...whatIfQuery(runId, verdict.detectionId), enabled: isOn });
   const answer = isOn ? data : undefined;
   const nominal = distance.angularMpc;
-  const start = answer && nearestPoint(answer.points, nominal);
+  const at = chosen ?? nominal;
   return {
     isOn,
     toggle: () => {
@@ -21,10 +21,11 @@ export function useWhatIf({ runId, verdict, distance }: VerdictDetail) {
     answer,
     error: isOn ? error : null,
     isFetching: isOn && isFetching,
-    point: answer && (chosen ?? start),
-    /** The distance supposed, where one was chosen. */
-    supposed: answer && chosen ? chosen : undefined,
-    choose: setChosen,
+    /** The verdict at the distance that was judged nearest to the one supposed. */
+    point: answer && nearestPoint(answer.points, at),
+    /** The distance supposed (angular-diameter), Mpc, where one was chosen. */
+    supposedMpc: answer ? (chosen ?? undefined) : undefined,
+    suppose: setChosen,
   };
 }
 
