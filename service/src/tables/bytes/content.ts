@@ -20,13 +20,13 @@ export interface Content {
 /** Opens a file: unpacks gzip, refuses what is empty, over the limit or packed in another way. */
 export async function openContent(source: ByteSource, limits: ReaderLimits): Promise<Content> {
   if (source.size === 0) {
-    throw new TableError('empty', 'The file is empty.', 'Export or upload the table again.', { byte: 0 });
+    throw new TableError('empty', 'The file is empty.', 'Export or upload it again.', { byte: 0 });
   }
   if (source.size > limits.maxBytes) {
     throw new TableError(
       'too-large',
       `The file has ${source.size} bytes, more than the limit of ${limits.maxBytes}.`,
-      'Split the table, pack it with gzip, or have the limit on file size raised.',
+      'Split it, pack it with gzip, or have the limit on file size raised.',
       { byte: limits.maxBytes },
     );
   }
@@ -35,7 +35,7 @@ export async function openContent(source: ByteSource, limits: ReaderLimits): Pro
   const stream = packed ? (from = 0) => skipBytes(gunzip(source.stream(), limits), from) : source.stream;
   const { head, complete } = await readHead(stream(), HEAD_BYTES);
   if (head.length === 0) {
-    throw new TableError('empty', 'The packed file holds nothing.', 'Pack the table again.', { byte: 0 });
+    throw new TableError('empty', 'The packed file holds nothing.', 'Pack it again.', { byte: 0 });
   }
   return {
     ...(source.name === undefined ? {} : { name: source.name }),
