@@ -1,10 +1,14 @@
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import type { Doubt } from '@eremite/shared/contracts/verdict';
 import { DEGREE } from '@eremite/shared/science/constants';
+import type { SurroundingsMeasures } from '@eremite/shared/contracts/surroundings-measures';
+import { distanceBranches } from '@eremite/shared/science/distance/distance-branches';
+import { hiMass } from '@eremite/shared/science/hydrogen/hi-mass';
 import { exclusiveProbabilities } from '@eremite/shared/science/counterpart/exclusive';
 import { projectedKpc } from '@eremite/shared/science/surroundings/projected-separation';
 import { bandLimit } from './band-limits.ts';
 import { beyondSearch } from './beyond-search.ts';
+import type { EngineInput } from './engine-input.ts';
 import { dataGrounds, headlineOf, surroundingsGrounds } from './other-grounds.ts';
 import { rowName } from './prepared-catalogue.ts';
 import type { Assessment, ScoredDetail, ScoredItem } from './scored-detection.ts';
@@ -73,7 +77,12 @@ const within = (p: number): number => Math.min(1, Math.max(0, p));
 const OTHER_PRIORS = [0.97, 0.986, 0.995];
 
 /** Everything behind one verdict but its candidates and neighbours. */
-export function describeDetail(assessment: Assessment, doubts: Doubt[], criteria: CriteriaSettings): ScoredDetail {
+export function describeDetail(
+  assessment: Assessment,
+  doubts: Doubt[],
+  measures: SurroundingsMeasures | null,
+  { criteria, survey }: Pick<EngineInput, 'criteria' | 'survey'>,
+): ScoredDetail {
   const { detection, surroundings, silence, objects, reliability } = assessment;
   const { distance } = detection;
   const known = distance.kind !== 'none';
@@ -88,7 +97,9 @@ export function describeDetail(assessment: Assessment, doubts: Doubt[], criteria
       note: known
         ? [detection.distanceSource, ...distance.cautions].filter((text) => text !== '').join('; ')
         : distance.reason,
+      branches: branchesOf(assessment, criteria, survey),
     },
+    measures,
     positionError: {
       majorArcsec: detection.error.majorArcsec,
       minorArcsec: detection.error.minorArcsec,
@@ -121,4 +132,29 @@ export function describeDetail(assessment: Assessment, doubts: Doubt[], criteria
     }),
     masks: assessment.masks.map(({ raDeg, decDeg, radiusArcsec, label }) => ({ raDeg, decDeg, radiusArcsec, label })),
   };
+}
+
+/** Every distance that the velocity may stand for; the one in use is marked, unless it was measured. */
+function branchesOf(
+  { detection }: Assessment,
+  { distance: rule }: CriteriaSettings,
+  survey: EngineInput['survey'],
+): ScoredDetail['distance']['branches'] {
+  const { czKms, raDeg, decDeg, distance, fluxJyKms, redshift } = detection;
+  if (!Number.isFinite(czKms)) return [];
+  const ra = (((raDeg % 360) + 360) % 360) * DEGREE;
+  return distanceBranches(czKms, ra, decDeg * DEGREE, survey).map((branch) => ({
+    name: branch.name,
+    velocityKms: branch.velocityKms,
+    luminosityMpc: orNull(branch.luminosityMpc),
+    logHiMass:
+      fluxJyKms > 0 && branch.luminosityMpc > 0
+        ? Math.log10(hiMass(fluxJyKms, branch.luminosityMpc, Math.max(redshift, -0.5)))
+        : null,
+    used:
+      distance.kind === branch.kind &&
+      Math.abs(distance.velocityUsedKms - branch.velocityKms) < 1e-6 &&
+      (branch.frame === null || branch.frame === rule.hubbleFrame),
+    note: branch.note,
+  }));
 }

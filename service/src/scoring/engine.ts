@@ -1,3 +1,5 @@
+import type { SurroundingsMeasures } from '@eremite/shared/contracts/surroundings-measures';
+import { DEGREE } from '@eremite/shared/science/constants';
 import type { VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
 import type { LearntPrior } from '@eremite/shared/science/counterpart/learn-prior';
 import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
@@ -19,7 +21,8 @@ import { learnPriors, learntNotes, type Lesson, lessonOf } from './learning.ts';
 import { MissedTable } from './missed-table.ts';
 import { buildNeighbourPool, type NeighbourPool } from './neighbour-pool.ts';
 import { lookForPieces } from './look-for-pieces.ts';
-import { type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
+import { PhotometricNeighbours } from './photometric-neighbours.ts';
+import { isStar, type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
 import { redshiftReaches } from './redshift-reach.ts';
 import { judgeStability } from './robustness.ts';
 import type { Assessment, ScoredDetection } from './scored-detection.ts';
@@ -31,6 +34,7 @@ import {
   type NeighbourRow,
   type SurroundingsContext,
 } from './surroundings.ts';
+import { MEASURED, measureSurroundings } from './surroundings-measures.ts';
 import { RedshiftField, velocityModelOf, velocityNotes } from './velocity-background.ts';
 import { rateRows, type WeighingModel } from './weigh-objects.ts';
 
@@ -70,6 +74,7 @@ export class Engine {
   private readonly shares: CoveredShares;
   private readonly redshifts: RedshiftField;
   private readonly claims: Claims;
+  private readonly photometric: PhotometricNeighbours;
   learnt: Learnt;
 
   constructor(readonly input: EngineInput) {
@@ -97,6 +102,7 @@ export class Engine {
     const pupils = this.detections.pick(this.places(0, Math.ceil(this.detections.length / this.step)));
     const velocity = this.redshifts.measure(velocityModelOf(criteria), pupils);
     this.learnt = { relation: null, priors: [], velocity, notes: [] };
+    this.photometric = new PhotometricNeighbours(this.searched, criteria);
     this.claims = new Claims(this.detections, criteria, (range) =>
       this.assess(range, this.context(this.learnt.relation, this.learnt.priors)),
     );
@@ -291,9 +297,23 @@ export class Engine {
         item: { ...describeItem(assessment, doubts, criteria), robustness },
         candidates: starlight.candidates,
         neighbours: surroundings.neighbours,
-        detail: () => describeDetail(assessment, doubts, criteria),
+        detail: () => describeDetail(assessment, doubts, this.measures(assessment, own), this.input),
       };
     });
+  }
+
+  /** Measures of the surroundings, made when a detail is asked for: they look further than the verdict does. */
+  private measures(assessment: Assessment, isOwn: (row: NeighbourRow) => boolean): SurroundingsMeasures | null {
+    const { detection } = assessment;
+    if (!(detection.angularMpc > 0)) return null;
+    const angleDeg = Math.min(180, MEASURED.radiusMpc / detection.angularMpc / DEGREE);
+    const [rows] = this.searchPool([detection], () => angleDeg, MEASURED.windowKms);
+    const others = rows!.filter((row) => !isOwn(row) && !isStar(row.catalogue, row.index));
+    const photometric = {
+      spoilers: this.photometric.spoilers(assessment),
+      unverified: this.photometric.unverified(assessment),
+    };
+    return measureSurroundings(assessment, others, photometric, this.surroundings);
   }
 
   /** Shifted positions of the control; none where it is switched off. */

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { surroundingsMeasures } from './surroundings-measures.ts';
 import { DOUBT_GRADES, STARLIGHT_VERDICTS, SURROUNDINGS_VERDICTS } from './words.ts';
 
 const starlight = z.enum(STARLIGHT_VERDICTS);
@@ -36,6 +37,19 @@ export const distanceUsed = z.object({
   errorMpc: z.number().nullable(),
   /** Why there is none, or where it came from. */
   note: z.string(),
+  /** Every distance that the velocity may stand for, with the gas mass there. */
+  branches: z
+    .array(
+      z.object({
+        name: z.string(),
+        velocityKms: z.number(),
+        luminosityMpc: z.number().nullable(),
+        logHiMass: z.number().nullable(),
+        used: z.boolean(),
+        note: z.string(),
+      }),
+    )
+    .default([]),
 });
 export type DistanceUsed = z.output<typeof distanceUsed>;
 
@@ -202,6 +216,8 @@ export const verdictDetail = z.object({
   neighbours: z.array(neighbour),
   limits: z.array(bandLimit),
   doubts: z.array(doubt),
+  /** Measures of the surroundings beside the verdict; null without a usable distance. */
+  measures: surroundingsMeasures.nullable().default(null),
   /** Galaxies that other detections claim too: probability of each if this detection were alone, here, and there. */
   claims: z
     .array(

@@ -4,8 +4,10 @@ import { useMemo, type ReactNode } from 'react';
 import { DataTable } from '#components/data-table/data-table.tsx';
 import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { chosenCandidate, type Decisions } from '../hooks/use-decisions.ts';
+import { DistanceBranches } from './distance-branches.tsx';
 import { History, type Said } from './history.tsx';
 import { DepthTable, LimitTable } from './limit-table.tsx';
+import { MeasuresTable } from './measures-table.tsx';
 import { candidateColumns, neighbourColumns } from './object-columns.tsx';
 import { Robustness } from './robustness.tsx';
 
@@ -89,6 +91,8 @@ export function EvidenceTabs(props: EvidenceTabsProps) {
         <LimitTable limits={limits} />
       </div>,
     ],
+    ['surroundings', 'Surroundings', <MeasuresTable key="surroundings" detail={detail} />],
+    ['distance', 'Distance', <DistanceBranches key="distance" detail={detail} />],
     ['stability', 'Stability', <Robustness key="stability" detail={detail} />],
     [
       'history',
