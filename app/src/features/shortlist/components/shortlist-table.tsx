@@ -5,6 +5,7 @@ import { DataTable, type Column } from '#components/data-table/data-table.tsx';
 import { DoubtFlags } from '#components/doubt-mark/doubt-mark.tsx';
 import { StarlightWord, SurroundingsWord } from '#components/verdict-mark/verdict-word.tsx';
 import { NO_VALUE, probabilityCell } from '#lib/format/number.ts';
+import './shortlist.css';
 
 type Entry = Shortlist['entries'][number];
 
@@ -57,6 +58,18 @@ export function ShortlistTable({ entries, to, actions, isPending }: ShortlistTab
     { key: 'pNone', header: 'P(none)', cell: ({ verdict }) => probabilityCell(verdict?.pNone) },
     { key: 'pAlone', header: 'P(alone)', cell: ({ verdict }) => probabilityCell(verdict?.pAlone) },
     {
+      key: 'stability',
+      header: 'Stability',
+      hint: 'The smaller share of draws in which one of the two verdicts stands',
+      cell: ({ priority }) => probabilityCell(priority?.stability),
+    },
+    {
+      key: 'priority',
+      header: 'Priority',
+      hint: 'P(none) × P(no neighbour) × stability; what is not known counts as zero',
+      cell: ({ priority }) => probabilityCell(priority?.value),
+    },
+    {
       key: 'doubts',
       header: 'Doubts',
       align: 'left',
@@ -66,8 +79,9 @@ export function ShortlistTable({ entries, to, actions, isPending }: ShortlistTab
       key: 'reason',
       header: 'Reason',
       align: 'left',
-      cell: ({ reason, nullResult }) => (
+      cell: ({ reason, nullResult, notReady }) => (
         <span className="prose shortlist__reason">
+          {notReady && <span className="shortlist__not-ready">Cannot be frozen: {notReady}. </span>}
           {reason || <span className="muted">none given</span>}
           {nullResult && <span className="muted"> If nothing is found: {nullResult}</span>}
         </span>
