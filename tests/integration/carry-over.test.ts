@@ -26,7 +26,6 @@ interface DocketItem {
 }
 const docket = async (query = '') => {
   const answer = await screened.reviewer.get(`/surveys/${screened.surveyId}/docket?${query}`);
-  if (answer.status !== 200) console.log(answer.text);
   expect(answer.status, answer.text).toBe(200);
   return answer.body.items as DocketItem[];
 };

@@ -1,6 +1,7 @@
 import { Radio, RadioGroup, Switch } from '@blueprintjs/core';
 import { useSuspenseQuery } from '@tanstack/react-query';
 import { Panel } from '#components/panel/panel.tsx';
+import { KeySettings } from '#features/account/components/key-settings.tsx';
 import { PasswordForm } from '#features/account/components/password-form.tsx';
 import { Tokens } from '#features/account/components/tokens.tsx';
 import { setPreferences, usePreferences } from '#lib/preferences.ts';
@@ -32,6 +33,7 @@ export function Component() {
           label="Single-key commands on the detection page"
           onChange={(event) => setPreferences({ shortcuts: event.target.checked })}
         />
+        {shortcuts && <KeySettings />}
       </Panel>
       <Panel title="Password">
         <PasswordForm />

@@ -1,4 +1,4 @@
-import { Button, SegmentedControl } from '@blueprintjs/core';
+import { Button } from '@blueprintjs/core';
 import { useQuery } from '@tanstack/react-query';
 import { useMemo } from 'react';
 import { Link, useNavigate } from 'react-router-dom';
@@ -11,6 +11,10 @@ import { Pager } from '#components/filters/pager.tsx';
 import { useSearchFilters } from '#components/filters/use-search-filters.ts';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { AssignBar } from '#features/docket/components/assign-bar.tsx';
+import { AgreementPanel } from '#features/docket/components/agreement-panel.tsx';
+import { BindingQuestions } from '#features/docket/components/binding-questions.tsx';
+import { DocketFilters } from '#features/docket/components/docket-filters.tsx';
+import { PhrasesEditor } from '#features/docket/components/phrases-editor.tsx';
 import { ReviewerProgress } from '#features/docket/components/reviewer-progress.tsx';
 import { docketColumns } from '#features/docket/components/docket-columns.tsx';
 import { paths } from '#config/paths.ts';
@@ -18,18 +22,23 @@ import { docketQuery } from '#lib/queries/docket.ts';
 import { mayLead, mayReview } from '#lib/role.ts';
 import { searchString } from '#lib/search-string.ts';
 import { useTitle } from '#lib/use-title.ts';
+import '#features/docket/components/docket.css';
+
+/** Parameters of the address that narrow or order the docket. */
+const NARROWING = ['sort', 'starlight', 'doubtGrade', 'search', 'returned', 'disagreement', 'settled', 'outcome'];
 
 export function Component() {
   const survey = useSurvey();
-  const { search, set } = useSearchFilters();
+  const filtering = useSearchFilters();
+  const { search } = filtering;
   const navigate = useNavigate();
   useTitle('Docket', survey.name);
   const assigned = search.get('assigned') ?? 'all';
   const state = search.get('state') ?? (mayReview(survey.role) ? 'open' : 'all');
-  const filters = searchString({ assigned, state });
-  const query = useQuery(
-    docketQuery(survey.id, searchString({ assigned, state, limit: 100, cursor: search.get('cursor') })),
-  );
+  const narrowing = NARROWING.flatMap((key) => (search.get(key) ? [[key, search.get(key)!] as const] : []));
+  const filter = { assigned, state, ...Object.fromEntries(narrowing) };
+  const filters = searchString(filter);
+  const query = useQuery(docketQuery(survey.id, searchString({ ...filter, limit: 100, cursor: search.get('cursor') })));
   const columns = useMemo(
     () => docketColumns((id) => paths.docketDetection(survey.id, id, filters)),
     [survey.id, filters],
@@ -41,7 +50,10 @@ export function Component() {
       <div className="page__head">
         <div>
           <h1>Docket</h1>
-          <p className="page__lede">Detections to look at: worst doubt and best candidate first.</p>
+          <p className="page__lede">
+            Detections to look at. What was decided before stays decided while its evidence stands; what moved comes
+            back.
+          </p>
         </div>
         {first && mayReview(survey.role) && (
           <Button
@@ -51,42 +63,31 @@ export function Component() {
           />
         )}
       </div>
-      <div className="filters">
-        {mayReview(survey.role) && (
-          <>
-            <SegmentedControl
-              aria-label="State"
-              options={[
-                { label: 'To review', value: 'open' },
-                { label: 'Reviewed by me', value: 'done' },
-                { label: 'All', value: 'all' },
-              ]}
-              value={state}
-              onValueChange={(value) => set({ state: value })}
+      <DocketFilters
+        teamId={survey.teamId}
+        mayReview={mayReview(survey.role)}
+        filters={filtering}
+        state={state}
+        assigned={assigned}
+      />
+      {mayLead(survey.role) && (
+        <div className="filters">
+          <ReviewerProgress surveyId={survey.id} />
+          <span className="grow" />
+          {items.length > 0 && (
+            <AssignBar
+              surveyId={survey.id}
+              teamId={survey.teamId}
+              detectionIds={items.map(({ detectionId }) => detectionId)}
+              filter={filter}
+              total={query.data!.total}
             />
-            <SegmentedControl
-              aria-label="Assigned"
-              options={[
-                { label: 'Everyone’s', value: 'all' },
-                { label: 'Assigned to me', value: 'me' },
-              ]}
-              value={assigned}
-              onValueChange={(value) => set({ assigned: value })}
-            />
-          </>
-        )}
-        <span className="grow" />
-        {mayLead(survey.role) && items.length > 0 && (
-          <AssignBar
-            surveyId={survey.id}
-            teamId={survey.teamId}
-            detectionIds={items.map(({ detectionId }) => detectionId)}
-            filter={{ assigned, state }}
-            total={query.data!.total}
-          />
-        )}
-      </div>
-      {mayLead(survey.role) && <ReviewerProgress surveyId={survey.id} />}
+          )}
+        </div>
+      )}
+      <BindingQuestions surveyId={survey.id} mayAnswer={mayReview(survey.role)} />
+      <AgreementPanel surveyId={survey.id} />
+      {mayReview(survey.role) && <PhrasesEditor surveyId={survey.id} />}
       <ProblemCallout error={query.error} />
       {query.isLoading && <Loading what="Reading the docket" />}
       {query.data && items.length === 0 && (

@@ -8,6 +8,9 @@ import { Pager } from '#components/filters/pager.tsx';
 import { useSearchFilters } from '#components/filters/use-search-filters.ts';
 import { useSurvey } from '#components/survey-context/use-survey.ts';
 import { ledgerQuery, verificationQuery } from '#features/ledger/api/ledger.ts';
+import { LedgerDetail } from '#features/ledger/components/ledger-detail.tsx';
+import { LedgerFilters } from '#features/ledger/components/ledger-filters.tsx';
+import '#features/ledger/components/ledger.css';
 import { count } from '#lib/format/number.ts';
 import { moment } from '#lib/format/time.ts';
 import { searchString } from '#lib/search-string.ts';
@@ -27,20 +30,21 @@ const COLUMNS: Column<LedgerEntry>[] = [
   },
   {
     key: 'hash',
-    header: 'Hash',
+    header: 'Before, after, hash',
     align: 'left',
-    cell: ({ hash, detail }) => (
-      <span className="muted" title={JSON.stringify(detail)}>
-        {hash.slice(0, 10)}
-      </span>
-    ),
+    cell: (entry) => <LedgerDetail entry={entry} />,
   },
 ];
 
+/** Parameters of the address that narrow the ledger. */
+const NARROWING = ['actor', 'action', 'since', 'until', 'search'];
+
 export function Component() {
   const survey = useSurvey();
-  const { search } = useSearchFilters();
-  const query = useQuery(ledgerQuery(survey.id, searchString({ limit: 100, cursor: search.get('cursor') })));
+  const filters = useSearchFilters();
+  const { search } = filters;
+  const filter = Object.fromEntries(NARROWING.flatMap((key) => (search.get(key) ? [[key, search.get(key)!]] : [])));
+  const query = useQuery(ledgerQuery(survey.id, searchString({ ...filter, limit: 100, cursor: search.get('cursor') })));
   const { data: chain } = useQuery(verificationQuery(survey.id));
   useTitle('Ledger', survey.name);
   return (
@@ -55,15 +59,18 @@ export function Component() {
         {chain && (
           <p role="status" className={chain.intact ? 'muted' : 'facts__open'}>
             {chain.intact
-              ? `The chain of ${count(chain.entries)} entries is intact.`
+              ? `The chain of ${count(chain.entries)} entries is intact; it ends in ${chain.lastHash.slice(0, 10)}.`
               : `The chain is broken at entry ${chain.brokenAt}.`}
           </p>
         )}
       </div>
+      <LedgerFilters surveyId={survey.id} filters={filters} filter={filter} />
       <ProblemCallout error={query.error} />
       {query.isLoading && <Loading what="Reading the ledger" />}
       {query.data?.items.length === 0 && (
-        <EmptyState title="Nothing has happened yet">The first import will be the first entry.</EmptyState>
+        <EmptyState title={search.size > 0 ? 'No entry fits' : 'Nothing has happened yet'}>
+          {search.size > 0 ? 'Ask for less.' : 'The first import will be the first entry.'}
+        </EmptyState>
       )}
       {query.data && query.data.items.length > 0 && (
         <>

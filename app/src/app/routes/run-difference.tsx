@@ -42,7 +42,7 @@ export function Component() {
         </div>
         <Link to={paths.run(survey.id, runId)}>Run {data.to.number}</Link>
       </div>
-      {(data.criteriaChanged.length > 0 || data.inputsChanged.length > 0) && (
+      {(data.criteriaChanged.length > 0 || data.inputsChanged.length > 0 || data.decisionsChanged.length > 0) && (
         <section className="panel">
           <div className="panel__head">
             <h2>What was changed</h2>
@@ -56,6 +56,19 @@ export function Component() {
                 <div key={change} style={{ display: 'contents' }}>
                   <dt>tables</dt>
                   <dd>{change}</dd>
+                </div>
+              ))}
+              {data.decisionsChanged.map(({ detectionId, name, change }) => (
+                <div key={`${detectionId} ${change}`} style={{ display: 'contents' }}>
+                  <dt>{name ? 'decision' : 'survey'}</dt>
+                  <dd>
+                    {detectionId ? (
+                      <Link to={paths.detection(survey.id, detectionId, `?run=${runId}`)}>{name}</Link>
+                    ) : (
+                      name
+                    )}{' '}
+                    {change.replace('->', '→')}
+                  </dd>
                 </div>
               ))}
             </dl>

@@ -56,6 +56,16 @@ const returned = (viewer: string): SQL => {
     or exists (select 1 from ${settlements} s where s.detection_id = ${verdicts.detectionId} and s.superseded_at is null and s.moved is not null))`;
 };
 
+/**
+ * What moved since an account's word, else since the lead settled. A fragment of its own, for columns named in the selection
+ * itself lose their table.
+ */
+const movedFor = (userId: string): SQL => sql`coalesce(
+  (select t.moved from ${returns} t where t.detection_id = ${verdicts.detectionId} and t.run_id = ${verdicts.runId} and t.reviewer_id = ${userId}
+    and not exists (select 1 from ${reviews} r where ${onThis} and r.reviewer_id = t.reviewer_id and r.superseded_at is null)),
+  (select s.moved from ${settlements} s where s.detection_id = ${verdicts.detectionId} and s.superseded_at is null),
+  '[]'::jsonb)`;
+
 /** What a page of verdicts may be narrowed by, beyond the query of the contract. */
 export interface VerdictFilter extends Partial<VerdictsQuery> {
   detectionIds?: readonly string[];
@@ -243,11 +253,7 @@ export class VerdictsRepository {
     db = this.db,
   ) {
     if (detectionIds.length === 0) return [];
-    const moved = sql<unknown>`coalesce(
-      (select t.moved from ${returns} t where t.detection_id = ${verdicts.detectionId} and t.run_id = ${verdicts.runId} and t.reviewer_id = ${of.userId}
-        and not exists (select 1 from ${reviews} r where ${onThis} and r.reviewer_id = t.reviewer_id and r.superseded_at is null)),
-      (select s.moved from ${settlements} s where s.detection_id = ${verdicts.detectionId} and s.superseded_at is null),
-      '[]'::jsonb)`;
+    const moved = sql<unknown>`${movedFor(of.userId)}`;
     return db
       .select({
         detectionId: verdicts.detectionId,

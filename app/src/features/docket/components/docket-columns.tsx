@@ -1,5 +1,6 @@
 import { Link } from 'react-router-dom';
 import type { Column } from '#components/data-table/data-table.tsx';
+import { signed } from '#components/moved-list/signed.ts';
 import { DoubtFlags } from '#components/doubt-mark/doubt-mark.tsx';
 import { StarlightWord, SurroundingsWord } from '#components/verdict-mark/verdict-word.tsx';
 import { probabilityCell } from '#lib/format/number.ts';
@@ -50,14 +51,30 @@ export const docketColumns = (to: (detectionId: string) => string): Column<Docke
     align: 'left',
     cell: (item) => <span className="prose">{reviewWords(item)}</span>,
   },
+  {
+    key: 'moved',
+    header: 'What moved',
+    hint: 'What moved since your word, or since it was settled',
+    align: 'left',
+    cell: (item) => <span className="prose">{movedWords(item)}</span>,
+  },
 ];
 
 function reviewWords(item: DocketItem): string {
-  if (item.settled) return 'settled';
+  if (item.settled) return item.settled.outcome === 'verdict' ? 'settled' : `settled: ${item.settled.outcome}`;
   const others = item.reviews - (item.reviewedByMe ? 1 : 0);
+  const differ = item.disagreement ? ', which differ' : '';
   return (
-    [item.reviewedByMe && 'yours', others > 0 && `${others} other${others > 1 ? 's' : ''}`]
+    ([item.reviewedByMe && 'yours', others > 0 && `${others} other${others > 1 ? 's' : ''}`]
       .filter(Boolean)
-      .join(' and ') || 'none'
+      .join(' and ') || 'none') + differ
   );
+}
+
+/** The first two things that moved, by how much; the detection page has all. */
+function movedWords({ moved }: DocketItem): string {
+  const words = moved
+    .slice(0, 2)
+    .map(({ what, from, to, by, unit }) => `${what} ${by === null ? `${from} → ${to}` : signed(by)} ${unit}`.trim());
+  return words.join('; ') + (moved.length > 2 ? ` and ${moved.length - 2} more` : '');
 }

@@ -9,12 +9,13 @@ export function ReviewerProgress({ surveyId }: { surveyId: string }) {
   if (!data || data.items.length === 0) return null;
   return (
     <ul className="reviewer-progress" aria-label="Progress of the reviewers on the latest run">
-      {data.items.map(({ userId, name, assigned, reviewed }) => (
+      {data.items.map(({ userId, name, assigned, reviewed, returned }) => (
         <li key={userId}>
           <span>{name}</span>
           <progress value={reviewed} max={assigned} aria-label={`${name}: ${reviewed} of ${assigned} reviewed`} />
           <span className="num small muted">
             {count(reviewed)} of {count(assigned)}
+            {returned > 0 && `, ${count(returned)} came back`}
           </span>
         </li>
       ))}

@@ -1,7 +1,6 @@
-import { ledgerEntry } from '@eremite/shared/contracts/ledger';
+import { ledgerEntry, ledgerFacets, ledgerVerification } from '@eremite/shared/contracts/ledger';
 import { listOf } from '@eremite/shared/contracts/list';
 import { keepPreviousData, queryOptions } from '@tanstack/react-query';
-import { z } from 'zod';
 import { call } from '#lib/api-client.ts';
 
 export const ledgerQuery = (surveyId: string, search: string) =>
@@ -11,11 +10,16 @@ export const ledgerQuery = (surveyId: string, search: string) =>
     placeholderData: keepPreviousData,
   });
 
-const verification = z.object({ entries: z.int(), intact: z.boolean(), brokenAt: z.int().nullable() });
-
 /** Recomputes the chain of hashes. */
 export const verificationQuery = (surveyId: string) =>
   queryOptions({
     queryKey: ['survey', surveyId, 'ledger', 'verification'],
-    queryFn: ({ signal }) => call(verification, `/surveys/${surveyId}/ledger/verification`, { signal }),
+    queryFn: ({ signal }) => call(ledgerVerification, `/surveys/${surveyId}/ledger/verification`, { signal }),
+  });
+
+/** Who and what there is to filter by. */
+export const ledgerFacetsQuery = (surveyId: string) =>
+  queryOptions({
+    queryKey: ['survey', surveyId, 'ledger', 'facets'],
+    queryFn: ({ signal }) => call(ledgerFacets, `/surveys/${surveyId}/ledger/facets`, { signal }),
   });

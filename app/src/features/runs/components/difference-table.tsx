@@ -35,8 +35,18 @@ const columns = (surveyId: string, runId: string, otherwise: string): Column<Cha
   },
   { key: 'pNone', header: 'P(none)', align: 'left', cell: ({ pNone }) => moved(pNone, probability) },
   {
+    key: 'causes',
+    header: 'Which input did it',
+    align: 'left',
+    cell: ({ causes }) => (
+      <span className="prose">
+        {causes.length > 0 ? causes.join('; ').replaceAll('->', '→') : 'none that is known'}
+      </span>
+    ),
+  },
+  {
     key: 'why',
-    header: 'Why',
+    header: 'What moved',
     align: 'left',
     cell: ({ why }) => <span className="prose">{why.length > 0 ? <Prose text={why.join('; ')} /> : otherwise}</span>,
   },
