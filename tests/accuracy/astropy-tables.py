@@ -1,9 +1,11 @@
 """Reads sample tables with astropy and prints what it finds as JSON lines, for astropy-tables.test.ts.
 
+With --by-content: every table in the data folders of any package, its reader chosen by what the file begins with.
 Each line: file, table index, format, rows, columns (name, unit, kind), first and last row, numbers of nulls.
 """
 
 import glob
+import gzip
 import json
 import math
 import os
@@ -109,13 +111,50 @@ def ascii_tables(path):
     yield describe(path, 0, formats[0] or "guessed", table)
 
 
-def main(root):
+def reader_by_content(path):
+    """The reader of a file of unknown name, or None: VOTables, FITS tables, IPAC tables, text with a header."""
+    with open(path, "rb") as file:
+        head = file.read(8192)
+    if path.endswith(".gz"):
+        with gzip.open(path) as file:
+            head = file.read(8192)
+    if head.startswith(b"SIMPLE  ="):
+        return fits_tables
+    if b"<VOTABLE" in head:
+        return votables
+    if head.lstrip()[:1] == b"<" or b"\0" in head:
+        return None
+    lines = [line for line in head.decode("utf-8", "replace").splitlines() if line.strip()]
+    if lines and lines[0].startswith(("\\", "|")):
+        return lambda path: [describe(path, 0, "ipac", ascii_io.read(path, format="ipac"))]
+    lines = [line for line in lines if not line.startswith("#")]
+    if path.endswith(".csv") or (len(lines) > 1 and lines[0].count(",") > 2):
+        return lambda path: [describe(path, 0, "csv", ascii_io.read(path, format="csv", comment="#"))]
+    if path.endswith((".txt", ".dat", ".tbl")):
+        return lambda path: [describe(path, 0, "guessed", ascii_io.read(path))]
+    return None
+
+
+def jobs_by_content(root):
+    for path in sorted(glob.glob(os.path.join(root, "**", "data", "**", "*"), recursive=True)):
+        if not os.path.isfile(path) or path.endswith((".py", ".pyc", ".zip", ".bz2", ".tar", ".json", ".html")):
+            continue
+        reader = reader_by_content(path)
+        if reader is not None:
+            yield path, reader
+
+
+def jobs_of_astropy(root):
     jobs = []
     for base, reader in (("votable", votables), ("fits", fits_tables), ("ascii", ascii_tables)):
         for path in sorted(glob.glob(os.path.join(root, "io", base, "tests", "data", "**", "*"), recursive=True)):
             if os.path.isfile(path) and "invalid" not in path and not path.endswith((".py", ".bz2", ".xz", ".tex", ".tex.gz", ".html", ".hdf5")):
                 jobs.append((path, reader))
-    for path, reader in jobs:
+    return jobs
+
+
+def main(root, by_content):
+    for path, reader in jobs_by_content(root) if by_content else jobs_of_astropy(root):
         try:
             for found in reader(path):
                 print(json.dumps(found))
@@ -123,4 +162,4 @@ def main(root):
             print(json.dumps({"file": path, "error": f"{type(error).__name__}: {str(error).splitlines()[0] if str(error) else ''}"[:200]}))
 
 
-main(sys.argv[1])
+main(sys.argv[1], sys.argv[2:] == ["--by-content"])
