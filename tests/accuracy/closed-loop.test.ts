@@ -7,7 +7,7 @@ import { closeLoop, type ClosedLoop } from '../support/closed-loop.ts';
  * Small by default; EREMITE_LONG draws enough for ten filled bins and prints how far each broken assumption moves them.
  */
 const LONG = process.env['EREMITE_LONG'] !== undefined;
-const SIZE = LONG ? { detections: 12_000, sideDeg: 26 } : { detections: 1200, sideDeg: 8 };
+const SIZE = LONG ? { detections: 4000, sideDeg: 14.6 } : { detections: 1200, sideDeg: 8 };
 
 interface Bin {
   count: number;
