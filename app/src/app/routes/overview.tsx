@@ -1,4 +1,5 @@
-import { useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
+import { useQuery, useSuspenseQuery, type QueryClient } from '@tanstack/react-query';
+import { useMemo } from 'react';
 import { Link, useNavigate, type LoaderFunctionArgs } from 'react-router-dom';
 import { Caution } from '#components/caution/caution.tsx';
 import { EmptyState } from '#components/feedback/empty-state.tsx';
@@ -6,6 +7,7 @@ import { SkyChart } from '#components/sky-chart/sky-chart.tsx';
 import { VerdictCounts } from '#components/verdict-counts/verdict-counts.tsx';
 import { paths } from '#config/paths.ts';
 import { count } from '#lib/format/number.ts';
+import { cataloguesQuery } from '#lib/queries/catalogues.ts';
 import { overviewQuery } from '#lib/queries/survey.ts';
 import { mayLead, mayReview } from '#lib/role.ts';
 import { useTitle } from '#lib/use-title.ts';
@@ -19,6 +21,14 @@ export const loader =
 export function Component() {
   const survey = useSurvey();
   const { data } = useSuspenseQuery(overviewQuery(survey.id));
+  const catalogues = useQuery(cataloguesQuery(survey.id));
+  const footprints = useMemo(
+    () =>
+      (catalogues.data?.items ?? []).flatMap(({ name, state, coverage }) =>
+        state === 'published' && coverage.moc ? [{ name, moc: coverage.moc }] : [],
+      ),
+    [catalogues.data],
+  );
   const navigate = useNavigate();
   useTitle(survey.name);
   const hasRun = data.survey.latestRun?.state === 'done' || Object.keys(data.counts.starlight).length > 0;
@@ -42,7 +52,11 @@ export function Component() {
         </EmptyState>
       ) : (
         <div className="overview">
-          <SkyChart marks={data.marks} onOpen={(id) => void navigate(paths.detection(survey.id, id))} />
+          <SkyChart
+            marks={data.marks}
+            footprints={footprints}
+            onOpen={(id) => void navigate(paths.detection(survey.id, id))}
+          />
           <div className="stack">
             {mayReview(survey.role) && (
               <section className="panel" aria-labelledby="waiting">

@@ -1,41 +1,10 @@
-import { cellBoundary, cellSide } from '@eremite/shared/science/sky/healpix';
-import { Moc } from '@eremite/shared/science/sky/moc';
 import { useMemo } from 'react';
 import './coverage-map.css';
+import { footprintCells } from '#components/sky-chart/footprint-cells.ts';
 import { graticule } from '#components/sky-chart/graticule.ts';
 import { chooseProjection } from '#components/sky-chart/project-sky.ts';
 
 const RAD = Math.PI / 180;
-const MOST_CELLS = 4000;
-
-interface Outline {
-  corners: { raDeg: number; decDeg: number }[];
-}
-
-/** Cells of the region, coarsened until few enough to draw, and their side in degrees. */
-function outlines(text: string): { cells: Outline[]; sideDeg: number } {
-  const region = Moc.parse(text);
-  const cells: Outline[] = [];
-  const order = (() => {
-    let at = Math.min(region.order, 10);
-    while (at > 3 && region.size / 4 ** (region.order - at) > MOST_CELLS) at--;
-    return at;
-  })();
-  const width = 4 ** (region.order - order);
-  const seen = new Set<number>();
-  for (let i = 0; i < region.ranges.length; i += 2) {
-    const last = Math.ceil(region.ranges[i + 1]! / width);
-    for (let cell = Math.floor(region.ranges[i]! / width); cell < last && seen.size < 4 * MOST_CELLS; cell++) {
-      if (seen.has(cell)) continue;
-      seen.add(cell);
-      cells.push({
-        corners: cellBoundary(order, cell, 1).map(({ lon, lat }) => ({ raDeg: lon / RAD, decDeg: lat / RAD })),
-      });
-    }
-  }
-  return { cells, sideDeg: cellSide(order) / RAD };
-}
-
 const sizeOf = (sideDeg: number) =>
   sideDeg >= 1
     ? `${sideDeg.toFixed(1)}°`
@@ -46,7 +15,7 @@ const sizeOf = (sideDeg: number) =>
 /** Where a catalogue looked: its cells between meridians and parallels, north up, east left. */
 export function CoverageMap({ moc }: { moc: string }) {
   const drawn = useMemo(() => {
-    const { cells, sideDeg } = outlines(moc);
+    const { cells, sideDeg } = footprintCells(moc);
     const corners = cells.flatMap((cell) => cell.corners);
     const projection = chooseProjection(corners);
     const shapes = cells.map((cell) => cell.corners.map(({ raDeg, decDeg }) => projection.place(raDeg, decDeg)));

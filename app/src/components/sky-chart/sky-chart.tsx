@@ -1,8 +1,10 @@
+import { HTMLSelect } from '@blueprintjs/core';
 import type { SurveyOverview } from '@eremite/shared/contracts/survey';
 import { useEffect, useMemo, useRef, useState, type MouseEvent } from 'react';
 import { readPalette } from '#components/sky-map/palette.ts';
 import { usePreferences } from '#lib/preferences.ts';
 import { drawMarks } from './draw-marks.ts';
+import { footprintPath } from './footprint-path.ts';
 import { graticule } from './graticule.ts';
 import { chooseProjection } from './project-sky.ts';
 import './sky-chart.css';
@@ -11,9 +13,12 @@ type Mark = SurveyOverview['marks'][number];
 
 interface SkyChartProps {
   marks: readonly Mark[];
+  /** Where each table looked, as MOC in ASCII. */
+  footprints?: readonly { name: string; moc: string }[];
   onOpen: (detectionId: string) => void;
 }
 
+const NONE: readonly { name: string; moc: string }[] = [];
 const WIDTH = 900;
 const MARGIN = 34;
 
@@ -45,7 +50,7 @@ function layOut(marks: readonly Mark[]) {
 }
 
 /** All detections of a survey on the sky, by verdict. The counts and the table beside it say the same in words. */
-export function SkyChart({ marks, onOpen }: SkyChartProps) {
+export function SkyChart({ marks, footprints = NONE, onOpen }: SkyChartProps) {
   const canvas = useRef<HTMLCanvasElement>(null);
   const { theme } = usePreferences();
   const [near, setNear] = useState<number | null>(null);
@@ -81,6 +86,11 @@ export function SkyChart({ marks, onOpen }: SkyChartProps) {
             .join(' ')}`,
       )
       .join('');
+  const [shown, setShown] = useState('');
+  const cells = useMemo(() => {
+    const footprint = footprints.find(({ name }) => name === shown);
+    return footprint ? footprintPath(footprint.moc, projection, toPage) : '';
+  }, [footprints, shown, projection, toPage]);
   const at = near === null ? undefined : points[near];
   return (
     <figure className="sky-chart">
@@ -92,6 +102,7 @@ export function SkyChart({ marks, onOpen }: SkyChartProps) {
         onClick={() => near !== null && onOpen(marks[near]!.detectionId)}
       >
         <svg viewBox={`0 0 ${WIDTH} ${height}`} aria-hidden="true">
+          {cells && <path className="sky-chart__footprint" d={cells} />}
           {lines.map(({ points: line, label }) => (
             <path key={label + String(line.length)} d={path(line)} />
           ))}
@@ -109,7 +120,7 @@ export function SkyChart({ marks, onOpen }: SkyChartProps) {
         <canvas
           ref={canvas}
           role="img"
-          aria-label={`${projection.kind === 'field' ? 'Field' : 'Whole sky'}: ${marks.length} detections by verdict. The counts beside it lead to the same detections.`}
+          aria-label={`${projection.kind === 'field' ? 'Field' : 'Whole sky'}: ${marks.length} detections by verdict${shown ? `, with the footprint of ${shown}` : ''}. The counts beside it lead to the same detections.`}
         />
         {at && near !== null && (
           <p
@@ -123,7 +134,20 @@ export function SkyChart({ marks, onOpen }: SkyChartProps) {
           </p>
         )}
       </div>
-      <figcaption className="muted small">North up, east left, ICRS.</figcaption>
+      <figcaption className="muted small sky-chart__caption">
+        <span className="grow">North up, east left, ICRS.</span>
+        {footprints.length > 0 && (
+          <HTMLSelect
+            aria-label="Footprint shown"
+            value={shown}
+            onChange={(event) => setShown(event.currentTarget.value)}
+            options={[
+              { value: '', label: 'no footprint' },
+              ...footprints.map(({ name }) => ({ value: name, label: `footprint of ${name}` })),
+            ]}
+          />
+        )}
+      </figcaption>
     </figure>
   );
 }

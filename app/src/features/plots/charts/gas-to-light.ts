@@ -2,7 +2,7 @@ import { meanHiMass } from '@eremite/shared/science/hydrogen/gas-relation';
 import * as Plot from '@observablehq/plot';
 import { type Chart, plainAxis } from './chart.ts';
 import { extentOf } from './extent.ts';
-import { errorMarks, frame, pointMarks } from './point-marks.ts';
+import { errorMarks, frame, opacityIn, pointMarks } from './point-marks.ts';
 
 const x = plainAxis('log L_r', (point) => point.logLight);
 const y = plainAxis('log M_HI/L_r', (point) => point.logGasToLight);
@@ -33,15 +33,11 @@ export const GAS_TO_LIGHT: Chart = {
       clip: true,
       marks: [
         Plot.line(line, { x: 'logLight', y: 'ratio', stroke: theme.serious, strokeWidth: 1.3 }),
-        Plot.text([line[8]!], {
-          x: 'logLight',
-          y: 'ratio',
-          text: () => 'Huang et al. (2012)',
-          textAnchor: 'start',
+        Plot.text(['Huang et al. (2012) ——'], {
+          frameAnchor: 'bottom-left',
           dx: 6,
-          dy: 14,
+          dy: -8,
           fill: theme.serious,
-          stroke: theme.field,
         }),
         errorMarks(
           options,
@@ -63,6 +59,7 @@ export const GAS_TO_LIGHT: Chart = {
           x2: (p) => p.logLight! - ARROW_DEX,
           y2: (p) => p.logGasToLight! + ARROW_DEX,
           stroke: theme.amber,
+          strokeOpacity: opacityIn(options),
           strokeWidth: 1,
           headLength: 5,
         }),

@@ -5,6 +5,12 @@ import { colourOf, VERDICT_SYMBOLS } from './verdict-symbols.ts';
 
 type Value = (point: PlotPoint) => number | null;
 
+/** How strongly a point is drawn: outside the brush it fades. */
+export const opacityIn =
+  ({ lit }: Pick<ChartOptions, 'lit'>) =>
+  ({ detectionId }: PlotPoint): number =>
+    lit === null || lit.has(detectionId) ? 0.9 : 0.12;
+
 /** Points by verdict, the rare ones on top; outside the brush they fade. */
 export function pointMarks({ points, lit, theme }: ChartOptions, x: Value, y: Value): Plot.Markish[] {
   return VERDICT_SYMBOLS.map(([verdict, symbol]) => {
@@ -18,7 +24,7 @@ export function pointMarks({ points, lit, theme }: ChartOptions, x: Value, y: Va
       stroke: colour,
       strokeWidth: symbol.filled ? 0 : 1.5,
       fill: symbol.filled ? colour : 'none',
-      opacity: (point: PlotPoint) => (lit === null || lit.has(point.detectionId) ? 0.9 : 0.12),
+      opacity: opacityIn({ lit }),
       title: (point: PlotPoint) => `${point.name}: ${point.starlight}, ${point.surroundings}`,
     });
   });

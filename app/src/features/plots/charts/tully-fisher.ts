@@ -1,7 +1,7 @@
 import { TULLY_FISHER_FORMS, type TullyFisherForm } from '@eremite/shared/science/hydrogen/baryonic-tully-fisher';
 import * as Plot from '@observablehq/plot';
 import { type Chart, plainAxis } from './chart.ts';
-import { errorMarks, frame, pointMarks } from './point-marks.ts';
+import { errorMarks, frame, opacityIn, pointMarks } from './point-marks.ts';
 import { extentOf } from './extent.ts';
 
 const SOURCES: Record<TullyFisherForm, string> = {
@@ -73,6 +73,7 @@ export const TULLY_FISHER: Chart = {
           y1: 'logBaryonicMass',
           y2: 'logBaryonicMassUpTo',
           stroke: theme.amber,
+          strokeOpacity: opacityIn(options),
           strokeWidth: 1,
           headLength: 5,
         }),

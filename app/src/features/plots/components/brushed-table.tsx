@@ -3,7 +3,7 @@ import { useMemo } from 'react';
 import { Link } from 'react-router-dom';
 import { DataTable, type Column } from '#components/data-table/data-table.tsx';
 import { StarlightWord, SurroundingsWord } from '#components/verdict-mark/verdict-word.tsx';
-import { fixed, NO_VALUE, probabilityCell, withError } from '#lib/format/number.ts';
+import { fixed, NO_VALUE, probabilityCell } from '#lib/format/number.ts';
 
 interface BrushedTableProps {
   points: readonly PlotPoint[];
@@ -37,7 +37,12 @@ const columns = (to: BrushedTableProps['to']): Column<PlotPoint>[] => [
   },
   { key: 'dark', header: 'P(no starlight)', cell: (p) => probabilityCell(p.pNoStarlight) },
   { key: 'alone', header: 'P(no neighbour)', cell: (p) => probabilityCell(p.pAlone) },
-  { key: 'gas', header: 'log M(HI)', unit: 'M☉', cell: (p) => withError(p.logHiMass, p.logHiMassError, 2) },
+  {
+    key: 'gas',
+    header: 'log M(HI)',
+    unit: 'M☉',
+    cell: (p) => `${fixed(p.logHiMass, 2)} ± ${fixed(p.logHiMassError, 2)}`,
+  },
   { key: 'light', header: 'log L(r)', unit: 'L☉', cell: (p) => bound(p.lightIsLimit, '<', p.logLight) },
   { key: 'ratio', header: 'log M(HI)/L', unit: 'solar', cell: (p) => bound(p.lightIsLimit, '>', p.logGasToLight) },
   { key: 'baryons', header: 'log M(bar)', unit: 'M☉', cell: (p) => bound(p.lightIsLimit, '>', p.logBaryonicMass) },
