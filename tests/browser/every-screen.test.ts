@@ -34,6 +34,7 @@ beforeAll(async () => {
     detections: '/detections',
     'a dark detection': `/detections/${dark!.detectionId}`,
     'neighbours of a detection': `/detections/${contested!.detectionId}?tab=neighbours`,
+    plots: '/plots',
     docket: '/docket',
     shortlist: '/shortlist',
     catalogues: '/catalogues',
