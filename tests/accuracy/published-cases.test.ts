@@ -165,14 +165,17 @@ describe('published cases', () => {
     },
   );
 
-  it('find AGC 229385 nearly dark at each of its distances, with the published gas-to-light ratio', () => {
+  it('find AGC 229385 nearly dark where the silence has the power, its ratio the same at each of its distances', () => {
     for (const far of ['25', '10.9', '5.50']) {
       const { item } = of(`AGC 229385 at ${far} Mpc`);
-      expect([item.starlight, item.counterpart!.name]).toEqual(['nearly dark', 'Coma P stars']);
+      // Nearer it is a dwarf of little gas, whose light scatters so much that an ordinary one may have been missed.
+      expect(item.starlight).toBe(item.power! >= 0.99 ? 'nearly dark' : 'cannot tell');
+      expect(item.counterpart!.name).toBe('Coma P stars');
       // 46 in g (Janowiecki et al. 2015); g - r 0.35 and the Sun's 0.46 make 51 in r, whatever the distance.
       expect(item.gasToLight!).toBeGreaterThan(45);
       expect(item.gasToLight!).toBeLessThan(57);
     }
+    expect(of('AGC 229385 at 25 Mpc').item.starlight).toBe('nearly dark');
   });
 
   it('raise the doubt of debris on VIRGOHI 21, naming NGC 4254', () => {
