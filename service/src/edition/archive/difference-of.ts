@@ -7,17 +7,22 @@ export function differenceOf(before: ResultLine | null, now: ResultLine): string
   if (before.catalogueId !== now.catalogueId || before.row !== now.row) {
     return `row ${now.row} stands where row ${before.row} stood`;
   }
-  const keys = new Set([...Object.keys(before.item), ...Object.keys(now.item)]);
-  const parts = [...keys]
-    .filter((key) => canonicalJson(before.item[key]) !== canonicalJson(now.item[key]))
-    .map((key) => `${key} ${shown(before.item[key])} → ${shown(now.item[key])}`);
+  const parts = changedKeys(before.item, now.item).map(
+    (key) => `${key} ${shown(before.item[key])} → ${shown(now.item[key])}`,
+  );
   if (before.candidatesSha256 !== now.candidatesSha256) parts.push('its candidates');
   if (before.neighboursSha256 !== now.neighboursSha256) parts.push('its neighbours');
-  if (before.detailSha256 !== now.detailSha256) parts.push('what stands behind it');
+  const behind = changedKeys(before.detail, now.detail);
+  if (behind.length > 0) parts.push(`what stands behind it (${behind.join(', ')})`);
   return parts.length === 0 ? null : parts.join('; ');
 }
 
 function shown(value: unknown): string {
   const text = canonicalJson(value);
   return text.length > 80 ? `${text.slice(0, 77)}…` : text;
+}
+
+function changedKeys(before: Record<string, unknown>, now: Record<string, unknown>): string[] {
+  const keys = new Set([...Object.keys(before), ...Object.keys(now)]);
+  return [...keys].filter((key) => canonicalJson(before[key]) !== canonicalJson(now[key]));
 }

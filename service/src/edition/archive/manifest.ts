@@ -55,12 +55,12 @@ export const manifestSchema = z.looseObject({
 });
 export type ReadManifest = z.output<typeof manifestSchema>;
 
-/** One line of {@link RESULTS}. Hashes stand for what is large. */
+/** One line of {@link RESULTS}. Hashes stand for the packed candidates and neighbours. */
 export interface ResultLine {
   catalogueId: string;
   row: number;
   item: Record<string, unknown>;
-  detailSha256: string;
+  detail: Record<string, unknown>;
   candidatesSha256: string;
   neighboursSha256: string;
 }

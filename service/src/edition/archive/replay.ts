@@ -22,8 +22,10 @@ import { type ReadManifest, RESULTS, type ResultLine } from './manifest.ts';
 import { hashOf, readArchive } from './read-archive.ts';
 import { sha256 } from './sha256.ts';
 
-/** Differences told one by one; the rest is counted. */
+/** Differences told; further ones are counted. */
 const TOLD = 50;
+/** Verdicts named that have the same difference. */
+const NAMED = 5;
 /** Share of the work that reading takes, for the progress. */
 const READING = 0.4;
 
@@ -102,13 +104,17 @@ async function compare(
   const { survey, criteria, decisions, run } = manifest;
   const lines = createInterface({ input: createReadStream(join(folder, RESULTS)), crlfDelay: Infinity });
   const frozen = lines[Symbol.asyncIterator]();
-  const differences: string[] = [];
+  // The same difference of many verdicts is told once.
+  const found = new Map<string, { count: number; names: string[] }>();
   let differing = 0;
   let detections = 0;
   const tell = (name: string, what: string | null) => {
     if (what === null) return;
     differing++;
-    if (differences.length < TOLD) differences.push(`${name}: ${what}`);
+    const same = found.get(what) ?? { count: 0, names: [] };
+    found.set(what, same);
+    same.count++;
+    if (same.names.length < NAMED) same.names.push(name);
   };
   await runEngine(
     { survey: survey.cosmology, criteria: criteria.settings, catalogues, decisions },
@@ -131,16 +137,23 @@ async function compare(
     run.scoringVersion === SCORING_VERSION
       ? ''
       : ` The edition was frozen by ${run.scoringVersion}, this is ${SCORING_VERSION}.`;
-  if (differing > TOLD) differences.push(`and ${differing - TOLD} more`);
   return {
     identical: differing === 0,
     detections,
-    differences,
+    differences: sentencesOf(found),
     sentence:
       differing === 0
         ? `Identical: all ${detections} verdicts of run ${run.number} come out again, number for number.${versions}`
         : `${differing} of ${detections} verdicts of run ${run.number} differ.${versions}`,
   };
+}
+
+function sentencesOf(found: ReadonlyMap<string, { count: number; names: string[] }>): string[] {
+  const told = [...found].slice(0, TOLD).map(([what, { count, names }]) => {
+    const more = count > names.length ? ` and ${count - names.length} more` : '';
+    return `${names.join(', ')}${more}: ${what}`;
+  });
+  return found.size > TOLD ? [...told, `and ${found.size - TOLD} other differences`] : told;
 }
 
 /** A scored detection as an archive keeps it. */
@@ -149,7 +162,7 @@ export function resultLine(one: ScoredDetection): ResultLine {
     catalogueId: one.catalogueId,
     row: one.row,
     item: JSON.parse(JSON.stringify(one.item)) as Record<string, unknown>,
-    detailSha256: sha256(canonicalJson(JSON.parse(JSON.stringify(one.detail())))),
+    detail: JSON.parse(JSON.stringify(one.detail())) as Record<string, unknown>,
     candidatesSha256: sha256(packCandidates(one.candidates, one.detection)),
     neighboursSha256: sha256(packNeighbours(one.neighbours, one.detection)),
   };

@@ -6,7 +6,6 @@ import { Injectable } from '@nestjs/common';
 import { FORMAT_VERSION, type InputFile, MANIFEST, RESULTS, type ResultLine } from '../../edition/archive/manifest.ts';
 import { sha256 } from '../../edition/archive/sha256.ts';
 import { type ArchiveEntry, writeArchive } from '../../edition/archive/write-archive.ts';
-import { canonicalJson } from '../../edition/canonical-json.ts';
 import type { EditionHead } from '../../edition/edition-head.ts';
 import { methodsBib, methodsTex, methodsText } from '../../edition/methods/write-methods.ts';
 import { utf8Pieces } from '../../tables/writers/utf8-pieces.ts';
@@ -83,7 +82,7 @@ export class EditionArchive {
           catalogueId,
           row,
           item: withoutPeople(item as Record<string, unknown>),
-          detailSha256: sha256(canonicalJson(detail)),
+          detail: detail as Record<string, unknown>,
           candidatesSha256: sha256(candidates),
           neighboursSha256: sha256(neighbours),
         };

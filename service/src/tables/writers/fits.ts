@@ -31,7 +31,12 @@ export async function* writeFits(
   });
   try {
     const rowBytes = widths.reduce((sum, width) => sum + width, 0);
-    yield block([card('SIMPLE', true), card('BITPIX', 8), card('NAXIS', 0), card('EXTEND', true)]);
+    yield block([
+      ...cardsOf('SIMPLE', true),
+      ...cardsOf('BITPIX', 8),
+      ...cardsOf('NAXIS', 0),
+      ...cardsOf('EXTEND', true),
+    ]);
     yield block(tableCards(columns, widths, rowBytes, spool.count, table));
     for await (const some of spool.blocks()) yield encodeRows(columns, widths, rowBytes, some);
     const over = (rowBytes * spool.count) % BLOCK;
@@ -49,38 +54,55 @@ function tableCards(
   table: OutputTable,
 ): string[] {
   const cards = [
-    card('XTENSION', 'BINTABLE'),
-    card('BITPIX', 8),
-    card('NAXIS', 2),
-    card('NAXIS1', rowBytes),
-    card('NAXIS2', rows),
-    card('PCOUNT', 0),
-    card('GCOUNT', 1),
-    card('TFIELDS', columns.length),
-    card('EXTNAME', table.name),
+    ...cardsOf('XTENSION', 'BINTABLE'),
+    ...cardsOf('BITPIX', 8),
+    ...cardsOf('NAXIS', 2),
+    ...cardsOf('NAXIS1', rowBytes),
+    ...cardsOf('NAXIS2', rows),
+    ...cardsOf('PCOUNT', 0),
+    ...cardsOf('GCOUNT', 1),
+    ...cardsOf('TFIELDS', columns.length),
+    ...cardsOf('EXTNAME', table.name),
   ];
-  if (table.frame !== undefined) cards.push(card('RADESYS', table.frame));
+  if (table.frame !== undefined) cards.push(...cardsOf('RADESYS', table.frame));
   for (const [i, column] of columns.entries()) {
     const n = i + 1;
-    cards.push(card(`TTYPE${n}`, column.name));
-    cards.push(card(`TFORM${n}`, `${column.datatype === 'text' ? widths[i] : ''}${CODES[column.datatype]}`));
-    if (column.unit) cards.push(card(`TUNIT${n}`, column.unit));
-    if (column.datatype === 'integer') cards.push(card(`TNULL${n}`, NULL_LONG));
-    if (column.ucd) cards.push(card(`TUCD${n}`, column.ucd));
-    if (column.description) cards.push(card(`TCOMM${n}`, column.description));
+    cards.push(...cardsOf(`TTYPE${n}`, column.name));
+    cards.push(...cardsOf(`TFORM${n}`, `${column.datatype === 'text' ? widths[i] : ''}${CODES[column.datatype]}`));
+    if (column.unit) cards.push(...cardsOf(`TUNIT${n}`, column.unit));
+    if (column.datatype === 'integer') cards.push(...cardsOf(`TNULL${n}`, NULL_LONG));
+    if (column.ucd) cards.push(...cardsOf(`TUCD${n}`, column.ucd));
+    if (column.description) cards.push(...cardsOf(`TCOMM${n}`, column.description));
   }
   return cards;
 }
 
-function card(keyword: string, value: string | number | bigint | boolean): string {
+/** Header cards of one keyword: a text too long for one goes on in CONTINUE cards (FITS 4.0, section 4.2.1.2). */
+function cardsOf(keyword: string, value: string | number | bigint | boolean): string[] {
   const start = `${keyword.padEnd(8)}= `;
-  if (typeof value === 'boolean') return `${start}${(value ? 'T' : 'F').padStart(20)}`.padEnd(CARD);
-  if (typeof value !== 'string') return `${start}${String(value).padStart(20)}`.padEnd(CARD);
-  // A string value has 68 characters between its quotes at most; doubled quotes count twice.
-  let text = asciiText(value);
-  while (text.replaceAll("'", "''").length > 68) text = text.slice(0, -1);
-  return `${start}'${text.replaceAll("'", "''").padEnd(8)}'`.padEnd(CARD);
+  if (typeof value === 'boolean') return [`${start}${(value ? 'T' : 'F').padStart(20)}`.padEnd(CARD)];
+  if (typeof value !== 'string') return [`${start}${String(value).padStart(20)}`.padEnd(CARD)];
+  const pieces = splitText(asciiText(value).replaceAll("'", "''"));
+  return pieces.map((piece, i) => {
+    const text = `${piece}${i < pieces.length - 1 ? '&' : ''}`;
+    return `${i === 0 ? start : 'CONTINUE  '}'${text.padEnd(8)}'`.padEnd(CARD);
+  });
 }
+
+/** Pieces of 67 characters at most, which leaves room for the sign that more follows; a doubled quote stays together. */
+function splitText(text: string): string[] {
+  const pieces: string[] = [];
+  let rest = text;
+  while (rest.length > 68) {
+    let at = 67;
+    while (trailingQuotes(rest.slice(0, at)) % 2 === 1) at--;
+    pieces.push(rest.slice(0, at));
+    rest = rest.slice(at);
+  }
+  return [...pieces, rest];
+}
+
+const trailingQuotes = (text: string): number => /'*$/.exec(text)![0].length;
 
 function block(cards: string[]): Uint8Array {
   const text = [...cards, 'END'.padEnd(CARD)].join('');
