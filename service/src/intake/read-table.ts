@@ -33,11 +33,17 @@ export interface CatalogueReading {
 
 const MAX_SIDELINED = 1000;
 
+export interface KeepOptions {
+  /** Maker of the memory of the rows. */
+  memory?: Memory;
+  /** Rows of each piece that are to be kept; all unless given. `check` and `facts` are of all rows in any case. */
+  keep?: (piece: RoleTable) => RoleTable;
+}
+
 /**
  * Reads one catalogue whole into memory: what a plan does, and what a check of an upload does without the rows.
  *
  * @param source path of the file, or its bytes
- * @param options.memory maker of the memory of the rows
  * @param settings as a person wrote them; whatever they leave open takes its documented default
  * @throws {TableError} for a file that cannot be read as a table
  * @throws {SettingsError} for settings that do not fit it, every fault named
@@ -45,18 +51,23 @@ const MAX_SIDELINED = 1000;
 export async function readCatalogue(
   source: ByteSource | string,
   settings: IntakeSettings,
-  { memory = plainMemory, ...options }: ReadOptions & { memory?: Memory } = {},
+  { memory = plainMemory, keep, ...options }: ReadOptions & KeepOptions = {},
 ): Promise<CatalogueReading> {
   const catalogue = await openCatalogue(source, settings, options);
   const { resolved } = catalogue.resolution;
   const parts: PackedColumns[] = [];
+  const places: PackedColumns[] = [];
   const sidelined: SidelinedRow[] = [];
   const { check, facts, questions } = await streamCatalogue(catalogue, settings, (extracted) => {
-    parts.push(extracted.roles);
+    const rows = extracted.roles;
+    parts.push(keep ? keep(asRoleTable(rows)) : rows);
+    // The area that rows cover is told from all of them.
+    if (keep && resolved.footprint.type === 'rows') places.push(placesOf(rows));
     for (const { row } of extracted.sidelined) if (sidelined.length < MAX_SIDELINED) sidelined.push(row);
   });
   const roles = joined(parts, memory);
-  const coverage = coverageOf(resolved, roles.columns.raDeg, roles.columns.decDeg);
+  const { raDeg, decDeg } = places.length > 0 ? joined(places, plainMemory).columns : roles.columns;
+  const coverage = coverageOf(resolved, raDeg, decDeg);
   if (settings.footprint === undefined && resolved.kind !== 'hi') {
     questions.push({
       level: 'assumed',
@@ -77,6 +88,11 @@ export async function readCatalogue(
     coverage,
     positionErrorArcsec: commonPositionError(resolved),
   };
+}
+
+function placesOf({ rows, columns }: PackedColumns): PackedColumns {
+  const { row, raDeg, decDeg } = columns;
+  return { rows, columns: { row: row!, raDeg: raDeg!, decDeg: decDeg! } };
 }
 
 function joined(parts: PackedColumns[], memory: Memory): RoleTable {

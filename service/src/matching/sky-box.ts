@@ -32,7 +32,7 @@ export const makeSkyBox = (): SkyBox => ({
  * Half width in right ascension of a circle on the sky, degrees: asin(sin r / cos dec), or Infinity where the circle
  * reaches a pole. Padded by more than its rounding.
  */
-function halfWidthDeg(decDeg: number, radiusDeg: number): number {
+export function halfWidthDeg(decDeg: number, radiusDeg: number): number {
   const reach = Math.abs(decDeg) + radiusDeg;
   // Close to the pole the arc sine grows without bound: there the whole circle is looked at.
   if (reach >= 90 - 1e-6) return Infinity;

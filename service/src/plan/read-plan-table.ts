@@ -6,9 +6,13 @@ import type { IntakeSettings } from '@eremite/shared/contracts/intake-settings';
 import { type CatalogueReading, readCatalogue } from '../intake/read-table.ts';
 import { SettingsError } from '../intake/resolved.ts';
 import { sharedMemory } from '../matching/memory.ts';
+import { type CatalogueDigest, mergeDigests } from '../scoring/catalogue-digest.ts';
 import { engineCatalogue } from '../scoring/engine-catalogue.ts';
 import type { EngineCatalogue } from '../scoring/engine-input.ts';
+import type { RowSelection } from '../scoring/row-selection.ts';
+import { siftRows } from '../scoring/sift-rows.ts';
 import { TableError } from '../tables/table.ts';
+import type { RoleTable } from '../tiles/role-table.ts';
 
 /** What is read of one table of a plan. */
 export interface PlanTableTask {
@@ -18,6 +22,8 @@ export interface PlanTableTask {
   /** Place among the tables of the plan. */
   index: number;
   settings: IntakeSettings;
+  /** Where rows can matter; without it all are kept. */
+  selection?: RowSelection;
 }
 
 /** A table of a plan, as plain data: it may have been read in another thread. */
@@ -38,21 +44,32 @@ async function hashOf(path: string): Promise<string> {
 
 /** Reads a table into memory that threads share; or says in a sentence each what keeps it from being read. */
 export async function readPlanTable(
-  { path, file, index, settings }: PlanTableTask,
+  { path, file, index, settings, selection }: PlanTableTask,
   onProgress: (fraction: number) => void = () => undefined,
 ): Promise<{ table: PlanTable } | { faults: string[] }> {
   try {
-    const { roles, coverage, ...reading } = await readCatalogue(path, settings, { onProgress, memory: sharedMemory });
+    const digests: CatalogueDigest[] = [];
+    const keep = (piece: RoleTable): RoleTable => {
+      const { roles: kept, digest } = siftRows(settings.kind!, piece, selection!);
+      digests.push(digest);
+      return kept;
+    };
+    const { roles, coverage, ...reading } = await readCatalogue(path, settings, {
+      onProgress,
+      memory: sharedMemory,
+      ...(selection && { keep }),
+    });
     const faults = faultsOf(file, reading);
     if (faults.length > 0) return { faults };
     const { resolved } = reading;
     const { type, moc, areaSqDeg, note } = coverage;
     const name = settings.name ?? basename(file).replace(/\.[^.]+$/, '');
     const sha256 = await hashOf(path);
-    const catalogue = engineCatalogue({ id: String(index), hash: sha256 }, { ...resolved, name }, roles, {
+    const rows = engineCatalogue({ id: String(index), hash: sha256 }, { ...resolved, name }, roles, {
       region: moc && { order: moc.order, ranges: moc.ranges },
       note: `What it covers: ${note}`,
     });
+    const catalogue = selection ? { ...rows, digest: mergeDigests(digests) } : rows;
     return { table: { file, sha256, reading: { ...reading, coverage: { type, areaSqDeg, note } }, catalogue } };
   } catch (error) {
     if (error instanceof SettingsError) {

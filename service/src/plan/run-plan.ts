@@ -2,6 +2,7 @@ import { createHash } from 'node:crypto';
 import { SCREENING_CAUTION } from '@eremite/shared/contracts/words';
 import { openTaskPool, type TaskPool } from '../matching/task-pool.ts';
 import type { EngineInput } from '../scoring/engine-input.ts';
+import type { RowSelection } from '../scoring/row-selection.ts';
 import { runScoring } from '../scoring/run-engine.ts';
 import type { ScoringAsked } from '../scoring/scoring-task.ts';
 import { SCORING_VERSION } from '../scoring/version.ts';
@@ -39,6 +40,7 @@ export async function runPlan(
       read,
       (fraction, message) => onProgress(READING * fraction, message),
       (task) => pool.ask({ read: task }) as ReturnType<ReadOne>,
+      (detections) => pool.ask({ select: inputOf(read, detections) }) as Promise<RowSelection>,
     );
     return await scorePlan(read, tables, folder, onProgress, pool);
   } finally {
@@ -54,12 +56,7 @@ async function scorePlan(
   pool: TaskPool<PlanAsked, unknown>,
 ): Promise<Summary> {
   const { plan } = read;
-  const input: EngineInput = {
-    survey: plan.survey.cosmology,
-    criteria: plan.criteria,
-    catalogues: tables.map(({ catalogue }) => catalogue),
-    decisions: { overrides: [], distances: [] },
-  };
+  const input = inputOf(read, tables);
   const outputs = new PlanOutputs(folder, plan.outputs);
   try {
     const counts = { detections: 0, starlight: {}, surroundings: {}, candidates: 0, neighbours: 0 };
@@ -92,6 +89,15 @@ async function scorePlan(
     outputs.discard();
     throw error;
   }
+}
+
+function inputOf({ plan }: ReadPlan, tables: readonly PlanTable[]): EngineInput {
+  return {
+    survey: plan.survey.cosmology,
+    criteria: plan.criteria,
+    catalogues: tables.map(({ catalogue }) => catalogue),
+    decisions: { overrides: [], distances: [] },
+  };
 }
 
 function addCounts(sums: Record<string, number>, more: Record<string, number>): void {

@@ -1,7 +1,11 @@
 import type { controlResult } from '@eremite/shared/contracts/run';
 import { ARCSECOND, DEGREE } from '@eremite/shared/science/constants';
 import { chanceFraction, correctedCounts } from '@eremite/shared/science/robustness/control';
-import { CONTROL_RING, controlPositions } from '@eremite/shared/science/robustness/control-positions';
+import {
+  CONTROL_RING,
+  type ControlPositions,
+  controlPositions,
+} from '@eremite/shared/science/robustness/control-positions';
 import { randomStream } from '@eremite/shared/science/robustness/random';
 import type { Direction } from '@eremite/shared/science/sky/direction';
 import type { z } from 'zod';
@@ -36,32 +40,13 @@ export function shiftedPlaces(
   offsetsPerSource: number,
   seed: number,
 ): ShiftedPlaces {
-  if (offsetsPerSource === 0) return pickPlaces([], () => true);
-  const step = Math.max(1, Math.ceil((detections.length * offsetsPerSource) / MOST_POSITIONS));
-  const sources = detections.pick(
-    Array.from({ length: Math.ceil(detections.length / step) }, (_, i) => Math.min(i * step, detections.length - 1)),
+  const shifted = controlSources(detections, offsetsPerSource, seed).flatMap(
+    ({ source, here, radius, random, ring }) => {
+      const covering = catalogues.filter(({ moc }) => moc?.contains(here.lon, here.lat));
+      const usable = ({ lon, lat }: Direction) => covering.every(({ moc }) => moc!.contains(lon, lat));
+      return placesOf(source, controlPositions(here, radius, random, usable, ring));
+    },
   );
-  const shifted: { source: Detection; raDeg: number; decDeg: number }[] = [];
-  for (const source of sources) {
-    const here = { lon: (((source.raDeg % 360) + 360) % 360) * DEGREE, lat: source.decDeg * DEGREE };
-    const covering = catalogues.filter(({ moc }) => moc?.contains(here.lon, here.lat));
-    const usable = ({ lon, lat }: Direction) => covering.every(({ moc }) => moc!.contains(lon, lat));
-    const radius = source.searchArcsec * ARCSECOND;
-    const ring = {
-      ...CONTROL_RING,
-      count: offsetsPerSource,
-      outerRadii: Math.min(CONTROL_RING.outerRadii, 1.5 / radius),
-    };
-    if (ring.outerRadii <= ring.innerRadii) continue;
-    const { positions } = controlPositions(
-      here,
-      radius,
-      randomStream(seed, `control/${source.name}/${source.row}`),
-      usable,
-      ring,
-    );
-    for (const { lon, lat } of positions) shifted.push({ source, raDeg: lon / DEGREE, decDeg: lat / DEGREE });
-  }
   const { raDeg, decDeg } = detections.places();
   const near = pairSearch(buildZoneGrid(raDeg, decDeg), {
     raDeg: Float64Array.from(shifted, (one) => one.raDeg),
@@ -75,10 +60,49 @@ export function shiftedPlaces(
   return pickPlaces(shifted, (i) => !blocked.has(i));
 }
 
-function pickPlaces(
-  shifted: readonly { source: Detection; raDeg: number; decDeg: number }[],
-  keep: (i: number) => boolean,
-): ShiftedPlaces {
+/** A detection that is moved, and a place it is moved to, degrees. */
+interface Shifted {
+  source: Detection;
+  raDeg: number;
+  decDeg: number;
+}
+
+const placesOf = (source: Detection, { positions }: ControlPositions): Shifted[] =>
+  positions.map(({ lon, lat }) => ({ source, raDeg: lon / DEGREE, decDeg: lat / DEGREE }));
+
+/** Detections that are moved, with the ring about each and the generator of its places. */
+function controlSources(detections: Detections, offsetsPerSource: number, seed: number) {
+  if (offsetsPerSource === 0 || detections.length === 0) return [];
+  const step = Math.max(1, Math.ceil((detections.length * offsetsPerSource) / MOST_POSITIONS));
+  const positions = Array.from({ length: Math.ceil(detections.length / step) }, (_, i) => i * step);
+  return detections.pick(positions).flatMap((source) => {
+    const radius = source.searchArcsec * ARCSECOND;
+    const outerRadii = Math.min(CONTROL_RING.outerRadii, 1.5 / radius);
+    if (outerRadii <= CONTROL_RING.innerRadii) return [];
+    return [
+      {
+        source,
+        here: { lon: (((source.raDeg % 360) + 360) % 360) * DEGREE, lat: source.decDeg * DEGREE },
+        radius,
+        random: randomStream(seed, `control/${source.name}/${source.row}`),
+        ring: { ...CONTROL_RING, count: offsetsPerSource, outerRadii },
+      },
+    ];
+  });
+}
+
+/** Every place that {@link shiftedPlaces} may choose, whatever the coverage turns out to be. */
+export function controlCandidates(detections: Detections, offsetsPerSource: number, seed: number): Shifted[] {
+  return controlSources(detections, offsetsPerSource, seed).flatMap(({ source, here, radius, random, ring }) =>
+    placesOf(
+      source,
+      // Each try draws one place, so that the first so many places are all that can be tried.
+      controlPositions(here, radius, random, () => true, { ...ring, count: ring.count * ring.tries }),
+    ),
+  );
+}
+
+function pickPlaces(shifted: readonly Shifted[], keep: (i: number) => boolean): ShiftedPlaces {
   const kept = shifted.filter((_, i) => keep(i));
   return {
     source: Uint32Array.from(kept, ({ source }) => source.position),

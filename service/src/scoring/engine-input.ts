@@ -1,5 +1,6 @@
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import type { CatalogueKind } from '@eremite/shared/contracts/words';
+import type { CatalogueDigest } from './catalogue-digest.ts';
 import type { RoleTable } from '../tiles/role-table.ts';
 
 /** What is known of one band of a catalogue. */
@@ -35,7 +36,10 @@ export interface EngineCatalogue {
   /** Null: what it covers is unknown. */
   coverage: EngineCoverage | null;
   coverageNote: string;
+  /** Rows in file order: all, or with a digest only those that can matter to the run. */
   roles: RoleTable;
+  /** What there is to know of all rows, where `roles` holds only some. */
+  digest?: CatalogueDigest;
 }
 
 export interface EngineOverride {

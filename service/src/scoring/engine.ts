@@ -75,7 +75,7 @@ export class Engine {
   private readonly redshifts: RedshiftField;
   private readonly claims: Claims;
   private readonly photometric: PhotometricNeighbours;
-  learnt: Learnt;
+  private known: Learnt | undefined;
 
   constructor(readonly input: EngineInput) {
     const { criteria, survey } = input;
@@ -99,9 +99,6 @@ export class Engine {
     this.overrideOf = overridesBy(input);
     this.shares = new CoveredShares(this.detections.length, this.catalogues.length);
     this.redshifts = new RedshiftField(criteria.counterpart.learnVelocities ? this.searched : []);
-    const pupils = this.detections.pick(this.places(0, Math.ceil(this.detections.length / this.step)));
-    const velocity = this.redshifts.measure(velocityModelOf(criteria), pupils);
-    this.learnt = { relation: null, priors: [], velocity, notes: [] };
     this.photometric = new PhotometricNeighbours(this.searched, criteria);
     this.claims = new Claims(this.detections, criteria, (range) =>
       this.assess(range, this.context(this.learnt.relation, this.learnt.priors)),
@@ -182,9 +179,19 @@ export class Engine {
     return { ...this.learnt, relation, priors, notes };
   }
 
+  /** What the run has learnt: at first only how velocities are spread, which is measured when it is first asked for. */
+  get learnt(): Learnt {
+    if (!this.known) {
+      const pupils = this.detections.pick(this.places(0, Math.ceil(this.detections.length / this.step)));
+      const velocity = this.redshifts.measure(velocityModelOf(this.input.criteria), pupils);
+      this.known = { relation: null, priors: [], velocity, notes: [] };
+    }
+    return this.known;
+  }
+
   /** Takes over what was learnt elsewhere from the same input. */
   setLearnt(learnt: Learnt): void {
-    this.learnt = learnt;
+    this.known = learnt;
   }
 
   /** Sentences about the run as a whole: what the tables leave open and what was learnt. */

@@ -1,48 +1,28 @@
-import { DEGREE } from '@eremite/shared/science/constants';
-import { cellOf } from '@eremite/shared/science/sky/healpix';
 import { buildZoneGrid } from '../matching/build-zone-grid.ts';
 import { pairSearch } from '../matching/pair-search.ts';
 import type { ZoneGrid } from '../matching/zone-grid.ts';
 import { numberRole } from '../tiles/role-table.ts';
+import { type CatalogueDigest, digestOf } from './catalogue-digest.ts';
 import type { Detection } from './detection-table.ts';
 import type { EngineCatalogue } from './engine-input.ts';
 
 /** The map of the dust behind such columns is 6 arcmin wide (Schlegel et al. 1998), so that this is still the same place. */
 const NEAR_ARCSEC = 600;
-/** One row a cell of 1.7 arcmin says all that the map has to say, and bounds the work in deep tables. */
-const THIN_ORDER = 11;
-
-interface Samples {
-  name: string;
-  raDeg: Float64Array;
-  decDeg: Float64Array;
-  ebvMag: Float64Array;
-}
+type Samples = { name: string } & Pick<CatalogueDigest['reddening'], 'raDeg' | 'decDeg' | 'ebvMag'>;
+type Table = Pick<EngineCatalogue, 'name' | 'roles' | 'digest'>;
 
 /** Rows with a reddening, thinned; undefined where the table has none. */
-function samplesOf({ name, roles }: Pick<EngineCatalogue, 'name' | 'roles'>): Samples | undefined {
-  const ebv = numberRole(roles, 'ebvMag');
-  if (!ebv) return undefined;
-  const { raDeg, decDeg } = roles.columns;
-  const kept: number[] = [];
-  const seen = new Set<number>();
-  for (let i = 0; i < roles.rows; i++) {
-    if (!(ebv[i]! >= 0)) continue;
-    const cell = cellOf(THIN_ORDER, (((raDeg[i]! % 360) + 360) % 360) * DEGREE, decDeg[i]! * DEGREE);
-    if (seen.has(cell)) continue;
-    seen.add(cell);
-    kept.push(i);
-  }
-  if (kept.length === 0) return undefined;
-  const pick = (values: Float64Array) => Float64Array.from(kept, (i) => values[i]!);
-  return { name, raDeg: pick(raDeg), decDeg: pick(decDeg), ebvMag: pick(ebv) };
+function samplesOf({ name, roles, digest }: Table): Samples | undefined {
+  if (!numberRole(roles, 'ebvMag')) return undefined;
+  const { reddening } = digest ?? digestOf(roles);
+  return reddening.row.length > 0 ? { name, ...reddening } : undefined;
 }
 
 /** E(B-V) of the sky about detections that give none, told from rows of the tables. */
 export class LocalReddening {
   private readonly tables: { samples: Samples; grid: ZoneGrid }[];
 
-  constructor(catalogues: readonly Pick<EngineCatalogue, 'name' | 'roles'>[]) {
+  constructor(catalogues: readonly Table[]) {
     this.tables = catalogues.flatMap((catalogue) => {
       const samples = samplesOf(catalogue);
       return samples ? [{ samples, grid: buildZoneGrid(samples.raDeg, samples.decDeg) }] : [];

@@ -1,13 +1,14 @@
 import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
-import { ARCSECOND, DEGREE } from '@eremite/shared/science/constants';
-import { countMagnitudes, type NumberCounts } from '@eremite/shared/science/counterpart/magnitude-term';
+import { ARCSECOND } from '@eremite/shared/science/constants';
+import { type NumberCounts, numberCounts } from '@eremite/shared/science/counterpart/magnitude-term';
 import { BANDS, type BandId } from '@eremite/shared/science/photometry/bands';
-import { cellCount, cellOf } from '@eremite/shared/science/sky/healpix';
+import { cellCount } from '@eremite/shared/science/sky/healpix';
 import { Moc } from '@eremite/shared/science/sky/moc';
 import { buildZoneGrid } from '../matching/build-zone-grid.ts';
 import type { ZoneGrid } from '../matching/zone-grid.ts';
 import { textAt } from '../tiles/column-pack.ts';
 import { bandsOf, limitRole, nameRole, numberRole } from '../tiles/role-table.ts';
+import { AREA_ORDER, type CatalogueDigest, digestOf } from './catalogue-digest.ts';
 import type { EngineBand, EngineCatalogue } from './engine-input.ts';
 
 /** A band of a catalogue made ready: its magnitudes and how many unrelated objects have them. */
@@ -27,6 +28,8 @@ export interface PreparedBand extends EngineBand {
 export interface PreparedCatalogue {
   index: number;
   input: EngineCatalogue;
+  /** Of all rows of the table, also of those that were not read. */
+  digest: CatalogueDigest;
   rows: number;
   grid: ZoneGrid;
   /** In the criteria's order of preference. */
@@ -49,18 +52,7 @@ export interface PreparedCatalogue {
 }
 
 const SQUARE_ARCSEC = ARCSECOND ** 2;
-/** A star by its own table. */
-export const STAR_PROBABILITY = 0.5;
-/** Galaxies do not move: a faster object is a star of the Galaxy, mas/yr. */
-const STAR_MOTION_MAS_YR = 20;
-
-export function isStar(
-  { starProbability, pmRa, pmDec }: Pick<PreparedCatalogue, 'starProbability' | 'pmRa' | 'pmDec'>,
-  row: number,
-): boolean {
-  if (starProbability && starProbability[row]! > STAR_PROBABILITY) return true;
-  return pmRa !== undefined && pmDec !== undefined && Math.hypot(pmRa[row]!, pmDec[row]!) > STAR_MOTION_MAS_YR;
-}
+export { isStar, STAR_PROBABILITY } from './is-star.ts';
 
 /** Name of a row, or its number in the file. */
 export function rowName({ input }: PreparedCatalogue, row: number): string {
@@ -86,11 +78,13 @@ export function prepareCatalogue(
   const { roles } = input;
   const { raDeg, decDeg } = roles.columns;
   const moc = input.coverage ? Moc.fromRanges(input.coverage.order, input.coverage.ranges) : null;
-  const area = moc && moc.area > 0 ? moc.area / SQUARE_ARCSEC : occupiedArea(raDeg, decDeg);
+  const digest = input.digest ?? digestOf(roles);
+  const area = moc && moc.area > 0 ? moc.area / SQUARE_ARCSEC : occupiedArea(digest);
   const starProbability = numberRole(roles, 'starProbability');
   const prepared: PreparedCatalogue = {
     index,
     input,
+    digest,
     rows: roles.rows,
     grid: buildZoneGrid(keepGrid ? raDeg : new Float64Array(0), keepGrid ? decDeg : new Float64Array(0)),
     bands: [],
@@ -108,15 +102,13 @@ export function prepareCatalogue(
     pmDec: numberRole(roles, 'pmDecMasYr'),
     continuum: numberRole(roles, 'continuumMjy'),
   };
-  let galaxies = roles.rows;
-  if (starProbability) for (let i = 0; i < roles.rows; i++) if (isStar(prepared, i)) galaxies--;
-  prepared.density = Math.max(1, galaxies) / area;
+  prepared.density = Math.max(1, digest.galaxies) / area;
   const rank = (name: string) => {
     const place = criteria.counterpart.bandPreference.indexOf(name);
     return place < 0 ? 1000 : place;
   };
   prepared.bands = bandsOf(roles)
-    .map((name) => prepareBand(prepared, name, criteria, area))
+    .map((name) => prepareBand(prepared, name, criteria, digest, area))
     .sort((a, b) => rank(a.name) - rank(b.name));
   return prepared;
 }
@@ -125,6 +117,7 @@ function prepareBand(
   catalogue: PreparedCatalogue,
   name: string,
   criteria: CriteriaSettings,
+  digest: CatalogueDigest,
   area: number,
 ): PreparedBand {
   const { roles, bands } = catalogue.input;
@@ -133,11 +126,6 @@ function prepareBand(
   const facts = bands.find((band) => band.name === name);
   const id = name in BANDS ? (name as BandId) : undefined;
   const system = facts?.system ?? (id ? BANDS[id].usualSystem : 'AB');
-  let counted = magnitude;
-  if (isLimit || catalogue.starProbability || catalogue.pmRa) {
-    counted = magnitude.slice();
-    for (let i = 0; i < counted.length; i++) if (isLimit?.[i] || isStar(catalogue, i)) counted[i] = NaN;
-  }
   return {
     name,
     id,
@@ -148,7 +136,7 @@ function prepareBand(
     extinction: facts?.extinction ?? 'none',
     magnitude,
     isLimit,
-    counts: countMagnitudes(counted, area),
+    counts: digest.counts[name] && numberCounts(digest.counts[name], area),
     toAb: system === 'Vega' && id ? BANDS[id].abMinusVega : 0,
   };
 }
@@ -157,18 +145,14 @@ function prepareBand(
  * Area of the sky that rows occupy, square arcsec: of the HEALPix cells that hold one, at the finest order with eight rows a
  * cell on average. For densities only; it says nothing of what is covered.
  */
-function occupiedArea(raDeg: Float64Array, decDeg: Float64Array): number {
+function occupiedArea({ sampled: { cell } }: CatalogueDigest): number {
   const whole = (4 * Math.PI) / SQUARE_ARCSEC;
-  const step = Math.max(1, Math.floor(raDeg.length / 50_000));
-  const sampled = Math.ceil(raDeg.length / step);
   let area = whole;
-  for (let order = 0; order <= 12; order++) {
+  for (let order = 0; order <= AREA_ORDER; order++) {
+    const width = 4 ** (AREA_ORDER - order);
     const cells = new Set<number>();
-    for (let i = 0; i < raDeg.length; i += step) {
-      const ra = ((raDeg[i]! % 360) + 360) % 360;
-      cells.add(cellOf(order, ra * DEGREE, decDeg[i]! * DEGREE));
-    }
-    if (cells.size === 0 || sampled / cells.size < 8) return area;
+    for (const fine of cell) cells.add(Math.floor(fine / width));
+    if (cells.size === 0 || cell.length / cells.size < 8) return area;
     area = (whole * cells.size) / cellCount(order);
   }
   return area;

@@ -1,4 +1,4 @@
-import { measuredRedshiftDepth } from '@eremite/shared/science/surroundings/redshift-depth';
+import { redshiftDepthOf } from '@eremite/shared/science/surroundings/redshift-depth';
 import { DEGREE } from '@eremite/shared/science/constants';
 import { DWARF_COLOURS } from '@eremite/shared/science/hydrogen/dwarf-colours';
 import { BANDS, type BandId } from '@eremite/shared/science/photometry/bands';
@@ -46,8 +46,8 @@ export function redshiftReaches(catalogues: readonly PreparedCatalogue[]): Redsh
 
 function measure(catalogue: PreparedCatalogue, band: PreparedBand | undefined): RedshiftReach | undefined {
   if (!band) return undefined;
-  const { czKms } = catalogue;
-  const magnitude = measuredRedshiftDepth(band.magnitude, (row) => Number.isFinite(czKms![row]!));
+  const counts = catalogue.digest.redshifts[band.name];
+  const magnitude = counts && redshiftDepthOf(counts.all, counts.moving);
   if (magnitude === undefined) return undefined;
   const limitR = asR(magnitude, band.id, band.toAb);
   return Number.isNaN(limitR) ? undefined : { catalogue, limitR, measured: true, band: band.name, magnitude };

@@ -28,7 +28,7 @@ export interface ScoringPlace {
 
 export interface RunResult {
   notes: string[];
-  learnt: Learnt | null;
+  learnt: Learnt;
   /** Result of the shifted positions; null where they are switched off. */
   control: ControlResult | null;
 }
@@ -58,7 +58,8 @@ export async function runScoring<R>(
     }, taken); // prettier-ignore
 
   onProgress?.(0, 'indexing the tables');
-  const { detections, pupils } = await ask('extent', {});
+  const { detections, pupils, learnt: atFirst } = await ask('extent', {});
+  learnt = atFirst;
   const learning = pupils > 0 ? 0.2 : 0.05;
   const teach = async (relation: GasStarRelation | null, base: number) => {
     const lessons: Lesson[] = [];
@@ -101,7 +102,7 @@ export async function runScoring<R>(
   );
   const { offsetsPerSource } = input.criteria.control;
   const control = controlSummary(offsetsPerSource, shifted, chance, matched, detections);
-  return { learnt, notes: await ask('notes', {}), control };
+  return { learnt: learnt ?? atFirst, notes: await ask('notes', {}), control };
 }
 
 /** Scores in this thread, giving way to other work between units. */

@@ -17,8 +17,8 @@ interface Range {
 
 /** The steps of a run. `R` is what becomes of scored detections where they are scored: a row to store, a line of a file. */
 export interface ScoringTasks<R> {
-  /** How much there is to do. */
-  extent: { task: object; result: { detections: number; pupils: number } };
+  /** How much there is to do, and what is known before anything is learnt. */
+  extent: { task: object; result: { detections: number; pupils: number; learnt: Learnt } };
   lessons: { task: Range & { relation: GasStarRelation | null }; result: Lesson[] };
   /** The relation that lessons teach; null for none. */
   relation: { task: { lessons: Lesson[] }; result: GasStarRelation | null };
@@ -38,7 +38,7 @@ const steps = <R>(
   engine: Engine,
   render: Render<R>,
 ): { [N in keyof ScoringTasks<R>]: (task: ScoringTasks<R>[N]['task']) => ScoringTasks<R>[N]['result'] } => ({
-  extent: () => ({ detections: engine.detections.length, pupils: engine.pupils }),
+  extent: () => ({ detections: engine.detections.length, pupils: engine.pupils, learnt: engine.learnt }),
   lessons: ({ from, to, relation }) => engine.lessons(from, to, relation),
   relation: ({ lessons }) => {
     const { criteria } = engine.input;

@@ -4,6 +4,7 @@ import { FAINTEST_MASKED_G, starMaskRadius } from '@eremite/shared/science/photo
 import { positionAngle } from '@eremite/shared/science/sky/position-angle';
 import { buildZoneGrid } from '../matching/build-zone-grid.ts';
 import { pairSearch } from '../matching/pair-search.ts';
+import type { ZoneGrid } from '../matching/zone-grid.ts';
 import type { Detection } from './detection-table.ts';
 import { isStar, type PreparedCatalogue, rowName } from './prepared-catalogue.ts';
 import type { SkyMask } from './scored-detection.ts';
@@ -13,6 +14,7 @@ interface Hiding {
   what: string;
   catalogue: PreparedCatalogue;
   index: Uint32Array;
+  grid: ZoneGrid;
   raDeg: Float64Array;
   decDeg: Float64Array;
   radiusArcsec: Float64Array;
@@ -43,7 +45,7 @@ export class SkyMasks {
     const masks: SkyMask[][] = detections.map(() => []);
     for (const stars of this.tables) {
       if (stars.index.length === 0) continue;
-      const pairs = pairSearch(buildZoneGrid(stars.raDeg, stars.decDeg), {
+      const pairs = pairSearch(stars.grid, {
         raDeg: Float64Array.from(detections, ({ raDeg }) => raDeg),
         decDeg: Float64Array.from(detections, ({ decDeg }) => decDeg),
         radiusArcsec: Float64Array.from(detections, ({ searchArcsec }) => searchArcsec + stars.widestArcsec),
@@ -106,12 +108,15 @@ function hiding(
   radiusOf: (row: number) => number,
 ): Hiding {
   const radiusArcsec = Float64Array.from(kept, radiusOf);
+  const raDeg = Float64Array.from(kept, (i) => catalogue.raDeg[i]!);
+  const decDeg = Float64Array.from(kept, (i) => catalogue.decDeg[i]!);
   return {
     what,
     catalogue,
     index: Uint32Array.from(kept),
-    raDeg: Float64Array.from(kept, (i) => catalogue.raDeg[i]!),
-    decDeg: Float64Array.from(kept, (i) => catalogue.decDeg[i]!),
+    grid: buildZoneGrid(raDeg, decDeg),
+    raDeg,
+    decDeg,
     radiusArcsec,
     widestArcsec: radiusArcsec.reduce((most, radius) => Math.max(most, radius), 0),
   };

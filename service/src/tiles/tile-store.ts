@@ -55,8 +55,13 @@ export class TileStore {
    */
   async readPackedRoles(catalogueId: string): Promise<Uint8Array[]> {
     const blobs: Uint8Array[] = [];
-    for (const group of await this.cellGroups(catalogueId)) blobs.push(...(await this.roleTiles(catalogueId, [group])));
+    for await (const piece of this.packedPieces(catalogueId)) blobs.push(...piece);
     return blobs;
+  }
+
+  /** The same piece by piece, so that a table larger than the memory can be gone through. */
+  async *packedPieces(catalogueId: string): AsyncIterable<Uint8Array[]> {
+    for (const group of await this.cellGroups(catalogueId)) yield await this.roleTiles(catalogueId, [group]);
   }
 
   /** Packed roles of some cells, given as ranges [first, last] that do not overlap. */

@@ -1,5 +1,5 @@
 import { type CatalogueSettings, engineCatalogue } from '../../scoring/engine-catalogue.ts';
-import { sharedMemory } from '../../matching/memory.ts';
+import { plainMemory, sharedMemory } from '../../matching/memory.ts';
 import type { EngineCatalogue, EngineCoverage, EngineInput } from '../../scoring/engine-input.ts';
 import { ColumnPackError } from '../../tiles/column-pack.ts';
 import { joinRoles } from '../../tiles/join-roles.ts';
@@ -42,14 +42,23 @@ export function packTable(
 }
 
 /**
- * Unpacks a table into memory that threads share: a second of work for a large one, so it is done in a thread.
+ * Unpacks a table: a second of work for a large one, so it is done in a thread.
  *
+ * @param order `file`: by row number, in memory that threads share; `sky`: as the tiles come, for this thread alone
  * @throws {DamagedTableError} when a stored tile is not what was written
  */
-export function unpackTable({ identity, settings, coverage, memory, tiles }: PackedTable): EngineCatalogue {
+export function unpackTable(
+  { identity, settings, coverage, memory, tiles }: PackedTable,
+  order: 'file' | 'sky' = 'file',
+): EngineCatalogue {
   const blobs = tiles.map(([offset, length]) => new Uint8Array(memory, offset, length));
   try {
-    return engineCatalogue(identity, settings, joinRoles(blobs, 'file', sharedMemory), coverage);
+    return engineCatalogue(
+      identity,
+      settings,
+      joinRoles(blobs, order, order === 'file' ? sharedMemory : plainMemory),
+      coverage,
+    );
   } catch (error) {
     if (!(error instanceof ColumnPackError)) throw error;
     throw new DamagedTableError(
@@ -59,5 +68,5 @@ export function unpackTable({ identity, settings, coverage, memory, tiles }: Pac
 }
 
 export function unpackInput({ tables, ...rest }: PackedInput): EngineInput {
-  return { ...rest, catalogues: tables.map(unpackTable) };
+  return { ...rest, catalogues: tables.map((table) => unpackTable(table)) };
 }

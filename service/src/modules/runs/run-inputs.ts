@@ -5,7 +5,7 @@ import { AppError } from '../../common/app-error.ts';
 import type { CatalogueSettings } from '../../scoring/engine-catalogue.ts';
 import type { EngineInput } from '../../scoring/engine-input.ts';
 import { TileStore } from '../../tiles/tile-store.ts';
-import { type PackedInput, type PackedTable, packTable } from './packed-input.ts';
+import type { PackedTable } from './packed-input.ts';
 import { type RunRow, RunsRepository } from './runs.repository.ts';
 
 export type CatalogueRow = Awaited<ReturnType<RunsRepository['publishedCatalogues']>>[number];
@@ -17,7 +17,18 @@ export interface StoredDecisions {
   distances: Awaited<ReturnType<RunsRepository['distancesInForce']>>;
 }
 
-/** Reads everything a run depends on, as it stood when the run was started. */
+/** A table of a run, still in the database. */
+export interface RunTable {
+  about: Pick<PackedTable, 'identity' | 'settings' | 'coverage'>;
+  rows: number;
+  /** Its tiles, packed, a few at a time. */
+  pieces(): AsyncIterable<Uint8Array[]>;
+}
+
+/** Everything a run depends on, its tables not yet read. */
+export type RunSource = Omit<EngineInput, 'catalogues'> & { tables: RunTable[] };
+
+/** Finds everything a run depends on, as it stood when the run was started. */
 @Injectable()
 export class RunInputs {
   constructor(
@@ -25,24 +36,18 @@ export class RunInputs {
     private readonly tiles: TileStore,
   ) {}
 
-  async load(
-    run: RunRow,
-    signal: AbortSignal,
-    progress: (fraction: number, message: string) => void,
-  ): Promise<PackedInput> {
+  /** @throws {AppError} RUN_FAILED where a table is gone */
+  async open(run: RunRow): Promise<RunSource> {
     const inputs = run.inputs as { catalogueId: string; name: string }[];
     const found = await this.runs.cataloguesOfRun(
       run.surveyId,
       inputs.map((input) => input.catalogueId),
     );
-    const tables: PackedTable[] = [];
-    for (const { catalogueId, name } of inputs) {
-      signal.throwIfAborted();
-      progress(tables.length / inputs.length, `reading ${name}`);
+    const tables = inputs.map(({ catalogueId, name }): RunTable => {
       const table = found.find((entry) => entry.id === catalogueId);
       if (!table) throw new AppError('RUN_FAILED', `${name} is no longer published.`);
-      tables.push(packTable(aboutTable(table), await this.tiles.readPackedRoles(catalogueId)));
-    }
+      return { about: aboutTable(table), rows: table.rows, pieces: () => this.tiles.packedPieces(catalogueId) };
+    });
     return {
       ...engineDecisions(run.decisions as StoredDecisions),
       criteria: run.criteriaSettings as CriteriaSettings,

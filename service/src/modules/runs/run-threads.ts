@@ -1,16 +1,18 @@
 import { AppError } from '../../common/app-error.ts';
 import { workerUrl } from '../../common/worker-url.ts';
 import { openTaskPool } from '../../matching/task-pool.ts';
-import type { EngineCatalogue, EngineInput } from '../../scoring/engine-input.ts';
 import { type RunResult, runScoring } from '../../scoring/run-engine.ts';
 import type { ScoringAsked } from '../../scoring/scoring-task.ts';
-import type { PackedInput, PackedTable } from './packed-input.ts';
+import { type ReadingAsked, readRunTables } from './read-run-tables.ts';
+import type { RunSource } from './run-inputs.ts';
 import type { StoredUnit, StoredVerdict, ThreadFailure } from './run-messages.ts';
 import { errorOf } from './thread-failure.ts';
 
 export interface RunHooks {
   /** Threads to use. */
   threads: number;
+  /** Most bytes of rows that a run may hold. */
+  memoryBytes: number;
   signal: AbortSignal;
   progress(fraction: number, message: string): void;
   /** Stores a batch; threads run at most a few units ahead of it. */
@@ -19,18 +21,18 @@ export interface RunHooks {
 
 export type RunOutcome = RunResult & { totals: { candidates: number; neighbours: number } };
 
-/** Share of the work that unpacking the tables is, for the progress. */
-const UNPACKING = 0.1;
+/** Share of the time that reading the tables takes, for the progress. */
+const READING = 0.2;
 
 /**
- * Scores a run in threads of its own. Aborting ends them at once: they hold nothing that needs tidying.
+ * Reads and scores a run in threads of its own. Aborting ends them at once: they hold nothing that needs tidying.
  *
  * @throws the signal's reason; {AppError} RUN_FAILED if a thread fails or dies
  */
-export async function scoreInThreads(packed: PackedInput, hooks: RunHooks): Promise<RunOutcome> {
-  const { threads, signal, progress } = hooks;
+export async function scoreInThreads(source: RunSource, hooks: RunHooks): Promise<RunOutcome> {
+  const { threads, memoryBytes, signal, progress } = hooks;
   signal.throwIfAborted();
-  const pool = openTaskPool<ScoringAsked | { unpack: PackedTable }, unknown, ThreadFailure>(workerUrl('run'), {
+  const pool = openTaskPool<ScoringAsked | ReadingAsked, unknown, ThreadFailure>(workerUrl('run'), {
     threads,
     restore: errorOf,
   });
@@ -40,7 +42,7 @@ export async function scoreInThreads(packed: PackedInput, hooks: RunHooks): Prom
     signal.addEventListener('abort', onAbort, { once: true });
   });
   aborted.catch(() => undefined);
-  const ask = async (asked: ScoringAsked | { unpack: PackedTable }): Promise<unknown> => {
+  const ask = async (asked: ScoringAsked | ReadingAsked): Promise<unknown> => {
     try {
       return await Promise.race([pool.ask(asked), aborted]);
     } catch (error) {
@@ -51,16 +53,16 @@ export async function scoreInThreads(packed: PackedInput, hooks: RunHooks): Prom
   let storing: Promise<void> = Promise.resolve();
   const totals = { candidates: 0, neighbours: 0 };
   try {
-    const { tables, ...rest } = packed;
-    let unpacked = 0;
-    const catalogues = await Promise.all(
-      tables.map(async (table) => {
-        const catalogue = (await ask({ unpack: table })) as EngineCatalogue;
-        progress(UNPACKING * (++unpacked / tables.length), 'unpacking the tables');
-        return catalogue;
-      }),
-    );
-    const input: EngineInput = { ...rest, catalogues };
+    const reading = readRunTables(source, {
+      threads,
+      memoryBytes,
+      ask,
+      signal,
+      progress: (fraction, message) => progress(READING * fraction, message),
+    });
+    // Left behind when the run is cancelled; it then ends by itself.
+    reading.catch(() => undefined);
+    const input = await Promise.race([reading, aborted]);
     const take = async ({ verdicts, candidates, neighbours }: StoredUnit): Promise<void> => {
       signal.throwIfAborted();
       totals.candidates += candidates;
@@ -70,7 +72,7 @@ export async function scoreInThreads(packed: PackedInput, hooks: RunHooks): Prom
     };
     const result = await runScoring<StoredUnit>({ threads, ask }, input, take, {
       signal,
-      onProgress: (fraction, message) => progress(UNPACKING + (1 - UNPACKING) * fraction, message),
+      onProgress: (fraction, message) => progress(READING + (1 - READING) * fraction, message),
     });
     return { ...result, totals };
   } finally {

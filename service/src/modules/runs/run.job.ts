@@ -15,8 +15,6 @@ interface Payload {
 }
 type Counts = { detections: number; starlight: Record<string, number>; surroundings: Record<string, number> };
 
-/** Share of a run's time that goes into reading its tables. */
-const READING = 0.15;
 /** Verdicts written in one go: other requests are served in between. */
 const STORED_AT_ONCE = 100;
 const VERDICT_COLUMNS = columns([
@@ -67,18 +65,18 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
     // Killed between the end of the run and the end of its job: what is done stays as it is.
     if (!(await this.runs.begin(runId))) return { runId };
     const run = (await this.runs.find(runId))!;
-    const input = await unlessAborted(
-      this.inputs.load(run, signal, (fraction, message) => progress(READING * fraction, message)),
-      signal,
-    );
+    const source = await this.inputs.open(run);
     const ids = new Map<string, string>();
-    const lists = input.tables.filter(({ settings }) => settings.kind === 'hi').map(({ identity }) => identity.id);
+    const lists = source.tables
+      .filter(({ about }) => about.settings.kind === 'hi')
+      .map(({ about }) => about.identity.id);
     for (const { id, catalogueId, row } of await this.runs.detectionIds(lists)) ids.set(`${catalogueId}/${row}`, id);
     const counts: Counts = { detections: 0, starlight: {}, surroundings: {} };
-    const outcome = await scoreInThreads(input, {
+    const outcome = await scoreInThreads(source, {
       threads: this.env.threads,
+      memoryBytes: this.env.runMemoryBytes,
       signal,
-      progress: (fraction, message) => progress(READING + (1 - READING) * fraction * 0.99, message),
+      progress: (fraction, message) => progress(fraction * 0.99, message),
       take: (verdicts) => this.#store(runId, verdicts, ids, counts),
     });
     signal.throwIfAborted();
@@ -138,13 +136,4 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
 
 function columns(list: readonly [name: string, type: BulkType][]): BulkColumn[] {
   return list.map(([name, type]) => ({ name, type }));
-}
-
-/** Does not wait for work that nobody wants any more; it ends by itself and its result is dropped. */
-function unlessAborted<T>(work: Promise<T>, signal: AbortSignal): Promise<T> {
-  return new Promise<T>((resolve, reject) => {
-    const onAbort = () => reject(signal.reason as Error);
-    signal.addEventListener('abort', onAbort, { once: true });
-    work.then(resolve, reject).finally(() => signal.removeEventListener('abort', onAbort));
-  });
 }

@@ -2,7 +2,10 @@ import type { TaskAnswer } from '../../matching/task-pool.ts';
 import { packCandidates, packNeighbours } from '../../scoring/evidence.ts';
 import type { ScoredDetection, ScoredItem } from '../../scoring/scored-detection.ts';
 import { type ScoringAsked, scoringDesk } from '../../scoring/scoring-task.ts';
-import { type PackedTable, unpackTable } from './packed-input.ts';
+import { selectionOf } from '../../scoring/row-selection.ts';
+import { joinSifted, siftRows } from '../../scoring/sift-rows.ts';
+import { unpackTable } from './packed-input.ts';
+import type { ReadingAsked } from './read-run-tables.ts';
 import type { StoredUnit, StoredVerdict, ThreadFailure } from './run-messages.ts';
 import { failureOf } from './thread-failure.ts';
 
@@ -10,12 +13,20 @@ import { failureOf } from './thread-failure.ts';
 // keeping requests waiting.
 const desk = scoringDesk(store);
 
-export default function answer(asked: ScoringAsked | { unpack: PackedTable }): TaskAnswer<unknown, ThreadFailure> {
+export default function answer(asked: ScoringAsked | ReadingAsked): TaskAnswer<unknown, ThreadFailure> {
   try {
-    return { result: 'unpack' in asked ? unpackTable(asked.unpack) : desk(asked) };
+    return { result: 'run' in asked ? desk(asked) : read(asked) };
   } catch (error) {
     return { refused: failureOf(error) };
   }
+}
+
+function read(asked: ReadingAsked): unknown {
+  if ('unpack' in asked) return unpackTable(asked.unpack);
+  if ('select' in asked) return selectionOf(asked.select);
+  if ('join' in asked) return joinSifted(asked.join);
+  const { kind, roles } = unpackTable(asked.sift, 'sky');
+  return siftRows(kind, roles, asked.selection);
 }
 
 function store(scored: ScoredDetection[]): StoredUnit {

@@ -1,4 +1,5 @@
 import { DomainError } from '../domain-error.ts';
+import { type MagnitudeHistogram, magnitudeHistogram } from './magnitude-histogram.ts';
 
 /** Distribution of the counterpart's magnitude: a Gaussian core and a wide Gaussian tail. */
 export interface CounterpartMagnitudes {
@@ -47,6 +48,7 @@ const EUCLIDEAN = 0.6;
  * Bins are smoothed with their neighbours and kept from falling towards the faint end: there a table loses unrelated
  * objects and counterparts alike, so that the loss cancels in their ratio only if n is the true density. Bright bins
  * with few objects take the Euclidean slope from the first bin that has ten.
+ * Method: counterpart.
  */
 export function countMagnitudes(
   magnitudes: ArrayLike<number>,
@@ -56,24 +58,22 @@ export function countMagnitudes(
   if (!(areaSquareArcsec > 0 && widthMag > 0)) {
     throw new DomainError(`countMagnitudes: area ${areaSquareArcsec} square arcsec, bins of ${widthMag} mag`);
   }
-  let low = Infinity;
-  let high = -Infinity;
-  for (let i = 0; i < magnitudes.length; i++) {
-    const m = magnitudes[i]!;
-    if (m < low) low = m;
-    if (m > high) high = m;
-  }
-  if (!(high >= low)) return undefined;
-  const firstMag = Math.floor(low / widthMag) * widthMag;
-  const bins = Math.max(1, Math.floor((high - firstMag) / widthMag) + 1);
-  const counts = new Float64Array(bins);
-  let total = 0;
-  for (let i = 0; i < magnitudes.length; i++) {
-    const m = magnitudes[i]!;
-    if (!(m === m)) continue;
-    counts[Math.min(bins - 1, Math.floor((m - firstMag) / widthMag))]!++;
-    total++;
-  }
+  return numberCounts(magnitudeHistogram(magnitudes, widthMag), areaSquareArcsec);
+}
+
+/**
+ * Number counts from a histogram of a catalogue's magnitudes: see {@link countMagnitudes}.
+ *
+ * @param areaSquareArcsec area covered, square arcsec, positive
+ */
+export function numberCounts(
+  { widthMag, firstBin, counts }: MagnitudeHistogram,
+  areaSquareArcsec: number,
+): NumberCounts | undefined {
+  const bins = counts.length;
+  if (bins === 0) return undefined;
+  const firstMag = firstBin * widthMag;
+  const total = counts.reduce((sum, count) => sum + count, 0);
   const cumulative = new Float64Array(bins);
   let sum = 0;
   for (let i = 0; i < bins; i++) cumulative[i] = (sum += counts[i]!) / areaSquareArcsec;

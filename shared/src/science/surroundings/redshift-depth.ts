@@ -1,3 +1,5 @@
+import { type MagnitudeHistogram, magnitudeHistogram } from '../counterpart/magnitude-histogram.ts';
+
 /** From this share of rows with a velocity on, a table lists nothing but redshifts. Our choice. */
 const ONLY_REDSHIFTS = 0.95;
 
@@ -18,34 +20,42 @@ export function measuredRedshiftDepth(
   hasVelocity: (row: number) => boolean,
   completeness = 0.85,
 ): number | undefined {
-  const width = 0.5;
-  const all = new Map<number, [rows: number, withVelocity: number]>();
-  let total = 0;
-  let moving = 0;
-  for (let i = 0; i < magnitudes.length; i++) {
-    const m = magnitudes[i]!;
-    if (!(m === m)) continue;
-    const bin = Math.floor(m / width);
-    const counts = all.get(bin) ?? [0, 0];
-    counts[0]++;
-    if (hasVelocity(i)) {
-      counts[1]++;
-      moving++;
-    }
-    all.set(bin, counts);
-    total++;
-  }
+  return redshiftDepthOf(
+    magnitudeHistogram(magnitudes, REDSHIFT_BIN_MAG),
+    magnitudeHistogram(magnitudes, REDSHIFT_BIN_MAG, hasVelocity),
+    completeness,
+  );
+}
+
+/** Bins in which redshifts are counted, mag. */
+export const REDSHIFT_BIN_MAG = 0.5;
+
+/**
+ * The same from counts in bins of {@link REDSHIFT_BIN_MAG}: see {@link measuredRedshiftDepth}.
+ *
+ * @param all rows with a magnitude
+ * @param withVelocity those of them that have a velocity
+ */
+export function redshiftDepthOf(
+  all: MagnitudeHistogram,
+  withVelocity: MagnitudeHistogram,
+  completeness = 0.85,
+): number | undefined {
+  const sum = ({ counts }: MagnitudeHistogram) => counts.reduce((total, count) => total + count, 0);
+  const [total, moving] = [sum(all), sum(withVelocity)];
   if (total < 100) return undefined;
-  const bins = [...all.keys()].sort((a, b) => a - b);
+  const rowsAt = (bin: number) => all.counts[bin - all.firstBin]!;
+  const bins = Array.from(all.counts.keys(), (k) => all.firstBin + k).filter((bin) => rowsAt(bin) > 0);
   let peak = bins[0]!;
-  for (const bin of bins) if (all.get(bin)![0] >= all.get(peak)![0]) peak = bin;
+  for (const bin of bins) if (rowsAt(bin) >= rowsAt(peak)) peak = bin;
   const onlyRedshifts = moving >= ONLY_REDSHIFTS * total;
   let reached: number | undefined;
   for (const bin of bins) {
-    const [rows, withVelocity] = all.get(bin)!;
-    if (rows >= 20 && withVelocity < completeness * rows) break;
+    const rows = rowsAt(bin);
+    const known = withVelocity.counts[bin - withVelocity.firstBin] ?? 0;
+    if (rows >= 20 && known < completeness * rows) break;
     if (onlyRedshifts && bin > peak) break;
-    if (rows >= 20) reached = (bin + 1) * width;
+    if (rows >= 20) reached = (bin + 1) * REDSHIFT_BIN_MAG;
   }
   return reached;
 }
