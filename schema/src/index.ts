@@ -3,3 +3,4 @@ export * from './tables/surveys.ts';
 export * from './tables/runs.ts';
 export * from './tables/decisions.ts';
 export * from './tables/editions.ts';
+export * from './tables/observations.ts';
