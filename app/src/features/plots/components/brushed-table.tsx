@@ -12,7 +12,7 @@ interface BrushedTableProps {
 }
 
 /** Rows shown at a time: the brush is the way to fewer. */
-const MOST_ROWS = 200;
+const MOST_ROWS = 100;
 
 const bound = (isLimit: boolean, sign: string, value: number | null) =>
   value === null ? NO_VALUE : `${isLimit ? sign : ''}${fixed(value, 2)}`;
