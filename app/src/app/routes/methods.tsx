@@ -1,6 +1,7 @@
 import { useEffect } from 'react';
 import { useLocation } from 'react-router-dom';
 import { Caution } from '#components/caution/caution.tsx';
+import { ColumnIndex } from '#features/methods/components/column-index.tsx';
 import { MethodSheet } from '#features/methods/components/method-sheet.tsx';
 import { METHODS } from '#features/methods/methods.ts';
 import { useTitle } from '#lib/use-title.ts';
@@ -31,12 +32,16 @@ export function Component() {
                 <a href={`#${id}`}>{title}</a>
               </li>
             ))}
+            <li>
+              <a href="#columns">Columns and their methods</a>
+            </li>
           </ul>
         </nav>
         <div className="stack">
           {METHODS.map((entry) => (
             <MethodSheet key={entry.id} entry={entry} />
           ))}
+          <ColumnIndex />
         </div>
       </div>
       <Caution />

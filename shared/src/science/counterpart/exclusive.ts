@@ -24,6 +24,8 @@ export interface Hypotheses {
  *
  * P(none) = R (1 - Q) / S, P(missed) = R Q (1 - c) / S, P(j) = R X_j / S, P(spurious) = (1 - R) / S. With c = 1 and R = 1
  * it is Sutherland & Saunders (1992) with a velocity term; with no object it is Bayes' theorem for a silence.
+ *
+ * Method: counterpart, reliability.
  */
 export function exclusiveProbabilities(
   weights: readonly number[],

@@ -13,6 +13,8 @@ export interface BeamMember {
  * @returns shares that add to one, in the same order; a galaxy without a magnitude counts as the median of the others
  *
  * All lie at one distance, so the share goes as predicted mass times the response exp(-4 ln 2 theta^2 / FWHM^2).
+ *
+ * Method: confusion.
  */
 export function expectedFluxShares(members: readonly BeamMember[]): number[] {
   const known = members.map((member) => member.logHiMass).filter((mass) => !Number.isNaN(mass));

@@ -21,6 +21,8 @@ const MOST_ASSIGNMENTS = 200_000;
  * twice and summed over all of them. With one claimant nothing changes. Where there would be more than 200,000
  * assignments the least claims are left out first. Source: Sutherland & Saunders (1992) for one detection; the
  * restriction is Bayes' theorem.
+ *
+ * Method: counterpart.
  */
 export function jointClaimFactors(claimants: readonly Claimant[]): Map<string, number>[] {
   const claims = limited(claimants);

@@ -38,6 +38,8 @@ export const DEFAULT_PRIOR_LEARNING: Omit<PriorSettings, 'fallback'> = {
  * @throws {DomainError} if the arrays differ in length
  *
  * Expectation maximisation: Q <- mean of Q a / (Q a + 1 - Q), to 1e-6.
+ *
+ * Method: prior.
  */
 export function learnPrior(
   logMass: ArrayLike<number>,

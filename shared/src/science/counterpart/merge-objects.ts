@@ -38,6 +38,8 @@ const centring = (row: RowPlace): number =>
  * errors overlap); rows of different catalogues are one object when the posterior of the pair passes one half for the
  * density of the second catalogue. Joining is transitive within these limits but each object keeps one place: that of
  * its best-measured row, with which every further row is compared.
+ *
+ * Method: counterpart.
  */
 export function mergeIntoObjects(rows: readonly RowPlace[]): Int32Array {
   const objects = new Int32Array(rows.length).fill(-1);

@@ -54,6 +54,8 @@ export function sigmaOfError(error: number, meaning: ErrorMeaning): number {
  * @param factor 0.60 by default (Ivison et al. 2007, MNRAS 380, 199, from memory); see {@link CONDON_FACTOR}
  * @returns 1-D sigma, arcsec
  * @throws {DomainError} if an input is not positive
+ *
+ * Method: position.
  */
 export function centroidError(fwhmArcsec: number, signalToNoise: number, factor = 0.6): number {
   if (!(fwhmArcsec > 0 && signalToNoise > 0 && factor > 0)) {
@@ -100,6 +102,8 @@ export function covarianceOf({ majorArcsec, minorArcsec, angleRad }: ErrorEllips
  * @param covariance total covariance, square arcsec
  * @param eastArcsec offset east (times cos dec), arcsec
  * @param northArcsec offset north, arcsec
+ *
+ * Method: position.
  */
 export function mahalanobisSquared(covariance: Covariance, eastArcsec: number, northArcsec: number): number {
   const { ee, nn, en } = covariance;

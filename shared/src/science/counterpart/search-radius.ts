@@ -37,6 +37,8 @@ function outsideCircle(radiusArcsec: number, majorArcsec: number, minorArcsec: n
  * @param error 1-D errors of the core, all terms in
  * @param tail wide component
  * @returns probability in [0, 1]
+ *
+ * Method: position.
  */
 export function shareInside(radiusArcsec: number, error: ErrorEllipse, tail: OffsetTail = NO_TAIL): number {
   const { majorArcsec: a, minorArcsec: b } = error;
@@ -56,6 +58,8 @@ export function shareInside(radiusArcsec: number, error: ErrorEllipse, tail: Off
  * @throws {DomainError} if the share or an error is out of range
  *
  * 0.997 of a mixture with a tail is wider than 3.44 sigma of its core.
+ *
+ * Method: position.
  */
 export function radiusHolding(share: number, error: ErrorEllipse, tail: OffsetTail = NO_TAIL): number {
   if (!(share > 0 && share < 1) || !(error.majorArcsec > 0 && error.minorArcsec > 0)) {

@@ -69,6 +69,8 @@ export function dominatingObject(evidence: StarlightEvidence, limits: StarlightT
  * 5. `dark`: P(none) and P(none) + P(missed) are high enough, the power suffices, and no excess of faint objects hints at a
  *    galaxy in pieces.
  * 6. `cannot tell`.
+ *
+ * Method: counterpart.
  */
 export function starlightVerdict(evidence: StarlightEvidence, limits: StarlightThresholds): Starlight {
   const { probabilities, power } = evidence;

@@ -20,6 +20,8 @@ const FARTHEST_KMS = 90_000;
  *
  * @param velocities cz of unrelated objects, km/s; those missing, below zero or beyond z = 0.3 are left out
  * @returns undefined with fewer than {@link LEAST_REDSHIFTS}
+ *
+ * Method: velocity.
  */
 export function velocityHistogram(velocities: Iterable<number>): VelocityHistogram | undefined {
   const counts = new Array<number>(FARTHEST_KMS / WIDTH_KMS).fill(0);
@@ -65,6 +67,8 @@ export interface RingCounts {
  * @param pseudoCounts objects the fallback counts for
  * @returns in [0, 1]: s of concordant = s objects + (1 - s) expected, drawn towards the fallback
  * @throws {DomainError} for negative counts
+ *
+ * Method: velocity.
  */
 export function clusteredShare(
   { objects, concordant, expected }: RingCounts,

@@ -66,6 +66,8 @@ export function plainVelocityFactor(differenceKms: number, scatterKms: number, c
  *
  * N(dv) over the chance density, which has a clustered part: a third of the unrelated redshift objects near a detection
  * are at its velocity too, and a bonus that forgets them makes matches worse.
+ *
+ * Method: velocity.
  */
 export function velocityFactor(differenceKms: number, scatterKms: number, model = DEFAULT_VELOCITY_MODEL): number {
   if (Math.abs(differenceKms) > model.discordantKms) return model.badFraction;

@@ -61,6 +61,8 @@ export function comovingDistance(z: number, cosmology: Cosmology): number {
  * @throws {DomainError} for a redshift or cosmology out of range
  *
  * Source: Hogg (1999); with two redshifts Davis et al. (2011), ApJ 741, 67 (form, from memory).
+ *
+ * Method: distance.
  */
 export function luminosityDistance(z: number, cosmology: Cosmology, observedZ = z): number {
   if (!(observedZ > -1)) throw new DomainError(`luminosityDistance: expected an observed z above -1, got ${observedZ}`);

@@ -28,6 +28,8 @@ export interface DistanceBranch {
  * @param cosmology flat cosmology
  * @returns the branches, Hubble first; empty without a velocity
  * Source: Mould et al. (2000), ApJ 529, 786, for the flow; frames as in `velocity/frames`.
+ *
+ * Method: distance.
  */
 export function distanceBranches(czKms: number, raRad: number, decRad: number, cosmology: Cosmology): DistanceBranch[] {
   if (!(Math.abs(czKms) < SPEED_OF_LIGHT_KMS)) return [];

@@ -136,6 +136,8 @@ function redshiftCautions(
  * large as the Hubble flow. The Local Group velocity for this test is that of `hubbleFrame`, and for the CMB frame
  * that of Karachentsev & Makarov (1996).
  * Source: common practice; form of D_L from Davis et al. (2011), ApJ 741, 67 (from memory).
+ *
+ * Method: distance.
  */
 export function chooseDistance(input: DistanceInput, rule: DistanceRule, cosmology: Cosmology): Distance {
   const { czKms, raRad, decRad } = input;

@@ -93,6 +93,8 @@ export interface FlowVelocity {
  * The correction for each attractor is v_fid [cos θ + ((v_o - v_a cos θ)/r_oa)(r_oa/v_a)^(1-γ)] with γ = 2. Inside a
  * cone the law fails (it yields -266 km/s beside the Great Attractor), so the collapse is not optional.
  * Source: Mould et al. (2000), ApJ 529, 786, appendix A.
+ *
+ * Method: distance.
  */
 export function flowVelocity(
   czKms: number,

@@ -26,6 +26,8 @@ const RULE: DoubtRule = {
  *
  * @param input beam, distance and known galaxies at the line's velocity
  * @returns the doubt; its value is the chance of another source, or the number of known galaxies where there are several
+ *
+ * Method: doubts.
  */
 export function blend(input: BlendInput): Doubt {
   const { beamArcmin, distanceMpc, galaxiesAtVelocity } = input;

@@ -46,6 +46,8 @@ const NEARBY_EXTRA_KMS = 50;
  *
  * A compact cloud with a narrow line (15-40 km/s) and a dwarf of the Local Group cannot be told apart without a
  * distance, so neither distance nor isolation is claimed for them.
+ *
+ * Method: doubts.
  */
 export function cloud(input: CloudInput, settings = CLOUD_SETTINGS): Doubt {
   const { galacticKms, cloudVelocityKms, deviationVelocityKms } = settings;

@@ -22,6 +22,8 @@ const RULE: DoubtRule = {
  *
  * @param input strongest continuum source in the beam and coverage
  * @returns the doubt; its value is that flux density, mJy
+ *
+ * Method: doubts.
  */
 export function continuum(input: ContinuumInput): Doubt {
   const { strongestMjy, covered } = input;

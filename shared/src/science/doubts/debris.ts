@@ -58,6 +58,8 @@ export interface DebrisDoubt extends Doubt {
  * Strong zone: serious. Possible zone: watch, or serious with a bridge. A neighbour whose mass is unknown counts for one
  * grade less. Source: common practice after the debris of NGC 4254 that was taken for a dark galaxy (Haynes et al. 2007;
  * Duc & Bournaud 2008).
+ *
+ * Method: doubts.
  */
 export function debris(input: DebrisInput, settings = DEBRIS_SETTINGS): DebrisDoubt {
   const { strong, possible, minLogHiMass, minLogStellarMass } = settings;

@@ -52,6 +52,8 @@ export function discVelocities(lonRad: number, latRad: number, disc = GALACTIC_D
  * @throws {DomainError} if an input is not finite
  *
  * Source: Wakker (1991), A&A 250, 499.
+ *
+ * Method: doubts.
  */
 export function deviationVelocity(lonRad: number, latRad: number, lsrKms: number, disc = GALACTIC_DISC): number {
   if (!Number.isFinite(lsrKms)) throw new DomainError(`deviationVelocity: velocity must be finite, got ${lsrKms}`);

@@ -26,6 +26,8 @@ const RULE: DoubtRule = {
  * @throws {DomainError} if a share is outside 0-1
  *
  * Beyond an edge the nearest neighbour is only a lower limit.
+ *
+ * Method: doubts.
  */
 export function edge(input: EdgeInput): Doubt {
   const parts: [string, number][] = [

@@ -43,6 +43,8 @@ const RULE: DoubtRule = {
  * @throws {DomainError} if the redshift is -1 or less
  *
  * A true dark source has no luminous mid-infrared source; a silent infrared catalogue therefore clears it.
+ *
+ * Method: doubts.
  */
 export function hydroxyl(input: HydroxylInput): Doubt {
   const { redshift, sources, radiusArcsec, covered } = input;

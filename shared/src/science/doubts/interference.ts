@@ -52,6 +52,8 @@ const RULE: DoubtRule = {
  * @throws {DomainError} if a band ends below its start
  *
  * What repeats at one frequency in many directions is interference whatever the list says.
+ *
+ * Method: doubts.
  */
 export function interference(input: InterferenceInput): Doubt {
   const { czKms, topocentric, width50Kms, channelKms, bands } = input;

@@ -31,6 +31,8 @@ const RULE: DoubtRule = {
  * @param input velocity, width, latitude and continuum
  * @returns the doubt; its value is the distance to the nearest such line, km/s
  * @throws {DomainError} if the latitude is not finite
+ *
+ * Method: doubts.
  */
 export function recombinationLine(input: RecombinationInput): Doubt {
   const { czKms, width50Kms, galacticLatRad, continuumMjy } = input;

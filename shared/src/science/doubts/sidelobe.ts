@@ -40,6 +40,8 @@ const RULE: DoubtRule = {
  *
  * @param input other HI sources, beam and flux
  * @returns the doubt; its value is the flux ratio of the source named
+ *
+ * Method: doubts.
  */
 export function sidelobe(input: SidelobeInput): Doubt {
   const { sources, beamArcmin, fluxJyKms, width50Kms } = input;

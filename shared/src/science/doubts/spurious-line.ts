@@ -34,6 +34,8 @@ export const SPURIOUS_LINE_SETTINGS: SpuriousLineSettings = {
  * @throws {DomainError} if the reliability is outside 0-1
  *
  * Lists of dark detections concentrate false ones, so the reliability of the list as a whole is too kind.
+ *
+ * Method: reliability.
  */
 export function spuriousLine(input: SpuriousLineInput, settings = SPURIOUS_LINE_SETTINGS): Doubt {
   const { reliability, signalToNoise } = input;

@@ -20,6 +20,8 @@ export interface BaryonicMass {
  * @throws {DomainError} if an input is out of range
  *
  * Source: definitions; molecules and ionised gas are left out.
+ *
+ * Method: hi-mass.
  */
 export function baryonicMass(
   hiMassSolar: number,

@@ -54,6 +54,8 @@ export interface ExpectationSettings {
  *
  * Source: direct fit of stars given gas (see DEFAULT_GAS_STAR_RELATION), turned to r with its mass-to-light ratio and
  * to other bands with the colours of gas-rich dwarfs.
+ *
+ * Method: expected.
  */
 export function expectedCounterpart(
   logHiMass: number,

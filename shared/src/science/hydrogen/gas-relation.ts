@@ -73,6 +73,8 @@ export const DEFAULT_GAS_STAR_RELATION: GasStarRelation = {
  * @param relation the line
  * @returns log10 of the stellar mass in solar masses
  * @throws {DomainError} if the input is not finite
+ *
+ * Method: expected.
  */
 export function stellarMassFromGas(logHiMass: number, relation = DEFAULT_GAS_STAR_RELATION): number {
   if (!Number.isFinite(logHiMass)) throw new DomainError(`stellarMassFromGas: got ${logHiMass}`);

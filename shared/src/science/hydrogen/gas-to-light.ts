@@ -15,6 +15,8 @@ export interface GasToLight {
  * @param isLimit true where the light is an upper limit
  * @returns ratio in solar units, free of distance, with its kind
  * @throws {DomainError} if an input is not positive
+ *
+ * Method: gas-to-light.
  */
 export function gasToLight(hiMassSolar: number, lightSolar: number, isLimit: boolean): GasToLight {
   if (!(hiMassSolar > 0 && lightSolar > 0)) {

@@ -23,6 +23,8 @@ const EXPONENT: Record<FluxVelocity, number> = { optical: 2, source: 1, radio: 0
  * Self-absorption is ignored (up to 10-20 per cent edge-on). Without its factor the local form is 1.7 per cent too
  * high at z = 0.0083 and 10 per cent at z = 0.05.
  * Source: M = 2.356e5 D_L^2 S (1+z)^-k, k = 2, 1, 0; Meyer et al. (2017), PASA 34, e052.
+ *
+ * Method: hi-mass.
  */
 export function hiMass(
   fluxJyKms: number,

@@ -10,6 +10,8 @@ import { DomainError } from '../domain-error.ts';
  *
  * A cloud much larger than this is no ordinary disc, whatever its distance. Calibrated from about 1e5.5 to 1e11.
  * Source: Wang et al. (2016), MNRAS 460, 2143: log D = 0.506 log M - 3.293.
+ *
+ * Method: hi-mass.
  */
 export function hiDiameterKpc(logMass: number): number {
   if (!Number.isFinite(logMass)) throw new DomainError(`hiDiameterKpc: log mass must be finite, got ${logMass}`);

@@ -69,6 +69,8 @@ export function detectionProbability(
  * Exact over magnitude (a Gaussian against an error function is an error function), seven-point Gauss-Hermite over the
  * logarithm of each size component: within 1e-3 of a fine sum for scatters up to 0.5 dex; about 5 microseconds.
  * Size and magnitude are taken as independent at the expected stellar mass.
+ *
+ * Method: absence.
  */
 export function expectedDetection(
   expected: MagnitudePrior,

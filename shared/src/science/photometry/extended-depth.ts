@@ -29,6 +29,8 @@ export function pointSourceArea(fwhmArcsec: number): number {
  * @throws {DomainError} if an input is out of range
  *
  * White noise growing as the square root of the area. Source: 5 sigma inside r_e, which holds half of the light.
+ *
+ * Method: absence.
  */
 export function extendedLimit(depth: PointDepth, effectiveRadiusArcsec: number, penaltyMag = 0): number {
   if (!(effectiveRadiusArcsec >= 0 && penaltyMag >= 0) || !Number.isFinite(depth.limitMag)) {

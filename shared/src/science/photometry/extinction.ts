@@ -16,6 +16,8 @@ export type UltravioletLaw = 'bianchi2017' | 'wyder2007';
  *
  * Fractional error 16 per cent. Above E(B-V) = 0.3 the optical and the ultraviolet are not tested by a catalogue.
  * Source: Schlafly & Finkbeiner (2011), R_V = 3.1.
+ *
+ * Method: extinction.
  */
 export function extinction(band: BandId, ebvMag: number, ultraviolet: UltravioletLaw = 'bianchi2017'): number {
   if (!(ebvMag >= 0 && Number.isFinite(ebvMag))) {

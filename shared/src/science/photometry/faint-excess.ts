@@ -12,6 +12,8 @@ import { incompleteBeta } from '../robustness/incomplete-beta.ts';
  *
  * A large galaxy of low surface brightness stands in catalogues as several faint pieces. Of all objects together a share
  * 1 / (1 + ratio) falls inside by chance: binomial, exact, and free of the density, which differs from place to place.
+ *
+ * Method: absence.
  */
 export function crowdingChance(inside: number, ring: number, areaRatio: number): number {
   if (!(inside >= 0 && ring >= 0 && areaRatio > 0)) {

@@ -44,6 +44,8 @@ export interface PhysicalLimit {
  * @param massToLight stellar mass over luminosity, solar units, positive (see `MASS_TO_LIGHT`)
  * @returns absolute magnitude, luminosity and stellar mass at the limit
  * @throws {DomainError} if an input is out of range
+ *
+ * Method: limits.
  */
 export function physicalLimit(
   magnitude: number,

@@ -25,6 +25,8 @@ export const DIFFUSE_TAIL = { weight: 0.15, factor: 2.5, scatterDex: 0.2 } as co
  * Below 1e8 solar masses the relation is extrapolated: 1.3 kpc at 1e8, 0.7 kpc at 1e6.
  * Source: Shen et al. (2003), MNRAS 343, 978, late types (coefficients from memory); the tail after HI-bearing
  * ultra-diffuse galaxies (our choice).
+ *
+ * Method: expected.
  */
 export function sizePriorKpc(
   logStellarMass: number,

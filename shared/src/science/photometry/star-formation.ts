@@ -68,6 +68,8 @@ export function nuLuminosityOfAb(
  * @throws {DomainError} if the luminosity is not positive
  *
  * TIR and 24 micron assume ordinary dust: a metal-poor dwarf is invisible there, so their silence says almost nothing.
+ *
+ * Method: limits.
  */
 export function starFormationRate(luminosityErg: number, tracer: StarFormationTracer): number {
   if (!(luminosityErg > 0))

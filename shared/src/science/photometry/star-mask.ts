@@ -11,6 +11,8 @@ export const FAINTEST_MASKED_G = 13;
  * @throws {DomainError} if the magnitude is not finite
  *
  * Source: Legacy Surveys mask relation, r = 1630 arcsec 1.396^-G.
+ *
+ * Method: absence.
  */
 export function starMaskRadius(gaiaG: number): number {
   if (!Number.isFinite(gaiaG)) throw new DomainError(`starMaskRadius: G must be finite, got ${gaiaG}`);

@@ -16,6 +16,8 @@ export interface ChanceFraction {
  * @param positions control positions kept (dropped ones do not count)
  * @returns fraction, error sqrt(k)/N and exact interval (Garwood); at k = 0 quote the interval
  * @throws {DomainError} if there are no positions or more matches than positions
+ *
+ * Method: control.
  */
 export function chanceFraction(matched: number, positions: number): ChanceFraction {
   if (!(positions > 0 && matched >= 0 && matched <= positions)) {
@@ -49,6 +51,8 @@ export interface CorrectedCounts {
  * @throws {DomainError} if an input is out of range
  *
  * Source: (f_obs - f_ch) / (1 - f_ch), binomial error of f_obs over 1 - f_ch; the error of f_ch itself is left out.
+ *
+ * Method: control.
  */
 export function correctedCounts(matched: number, sources: number, chance: number): CorrectedCounts {
   if (!(sources > 0 && matched >= 0 && matched <= sources && chance >= 0 && chance < 1)) {

@@ -22,6 +22,8 @@ export const ONE_SIGMA = 0.682689492137086;
  * @throws {DomainError} if an input is out of range
  *
  * Source: Wilson (1927), J. Am. Stat. Assoc. 22, 209.
+ *
+ * Method: stability.
  */
 export function wilsonInterval(successes: number, trials: number, level = 0.95): Interval {
   checkFraction('wilsonInterval', successes, trials, level);

@@ -21,6 +21,8 @@ export interface Stability<V extends string> {
  * @param options draws to begin with, cap, and the cut the agreement is compared with
  * @returns tally, agreement and interval
  * @throws {DomainError} if the number of draws is not a positive integer
+ *
+ * Method: stability.
  */
 export function stability<V extends string>(
   nominal: V,

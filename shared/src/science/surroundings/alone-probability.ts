@@ -21,6 +21,8 @@ export interface DistanceDraw {
  *
  * @param draws equally likely distances, at least one
  * @param covered covered share of the circle, 0 to 1
+ *
+ * Method: surroundings.
  */
 export function aloneProbability(draws: readonly DistanceDraw[], covered: number): AloneFactors {
   let known = 0;

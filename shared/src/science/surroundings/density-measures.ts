@@ -22,6 +22,8 @@ const pull = ({ mass, separationMpc }: Disturber): number => {
  *
  * @throws {DomainError} without a disturber, or for one whose mass or separation is not positive
  * Source: Karachentsev & Makarov (1999); Karachentsev et al. (2013), AJ 145, 101 (constant from memory).
+ *
+ * Method: measures.
  */
 export function tidalIndex(disturbers: readonly Disturber[]): number {
   if (disturbers.length === 0) throw new DomainError('tidalIndex: no disturber');
@@ -41,6 +43,8 @@ export function tidalIndexOfFive(disturbers: readonly Disturber[]): number {
  * @param neighbours mass over the primary's, and distance in units of the primary's diameter
  * @throws {DomainError} without a neighbour, or for values that are not positive
  * Source: Dahari (1984); Verley et al. (2007), A&A 472, 121.
+ *
+ * Method: measures.
  */
 export function tidalStrength(neighbours: readonly { massRatio: number; diameters: number }[]): number {
   if (neighbours.length === 0) throw new DomainError('tidalStrength: no neighbour');
@@ -59,6 +63,8 @@ export function tidalStrength(neighbours: readonly { massRatio: number; diameter
  * @param distanceMpc distance of the k-th neighbour, Mpc, positive
  * @throws {DomainError} if an input is out of range
  * Source: Verley et al. (2007).
+ *
+ * Method: measures.
  */
 export function localDensity(rank: number, distanceMpc: number): number {
   if (!(rank >= 2 && distanceMpc > 0)) throw new DomainError(`localDensity: k ${rank}, r ${distanceMpc} Mpc`);
@@ -72,6 +78,8 @@ export function localDensity(rank: number, distanceMpc: number): number {
  * @param distanceMpc projected distance of the n-th neighbour, Mpc, positive
  * @throws {DomainError} if an input is out of range
  * Source: Baldry et al. (2006) and others; common practice with n = 5, |dv| < 1000 km/s.
+ *
+ * Method: measures.
  */
 export function projectedDensity(rank: number, distanceMpc: number): number {
   if (!(rank >= 1 && distanceMpc > 0)) throw new DomainError(`projectedDensity: n ${rank}, d ${distanceMpc} Mpc`);
@@ -85,6 +93,8 @@ export function projectedDensity(rank: number, distanceMpc: number): number {
  * @param neighbourDiameter angular diameter of the neighbour, same unit
  * @param separation separation, same unit
  * Source: Karachentseva (1973): a_1/4 <= a_i <= 4 a_1 nearer than 20 a_i.
+ *
+ * Method: measures.
  */
 export function spoilsIsolation(diameter: number, neighbourDiameter: number, separation: number): boolean {
   const similar = neighbourDiameter >= diameter / 4 && neighbourDiameter <= 4 * diameter;

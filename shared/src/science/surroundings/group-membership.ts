@@ -14,6 +14,8 @@ export function criticalDensity(h0: number): number {
  * @returns kpc
  * @throws {DomainError} if the mass is not positive
  * Source: definition, [3 M / (800 pi rho_c)]^(1/3).
+ *
+ * Method: measures.
  */
 export function r200Kpc(mass: number, h0 = 70): number {
   if (!(mass > 0)) throw new DomainError(`r200Kpc: mass must be positive, got ${mass}`);
@@ -44,6 +46,8 @@ export interface Structure {
  * @param separationKpc projected separation at the structure's own distance, kpc
  * @param differenceKms velocity difference from its mean, km/s
  * @param reach in units of R200; 1 strict, 2 to 3 loose
+ *
+ * Method: surroundings.
  */
 export function isMember(structure: Structure, separationKpc: number, differenceKms: number, reach: number): boolean {
   return separationKpc <= reach * structure.r200Kpc && Math.abs(differenceKms) <= 3 * structure.dispersionKms;

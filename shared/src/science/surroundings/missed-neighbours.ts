@@ -57,6 +57,8 @@ export function clusteringBoost(window: Window, clustering: Clustering): number 
  * @param window cylinder
  * @param law luminosity function
  * @returns for the mean field; times {@link clusteringBoost} for the clustered bracket. 0 where the survey goes deeper.
+ *
+ * Method: surroundings.
  */
 export function missedNeighbours(
   limitAbsoluteMag: number,

@@ -22,6 +22,8 @@ export interface SurroundingsThresholds {
  *
  * `in a cluster`, `in a group`, `accompanied`, `alone`, else `cannot tell`. Incompleteness, edges and an unusable
  * distance can defeat only `alone`: a known neighbour at the same velocity is enough, whatever is incomplete.
+ *
+ * Method: surroundings.
  */
 export function surroundingsVerdict(evidence: SurroundingsEvidence, thresholds: SurroundingsThresholds): Surroundings {
   if (evidence.inCluster) return 'in a cluster';

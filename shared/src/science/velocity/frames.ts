@@ -93,6 +93,8 @@ function assertCz(where: string, czKms: number): void {
  *
  * Topocentric velocities need the site and time and must be corrected where they were observed.
  * Source of each vector: {@link SOLAR_MOTION}.
+ *
+ * Method: velocity.
  */
 export function fromBarycentric(
   frame: VelocityFrame,

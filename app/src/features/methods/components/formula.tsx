@@ -1,15 +1,9 @@
-import { Fragment } from 'react';
+import katex from 'katex';
+import 'katex/dist/katex.min.css';
+import { useMemo } from 'react';
 
-/** A formula of plain signs, with `_{…}` low and `^{…}` high. */
-export function Formula({ text }: { text: string }) {
-  return (
-    <>
-      {text.split(/([_^]\{[^}]*\})/).map((piece, i) => {
-        const inner = piece.slice(2, -1);
-        if (piece.startsWith('_{')) return <sub key={i}>{inner}</sub>;
-        if (piece.startsWith('^{')) return <sup key={i}>{inner}</sup>;
-        return <Fragment key={i}>{piece}</Fragment>;
-      })}
-    </>
-  );
+/** A formula in TeX, set for the eye and as MathML for those who listen. The text is the project's own. */
+export function Formula({ tex, display = false }: { tex: string; display?: boolean }) {
+  const html = useMemo(() => katex.renderToString(tex, { displayMode: display, throwOnError: true }), [tex, display]);
+  return <span dangerouslySetInnerHTML={{ __html: html }} />;
 }

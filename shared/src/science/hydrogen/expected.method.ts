@@ -6,17 +6,17 @@ export const expected: MethodEntry = {
   summary:
     'The light that a galaxy with this much gas has as a rule, with its scatter. It tells how an object’s magnitude weighs, and whether silence means anything.',
   formulas: [
-    'log M_{*} = a + b (log M_{HI} − 9.5)',
-    'M_{r} = M_{☉,r} − 2.5 (log M_{*} − log Υ_{r}) − 0.5',
-    'm = M_{r} + colour + 5 log(D_{L}/Mpc) + 25 + A',
-    'σ_{m} = s exp(−0.4 (log M_{HI} − 9.5)), clipped to 0.7–2.5 mag',
+    String.raw`\log M_* = a + b\,(\log M_{\mathrm{HI}} - 9.5)`,
+    String.raw`M_r = M_{\odot,r} - 2.5\,(\log M_* - \log \Upsilon_r) - 0.5`,
+    String.raw`m = M_r + \text{colour} + 5 \log(D_L/\mathrm{Mpc}) + 25 + A`,
+    String.raw`\sigma_m = s\,e^{-0.4\,(\log M_{\mathrm{HI}} - 9.5)}, \quad 0.7 \le \sigma_m \le 2.5`,
   ],
   symbols: [
-    ['M_{*}, M_{HI}', 'mass of stars, of gas', 'M☉'],
-    ['a, b', 'intercept and slope', 'dex; dex/dex'],
-    ['Υ_{r}', 'mass-to-light ratio of the stars in r', 'solar'],
-    ['s', 'scatter at log M_{HI} = 9.5', 'mag'],
-    ['A', 'Galactic extinction in the band', 'mag'],
+    [String.raw`M_{*}, M_{\mathrm{HI}}`, 'mass of stars, of gas', 'M☉'],
+    [String.raw`a, b`, 'intercept and slope', 'dex; dex/dex'],
+    [String.raw`\Upsilon_{r}`, 'mass-to-light ratio of the stars in r', 'solar'],
+    [String.raw`s`, 'scatter at log M_HI = 9.5', 'mag'],
+    [String.raw`A`, 'Galactic extinction in the band', 'mag'],
   ],
   criteria: [
     'counterpart.relationSlope',
@@ -25,6 +25,12 @@ export const expected: MethodEntry = {
     'counterpart.relationTail',
     'counterpart.massToLightR',
     'counterpart.learnMagnitudes',
+  ],
+  columns: ['expectedMagnitude', 'expectedScatterMag'],
+  functions: [
+    'hydrogen/expected-counterpart#expectedCounterpart',
+    'hydrogen/gas-relation#stellarMassFromGas',
+    'photometry/size-prior#sizePriorKpc',
   ],
   validity:
     'The half magnitude and the line come from a direct fit on published assignments and are refitted on the survey’s own secure counterparts where there are 200 or more. A wide tail allows for galaxies far off the relation. Without a distance the flux alone is used, with a scatter of at least 1.5 mag.',
