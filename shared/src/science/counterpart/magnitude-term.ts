@@ -48,6 +48,7 @@ const EUCLIDEAN = 0.6;
  * Bins are smoothed with their neighbours and kept from falling towards the faint end: there a table loses unrelated
  * objects and counterparts alike, so that the loss cancels in their ratio only if n is the true density. Bright bins
  * with few objects take the Euclidean slope from the first bin that has ten.
+ *
  * Method: counterpart.
  */
 export function countMagnitudes(
