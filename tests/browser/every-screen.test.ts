@@ -145,3 +145,9 @@ describe('every screen', () => {
     expect(browser.complaints()).toEqual([]);
   });
 });
+
+it('leads a comparison with no other run to the run, which offers the choice', async () => {
+  await page.goto(`/surveys/${survey.id}/runs/${survey.runId}/difference`);
+  await page.getByRole('heading', { level: 1, name: /^Run \d+$/ }).waitFor();
+  expect(new URL(page.url()).pathname).toBe(`/surveys/${survey.id}/runs/${survey.runId}`);
+});

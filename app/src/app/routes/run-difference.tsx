@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query';
-import { Link, useParams, useSearchParams } from 'react-router-dom';
+import { Link, redirect, useParams, useSearchParams, type LoaderFunctionArgs } from 'react-router-dom';
 import { Caution } from '#components/caution/caution.tsx';
 import { EmptyState } from '#components/feedback/empty-state.tsx';
 import { Loading } from '#components/feedback/loading.tsx';
@@ -11,6 +11,12 @@ import { DifferenceTable } from '#features/runs/components/difference-table.tsx'
 import { paths } from '#config/paths.ts';
 import { count } from '#lib/format/number.ts';
 import { useTitle } from '#lib/use-title.ts';
+
+/** Without another run to compare with, the run's own page offers the choice. */
+export const loader =
+  () =>
+  ({ params, request }: LoaderFunctionArgs) =>
+    new URL(request.url).searchParams.has('from') ? null : redirect(paths.run(params['surveyId']!, params['runId']!));
 
 export function Component() {
   const survey = useSurvey();
