@@ -28,6 +28,7 @@ beforeAll(async () => {
   const [contested] = await detections(page, survey, 'starlight=contested&limit=1');
   const catalogue = (await list('catalogues')).find(({ name }) => name === 'Halcyon deep g, r')!;
   const criteria = await list('criteria');
+  const editions = await list('editions');
   intakeId = await stagedIntake(page, survey.id);
   const inSurvey = {
     overview: '',
@@ -37,6 +38,8 @@ beforeAll(async () => {
     plots: '/plots',
     docket: '/docket',
     shortlist: '/shortlist',
+    editions: '/editions',
+    'an edition': `/editions/${editions[0]!.id}`,
     catalogues: '/catalogues',
     'a catalogue': `/catalogues/${catalogue.id}`,
     intake: '/intake',
@@ -48,10 +51,12 @@ beforeAll(async () => {
     'a run': `/runs/${survey.runId}`,
     ledger: '/ledger',
     people: '/people',
+    settings: '/settings',
   };
   screens = Object.fromEntries(Object.entries(inSurvey).map(([name, path]) => [name, `/surveys/${survey.id}${path}`]));
   screens['surveys'] = '/surveys';
   screens['account'] = '/account';
+  screens['methods'] = '/methods';
   screens['no such page'] = '/nowhere';
 });
 afterAll(async () => {
