@@ -54,6 +54,12 @@ const COLUMNS: Column<BandLimit>[] = [
       l.expectedMagnitude === null ? NO_VALUE : `${fixed(l.expectedMagnitude, 1)} ± ${fixed(l.expectedScatterMag, 1)}`,
   },
   {
+    key: 'unmasked',
+    header: 'Unmasked',
+    hint: 'Share of the search area not under a mask.',
+    cell: (l) => probability(l.unmasked),
+  },
+  {
     key: 'seen',
     header: 'Would be seen',
     align: 'left',
@@ -69,12 +75,6 @@ const PHYSICAL: Column<BandLimit>[] = [
     header: 'Covered',
     hint: 'Share of the search area observed.',
     cell: (l) => probability(l.covered),
-  },
-  {
-    key: 'unmasked',
-    header: 'Unmasked',
-    hint: 'Share of the search area not under a mask.',
-    cell: (l) => probability(l.unmasked),
   },
   {
     key: 'extinction',
