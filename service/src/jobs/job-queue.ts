@@ -4,6 +4,8 @@ import { SQL_CLIENT, type SqlClient } from '../database/sql-client.ts';
 
 const QUEUE = 'eremite-work';
 const HOUR = 3600;
+/** A process is told of its own entries at once; for those of other processes it looks this often. */
+const POLL_SECONDS = 1;
 
 /** The queue on the same database: hands job ids to whichever process is free. */
 @Injectable()
@@ -30,7 +32,7 @@ export class JobQueue {
 
   async work(count: number, run: (jobId: string) => Promise<void>): Promise<void> {
     for (let i = 0; i < count; i += 1) {
-      const worker = await this.#boss.work<{ jobId: string }>(QUEUE, { pollingIntervalSeconds: 5 }, async (tasks) => {
+      const worker = await this.#boss.work<{ jobId: string }>(QUEUE, { pollingIntervalSeconds: POLL_SECONDS }, async (tasks) => {
         for (const task of tasks) await run(task.data.jobId);
       });
       this.#workers.push(worker);

@@ -1,8 +1,9 @@
 import type { JobContext, JobHandler } from './job-handler.ts';
 import type { JobRow, JobsRepository } from './jobs.repository.ts';
 
-const BEAT_MS = 5000;
-/** Progress reaches the database at most this often; a beat reads one row and writes one. */
+/** Also how soon a wish to cancel is heard that reached another process; a beat reads one row and writes one. */
+const BEAT_MS = 700;
+/** Progress reaches the database at most this often. */
 const REPORT_MS = 250;
 
 /** One job in hand in this process: its signal, its progress, its heartbeat. */
