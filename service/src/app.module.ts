@@ -17,6 +17,7 @@ import { AuthModule } from './modules/auth/auth.module.ts';
 import { CriteriaModule } from './modules/criteria/criteria.module.ts';
 import { DemoModule } from './modules/demo/demo.module.ts';
 import { EditionsModule } from './modules/editions/editions.module.ts';
+import { ObservationsModule } from './modules/observations/observations.module.ts';
 import { ReviewsModule } from './modules/reviews/reviews.module.ts';
 import { RunsModule } from './modules/runs/runs.module.ts';
 import { ShortlistsModule } from './modules/shortlists/shortlists.module.ts';
@@ -53,6 +54,7 @@ const FEATURES = [
   CriteriaModule,
   RunsModule,
   ReviewsModule,
+  ObservationsModule,
   ShortlistsModule,
   EditionsModule,
   DemoModule,

@@ -42,6 +42,7 @@ const variables = z.object({
   EREMITE_MAX_UNPACKED: bytes.prefault('20GiB'),
   EREMITE_MAX_COLUMNS: z.coerce.number().int().min(1).max(100_000).default(5000),
   EREMITE_MAX_CELL: bytes.prefault('1MiB'),
+  EREMITE_MAX_IMAGE_PIXELS: z.coerce.number().int().min(1).max(1_000_000_000).default(40_000_000),
   EREMITE_JOB_WORKERS: z.coerce.number().int().min(0).max(64).default(2),
   EREMITE_THREADS: z.coerce.number().int().min(1).max(256).optional(),
   EREMITE_RUN_MEMORY: bytes.prefault('1GiB'),
@@ -73,6 +74,8 @@ export interface Env {
   readonly maxUploadBytes: number;
   /** Of a table that is read. */
   readonly tableLimits: { readonly maxBytes: number; readonly maxColumns: number; readonly maxCellLength: number };
+  /** Pixels of an image. */
+  readonly maxImagePixels: number;
   readonly jobWorkers: number;
   /** Threads of a run. */
   readonly threads: number;
@@ -131,6 +134,7 @@ export function readEnv(overrides: Partial<Env> = {}): Env {
       maxColumns: value.EREMITE_MAX_COLUMNS,
       maxCellLength: value.EREMITE_MAX_CELL,
     },
+    maxImagePixels: value.EREMITE_MAX_IMAGE_PIXELS,
     jobWorkers: value.EREMITE_JOB_WORKERS,
     threads: value.EREMITE_THREADS ?? readThreads(),
     runMemoryBytes: value.EREMITE_RUN_MEMORY,

@@ -2,6 +2,8 @@
 export const ERROR_CATALOGUE = {
   VALIDATION_FAILED: { status: 400, title: 'The request does not have the expected shape' },
   TABLE_UNREADABLE: { status: 422, title: 'The file could not be read as a table' },
+  OBSERVATION_UNREADABLE: { status: 422, title: 'The file could not be read as an image or a spectrum' },
+  OBSERVATION_ELSEWHERE: { status: 422, title: 'The file shows no detection it could go with' },
   SETTINGS_INCOMPLETE: { status: 422, title: 'The settings do not fit the table' },
   NOTHING_TO_PUBLISH: { status: 422, title: 'No row of the table can be used' },
   SELECTS_EVERYTHING: { status: 422, title: 'The criteria select too much of the sky' },
