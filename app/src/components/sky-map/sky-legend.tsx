@@ -39,6 +39,9 @@ export function SkyLegend({ id, uncovered }: { id: string; uncovered: string[] }
         <i className="sky-legend__hatch" aria-hidden="true" />
         {'masked or not observed'}
       </span>
+      <span>
+        <kbd>[</kbd> <kbd>]</kbd> step <kbd>M</kbd> measure
+      </span>
     </figcaption>
   );
 }
