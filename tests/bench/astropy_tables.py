@@ -6,6 +6,7 @@ import sys
 import time
 
 import astropy
+import numpy
 from astropy.io import ascii
 from astropy.table import Table
 
@@ -14,11 +15,10 @@ def read(path, kind):
     if kind == "csv":
         return ascii.read(path, format="csv", fast_reader=True, guess=False)
     if kind == "fits":
-        # Columns are mapped, not read; touching every one of them makes the comparison fair.
+        # Left to itself astropy only maps the file. Here the bytes are read, and every column is made an array of its
+        # own in the order of this machine, as any work with it would need; strings stay bytes.
         table = Table.read(path, format="fits", memmap=False)
-        for name in table.colnames:
-            len(table[name].tobytes())
-        return table
+        return [numpy.array(table[name], dtype=table[name].dtype.newbyteorder("=")) for name in table.colnames]
     return Table.read(path, format="votable")
 
 
@@ -35,7 +35,8 @@ if sys.argv[1] == "make":
 else:
     path, kind = sys.argv[2], sys.argv[3]
     start = time.perf_counter()
-    rows = len(read(path, kind))
+    table = read(path, kind)
     seconds = time.perf_counter() - start
+    rows = len(table[0]) if kind == "fits" else len(table)
     peak = resource.getrusage(resource.RUSAGE_SELF).ru_maxrss * 1024
     json.dump({"rows": rows, "seconds": seconds, "peakBytes": peak, "program": f"astropy {astropy.__version__}"}, sys.stdout)
