@@ -19,6 +19,15 @@ export function roundError(error: number | null): number | null {
   return error === null || !Number.isFinite(error) || error <= 0 ? null : Number(error.toPrecision(ERROR_DIGITS));
 }
 
+/** Value and error as people write them, `65.0 ± 2.9`; null where there is no value. */
+export function withError(value: number | null, error: number | null): string | null {
+  const rounded = roundByError(value, error);
+  const rest = roundError(error);
+  if (rounded === null || rest === null) return rounded === null ? null : String(rounded);
+  const decimals = Math.max(0, ERROR_DIGITS - 1 - Math.floor(Math.log10(rest)));
+  return `${rounded.toFixed(decimals)} ± ${rest.toFixed(decimals)}`;
+}
+
 function roundTo(value: number, decimals: number): number {
   if (decimals >= 0) return Number(value.toFixed(Math.min(decimals, 15)));
   const unit = 10 ** -decimals;

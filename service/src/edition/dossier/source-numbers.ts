@@ -1,5 +1,5 @@
 import { formatDeclination, formatRightAscension } from '@eremite/shared/science/sky/sexagesimal-format';
-import { roundByError, roundError } from '../columns/round-by-error.ts';
+import { withError } from '../columns/round-by-error.ts';
 import type { DossierSource } from './dossier-input.ts';
 
 const figure = (value: number | null, decimals: number, unit = ''): string =>
@@ -9,8 +9,7 @@ const figure = (value: number | null, decimals: number, unit = ''): string =>
 export function sourceNumbers({ detail, priority }: DossierSource): [name: string, value: string][] {
   const { verdict, distance, positionError, beamArcsec, searchRadiusArcsec, aloneFactors } = detail;
   const { robustness } = verdict;
-  const d = roundByError(verdict.distanceMpc, verdict.distanceErrorMpc);
-  const error = roundError(verdict.distanceErrorMpc);
+  const d = withError(verdict.distanceMpc, verdict.distanceErrorMpc);
   const massError =
     verdict.distanceMpc && verdict.distanceErrorMpc !== null
       ? ` ± ${((2 * verdict.distanceErrorMpc) / (verdict.distanceMpc * Math.LN10)).toFixed(2)}`
@@ -32,7 +31,7 @@ export function sourceNumbers({ detail, priority }: DossierSource): [name: strin
     ['W50', figure(verdict.width50Kms, 1, 'km/s')],
     ['HI flux', figure(verdict.fluxJyKms, 3, 'Jy km/s')],
     ['S/N', figure(verdict.signalToNoise, 1)],
-    ['Distance', d === null ? 'none usable' : `${d}${error === null ? '' : ` ± ${error}`} Mpc (${distance.kind})`],
+    ['Distance', d === null ? 'none usable' : `${d} Mpc (${distance.kind})`],
     ['log M_HI', verdict.logHiMass === null ? 'not known' : `${verdict.logHiMass.toFixed(2)}${massError} (solar)`],
     [
       'M_HI/L',

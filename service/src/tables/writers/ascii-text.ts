@@ -6,9 +6,31 @@ const SPELLED: Record<string, string> = {
   '\u2019': "'",
   '\u00b5': 'u',
   '\u03bc': 'u',
+  Æ: 'AE',
+  æ: 'ae',
+  Œ: 'OE',
+  œ: 'oe',
+  Ø: 'O',
+  ø: 'o',
+  Ł: 'L',
+  ł: 'l',
+  Đ: 'D',
+  đ: 'd',
+  ð: 'd',
+  Þ: 'Th',
+  þ: 'th',
+  ß: 'ss',
+  ı: 'i',
+  '±': '+/-',
+  '×': 'x',
+  '°': 'deg',
+  '→': '->',
+  α: 'alpha',
+  σ: 'sigma',
+  Δ: 'Delta',
 };
 
-/** Printable ASCII for formats that allow nothing else: accents are dropped, what has no ASCII form becomes "?". */
+/** Printable ASCII for formats that allow nothing else: accents are dropped, letters spelled, the rest becomes "?". */
 export function asciiText(text: string): string {
   return text
     .normalize('NFD')

@@ -62,10 +62,16 @@ function texCell(columns: OutputColumn[], row: OutputRow, { at, errorAt, flagAt 
   if (value === '') return '\\nodata';
   if (columns[at]!.datatype === 'text' || columns[at]!.datatype === 'boolean') return escapeTex(value);
   const error = errorAt < 0 ? '' : formatCell(row[errorAt] ?? null, columns[errorAt]!);
+  if (error !== '' && columns[at]!.decimals === undefined) {
+    const decimals = errorDecimals(Number(error));
+    return `$${Number(value).toFixed(decimals)}\\pm${Number(error).toFixed(decimals)}$`;
+  }
   const flag = flagAt < 0 ? '' : textOf(row[flagAt] ?? null);
   return `$${flag}${power(value)}${error === '' ? '' : `\\pm${power(error)}`}$`;
 }
 
+/** Decimals that show two digits of an error, so that 65.0 stands beside 2.9. */
+const errorDecimals = (error: number): number => Math.max(0, 1 - Math.floor(Math.log10(error)));
 const textOf = (cell: OutputCell): string => (cell === null ? '' : String(cell));
 const power = (number: string): string => number.replace(/e\+?(-?\d+)$/, '\\times10^{$1}');
 const unitHead = (unit: string | undefined): string => (unit ? `(${UNITS[unit] ?? escapeTex(unit)})` : '');
