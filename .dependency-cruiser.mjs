@@ -52,7 +52,7 @@ export default {
     {
       name: 'kernels-are-pure',
       severity: 'error',
-      from: { path: '^service/src/(matching|scoring|tables|images|intake|plan)/', pathNot: TESTS },
+      from: { path: '^service/src/(matching|scoring|tables|images|intake|plan|edition)/', pathNot: TESTS },
       to: {
         path: '^(schema/|service/src/(modules|database|jobs|common|config)/|node_modules/(@nestjs|drizzle-orm|@electric-sql)/)',
       },

@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { send } from './support/api.ts';
 import { DEMO_PASSWORD, emailOf } from './support/demo-people.ts';
 import { openBrowser, type TestBrowser } from './support/open-browser.ts';
 import { stopAtFailure } from './support/stop-at-failure.ts';
@@ -136,7 +137,11 @@ describe('a lead of a new survey', () => {
     await page.getByText('A foreground dwarf by its shape.').waitFor();
   });
 
-  it('puts it on the shortlist and exports that with the verdict', async () => {
+  it('puts it on the shortlist once it is settled, and exports that with the verdict', async () => {
+    const detectionId = /detections\/([\w-]+)/.exec(page.url())![1]!;
+    const runId = new URL(page.url()).searchParams.get('run')!;
+    const word = { runId, starlight: 'cannot tell', surroundings: 'cannot tell', note: 'Not deep enough.' };
+    expect((await send(page, 'POST', `/detections/${detectionId}/settlements`, word)).ok()).toBe(true);
     await button(/shortlist$/).click();
     await button(/off the shortlist$/).waitFor();
     await page.getByRole('link', { name: 'Shortlist', exact: true }).click();

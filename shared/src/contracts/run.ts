@@ -100,7 +100,8 @@ export const verdictsQuery = listQuery.extend({
 export type VerdictsQuery = z.output<typeof verdictsQuery>;
 
 export const evidenceQuery = listQuery.extend({
-  format: z.enum(['json', 'csv', 'votable']).default('json'),
+  /** A page as JSON, or the whole list as a table. */
+  format: z.enum(['json', 'csv', 'votable', 'fits', 'mrt']).default('json'),
   detectionId: z.uuid().optional(),
 });
 

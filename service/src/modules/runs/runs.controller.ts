@@ -25,7 +25,7 @@ import { VerdictsService } from './verdicts.service.ts';
 import { verdictTable } from './verdict-columns.ts';
 
 const uuid = z.uuid();
-const verdictsAnswer = verdictsQuery.extend({ format: z.enum(['json', 'csv', 'votable']).default('json') });
+const verdictsAnswer = verdictsQuery.extend({ format: evidenceQuery.shape.format });
 const fromQuery = z.object({ from: z.uuid() });
 
 @Controller()
