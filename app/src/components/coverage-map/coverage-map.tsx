@@ -36,9 +36,9 @@ export function CoverageMap({ moc }: { moc: string }) {
       width: high(xs) - low(xs) + span * 0.12,
       height: high(ys) - low(ys) + span * 0.12,
     };
-    return { kept, box, sideDeg, lines: graticule(projection, span / RAD) };
+    return { kept, box, sideDeg, whole, lines: graticule(projection, span / RAD) };
   }, [moc]);
-  const { box, kept, lines, sideDeg } = drawn;
+  const { box, kept, lines, sideDeg, whole } = drawn;
   // Text of about 11 pixels in a map some 420 wide.
   const letter = box.width / 38;
   const path = (points: readonly (readonly [number, number])[]) =>
@@ -56,9 +56,14 @@ export function CoverageMap({ moc }: { moc: string }) {
         ))}
         <path className="coverage-map__cells" d={kept.map((shape) => `${path(shape)}Z`).join('')} />
         {lines.map(({ points, label }) => {
-          const first = points.find(
-            ([x, y]) => x > box.x && x < box.x + box.width * 0.9 && -y > box.y + letter && -y < box.y + box.height,
-          );
+          // On the whole sky all meridians begin at the pole: their hours stand on the equator.
+          const first =
+            whole && label.includes('ʰ')
+              ? points[points.length >> 1]
+              : points.find(
+                  ([x, y]) =>
+                    x > box.x && x < box.x + box.width * 0.9 && -y > box.y + letter && -y < box.y + box.height,
+                );
           return first ? (
             <text
               key={`${label} ${points.length}`}

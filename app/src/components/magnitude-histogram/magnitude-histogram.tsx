@@ -38,7 +38,8 @@ export function MagnitudeHistogram({ band }: { band: BandCounts }) {
               Plot.text([band.suggestedDepth.magnitude], {
                 x: (depth: number) => depth,
                 frameAnchor: 'top',
-                dy: band.depth5Sigma === null ? -6 : -17,
+                lineAnchor: 'bottom',
+                dy: band.depth5Sigma === null ? -3 : -15,
                 text: () => 'turn-over',
                 fill: 'var(--text)',
               }),
@@ -50,7 +51,8 @@ export function MagnitudeHistogram({ band }: { band: BandCounts }) {
               Plot.text([band.depth5Sigma], {
                 x: (depth: number) => depth,
                 frameAnchor: 'top',
-                dy: -6,
+                lineAnchor: 'bottom',
+                dy: -3,
                 text: () => 'depth',
                 fill: 'var(--amber)',
               }),

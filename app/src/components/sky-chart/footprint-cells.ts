@@ -3,6 +3,8 @@ import { Moc } from '@eremite/shared/science/sky/moc';
 
 const RAD = Math.PI / 180;
 const MOST_CELLS = 4000;
+const FINEST_DRAWN = 10;
+const COARSEST_DRAWN = 4;
 
 export interface FootprintCell {
   corners: { raDeg: number; decDeg: number }[];
@@ -16,9 +18,10 @@ export function footprintCells(text: string): { cells: FootprintCell[]; sideDeg:
   const region = Moc.parse(text);
   const cells: FootprintCell[] = [];
   const order = (() => {
-    let at = Math.min(region.order, 10);
-    while (at > 3 && region.size / 4 ** (region.order - at) > MOST_CELLS) at--;
-    return at;
+    let at = Math.min(region.order, FINEST_DRAWN);
+    while (at > COARSEST_DRAWN && region.size / 4 ** (region.order - at) > MOST_CELLS) at--;
+    // Large cells have curved edges: they are drawn as the smaller ones they are made of.
+    return Math.max(at, COARSEST_DRAWN);
   })();
   const width = 4 ** (region.order - order);
   const seen = new Set<number>();

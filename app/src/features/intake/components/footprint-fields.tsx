@@ -1,11 +1,11 @@
 import type { Intake } from '@eremite/shared/contracts/intake';
-import type { FOOTPRINT_TYPES } from '@eremite/shared/contracts/intake-settings';
-import { type IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import type { FOOTPRINT_TYPES, IntakeSettings } from '@eremite/shared/contracts/intake-settings';
+import { useState } from 'react';
 import { CoverageMap } from '#components/coverage-map/coverage-map.tsx';
 import { significant } from '#lib/format/number.ts';
 import type { Change } from '../hooks/use-intake-draft.ts';
 import { ChoiceField, NumberField } from './field.tsx';
-import { FootprintText } from './footprint-text.tsx';
+import { FootprintText, type WrittenFootprint } from './footprint-text.tsx';
 
 const FOOTPRINTS: Record<(typeof FOOTPRINT_TYPES)[number], string> = {
   unknown: 'unknown',
@@ -18,6 +18,9 @@ const FOOTPRINTS: Record<(typeof FOOTPRINT_TYPES)[number], string> = {
 };
 const FIRST_CONE_ARCSEC = 120;
 
+const isWritten = (type: string | undefined): type is WrittenFootprint =>
+  type === 'moc' || type === 'circles' || type === 'polygons';
+
 interface FootprintFieldsProps {
   intake: Intake;
   draft: IntakeSettings;
@@ -27,9 +30,12 @@ interface FootprintFieldsProps {
 
 /** Where the table has looked, said in one of several ways, and drawn as it will be published. */
 export function FootprintFields({ intake, draft, change, isChecking }: FootprintFieldsProps) {
-  const { type, value } = draft.footprint ?? {};
+  // A region that is written down begins to count once there is something of it.
+  const [begun, setBegun] = useState<WrittenFootprint>();
+  const { type: stated, value } = draft.footprint ?? {};
+  const type = begun ?? stated;
   const { coverage } = intake;
-  const written = type === 'moc' || type === 'circles' || type === 'polygons' ? type : undefined;
+  const written = isWritten(type) ? type : undefined;
   const start = (next: typeof type) =>
     next && { type: next, ...(next === 'cones' ? { value: { radiusArcsec: FIRST_CONE_ARCSEC } } : {}) };
   return (
@@ -41,7 +47,10 @@ export function FootprintFields({ intake, draft, change, isChecking }: Footprint
           unsaid="not stated: from the rows, if they can tell"
           value={type}
           choices={FOOTPRINTS}
-          onChange={(next) => change({ footprint: start(next) })}
+          onChange={(next) => {
+            setBegun(isWritten(next) ? next : undefined);
+            if (!isWritten(next)) change({ footprint: start(next) });
+          }}
         />
         {type === 'cones' && (
           <NumberField
@@ -57,8 +66,11 @@ export function FootprintFields({ intake, draft, change, isChecking }: Footprint
           <FootprintText
             key={written}
             type={written}
-            value={value}
-            onChange={(next) => change({ footprint: { type: written, value: next } })}
+            value={written === stated ? value : undefined}
+            onChange={(next) => {
+              setBegun(undefined);
+              change({ footprint: { type: written, value: next } });
+            }}
           />
         )}
       </div>
