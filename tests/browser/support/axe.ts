@@ -11,13 +11,21 @@ interface Violation {
   nodes: { target: string[]; failureSummary: string }[];
 }
 
-/** Serious and critical violations of WCAG 2.2 AA on the page as it stands, a line each. */
-export async function violations(page: Page): Promise<string[]> {
+/**
+ * Serious and critical violations of WCAG 2.2 AA on the page as it stands, a line each.
+ * @param within selectors of the parts to look at; the whole page where absent
+ */
+export async function violations(page: Page, within?: readonly string[]): Promise<string[]> {
   if (!(await page.evaluate(() => 'axe' in globalThis))) await page.evaluate(AXE);
-  const found = await page.evaluate(async (tags) => {
-    const { axe } = globalThis as unknown as { axe: { run(options: object): Promise<{ violations: Violation[] }> } };
-    return (await axe.run({ runOnly: tags, resultTypes: ['violations'] })).violations;
-  }, TAGS);
+  const found = await page.evaluate(
+    async ({ tags, parts }) => {
+      const { axe } = globalThis as unknown as {
+        axe: { run(context: unknown, options: object): Promise<{ violations: Violation[] }> };
+      };
+      return (await axe.run(parts ?? document, { runOnly: tags, resultTypes: ['violations'] })).violations;
+    },
+    { tags: TAGS, parts: within?.map((part) => [part]) },
+  );
   return found
     .filter(({ impact }) => impact === 'serious' || impact === 'critical')
     .flatMap(({ id, nodes }) =>
