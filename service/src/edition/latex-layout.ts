@@ -5,7 +5,6 @@ import { escapeTex, type LatexTable } from '../tables/writers/latex.ts';
 /** Columns that fit a page, with their heads; the machine-readable table has them all. */
 const HEADS: Record<EditionTable, Record<string, string>> = {
   shortlist: {
-    rank: '',
     detection: 'Source',
     ra_deg: '$\\alpha$',
     dec_deg: '$\\delta$',
@@ -18,7 +17,6 @@ const HEADS: Record<EditionTable, Record<string, string>> = {
     gas_to_light: '$M_\\mathrm{HI}/L$',
     settled_surroundings: 'Surroundings',
     p_alone: '$P_\\mathrm{alone}$',
-    nearest_kpc: '$d_\\mathrm{near}$',
   },
   limits: {
     detection: 'Source',

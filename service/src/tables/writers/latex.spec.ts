@@ -27,11 +27,11 @@ describe('writeLatex', () => {
     const text = await texOf([
       ['S_1', 65, 2.9, '>', 352.6],
       ['S 2', null, null, null, 1.23e-7],
-      ['S 3', 12, null, null, 3],
+      ['S 3', 12, null, '<', 917000],
     ]);
     expect(text).toContain('S\\_1 & $65.0\\pm2.9$ & $>353$ \\\\');
     expect(text).toContain('S 2 & \\nodata & $1.23\\times10^{-7}$ \\\\');
-    expect(text).toContain('S 3 & $12$ & $3$\n\\enddata');
+    expect(text).toContain('S 3 & $12$ & $<9.17\\times10^{5}$\n\\enddata');
     expect(text).toContain('\\tablecaption{A \\& B\\label{tab:x}}');
     expect(text).toContain('\\colhead{(Mpc)}');
   });

@@ -15,6 +15,7 @@ const UNITS: Record<string, string> = {
   'km/s': 'km~s$^{-1}$',
   'Jy.km/s': 'Jy~km~s$^{-1}$',
   solMass: '$M_\\odot$',
+  solLum: '$L_\\odot$',
   'log(solMass)': '$\\log M_\\odot$',
   'solMass/solLum': '$M_\\odot/L_\\odot$',
   'solMass/yr': '$M_\\odot$~yr$^{-1}$',
@@ -36,7 +37,7 @@ async function* latexTexts(columns: OutputColumn[], rows: OutputRows, table: Lat
   const aligned = shown.map(({ at }) => (columns[at]!.datatype === 'text' ? 'l' : 'r')).join('');
   const heads = shown.map(({ at }) => `\\colhead{${table.heads[columns[at]!.name]!}}`);
   const units = shown.map(({ at }) => `\\colhead{${unitHead(columns[at]!.unit)}}`);
-  yield `\\begin{deluxetable*}{${aligned}}\n\\tablecaption{${escapeTex(table.caption)}\\label{${table.label}}}\n`;
+  yield `\\begin{deluxetable*}{${aligned}}\n\\tabletypesize{\\scriptsize}\n\\tablecaption{${escapeTex(table.caption)}\\label{${table.label}}}\n`;
   yield `\\tablehead{\n${heads.join(' & ')} \\\\\n${units.join(' & ')}\n}\n\\startdata\n`;
   let first = true;
   for await (const row of rows) {
@@ -73,7 +74,11 @@ function texCell(columns: OutputColumn[], row: OutputRow, { at, errorAt, flagAt 
 /** Decimals that show two digits of an error, so that 65.0 stands beside 2.9. */
 const errorDecimals = (error: number): number => Math.max(0, 1 - Math.floor(Math.log10(error)));
 const textOf = (cell: OutputCell): string => (cell === null ? '' : String(cell));
-const power = (number: string): string => number.replace(/e\+?(-?\d+)$/, '\\times10^{$1}');
+/** Large and small numbers by powers of ten. */
+function power(number: string): string {
+  const written = Math.abs(Number(number)) >= 1e5 ? Number(number).toExponential() : number;
+  return written.replace(/e\+?(-?\d+)$/, '\\times10^{$1}');
+}
 const unitHead = (unit: string | undefined): string => (unit ? `(${UNITS[unit] ?? escapeTex(unit)})` : '');
 
 const SPECIAL: Record<string, string> = {
