@@ -17,6 +17,7 @@ import { SkyControls } from './sky-controls.tsx';
 import { SkyLegend } from './sky-legend.tsx';
 import { isShown, useSkySettings } from './sky-settings.ts';
 import { unseenAtCentre } from './unseen-at-centre.ts';
+import { type Backdrop, useImageLayer } from './use-image-layer.ts';
 import { useMarkLayer } from './use-mark-layer.ts';
 import { usePanelView } from './use-panel-view.ts';
 import { useSkyMap } from './use-sky-map.ts';
@@ -33,6 +34,8 @@ interface SkyPanelProps {
   tables: readonly Omit<PanelLayer, 'objects'>[];
   /** What of the field is not shown, in words; empty where all of it is. */
   note?: string;
+  /** An image behind the objects. */
+  backdrop?: Backdrop | undefined;
   hovered: string | null;
   selected: string | null;
   onHover: (key: string | null) => void;
@@ -79,6 +82,7 @@ export function SkyPanel(props: SkyPanelProps) {
         layer.dispose();
       });
   }, [map, visible, palette]);
+  useImageLayer(map, props.backdrop, theme);
   useMarkLayer({
     map,
     marks: shown,

@@ -1,5 +1,6 @@
 import { detection, type updateDetectionRequest } from '@eremite/shared/contracts/detection';
-import { listOf } from '@eremite/shared/contracts/list';
+import type { DocketItem } from '@eremite/shared/contracts/docket';
+import { listOf, type List } from '@eremite/shared/contracts/list';
 import { notePhrases } from '@eremite/shared/contracts/note';
 import { remark } from '@eremite/shared/contracts/remark';
 import { doubtWord, override, review, settlement } from '@eremite/shared/contracts/review';
@@ -33,17 +34,41 @@ export const notePhrasesQuery = (surveyId: string) =>
     staleTime: 300_000,
   });
 
-/** After a decision all that shows it is asked for anew: this detection, the lists, the docket. */
-export const askAnew = (client: QueryClient, detectionId: string) =>
-  Promise.all([
-    client.invalidateQueries({ queryKey: ['detection', detectionId] }),
+/**
+ * After a decision what is said of the detection is asked for anew. Lists that show it are so when one comes back to them:
+ * asking for hundreds of rows after each key would keep the next decision waiting.
+ *
+ * @param isLeft whether one goes on to another detection, so that this one is asked for when one comes back to it
+ */
+export const askAnew = (client: QueryClient, detectionId: string, isLeft = false) => {
+  markDecided(client, detectionId);
+  return Promise.all([
+    client.invalidateQueries({ queryKey: ['detection', detectionId], refetchType: isLeft ? 'none' : 'active' }),
+    client.invalidateQueries({
+      predicate: ({ queryKey }) => queryKey[0] === 'run' && queryKey[3] === detectionId,
+      refetchType: isLeft ? 'none' : 'active',
+    }),
     client.invalidateQueries({
       predicate: ({ queryKey }) =>
-        (queryKey[0] === 'run' && (queryKey[2] === 'verdicts' || queryKey[3] === detectionId)) ||
-        queryKey[2] === 'docket' ||
-        queryKey[2] === 'overview',
+        (queryKey[0] === 'run' && queryKey[2] === 'verdicts') || queryKey[2] === 'docket' || queryKey[2] === 'overview',
+      refetchType: 'none',
     }),
   ]);
+};
+
+/** Ticks the detection off in the lists that are held. */
+function markDecided(client: QueryClient, detectionId: string): void {
+  client.setQueriesData<List<DocketItem>>(
+    { predicate: ({ queryKey }) => isDocket(queryKey) },
+    (page) =>
+      page && {
+        ...page,
+        items: page.items.map((item) => (item.detectionId === detectionId ? { ...item, reviewedByMe: true } : item)),
+      },
+  );
+}
+const isDocket = (key: readonly unknown[]): boolean =>
+  key[0] === 'survey' && key[2] === 'docket' && typeof key[3] === 'string' && key[3].startsWith('?');
 
 function useAct<T>(detectionId: string, work: (value: T) => Promise<unknown>) {
   const client = useQueryClient();

@@ -88,7 +88,15 @@ export function DetectionView(props: DetectionViewProps) {
               onDecide={decisions.mayDecide ? (doubt) => decisions.ask({ what: 'doubt', doubt }) : undefined}
             />
           </div>
-          <EvidenceTabs detail={detail} decisions={decisions} said={said} tab={tab} onTab={onTab} {...link} />
+          <EvidenceTabs
+            detail={detail}
+            settings={settings}
+            decisions={decisions}
+            said={said}
+            tab={tab}
+            onTab={onTab}
+            {...link}
+          />
         </div>
       </div>
       <CommandsBar commands={commands} />

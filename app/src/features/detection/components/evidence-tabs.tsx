@@ -1,4 +1,5 @@
 import { Button, Tab, Tabs } from '@blueprintjs/core';
+import type { CriteriaSettings } from '@eremite/shared/contracts/criteria';
 import type { VerdictDetail } from '@eremite/shared/contracts/verdict';
 import { useMemo, type ReactNode } from 'react';
 import { DataTable } from '#components/data-table/data-table.tsx';
@@ -6,13 +7,16 @@ import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { chosenCandidate, type Decisions } from '../hooks/use-decisions.ts';
 import { DistanceBranches } from './distance-branches.tsx';
 import { History, type Said } from './history.tsx';
+import { ImagesTab } from './images-tab.tsx';
 import { DepthTable, LimitTable } from './limit-table.tsx';
+import { LineTab } from './line-tab.tsx';
 import { MeasuresTable } from './measures-table.tsx';
 import { candidateColumns, neighbourColumns } from './object-columns.tsx';
 import { Robustness } from './robustness.tsx';
 
 interface EvidenceTabsProps {
   detail: VerdictDetail;
+  settings: CriteriaSettings | undefined;
   decisions: Decisions;
   said: Said;
   tab: string;
@@ -91,6 +95,8 @@ export function EvidenceTabs(props: EvidenceTabsProps) {
         <LimitTable limits={limits} />
       </div>,
     ],
+    ['images', 'Images', <ImagesTab key="images" detail={detail} mayAdd={decisions.mayDecide} />],
+    ['line', 'Line', <LineTab key="line" detail={detail} settings={props.settings} mayAdd={decisions.mayDecide} />],
     ['surroundings', 'Surroundings', <MeasuresTable key="surroundings" detail={detail} />],
     ['distance', 'Distance', <DistanceBranches key="distance" detail={detail} />],
     ['stability', 'Stability', <Robustness key="stability" detail={detail} />],

@@ -6,16 +6,18 @@ import { finderChartSvg } from '@eremite/shared/drawing/finder-chart';
 import { toSkyMarks } from '@eremite/shared/drawing/sky-mark';
 import { stripZones } from '@eremite/shared/drawing/strip-zones';
 import { surroundingsStripSvg } from '@eremite/shared/drawing/surroundings-strip';
-import { useCallback, useMemo, type ComponentProps } from 'react';
+import { useCallback, useMemo, useState, type ComponentProps } from 'react';
 import { Loading } from '#components/feedback/loading.tsx';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { SaveMenu } from '#components/save-menu/save-menu.tsx';
 import { SkyPanel } from '#components/sky-map/sky-panel.tsx';
 import { SurroundingsStrip } from '#components/surroundings-strip/surroundings-strip.tsx';
 import { fileNameOf } from '#lib/save-picture.ts';
+import { useBackdrop } from '../hooks/use-backdrop.ts';
 import { useFieldMarks } from '../hooks/use-field-marks.ts';
 import { useOutlines, useSearched, useVerdictMarks } from '../hooks/use-panel-data.ts';
 import { useWhatIf } from '../hooks/use-what-if.ts';
+import { ImageBar } from './image-bar.tsx';
 import { WhatIfPanel } from './what-if.tsx';
 
 interface SkyEvidenceProps {
@@ -39,6 +41,16 @@ export function SkyEvidence({ detail, settings, catalogues, ...link }: SkyEviden
   const whatIf = useWhatIf(detail);
   const { supposedMpc, answer, point } = whatIf;
   const sky = useFieldMarks(detail, marks, windowKms);
+  const [viewReach, setViewReach] = useState(1);
+  const imagery = useBackdrop(detail.verdict.detectionId, centre, viewReach);
+  const { onReach } = sky;
+  const lookAsFarAs = useCallback(
+    (reach: number) => {
+      onReach(reach);
+      setViewReach(reach);
+    },
+    [onReach],
+  );
   const nominal = useOutlines(detail, coverages, sky.field);
   const distanceMpc = supposedMpc ?? detail.distance.angularMpc;
   const outlines = useMemo(() => {
@@ -108,10 +120,13 @@ export function SkyEvidence({ detail, settings, catalogues, ...link }: SkyEviden
         marks={skyMarks}
         tables={tables}
         note={sky.note}
-        onReach={sky.onReach}
+        onReach={lookAsFarAs}
+        backdrop={imagery.backdrop}
         {...(settings ? { drawFinder } : {})}
         {...link}
       />
+      <ProblemCallout error={imagery.error} />
+      <ImageBar {...imagery} centre={centre} />
       {zones ? (
         <SurroundingsStrip
           marks={stripMarks}

@@ -61,7 +61,9 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
         at: new Date().toISOString(),
         ...(ifMatch && { ifMatch }),
       }),
-    onSettled: () => void askAnew(client, id),
+    // Shown even where the word was refused: someone else's is there then.
+    onError: () => void askAnew(client, id),
+    onSuccess: (_, { decision }) => void askAnew(client, id, decision.advances),
   });
   const close = useCallback(() => {
     setAsking(null);
