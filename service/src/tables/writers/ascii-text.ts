@@ -32,6 +32,8 @@ const SPELLED: Record<string, string> = {
 
 /** Printable ASCII for formats that allow nothing else: accents are dropped, letters spelled, the rest becomes "?". */
 export function asciiText(text: string): string {
+  // Nearly every cell is plain already, and a table has millions of them.
+  if (/^[\x20-\x7e]*$/.test(text)) return text;
   return text
     .normalize('NFD')
     .replace(/[\u0300-\u036f]/g, '')

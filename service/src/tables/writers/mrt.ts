@@ -6,6 +6,8 @@ import { utf8Pieces } from './utf8-pieces.ts';
 const LINE = 80;
 const MAX_LABEL = 16;
 const MAX_DECIMALS = 12;
+/** `E+123`. */
+const EXPONENT = 5;
 
 export interface MrtTable extends OutputTable {
   title: string;
@@ -94,7 +96,8 @@ class CellLayout {
       this.#isExponential ||= /e/i.test(text);
       this.#whole = Math.max(this.#whole, point < 0 ? text.length : point);
       this.#decimals = Math.max(this.#decimals, point < 0 ? 0 : text.length - point - 1);
-      this.#exponential = Math.max(this.#exponential, exponential(text).length);
+      // No exponential form has more digits than the text; the exponent takes five places at most.
+      this.#exponential = Math.max(this.#exponential, text.length + EXPONENT);
     }
   }
 

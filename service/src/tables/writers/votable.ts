@@ -56,6 +56,8 @@ function fieldTag(column: OutputColumn, hasFrame: boolean): string {
 
 /** Escapes what XML reserves; characters that XML 1.0 cannot hold become U+FFFD. */
 export function escapeXml(text: string): string {
+  // Nearly every cell is plain already, and a table has millions of them.
+  if (/^[\x20\x21\x23-\x25\x27-\x3b\x3d\x3f-\x7e]*$/.test(text)) return text;
   return text
     .replace(
       /[\0-\x08\x0b\x0c\x0e-\x1f\ufffe\uffff]|[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/g,
