@@ -3,8 +3,11 @@ import { DEGREE } from '@eremite/shared/science/constants';
 import type { VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
 import type { LearntPrior } from '@eremite/shared/science/counterpart/learn-prior';
 import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
+import { candidateRows, estimateHits } from '../matching/hit-estimate.ts';
+import { HitLimitError } from '../matching/hit-limit.ts';
 import { neighbourSearch } from '../matching/neighbour-search.ts';
 import { pairSearch } from '../matching/pair-search.ts';
+import type { SearchPositions } from '../matching/search-positions.ts';
 import { assessStarlight, type AssessmentContext, type StarlightAssessment } from './assess.ts';
 import { type CandidateRow, makeCandidate, type OverrideOf } from './candidate-row.ts';
 import { Claims } from './claims.ts';
@@ -35,6 +38,7 @@ import {
   type SurroundingsContext,
 } from './surroundings.ts';
 import { MEASURED, measureSurroundings } from './surroundings-measures.ts';
+import { removeCounterparts } from './unrelated-counts.ts';
 import { RedshiftField, velocityModelOf, velocityNotes } from './velocity-background.ts';
 import { rateRows, type WeighingModel } from './weigh-objects.ts';
 
@@ -44,6 +48,8 @@ const COUNTERPART_KINDS = ['optical', 'infrared', 'ultraviolet', 'continuum'];
 const FAR_MPC = 5;
 /** Detections to learn from: more would move what is learnt by less than its error. */
 const MOST_PUPILS = 6000;
+/** Candidates of a run in all: more are no screening any more, and would not fit into memory or onto a disk. Our choice. */
+const MOST_CANDIDATES = 20_000_000;
 /** Fewer detections teach nothing. Our choice. */
 const LEAST_DETECTIONS = 100;
 /** And without a distance: neighbours with a distance of their own, degrees. */
@@ -84,6 +90,13 @@ export class Engine {
       prepareCatalogue(catalogue, index, criteria, COUNTERPART_KINDS.includes(catalogue.kind)),
     );
     this.searched = this.catalogues.filter(({ input: { kind } }) => COUNTERPART_KINDS.includes(kind));
+    removeCounterparts(
+      this.searched,
+      this.detections.pick(this.places(0, Math.ceil(this.detections.length / this.step))),
+      this.step,
+      criteria.counterpart.priorFraction,
+      relationOf(criteria),
+    );
     this.pool = buildNeighbourPool(this.catalogues);
     this.masks = new SkyMasks(this.catalogues, criteria);
     this.surroundings = {
@@ -118,11 +131,7 @@ export class Engine {
   /** Candidate rows of each detection of a range, nearest first within each catalogue. */
   private candidatesOf(range: readonly Detection[], overrideOf: OverrideOf | null): CandidateRow[][] {
     const rows: CandidateRow[][] = range.map(() => []);
-    const positions = {
-      raDeg: Float64Array.from(range, ({ raDeg }) => raDeg),
-      decDeg: Float64Array.from(range, ({ decDeg }) => decDeg),
-      radiusArcsec: Float64Array.from(range, ({ searchArcsec }) => searchArcsec),
-    };
+    const positions = positionsOf(range);
     for (const catalogue of this.searched) {
       const pairs = pairSearch(catalogue.grid, positions);
       for (let k = 0; k < pairs.position.length; k++) {
@@ -153,6 +162,24 @@ export class Engine {
   }
 
   /** Places of the pupils [from, to). */
+  /**
+   * Refuses criteria that would make candidates of nearly everything, before any of them is made.
+   *
+   * @throws {HitLimitError} with the count that the whole run would give and the limit
+   */
+  assertBounded(): void {
+    const sample = this.detections.pick(this.places(0, Math.ceil(this.detections.length / this.step)));
+    const positions = positionsOf(sample);
+    const order = Uint32Array.from(sample.keys());
+    let about = 0;
+    for (const { grid } of this.searched) {
+      // The rows in the boxes are an upper bound that costs little.
+      if (this.step * candidateRows(grid, positions, order) <= MOST_CANDIDATES / this.searched.length) continue;
+      about += this.step * estimateHits(grid, positions, order);
+    }
+    if (about > MOST_CANDIDATES) throw new HitLimitError(MOST_CANDIDATES, about);
+  }
+
   private places(from: number, to: number): number[] {
     return Array.from({ length: to - from }, (_, i) => (from + i) * this.step);
   }
@@ -365,6 +392,14 @@ export class Engine {
     });
     return nearest;
   }
+}
+
+function positionsOf(range: readonly Detection[]): SearchPositions {
+  return {
+    raDeg: Float64Array.from(range, ({ raDeg }) => raDeg),
+    decDeg: Float64Array.from(range, ({ decDeg }) => decDeg),
+    radiusArcsec: Float64Array.from(range, ({ searchArcsec }) => searchArcsec),
+  };
 }
 
 /** Rows that are the detection itself, the same source in another HI list, or its counterpart. */

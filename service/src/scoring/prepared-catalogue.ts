@@ -34,6 +34,8 @@ export interface PreparedCatalogue {
   grid: ZoneGrid;
   /** In the criteria's order of preference. */
   bands: PreparedBand[];
+  /** Area behind the densities, square arcsec. */
+  area: number;
   /** Rows per square arcsec, stars left out. */
   density: number;
   moc: Moc | null;
@@ -88,6 +90,7 @@ export function prepareCatalogue(
     rows: roles.rows,
     grid: buildZoneGrid(keepGrid ? raDeg : new Float64Array(0), keepGrid ? decDeg : new Float64Array(0)),
     bands: [],
+    area,
     density: 0,
     moc,
     areaFromRows: !moc,
