@@ -38,7 +38,10 @@ const steps = <R>(
   engine: Engine,
   render: Render<R>,
 ): { [N in keyof ScoringTasks<R>]: (task: ScoringTasks<R>[N]['task']) => ScoringTasks<R>[N]['result'] } => ({
-  extent: () => ({ detections: engine.detections.length, pupils: engine.pupils, learnt: engine.learnt }),
+  extent: () => {
+    engine.assertBounded();
+    return { detections: engine.detections.length, pupils: engine.pupils, learnt: engine.learnt };
+  },
   lessons: ({ from, to, relation }) => engine.lessons(from, to, relation),
   relation: ({ lessons }) => {
     const { criteria } = engine.input;
