@@ -99,7 +99,9 @@ export function Component() {
         <>
           <DataTable
             caption="Docket"
-            columns={columns}
+            columns={
+              items.some(({ moved }) => moved.length > 0) ? columns : columns.filter(({ key }) => key !== 'moved')
+            }
             rows={items}
             rowKey={(item) => item.detectionId}
             isStale={query.isPlaceholderData}

@@ -11,19 +11,22 @@ function concerns(queryKey: readonly unknown[], { detectionId }: SurveyEvent): b
 }
 
 function askAnew(client: QueryClient, surveyId: string, events: readonly SurveyEvent[]): void {
-  const runEnded = events.some(({ action }) => action === 'finished a run' || action === 'started a run');
+  const runEnded = events.some(({ action }) => action === 'finished a run');
+  const isList = ({ queryKey }: { queryKey: readonly unknown[] }): boolean =>
+    (queryKey[0] === 'survey' && queryKey[1] === surveyId) || (queryKey[0] === 'run' && queryKey[2] === 'verdicts');
   void client.invalidateQueries({
-    predicate: ({ queryKey }) => {
-      if (queryKey[0] === 'survey' && queryKey[1] === surveyId) return true;
-      // Lists of verdicts carry what people said; a run itself never changes.
-      if (queryKey[0] === 'run' && queryKey[2] === 'verdicts') return true;
-      return runEnded ? queryKey[0] === 'detection' : events.some((event) => concerns(queryKey, event));
-    },
+    predicate: ({ queryKey }) =>
+      runEnded ? queryKey[0] === 'detection' : events.some((event) => concerns(queryKey, event)),
+  });
+  // What one does oneself is on the page already; the long lists are asked for when others did something.
+  void client.invalidateQueries({
+    predicate: isList,
+    refetchType: events.every(({ mine }) => mine) ? 'none' : 'active',
   });
 }
 
 /** Together within this time, so that a bulk of work is asked for once. */
-const GATHER_MS = 150;
+const GATHER_MS = 400;
 
 /** What others finish in the survey appears without reload. */
 export function useSurveyEvents(surveyId: string): void {

@@ -5,6 +5,7 @@ import { Inject, Injectable } from '@nestjs/common';
 import { and, desc, eq, inArray, isNull, sql } from 'drizzle-orm';
 import { DATABASE, type Database } from '../../database/database.ts';
 
+export type NewReview = typeof reviews.$inferInsert;
 const BATCH = 500;
 
 /** Reads and writes what of people's words holds in a new run. */
@@ -98,7 +99,7 @@ export class CarryOverRepository {
     return found;
   }
 
-  async carry(rows: (typeof reviews.$inferInsert)[], db: Database): Promise<void> {
+  async carry(rows: NewReview[], db: Database): Promise<void> {
     for (let from = 0; from < rows.length; from += BATCH) {
       // A reviewer who has spoken on the later run already is not spoken for.
       await db

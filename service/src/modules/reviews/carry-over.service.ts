@@ -1,11 +1,10 @@
-import type { reviews } from '@eremite/schema';
 import type { Moved } from '@eremite/shared/contracts/evidence-moved';
 import type { VerdictItem } from '@eremite/shared/contracts/verdict';
 import { Injectable, type OnModuleInit } from '@nestjs/common';
 import { type FinishingRun, SurveyHooks } from '../../common/survey-hooks.ts';
 import type { Database } from '../../database/database.ts';
 import { LedgerService } from '../ledger/ledger.service.ts';
-import { CarryOverRepository } from './carry-over.repository.ts';
+import { CarryOverRepository, type NewReview } from './carry-over.repository.ts';
 import { evidenceMoved } from './evidence-moved.ts';
 
 type Run = { id: string; number: number };
@@ -61,7 +60,7 @@ export class CarryOverService implements OnModuleInit {
   async #reviews(surveyId: string, run: Run, only: string | undefined, tx: Database) {
     const words = (await this.carrying.lastWords(surveyId, only, tx)).filter((word) => word.runId !== run.id);
     const compare = await this.#comparison(surveyId, run, words, tx);
-    const kept: (typeof reviews.$inferInsert)[] = [];
+    const kept: NewReview[] = [];
     const back: Parameters<CarryOverRepository['giveBack']>[0] = [];
     for (const { id, ...word } of words) {
       const { detectionId, moved } = compare(word);

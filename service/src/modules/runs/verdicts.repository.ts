@@ -169,6 +169,15 @@ export class VerdictsRepository {
     return row!.count;
   }
 
+  /** The two words of a verdict, without the evidence behind it. */
+  async words(runId: string, detectionId: string, db = this.db) {
+    const [row] = await db
+      .select({ starlight: verdicts.starlight, surroundings: verdicts.surroundings })
+      .from(verdicts)
+      .where(and(eq(verdicts.runId, runId), eq(verdicts.detectionId, detectionId)));
+    return row;
+  }
+
   async find(runId: string, detectionId: string, db = this.db) {
     const [row] = await db
       .select({

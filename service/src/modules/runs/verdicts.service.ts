@@ -77,9 +77,8 @@ export class VerdictsService {
     surveyId?: string,
   ): Promise<{ starlight: StarlightVerdict; surroundings: SurroundingsVerdict } | undefined> {
     if (!(await this.runs.isDone(runId, surveyId))) return undefined;
-    const row = await this.verdicts.find(runId, detectionId);
-    const item = row?.item as VerdictItem | undefined;
-    return item && { starlight: item.starlight, surroundings: item.surroundings };
+    const words = await this.verdicts.words(runId, detectionId);
+    return words as { starlight: StarlightVerdict; surroundings: SurroundingsVerdict } | undefined;
   }
 
   /** The newest finished run of a survey. */

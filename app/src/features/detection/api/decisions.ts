@@ -41,7 +41,6 @@ export const notePhrasesQuery = (surveyId: string) =>
  * @param isLeft whether one goes on to another detection, so that this one is asked for when one comes back to it
  */
 export const askAnew = (client: QueryClient, detectionId: string, isLeft = false) => {
-  markDecided(client, detectionId);
   return Promise.all([
     client.invalidateQueries({ queryKey: ['detection', detectionId], refetchType: isLeft ? 'none' : 'active' }),
     client.invalidateQueries({
@@ -56,14 +55,14 @@ export const askAnew = (client: QueryClient, detectionId: string, isLeft = false
   ]);
 };
 
-/** Ticks the detection off in the lists that are held. */
-function markDecided(client: QueryClient, detectionId: string): void {
+/** Ticks a detection off in the lists that are held, or takes the tick away. */
+export function markDecided(client: QueryClient, detectionId: string, reviewedByMe: boolean): void {
   client.setQueriesData<List<DocketItem>>(
     { predicate: ({ queryKey }) => isDocket(queryKey) },
     (page) =>
       page && {
         ...page,
-        items: page.items.map((item) => (item.detectionId === detectionId ? { ...item, reviewedByMe: true } : item)),
+        items: page.items.map((item) => (item.detectionId === detectionId ? { ...item, reviewedByMe } : item)),
       },
   );
 }

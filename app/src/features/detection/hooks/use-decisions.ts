@@ -10,7 +10,7 @@ import { outbox } from '#lib/outbox/use-outbox.ts';
 import { meQuery } from '#lib/queries/me.ts';
 import { mayLead, mayReview } from '#lib/role.ts';
 import { complain, say } from '#lib/toaster.ts';
-import { askAnew, useTakeBack } from '../api/decisions.ts';
+import { askAnew, markDecided, useTakeBack } from '../api/decisions.ts';
 import { recall, remember } from './last-decision.ts';
 
 /** Which question is open, if any. */
@@ -63,7 +63,10 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
       }),
     // Shown even where the word was refused: someone else's is there then.
     onError: () => void askAnew(client, id),
-    onSuccess: (_, { decision }) => void askAnew(client, id, decision.advances),
+    onSuccess: (_, { decision }) => {
+      if (decision.path === 'reviews') markDecided(client, id, true);
+      void askAnew(client, id, decision.advances);
+    },
   });
   const close = useCallback(() => {
     setAsking(null);
@@ -111,6 +114,7 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
         {
           onSuccess: () => {
             remember(null);
+            markDecided(client, last.detectionId, false);
             void askAnew(client, last.detectionId);
             void say(`Your decision on ${last.name} is taken back.`);
             onUndone(last.detectionId);
