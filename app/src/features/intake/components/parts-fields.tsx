@@ -38,7 +38,7 @@ export function PartsFields({ intake, draft, change, isSettled }: PartsFieldsPro
                   size="small"
                   variant="minimal"
                   text="Take out"
-                  aria-label={`Take ${fileName} out`}
+                  aria-label={`Take out ${fileName}`}
                   disabled={isBusy || !isSettled}
                   onClick={() => remove.mutate(part)}
                 />
