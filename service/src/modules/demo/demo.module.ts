@@ -4,12 +4,14 @@ import { AuthModule } from '../auth/auth.module.ts';
 import { CriteriaModule } from '../criteria/criteria.module.ts';
 import { FilesModule } from '../files/files.module.ts';
 import { IntakesModule } from '../intakes/intakes.module.ts';
+import { ObservationsModule } from '../observations/observations.module.ts';
 import { ReviewsModule } from '../reviews/reviews.module.ts';
 import { RunsModule } from '../runs/runs.module.ts';
 import { EditionsModule } from '../editions/editions.module.ts';
 import { ShortlistsModule } from '../shortlists/shortlists.module.ts';
 import { SurveysModule } from '../surveys/surveys.module.ts';
 import { TeamsModule } from '../teams/teams.module.ts';
+import { DemoObservations } from './demo-observations.ts';
 import { DemoService } from './demo.service.ts';
 
 @Module({
@@ -22,10 +24,11 @@ import { DemoService } from './demo.service.ts';
     CriteriaModule,
     RunsModule,
     ReviewsModule,
+    ObservationsModule,
     ShortlistsModule,
     EditionsModule,
   ],
-  providers: [DemoService, { provide: DEMO_FILLER, useExisting: DemoService }],
+  providers: [DemoObservations, DemoService, { provide: DEMO_FILLER, useExisting: DemoService }],
   exports: [DEMO_FILLER],
 })
 export class DemoModule {}

@@ -21,6 +21,7 @@ import { EditionsService } from '../editions/editions.service.ts';
 import { ShortlistsService } from '../shortlists/shortlists.service.ts';
 import { SurveysService } from '../surveys/surveys.service.ts';
 import { TeamsRepository } from '../teams/teams.repository.ts';
+import { DemoObservations } from './demo-observations.ts';
 import { DEMO_TABLES, demoFile } from './demo-tables.ts';
 
 const PEOPLE: readonly { email: string; name: string; role: TeamRole | 'administrator' }[] = [
@@ -49,6 +50,7 @@ export class DemoService implements DemoFiller {
     private readonly shortlists: ShortlistsService,
     private readonly editions: EditionsService,
     private readonly jobs: JobsService,
+    private readonly observations: DemoObservations,
   ) {}
 
   async fill({ password, report }: { password: string; report: (message: string) => void }) {
@@ -70,6 +72,8 @@ export class DemoService implements DemoFiller {
     report('the demo: a run');
     const { runId, jobId } = await this.runs.start(lead, survey.id, { criteriaId: criteria.id });
     await this.#done(jobId);
+    report('the demo: images and spectra');
+    await this.observations.fill(lead, survey.id);
     report('the demo: reviews');
     await this.#review(lead, reviewer, survey.id, runId);
     return PEOPLE.map(({ email, role }) => ({ email, role }));
