@@ -104,7 +104,8 @@ export function duplicateQuestions(
   const text = `${count} to be a source that another row has too: ${first}.`;
   if (merged) {
     const kept = 'The row of the higher signal-to-noise ratio is kept, the other put aside.';
-    const apart = keptApart > 0 ? ` ${keptApart.toLocaleString('en')} of them are kept apart, as stated.` : '';
+    const some = keptApart === 1 ? 'One of them is' : `${keptApart.toLocaleString('en')} of them are`;
+    const apart = keptApart > 0 ? ` ${some} kept apart, as stated.` : '';
     return [{ level: 'assumed', pointer, text: `${text} ${kept}${apart}` }];
   }
   return [{ level: 'warning', pointer, text: `${text} Set mergeDuplicates to keep the better one of each.` }];

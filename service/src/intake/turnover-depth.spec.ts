@@ -21,8 +21,9 @@ describe('the depth from the counts', () => {
     const truth = depth + width * Math.log(k / (1 - k));
     const found = turnoverDepth({ start: 14, step: 0.25, counts: counts(depth, width) })!;
     expect(Math.abs(found.magnitude - truth)).toBeLessThan(2 * found.uncertainty);
-    expect(found.uncertainty).toBeLessThan(0.3);
-    expect(found.uncertainty).toBeGreaterThanOrEqual(0.125);
+    expect(found.uncertainty).toBeLessThan(0.4);
+    // The bins are 0.25 mag wide.
+    expect(found.uncertainty).toBeGreaterThanOrEqual(0.25);
   });
 
   it('is less sure with fewer objects', () => {

@@ -21,7 +21,8 @@ const LEAST_PEAK = 30;
  * @param histogram counts in bins of equal width, limits left out
  * @returns undefined where the counts show no turn-over: too few objects, or falling from the brightest on
  *
- * Common practice; the uncertainty is half a bin with the Poisson error of the vertex in quadrature.
+ * Common practice; the uncertainty is a bin, for the counts are smoothed over three, with the Poisson error of the vertex
+ * in quadrature.
  */
 export function turnoverDepth({ start, step, counts }: Histogram): TurnoverDepth | undefined {
   const total = counts.reduce((sum, count) => sum + count, 0);
@@ -45,6 +46,6 @@ export function turnoverDepth({ start, step, counts }: Histogram): TurnoverDepth
   const vertexError = curvature < 0 ? Math.min(1, noise / -curvature) : 1;
   return {
     magnitude: start + (peak + 0.5 + shift) * step,
-    uncertainty: step * Math.hypot(0.5, vertexError),
+    uncertainty: step * Math.hypot(1, vertexError),
   };
 }

@@ -39,8 +39,8 @@ export function CoverageMap({ moc }: { moc: string }) {
     return { kept, box, sideDeg, whole, lines: graticule(projection, span / RAD) };
   }, [moc]);
   const { box, kept, lines, sideDeg, whole } = drawn;
-  // Text of about 11 pixels in a map some 420 wide.
-  const letter = box.width / 38;
+  // Text of about 11 pixels: the map is some 420 wide, and at most 300 high.
+  const letter = 11 * Math.max(box.width / 420, box.height / 300);
   const path = (points: readonly (readonly [number, number])[]) =>
     points.map(([x, y], i) => `${i ? 'L' : 'M'}${x.toFixed(5)} ${(-y).toFixed(5)}`).join('');
   return (

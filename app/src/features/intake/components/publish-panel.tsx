@@ -2,9 +2,11 @@ import { Button } from '@blueprintjs/core';
 import type { Intake } from '@eremite/shared/contracts/intake';
 import type { Job } from '@eremite/shared/contracts/job';
 import { useState } from 'react';
+import { Link } from 'react-router-dom';
 import { NoteDialog } from '#components/dialogs/note-dialog.tsx';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { JobProgress } from '#components/job-progress/job-progress.tsx';
+import { paths } from '#config/paths.ts';
 import { count } from '#lib/format/number.ts';
 import { useDiscard, usePublish } from '../api/intakes.ts';
 
@@ -44,6 +46,11 @@ export function PublishPanel({ intake, isUnsettled, onPublished, onDiscarded }: 
         />
         <Button variant="minimal" text="Discard" disabled={isRunning} onClick={() => setAsking(true)} />
       </div>
+      {intake.catalogueId && (
+        <p className="small">
+          It is published: <Link to={paths.catalogue(intake.surveyId, intake.catalogueId)}>to its catalogue</Link>.
+        </p>
+      )}
       {!intake.check.ready && <p className="muted small">Answer what is marked “Say” first.</p>}
       <NoteDialog
         isOpen={asking}
