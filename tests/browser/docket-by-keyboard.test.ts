@@ -81,6 +81,9 @@ describe('a reviewer with nothing but the keyboard', () => {
     await page.keyboard.press('Control+Enter');
     await dialog.waitFor({ state: 'detached' });
     expect(await reviewsOf(id)).toMatchObject([{ note: 'The noise is higher here than stated.' }]);
+    // Deciding goes on to the next.
+    await page.waitForURL((url) => !url.pathname.includes(id));
+    await page.getByRole('group', { name: /^Sky about/ }).waitFor();
   });
 
   it('types o, n and j into a note without anything happening', async () => {

@@ -44,8 +44,8 @@ export const COMMANDS: readonly KeyedCommand[] = [
   { id: 'settle', label: 'settle…', group: 'Decide', combo: 's' },
   { id: 'shortlist', label: 'shortlist', group: 'Decide', combo: 'l' },
   { id: 'undo', label: 'undo my last decision', group: 'Decide', combo: 'z' },
-  { id: 'nextCandidate', label: 'choose the next object', group: 'Evidence', combo: ']' },
-  { id: 'previousCandidate', label: 'choose the object before', group: 'Evidence', combo: '[' },
+  { id: 'nextCandidate', label: 'choose the next object', group: 'Evidence', combo: '.' },
+  { id: 'previousCandidate', label: 'choose the object before', group: 'Evidence', combo: ',' },
   { id: 'acceptCandidate', label: 'make the chosen object the counterpart…', group: 'Evidence', combo: 'c' },
   { id: 'rejectCandidate', label: 'reject the chosen object…', group: 'Evidence', combo: 'x' },
   { id: 'doubt', label: 'clear or confirm a doubt…', group: 'Evidence', combo: 'd' },
@@ -66,8 +66,8 @@ export type KeyMap = Partial<Record<CommandId, string>>;
 export const comboOf = (id: CommandId, keys: KeyMap): string =>
   keys[id] ?? COMMANDS.find((command) => command.id === id)!.combo;
 
-/** Keys that mean something already: the help sheet, moving in the page, closing a dialog. */
-const TAKEN = new Set(['shift+?', '?', 'tab', 'shift+tab', 'escape', 'space', 'arrowup', 'arrowdown']);
+/** Keys that mean something already: the help sheet, the sky panel, moving in the page, closing a dialog. */
+const TAKEN = new Set(['shift+?', '?', '[', ']', 'm', 'tab', 'shift+tab', 'escape', 'space', 'arrowup', 'arrowdown']);
 
 /**
  * Why a key cannot be given to a command; undefined where it can.
