@@ -9,14 +9,24 @@ const sorted = sortedSample(values);
 describe('stretcher', () => {
   it.each(STRETCHES)('%s runs from dark to bright and never falls', (stretch) => {
     const brightness = stretcher(stretch, sorted, 99);
-    const seen = [-5, 0, 100, 3000, 5000, 9000, 9999, 1e6].map(brightness);
+    const seen = [-1e6, 0, 100, 3000, 5000, 9000, 9999, 1e6].map(brightness);
     expect(seen[0]).toBe(0);
     expect(seen.at(-1)).toBe(1);
     expect([...seen].sort((a, b) => a - b)).toEqual(seen);
   });
 
   it('cuts as much above as below', () => expect(cutsOf(sorted, 98)).toEqual({ low: 100, high: 9900 }));
-  it('asinh lifts what is faint', () => expect(stretcher('asinh', sorted, 100)(1000)).toBeGreaterThan(0.25));
+  it('asinh keeps blank sky dark and lifts what is faint above it', () => {
+    // Sky of sigma 1 about 100 with one bright object.
+    const sky = Float32Array.from({ length: 2001 }, (_, i) => 100 + 3 * ((i - 1000) / 1000) ** 3);
+    const image = sortedSample(Float32Array.from([...sky, 5000]));
+    const brightness = stretcher('asinh', image, 100);
+    expect(brightness(100)).toBeLessThan(0.3);
+    expect(brightness(110)).toBeGreaterThan(brightness(100) + 0.15);
+    expect(stretcher('linear', image, 100)(110)).toBeLessThan(0.01);
+    const blank = stretcher('asinh', sortedSample(sky), 99.5);
+    expect(blank(103)).toBeLessThan(0.65);
+  });
   it('shows an even image in the middle', () => {
     expect(stretcher('linear', sortedSample(new Float32Array(50).fill(7)), 99)(7)).toBe(0.5);
   });

@@ -10,8 +10,8 @@ export interface Cuts {
 
 /** Values looked at to choose the cuts of a large image. */
 const MOST_SAMPLED = 40_000;
-/** How far the asinh stretch lifts: linear up to a tenth of the range, logarithmic beyond. Choice. */
-const SOFTENING = 10;
+/** The asinh stretch in sigmas of the sky: dark below the first, in proportion up to the second, bright at least at the third. Choice. */
+const ASINH_SIGMAS = { dark: -1.5, linear: 2, bright: 12 } as const;
 
 /** A sorted sample of the values that are known. */
 export function sortedSample(values: Float32Array): Float32Array {
@@ -41,11 +41,20 @@ export function stretcher(stretch: Stretch, sorted: Float32Array, percent: numbe
   const { low, high } = cutsOf(sorted, percent);
   const part = (value: number) => Math.min(1, Math.max(0, (value - low) / (high - low)));
   if (stretch === 'linear') return part;
-  if (stretch === 'asinh') {
-    const full = Math.asinh(SOFTENING);
-    return (value) => Math.asinh(SOFTENING * part(value)) / full;
-  }
+  if (stretch === 'asinh') return aboutSky(sorted, high);
   return (value) => rank(sorted, value) / Math.max(1, sorted.length);
+}
+
+/** Light above the sky, so that blank sky stays dark however little else there is in the image. */
+function aboutSky(sorted: Float32Array, high: number): (value: number) => number {
+  const at = (share: number) => sorted[Math.floor(share * (sorted.length - 1))] ?? 0;
+  const sky = at(0.5);
+  // Half the range of the middle 68 per cent: one sigma of a Gaussian.
+  const sigma = (at(0.8413) - at(0.1587)) / 2 || 1;
+  const dark = sky + ASINH_SIGMAS.dark * sigma;
+  const scale = ASINH_SIGMAS.linear * sigma;
+  const full = Math.asinh((Math.max(high, sky + ASINH_SIGMAS.bright * sigma) - dark) / scale);
+  return (value) => Math.min(1, Math.max(0, Math.asinh((value - dark) / scale) / full));
 }
 
 /** How many of the sorted values are below. */

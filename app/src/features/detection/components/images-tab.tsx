@@ -4,7 +4,7 @@ import { Loading } from '#components/feedback/loading.tsx';
 import { ProblemCallout } from '#components/feedback/problem-callout.tsx';
 import { fixed, significant } from '#lib/format/number.ts';
 import { observationsQuery } from '../api/observations.ts';
-import { isImage, type ImageObservation } from '../hooks/use-backdrop.ts';
+import { finestFirst, type ImageObservation } from '../hooks/use-backdrop.ts';
 import { AddObservations } from './add-observations.tsx';
 import { BandStrip } from './band-strip.tsx';
 import { ObservationFacts } from './observation-facts.tsx';
@@ -18,7 +18,7 @@ interface ImagesTabProps {
 export function ImagesTab({ detail, mayAdd }: ImagesTabProps) {
   const id = detail.verdict.detectionId;
   const { data, error, isPending } = useQuery(observationsQuery(id));
-  const images = data?.items.filter(isImage) ?? [];
+  const images = finestFirst(data?.items ?? []);
   const radius = detail.searchRadiusArcsec;
   return (
     <section className="stack">

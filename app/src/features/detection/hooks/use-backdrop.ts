@@ -15,7 +15,11 @@ const BLINK_MS = 900;
 const WIDEST = 14_400;
 
 export type ImageObservation = Observation & { image: NonNullable<Observation['image']> };
-export const isImage = (item: Observation): item is ImageObservation => item.image !== null;
+const isImage = (item: Observation): item is ImageObservation => item.image !== null;
+
+/** The images among what there is, the one with the finest pixels first. */
+export const finestFirst = (items: readonly Observation[]): ImageObservation[] =>
+  items.filter(isImage).sort((a, b) => a.image.pixelArcsec - b.image.pixelArcsec);
 
 /** How far the image reaches from the detection, arcsec. */
 export function reachOf({ image }: ImageObservation, centre: { raDeg: number; decDeg: number }): number {
@@ -35,7 +39,7 @@ export function useLook(): Look {
 export function useBackdrop(detectionId: string, centre: { raDeg: number; decDeg: number }, viewReach: number) {
   const { shown, blinks } = useImageSettings();
   const { data } = useQuery(observationsQuery(detectionId));
-  const images = useMemo(() => data?.items.filter(isImage) ?? [], [data]);
+  const images = useMemo(() => finestFirst(data?.items ?? []), [data]);
   const chosen = shown === null ? undefined : (images.find(({ label }) => label === shown) ?? images[0]);
   useBlinking(blinks && shown !== null, images, chosen);
   const full = chosen ? Math.min(WIDEST, reachOf(chosen, centre)) : 1;
