@@ -25,3 +25,15 @@ export function recall(userId: string): LastDecision | null {
     return null;
   }
 }
+
+let underWay = 0;
+/** Counts a decision that is being sent while one goes on already: what it came to cannot be undone before it is known. */
+export async function whileUnderWay<T>(work: Promise<T>): Promise<T> {
+  underWay += 1;
+  try {
+    return await work;
+  } finally {
+    underWay -= 1;
+  }
+}
+export const isUnderWay = (): boolean => underWay > 0;

@@ -32,14 +32,14 @@ interface CommandContext {
 export function useCommands(context: CommandContext): Command[] {
   const { detail, decisions, shortlisting, chosen, onChoose, onTab, onNext, onPrevious, onBack, onReturn } = context;
   return useMemo(() => {
-    const { mayDecide, maySettle, isPending, ask, asking, decide, undo } = decisions;
+    const { mayDecide, maySettle, isPending, ask, asking, decideAndGo, undo } = decisions;
     const { verdict, candidates, doubts, runId } = detail;
     const off = isPending || asking !== null;
     const agree = () => {
       const { starlight, surroundings, name } = verdict;
       const done = `You agreed: ${starlight}, ${surroundings}.`;
       const json = { runId, starlight, surroundings, note: '' };
-      decide({ path: 'reviews', json, what: `Agreeing with ${name}`, done, advances: true });
+      decideAndGo({ path: 'reviews', json, what: `Agreeing with ${name}`, done, advances: true });
     };
     const choose = (by: 1 | -1) => () => {
       const at = chosen ? candidates.indexOf(chosen) : by > 0 ? -1 : candidates.length;

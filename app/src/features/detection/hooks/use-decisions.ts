@@ -6,12 +6,13 @@ import { useCallback, useState } from 'react';
 import { rowKey } from '@eremite/shared/drawing/sky-mark';
 import { ApiError } from '#lib/api-error.ts';
 import { dropDraft } from '#lib/drafts.ts';
+import type { Waiting } from '#lib/outbox/outbox.ts';
 import { outbox } from '#lib/outbox/use-outbox.ts';
 import { meQuery } from '#lib/queries/me.ts';
 import { mayLead, mayReview } from '#lib/role.ts';
 import { complain, say } from '#lib/toaster.ts';
 import { askAnew, markDecided, useTakeBack } from '../api/decisions.ts';
-import { recall, remember } from './last-decision.ts';
+import { isUnderWay, recall, remember, whileUnderWay } from './last-decision.ts';
 
 /** Which question is open, if any. */
 export type Asking =
@@ -51,16 +52,8 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
   const takeBack = useTakeBack(id);
   const send = useMutation({
     networkMode: 'always',
-    mutationFn: ({ decision: { path, json, what }, ifMatch }: { decision: Decision; ifMatch?: string }) =>
-      outbox.submit({
-        key: crypto.randomUUID(),
-        userId: me.id,
-        path: `/detections/${id}/${path}`,
-        json,
-        what,
-        at: new Date().toISOString(),
-        ...(ifMatch && { ifMatch }),
-      }),
+    mutationFn: ({ decision, ifMatch }: { decision: Decision; ifMatch?: string }) =>
+      outbox.submit(waitingOf(me.id, id, decision, ifMatch)),
     // Shown even where the word was refused: someone else's is there then.
     onError: () => void askAnew(client, id),
     onSuccess: (_, { decision }) => {
@@ -68,6 +61,27 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
       void askAnew(client, id, decision.advances);
     },
   });
+  /** What a review that went out came to, for undoing it. */
+  const keepLast = (answer: unknown) => {
+    const made = review.safeParse(answer);
+    if (made.success) remember({ userId: me.id, reviewId: made.data.id, detectionId: id, name: detail.verdict.name });
+  };
+  /** Goes on at once and sends meanwhile: agreeing has no words that could be lost, and a refusal is told. */
+  const decideAndGo = (decision: Decision) => {
+    markDecided(client, id, true);
+    onDone();
+    void whileUnderWay(outbox.submit(waitingOf(me.id, id, decision))).then(
+      (result) => {
+        if (result.state === 'sent') keepLast(result.answer);
+        void say(result.state === 'sent' ? decision.done : keptWords(decision));
+        void askAnew(client, id);
+      },
+      (error: unknown) => {
+        markDecided(client, id, false);
+        void complain(new Error(`${decision.what}: ${error instanceof Error ? error.message : 'it was refused.'}`));
+      },
+    );
+  };
   const close = useCallback(() => {
     setAsking(null);
     send.reset();
@@ -80,12 +94,8 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
         onSuccess: (result) => {
           if (decision.draft) dropDraft(decision.draft);
           close();
-          const made = result.state === 'sent' ? review.safeParse(result.answer) : undefined;
-          if (decision.path === 'reviews' && made?.success)
-            remember({ userId: me.id, reviewId: made.data.id, detectionId: id, name: detail.verdict.name });
-          void say(
-            result.state === 'sent' ? decision.done : `${decision.what}: kept, it is sent when the service is back.`,
-          );
+          if (result.state === 'sent' && decision.path === 'reviews') keepLast(result.answer);
+          void say(result.state === 'sent' ? decision.done : keptWords(decision));
           if (decision.advances) onDone();
         },
         onError: (error) => {
@@ -103,10 +113,12 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
     error: send.error ?? takeBack.error,
     collision: collisionOf(send.error),
     decide,
+    decideAndGo,
     takeBack: (path: string, note: string) =>
       takeBack.mutate({ path, note }, { onSuccess: () => (close(), void say('Taken back.')) }),
     /** Takes the last review of this sitting back, wherever it was given, and answers on which detection it was. */
     undo: (onUndone: (detectionId: string) => void) => {
+      if (isUnderWay()) return void say('Your last decision is still being sent; undo it in a moment.');
       const last = recall(me.id);
       if (!last) return void say('There is nothing to undo.');
       takeBack.mutate(
@@ -123,6 +135,20 @@ export function useDecisions(detail: VerdictDetail, role: TeamRole, onDone: () =
         },
       );
     },
+  };
+}
+
+const keptWords = ({ what }: Decision): string => `${what}: kept, it is sent when the service is back.`;
+
+function waitingOf(userId: string, detectionId: string, { path, json, what }: Decision, ifMatch?: string): Waiting {
+  return {
+    key: crypto.randomUUID(),
+    userId,
+    path: `/detections/${detectionId}/${path}`,
+    json,
+    what,
+    at: new Date().toISOString(),
+    ...(ifMatch && { ifMatch }),
   };
 }
 
