@@ -36,6 +36,6 @@ export const counterpart: MethodEntry = {
     'counterpart/starlight#starlightVerdict',
   ],
   validity:
-    'In a deep catalogue position alone decides nothing; the magnitude does. Stars by the tables are left out. What a person accepted or rejected is taken as said.',
+    'In a deep catalogue position alone decides nothing; the magnitude does. Stars by the tables are left out. What a person accepted or rejected is taken as said. Where several detections claim one galaxy, all assignments that use no galaxy twice are summed; who loses its galaxy so is contested, not dark. The counts of unrelated objects leave out the counterparts to be expected of the detections themselves.',
   sources: ['Sutherland & Saunders (1992), MNRAS 259, 413', 'Budavári & Szalay (2008), ApJ 679, 301'],
 };

@@ -42,7 +42,7 @@ export const absence: MethodEntry = {
     'photometry/faint-excess#crowdingChance',
   ],
   validity:
-    'The power is the largest of the bands’, for their detections are not independent. At Q = 0.97 a power of 0.95 leaves P(missed) at 0.62: most “dark” sources would be missed galaxies; dark at 0.8 needs 0.992. Real catalogues reach less deep for extended sources than noise allows, hence the penalty.',
+    'The power is the largest of the bands’, for their detections are not independent. At Q = 0.97 a power of 0.95 leaves P(missed) at 0.62: most “dark” sources would be missed galaxies; dark at 0.8 needs 0.992. Real catalogues reach less deep for extended sources than noise allows, hence the penalty. Bright stars and large galaxies in front hide; the share of the positional probability under them counts, not the area. A crowd of faint objects against the ring about the place, at the chance of the criteria, may be a galaxy in pieces: nothing is called dark there.',
   sources: [
     'depth of extended sources: background-limited noise (textbook)',
     'Shen et al. (2003), MNRAS 343, 978, sizes (coefficients from memory)',

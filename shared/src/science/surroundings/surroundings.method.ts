@@ -15,7 +15,7 @@ export const surroundings: MethodEntry = {
     [String.raw`\Delta v`, 'velocity difference', 'km/s'],
     [String.raw`M_{\mathrm{faint}}`, 'faintest neighbour that counts', 'mag'],
     [String.raw`M_{\mathrm{lim}}`, 'what the redshift survey reaches at that distance', 'mag'],
-    [String.raw`V`, 'volume of the window: π R_{max}^{2} × 2 Δv_{max}/H_{0}', 'Mpc³'],
+    [String.raw`V`, 'volume of the window, π R² × 2 Δv / H₀ at their limits', 'Mpc³'],
     [String.raw`\varphi^{*}, M^{*}, \alpha`, 'luminosity function', 'h³ Mpc⁻³, mag, –'],
   ],
   criteria: [

@@ -37,7 +37,7 @@ export const velocity: MethodEntry = {
     'counterpart/velocity-background#clusteredShare',
   ],
   validity:
-    'Objects without a redshift keep a weight of one: the lack of a redshift is never evidence. Redshifts above 0.3 or below −0.01 are ignored against so near a detection. A discordant redshift keeps the share of bad redshifts, not zero.',
+    'Objects without a redshift keep a weight of one: the lack of a redshift is never evidence. Redshifts above 0.3 or below −0.01 are ignored against so near a detection. A discordant redshift keeps the share of bad redshifts, not zero. The spread of unrelated redshifts is measured from 500 or more of the run itself, the share that clusters from 200 or more in rings about the detections, and in a dense place, such as a cluster, the share within 20 arcmin is used; the notes of a run say which.',
   sources: [
     'Greisen et al. (2006), A&A 446, 747',
     'velocity weight and its floor: measured on published assignments; a starting point',

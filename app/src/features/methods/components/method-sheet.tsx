@@ -15,7 +15,7 @@ export function MethodSheet({ entry }: { entry: MethodEntry }) {
       </div>
       <div className="panel__body stack">
         <p>{entry.summary}</p>
-        <ul className="method__formulas" aria-label="Formulas">
+        <ul className="method__formulas" aria-label="Formulas" tabIndex={0}>
           {entry.formulas.map((formula) => (
             <li key={formula}>
               <Formula tex={formula} display />
