@@ -16,9 +16,9 @@ export const velocity: MethodEntry = {
     [String.raw`\Delta v`, 'velocity difference', 'km/s'],
     [String.raw`B_{v}`, 'weight of the velocity', ''],
     [
-      String.raw`p_{\mathrm{chance}}`,
-      'density of unrelated redshifts at that velocity, with a clustered part',
-      '1/(km/s)',
+      String.raw`p, s`,
+      'density of unrelated redshifts at that velocity, and the share of them that clusters',
+      '1/(km/s), –',
     ],
     [String.raw`\sigma_{\mathrm{int}}`, 'scatter of stars about gas; at least a quarter of W50', 'km/s'],
   ],
