@@ -15,6 +15,8 @@ const SEED = 20_261_201;
 const HERE = new URL('../', import.meta.url);
 const OUT = process.argv[2] ? pathToFileURL(`${process.argv[2]}/`) : new URL('observations/', HERE);
 const ZERO_POINT = 30;
+/** Share of a star's light that the instrument spreads widely. Choice. */
+const WING_SHARE = 0.03;
 /** Counts of noise that a stored step is: coarse enough to pack well, fine enough to lose nothing. */
 const STEPS_PER_SIGMA = 4;
 
@@ -114,8 +116,9 @@ function draw(band: Band, raDeg: number, decDeg: number, random: Random): Buffer
     const north = (thing.decDeg - decDeg) * 3600;
     const flux = 10 ** (0.4 * (ZERO_POINT - thing.mag));
     const core = seeingArcsec / 2.35482;
-    // Bright light reaches far: out to where it is lost in the noise.
-    const reach = Math.max(6 * core, 6 * thing.size) * Math.max(1, Math.log10(flux / noise) / 3);
+    // Bright light reaches far: out to where its wings are lost in the noise.
+    const wings = ((WING_SHARE * flux * pixelArcsec ** 2) / (2 * Math.PI * 9 * core ** 2) / (0.1 * noise)) ** (1 / 3);
+    const reach = Math.max(6 * core, 6 * thing.size, 3 * core * wings);
     if (!Number.isFinite(flux) || Math.abs(east) > half + reach || Math.abs(north) > half + reach) continue;
     addThing(values, band, { east, north, flux, core, size: thing.size, reach });
   }
@@ -144,11 +147,11 @@ function addThing(values: Float64Array, { pixels, pixelArcsec }: Band, spot: Spo
   for (let y = Math.max(0, Math.ceil(y0 - span)); y < Math.min(pixels, y0 + span); y++) {
     for (let x = Math.max(0, Math.ceil(x0 - span)); x < Math.min(pixels, x0 + span); x++) {
       const r = Math.hypot(x - x0, y - y0) * pixelArcsec;
-      const wing = 0.03 / (2 * Math.PI * (3 * core) ** 2) / (1 + (r / (3 * core)) ** 2) ** 1.5;
+      const wing = WING_SHARE / (2 * Math.PI * (3 * core) ** 2) / (1 + (r / (3 * core)) ** 2) ** 1.5;
       const profile =
         size > 0
           ? Math.exp(-Math.sqrt(r * r + core * core) / scale) / (2 * Math.PI * scale ** 2)
-          : (0.97 * Math.exp(-0.5 * (r / core) ** 2)) / (2 * Math.PI * core ** 2) + wing;
+          : ((1 - WING_SHARE) * Math.exp(-0.5 * (r / core) ** 2)) / (2 * Math.PI * core ** 2) + wing;
       values[y * pixels + x]! += flux * area * profile;
     }
   }
