@@ -18,6 +18,7 @@ await build({
       input: {
         run: join(here, 'run.ts'),
         intake: join(here, 'intake-run.ts'),
+        survey: join(here, 'survey-run.ts'),
         worker: join(service, 'matching.worker.ts'),
       },
       output: { entryFileNames: '[name].mjs', chunkFileNames: '[name]-[hash].mjs' },
@@ -29,9 +30,11 @@ const asked = process.argv.slice(2);
 const start = (script, args) =>
   spawnSync(process.execPath, [join(here, 'dist', script), ...args], { stdio: 'inherit' });
 const runs = [];
-if (asked[0] !== 'intake') runs.push(['run.mjs', asked]);
+const survey = asked[0] === 'plan' || asked[0] === 'run';
+if (asked[0] !== 'intake' && !survey) runs.push(['run.mjs', asked]);
+if (survey || asked.length === 0) runs.push(['survey.mjs', asked]);
 if (asked[0] === 'intake' || asked.length === 0) runs.push(['intake.mjs', asked.slice(1)]);
-if (asked[0] === '--list') console.log('intake');
+if (asked[0] === '--list') console.log('intake\nplan\nrun');
 for (const [script, args] of runs) {
   const { status } = start(script, args);
   if (status !== 0) process.exitCode = status ?? 1;

@@ -105,3 +105,48 @@ describe('a run that cannot be done', () => {
     expect((await ledgerOf(lead, surveyId)).filter(({ action }) => action === 'finished a run')).toHaveLength(2);
   });
 });
+
+describe('a run whose threads or rows need more memory than they may have', () => {
+  let tight: TestApp | undefined;
+  afterAll(() => tight?.close());
+  const failedRun = async (limits: Parameters<typeof startApp>[0], settings: object) => {
+    await tight?.close();
+    tight = await startApp(limits);
+    const { lead, survey } = await aStaffedSurvey(tight);
+    const { hi, deep } = crowdedTables(1500);
+    await aCatalogue(lead, survey.id, hi);
+    await aCatalogue(lead, survey.id, deep);
+    const { id } = await someCriteria(lead, survey.id, { ...QUICK_SETTINGS, ...settings });
+    const { jobId, runId } = (await lead.post(`/surveys/${survey.id}/runs`, { criteriaId: id })).body;
+    const job = await jobEnd(lead, jobId);
+    expect(job.state).toBe('failed');
+    const run = (await lead.get(`/runs/${runId}`)).body;
+    expect([run.state, run.error]).toEqual(['failed', job.error.detail]);
+    expect(await tight.db.$count(verdicts, eq(verdicts.runId, runId))).toBe(0);
+    return { lead, surveyId: survey.id, error: job.error as { title: string; detail: string } };
+  };
+
+  it(
+    'fails with a clear reason when a thread dies of it, and the service does the next run',
+    { timeout: 300_000 },
+    async () => {
+      // Hundreds of candidates each are more than so small a heap holds.
+      const wide = { position: { searchRadiusArcsec: 3600 } };
+      const { lead, surveyId, error } = await failedRun({ threadMemoryBytes: 48 * 2 ** 20 }, wide);
+      expect(error.detail).toMatch(/A thread that scores ended early.*memory.*48 MiB, EREMITE_THREAD_MEMORY/);
+      const narrow = await someCriteria(lead, surveyId, { ...QUICK_SETTINGS, position: { searchRadiusArcsec: 5 } });
+      expect((await aRun(lead, surveyId, narrow.id)).state).toBe('done');
+    },
+  );
+
+  it(
+    'is refused when the rows that matter are too many, with their number and the limit',
+    { timeout: 300_000 },
+    async () => {
+      const { error } = await failedRun({ runMemoryBytes: 2 ** 17 }, {});
+      expect(error.detail).toMatch(
+        /More than [\d,]+ rows \([\d.]+ MiB\).*allows a run 0\.1 MiB \(EREMITE_RUN_MEMORY\)/,
+      );
+    },
+  );
+});

@@ -46,6 +46,7 @@ const variables = z.object({
   EREMITE_JOB_WORKERS: z.coerce.number().int().min(0).max(64).default(2),
   EREMITE_THREADS: z.coerce.number().int().min(1).max(256).optional(),
   EREMITE_RUN_MEMORY: bytes.prefault('1GiB'),
+  EREMITE_THREAD_MEMORY: bytes.prefault('1GiB'),
   EREMITE_TRUST_PROXY: z.coerce.number().int().min(0).max(10).default(0),
   EREMITE_ACCESS_MINUTES: z.coerce.number().positive().max(1440).default(60),
 });
@@ -81,6 +82,8 @@ export interface Env {
   readonly threads: number;
   /** Bytes of catalogue rows that a run may hold. */
   readonly runMemoryBytes: number;
+  /** Bytes of heap that one thread of a run may use besides those rows. */
+  readonly threadMemoryBytes: number;
   readonly trustProxy: number;
   readonly accessMinutes: number;
 }
@@ -138,6 +141,7 @@ export function readEnv(overrides: Partial<Env> = {}): Env {
     jobWorkers: value.EREMITE_JOB_WORKERS,
     threads: value.EREMITE_THREADS ?? readThreads(),
     runMemoryBytes: value.EREMITE_RUN_MEMORY,
+    threadMemoryBytes: value.EREMITE_THREAD_MEMORY,
     trustProxy: value.EREMITE_TRUST_PROXY,
     accessMinutes: value.EREMITE_ACCESS_MINUTES,
     ...overrides,

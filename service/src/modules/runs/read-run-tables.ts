@@ -101,7 +101,7 @@ function spend(budget: Budget, { rows, columns }: PackedColumns): void {
     budget.bytes += 'kind' in column ? column.offsets.byteLength + column.bytes.byteLength : column.byteLength;
   }
   if (budget.bytes <= budget.limit) return;
-  const mib = (bytes: number) => `${Math.round(bytes / 2 ** 20).toLocaleString('en')} MiB`;
+  const mib = (bytes: number) => `${(bytes / 2 ** 20).toLocaleString('en', { maximumFractionDigits: 1 })} MiB`;
   throw new AppError(
     'SELECTS_EVERYTHING',
     `More than ${budget.rows.toLocaleString('en')} rows (${mib(budget.bytes)}) lie where they can matter to the detections; this installation allows a run ${mib(budget.limit)} (EREMITE_RUN_MEMORY). Use narrower search radii or fewer tables.`,

@@ -13,6 +13,8 @@ export interface RunHooks {
   threads: number;
   /** Most bytes of rows that a run may hold. */
   memoryBytes: number;
+  /** Most bytes of heap of one thread. */
+  threadMemoryBytes: number;
   signal: AbortSignal;
   progress(fraction: number, message: string): void;
   /** Stores a batch; threads run at most a few units ahead of it. */
@@ -34,6 +36,7 @@ export async function scoreInThreads(source: RunSource, hooks: RunHooks): Promis
   signal.throwIfAborted();
   const pool = openTaskPool<ScoringAsked | ReadingAsked, unknown, ThreadFailure>(workerUrl('run'), {
     threads,
+    heapMiB: Math.max(16, Math.floor(hooks.threadMemoryBytes / 2 ** 20)),
     restore: errorOf,
   });
   let onAbort!: () => void;
@@ -46,7 +49,7 @@ export async function scoreInThreads(source: RunSource, hooks: RunHooks): Promis
     try {
       return await Promise.race([pool.ask(asked), aborted]);
     } catch (error) {
-      throw signal.aborted ? signal.reason : asFailure(error);
+      throw signal.aborted ? signal.reason : asFailure(error, hooks.threadMemoryBytes);
     }
   };
   /** The batch being stored: whoever tidies up after the run must not meet it still on its way. */
@@ -83,13 +86,13 @@ export async function scoreInThreads(source: RunSource, hooks: RunHooks): Promis
 }
 
 /** What the death of a thread is to whoever started the run; refusals are that already. */
-function asFailure(error: unknown): Error {
+function asFailure(error: unknown, threadMemoryBytes: number): Error {
   if (error instanceof AppError) return error;
   const { message, stack } = error instanceof Error ? error : new Error(String(error));
   if ((error as { code?: string }).code === 'ERR_WORKER_OUT_OF_MEMORY' || /worker exited/.test(message)) {
     const failure = new AppError(
       'RUN_FAILED',
-      'A thread that scores ended early; it may have run out of memory. The tables and earlier runs are as they were.',
+      `A thread that scores ended early; it may have run out of memory (it is allowed ${Math.floor(threadMemoryBytes / 2 ** 20)} MiB, EREMITE_THREAD_MEMORY). The tables and earlier runs are as they were.`,
     );
     return Object.assign(failure, { cause: error });
   }

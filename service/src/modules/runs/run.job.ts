@@ -75,6 +75,7 @@ export class RunJob implements JobHandler<Payload, { runId: string }> {
     const outcome = await scoreInThreads(source, {
       threads: this.env.threads,
       memoryBytes: this.env.runMemoryBytes,
+      threadMemoryBytes: this.env.threadMemoryBytes,
       signal,
       progress: (fraction, message) => progress(fraction * 0.99, message),
       take: (verdicts) => this.#store(runId, verdicts, ids, counts),
