@@ -84,7 +84,7 @@ describe('from a settled detection to a referee', () => {
     await page.getByRole('heading', { name: /^Edition \d+$/, level: 1 }).waitFor();
     await page.getByRole('table', { name: 'Sources of the edition' }).getByText(name).waitFor();
     await page.getByText(/^What changed since edition/).waitFor();
-    await page.getByText(new RegExp(`Added: ${name}`)).waitFor();
+    await page.getByText(`Added: ${name}`).waitFor();
   });
 
   it('hands it out in every format', async () => {

@@ -1,4 +1,5 @@
-import { once } from 'node:events';
+import { Readable } from 'node:stream';
+import { pipeline } from 'node:stream/promises';
 import { SCREENING_CAUTION } from '@eremite/shared/contracts/words';
 import type { Response } from 'express';
 import type { TableAnswer } from '../../edition/columns/table-column.ts';
@@ -32,9 +33,10 @@ export async function sendPieces(
 ): Promise<void> {
   response.setHeader('Content-Type', type);
   response.setHeader('Content-Disposition', `attachment; filename="${fileName}"`);
-  for await (const piece of pieces) {
-    if (response.destroyed) return;
-    if (!response.write(piece)) await Promise.race([once(response, 'drain'), once(response, 'close')]);
+  try {
+    await pipeline(Readable.from(pieces, { objectMode: false }), response);
+  } catch (error) {
+    // Whoever asked went away: nothing is left to be said to them.
+    if ((error as NodeJS.ErrnoException).code !== 'ERR_STREAM_PREMATURE_CLOSE') throw error;
   }
-  response.end();
 }
