@@ -2,16 +2,17 @@ import { Button, ButtonGroup } from '@blueprintjs/core';
 import { type PanelPoint, rayleighRadius } from '@eremite/shared/drawing/panel-plane';
 import type { SkyMark } from '@eremite/shared/drawing/sky-mark';
 import VectorLayer from 'ol/layer/Vector.js';
+import type OlMap from 'ol/Map.js';
 import VectorSource from 'ol/source/Vector.js';
 import { useEffect, useId, useMemo, useState, type KeyboardEvent } from 'react';
 import { SaveMenu } from '#components/save-menu/save-menu.tsx';
 import { usePreferences } from '#lib/preferences.ts';
 import { fileNameOf } from '#lib/save-picture.ts';
-import { Frame, type PanelView } from './frame.tsx';
 import { markFacts } from './mark-label.ts';
 import { measure, measuredText } from './measure.ts';
 import { hatchedFeatures, outlineFeatures, type Outlines } from './outline-layers.ts';
 import { readPalette, type Palette } from './palette.ts';
+import { PanelFrame } from './panel-frame.tsx';
 import { type PanelLayer, panelLayers } from './panel-layer.ts';
 import { SkyControls } from './sky-controls.tsx';
 import { SkyLegend } from './sky-legend.tsx';
@@ -19,7 +20,6 @@ import { isShown, useSkySettings } from './sky-settings.ts';
 import { unseenAtCentre } from './unseen-at-centre.ts';
 import { type Backdrop, useImageLayer } from './use-image-layer.ts';
 import { useMarkLayer } from './use-mark-layer.ts';
-import { usePanelView } from './use-panel-view.ts';
 import { useSkyMap } from './use-sky-map.ts';
 import './sky-panel.css';
 
@@ -50,9 +50,9 @@ interface SkyPanelProps {
 export function SkyPanel(props: SkyPanelProps) {
   const { centre, outlines, marks, tables, distanceMpc, hovered, selected, onHover, onSelect, onReach } = props;
   const { target, map } = useSkyMap();
-  const view = usePanelView(map);
   const { theme } = usePreferences();
   const settings = useSkySettings();
+  const hasImage = props.backdrop !== undefined;
   const legend = useId();
   const palette = usePalette(theme);
   const [measuredFrom, setMeasuredFrom] = useState<SkyMark | null>(null);
@@ -71,7 +71,12 @@ export function SkyPanel(props: SkyPanelProps) {
   useEffect(() => {
     if (!map) return;
     const drawn = [
-      new VectorLayer({ source: new VectorSource({ features: hatchedFeatures(visible, palette) }), zIndex: 1 }),
+      new VectorLayer({
+        source: new VectorSource({ features: hatchedFeatures(visible, palette) }),
+        zIndex: 1,
+        // Over an image the hatching must not hide what is to be seen.
+        opacity: hasImage ? 0.25 : 1,
+      }),
       new VectorLayer({ source: new VectorSource({ features: outlineFeatures(visible, palette) }), zIndex: 2 }),
     ];
     drawn.forEach((layer) => map.addLayer(layer));
@@ -81,7 +86,7 @@ export function SkyPanel(props: SkyPanelProps) {
         layer.getSource()?.clear();
         layer.dispose();
       });
-  }, [map, visible, palette]);
+  }, [map, visible, palette, hasImage]);
   useImageLayer(map, props.backdrop, theme);
   useMarkLayer({
     map,
@@ -106,10 +111,6 @@ export function SkyPanel(props: SkyPanelProps) {
     show(reach.beam);
     // The reach is that of the detection: a new one is a new panel.
   }, [show, reach.beam]);
-  const corner = view ? cornerOf(view) : 0;
-  useEffect(() => {
-    if (corner > 0) onReach?.(corner);
-  }, [corner, onReach]);
   const zoom = (factor: number) => {
     const resolution = map?.getView().getResolution();
     if (resolution) map?.getView().setResolution(resolution * factor);
@@ -141,7 +142,7 @@ export function SkyPanel(props: SkyPanelProps) {
         aria-label={`Sky about ${props.name}: ${shown.length} objects. Arrow keys move, plus and minus zoom, square brackets step through the objects from the middle outwards, M measures from the chosen one; the tables list the same objects.`}
         aria-describedby={legend}
       />
-      {view && <Frame view={view} distanceMpc={distanceMpc} />}
+      <PanelFrame map={map} distanceMpc={distanceMpc} onReach={onReach} />
       <div className="sky-panel__zoom">
         <ButtonGroup>
           <Button size="small" text="error" onClick={() => show(reach.error)} />
@@ -160,11 +161,11 @@ export function SkyPanel(props: SkyPanelProps) {
             onClick={startMeasuring}
           />
           <SkyControls layers={layers} settings={settings} />
-          {props.drawFinder && view && (
+          {props.drawFinder && map && (
             <SaveMenu
               label="Save a finder chart"
               fileName={fileNameOf(`${props.name}-finder`)}
-              draw={() => props.drawFinder!({ centre: view.centre, radiusArcsec: halfHeightOf(view), marks: shown })}
+              draw={() => props.drawFinder!({ ...lookOf(map), marks: shown })}
             />
           )}
           <Button size="small" text="+" aria-label="Zoom in" onClick={() => zoom(1 / 1.5)} />
@@ -196,16 +197,11 @@ export function SkyPanel(props: SkyPanelProps) {
   );
 }
 
-/** Half the height of the view, arcsec. */
-const halfHeightOf = ({ height, resolution }: PanelView): number => (height / 2) * resolution;
-
-/** How far the furthest corner of the view is from the detection, arcsec, rounded up so that it changes seldom. */
-function cornerOf({ centre, resolution, width, height }: PanelView): number {
-  const far = Math.hypot(
-    Math.abs(centre[0]) + (width / 2) * resolution,
-    Math.abs(centre[1]) + (height / 2) * resolution,
-  );
-  return 2 ** Math.ceil(Math.log2(Math.max(1, far)));
+/** Middle and half height of what the map shows, arcsec. */
+function lookOf(map: OlMap): { centre: PanelPoint; radiusArcsec: number } {
+  const [x = 0, y = 0] = map.getView().getCenter() ?? [];
+  const height = map.getSize()?.[1] ?? 0;
+  return { centre: [x, y], radiusArcsec: (height / 2) * (map.getView().getResolution() ?? 1) };
 }
 
 /** Colours of the theme; the document carries the theme before anyone is told that it changed. */

@@ -6,6 +6,7 @@ import { useEffect, useMemo, useRef } from 'react';
 import { drawLit } from './draw-lit.ts';
 import type { PanelView } from './frame.tsx';
 import { MarkField } from './mark-field.ts';
+import { MarkSheets } from './mark-sheets.ts';
 import { MarkSprites } from './mark-sprites.ts';
 import { resolvedTheme } from './screen-theme.ts';
 
@@ -36,6 +37,7 @@ function viewOf({ viewState, size }: FrameState): PanelView {
 export function useMarkLayer(options: MarkLayerOptions): void {
   const { map, marks, centre, theme, hovered, selected, measuredFrom, measuredText } = options;
   const layer = useRef<Layer | null>(null);
+  const relight = useRef<() => void>(() => undefined);
   const field = useMemo(() => new MarkField(marks, centre), [marks, centre]);
   const now = useRef({ ...options, field });
   useEffect(() => {
@@ -44,27 +46,20 @@ export function useMarkLayer(options: MarkLayerOptions): void {
 
   useEffect(() => {
     if (!map) return;
-    const canvas = document.createElement('canvas');
-    canvas.style.position = 'absolute';
     const colours = resolvedTheme(document.documentElement);
     const density = window.devicePixelRatio || 1;
     const sprites = new MarkSprites(colours, density);
+    const sheets = new MarkSheets(density);
+    let last: PanelView | undefined;
+    // What is lit changes with every move of the pointer: it has a sheet of its own, so that the marks stay as they are.
+    relight.current = () => last && drawLit(sheets.clear('lit', last), last, now.current, colours);
     const created = new Layer({
       zIndex: 3,
       render: (frame) => {
-        const view = viewOf(frame);
-        const [width, height] = [Math.round(view.width * density), Math.round(view.height * density)];
-        if (canvas.width !== width || canvas.height !== height) {
-          [canvas.width, canvas.height] = [width, height];
-          [canvas.style.width, canvas.style.height] = [`${view.width}px`, `${view.height}px`];
-        }
-        const context = canvas.getContext('2d');
-        if (!context) return canvas;
-        context.setTransform(density, 0, 0, density, 0, 0);
-        context.clearRect(0, 0, view.width, view.height);
-        now.current.field.draw(context, view, sprites);
-        drawLit(context, view, now.current, colours);
-        return canvas;
+        last = viewOf(frame);
+        now.current.field.draw(sheets.clear('marks', last), last, sprites);
+        relight.current();
+        return sheets.element;
       },
     });
     layer.current = created;
@@ -72,14 +67,18 @@ export function useMarkLayer(options: MarkLayerOptions): void {
     return () => {
       map.removeLayer(created);
       created.dispose();
-      canvas.width = canvas.height = 0;
+      sheets.release();
       layer.current = null;
+      relight.current = () => undefined;
     };
   }, [map, theme]);
 
   useEffect(() => {
     layer.current?.changed();
-  }, [field, hovered, selected, measuredFrom, measuredText]);
+  }, [field]);
+  useEffect(() => {
+    relight.current();
+  }, [hovered, selected, measuredFrom, measuredText]);
 
   useEffect(() => {
     if (!map) return;
