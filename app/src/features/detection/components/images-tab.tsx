@@ -9,6 +9,8 @@ import { AddObservations } from './add-observations.tsx';
 import { BandStrip } from './band-strip.tsx';
 import { ObservationFacts } from './observation-facts.tsx';
 
+const FRAME_WORDS = { icrs: 'ICRS', fk5: 'FK5 J2000', b1950: 'FK4 B1950', galactic: 'galactic coordinates' } as const;
+
 interface ImagesTabProps {
   detail: VerdictDetail;
   mayAdd: boolean;
@@ -45,7 +47,7 @@ function ImageFactsList({ item }: { item: ImageObservation }) {
     <article className="observation">
       <h4 className="mono">{item.label}</h4>
       <p className="small num">
-        {width} × {height} pixels of {significant(pixelArcsec, 3)}″, {projection} in {frame}
+        {width} × {height} pixels of {significant(pixelArcsec, 3)}″, {projection} in {FRAME_WORDS[frame]}
         {unit ? `, ${unit}` : ', unit not stated'}
         {zeroPointMag !== null && `, zero point ${fixed(zeroPointMag, 2)} mag`}
         {beam && `, beam ${fixed(beam.majorArcsec, 1)}″ × ${fixed(beam.minorArcsec, 1)}″`}
