@@ -15,7 +15,8 @@ interface NoticesProps {
 export function Notices({ detail, said, newerRun }: NoticesProps) {
   const event = useOthersEvent(detail.verdict.detectionId);
   const mine = said.reviews.find((review) => review.mine && review.returned?.runNumber === detail.runNumber);
-  const settled = said.settlement;
+  // The word itself stands in the summary; here only that its evidence does not.
+  const settled = said.settlement?.moved.length ? said.settlement : null;
   if (!event && !mine && !newerRun && !settled) return null;
   return (
     <div className="notices" role="status">
@@ -37,11 +38,10 @@ export function Notices({ detail, said, newerRun }: NoticesProps) {
         />
       )}
       {settled && (
-        <p>
-          Settled by <b>{settled.mine ? 'you' : settled.by}</b>:{' '}
-          {settled.outcome === 'verdict' ? `${settled.starlight}, ${settled.surroundings}` : settled.outcome}
-          {settled.moved.length > 0 && ' (its evidence moved since, see the history)'}
-        </p>
+        <MovedList
+          lead={`Settled by ${settled.mine ? 'you' : settled.by} on other evidence; what moved since`}
+          moved={settled.moved}
+        />
       )}
     </div>
   );
