@@ -17,10 +17,12 @@ import {
   Post,
   Query,
   Req,
+  Res,
   SerializeOptions,
   StreamableFile,
   UseInterceptors,
 } from '@nestjs/common';
+import type { Response } from 'express';
 import { z } from 'zod';
 import { CurrentUser, type SignedInUser } from '../../common/signed-in-user.ts';
 import { type ObservationRequest, ObservationUpload } from './observation-upload.interceptor.ts';
@@ -69,8 +71,11 @@ export class ObservationsController {
     @CurrentUser() user: SignedInUser,
     @Param('id', uuid) id: string,
     @Query({ schema: rasterQuery }) query: RasterQuery,
+    @Res({ passthrough: true }) response: Response,
   ) {
     const values = await this.observations.raster(user, id, query);
+    // The file never changes and neither does its detection's place, but whoever lost access must lose it at once.
+    response.setHeader('Cache-Control', 'private, no-cache');
     return new StreamableFile(new Uint8Array(values.buffer, values.byteOffset, values.byteLength), {
       type: 'application/octet-stream',
     });
@@ -83,8 +88,14 @@ export class ObservationsController {
   }
 
   @Get('observations/:id/file')
-  async file(@CurrentUser() user: SignedInUser, @Param('id', uuid) id: string) {
+  async file(
+    @CurrentUser() user: SignedInUser,
+    @Param('id', uuid) id: string,
+    @Res({ passthrough: true }) response: Response,
+  ) {
     const { stream, fileName, bytes } = await this.observations.download(user, id);
+    // As a download, never shown by the browser in our name.
+    response.setHeader('Content-Security-Policy', "default-src 'none'; sandbox");
     return new StreamableFile(stream, {
       type: 'application/octet-stream',
       length: bytes,
