@@ -14,6 +14,8 @@ interface Lit {
 
 const FONT = '500 11.5px "Roboto Mono", monospace';
 const LINE = 15;
+/** Shortest measured line that carries its words, pixels. */
+const LEAST_WORDED = 60;
 
 function write(
   context: CanvasRenderingContext2D,
@@ -64,5 +66,7 @@ export function drawLit(context: CanvasRenderingContext2D, view: PanelView, lit:
   context.setLineDash([6, 4]);
   context.stroke();
   context.setLineDash([]);
+  // A short line has no room for its words beside the label; the note of the panel says them too.
+  if (Math.hypot(to[0] - from[0], to[1] - from[1]) < LEAST_WORDED) return;
   write(context, lit.measuredText, (from[0] + to[0]) / 2 + 8, (from[1] + to[1]) / 2 + 16, theme);
 }
