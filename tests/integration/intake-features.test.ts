@@ -201,7 +201,7 @@ describe("a journal's data file", () => {
     expect(checked.body).toMatchObject({ rows: 2, readMe: 'ReadMe' });
     const id = await publish(body.id);
     const { items } = (await staff.observer.get(`/catalogues/${id}/rows`)).body;
-    expect(items[0].cells).toEqual(['A 1', '1', '39', '30.25', '+', '43', '28', '30', '2464']);
+    expect(items[0].cells).toEqual(['A 1', '01', '39', '30.25', '+', '43', '28', '30', '2464']);
     // Source: 15 (1 + 39/60 + 30.25/3600) and -1/3600 degrees.
     expect(items[0].raDeg).toBeCloseTo(24.876041666666666, 10);
     expect(items[1].decDeg).toBeCloseTo(-1 / 3600, 12);
