@@ -21,7 +21,7 @@ function table(): string {
 
 it(
   'leaves a whole catalogue or none when the process is killed while it publishes, and the upload survives',
-  { timeout: KILLS * 40_000 + 60_000 },
+  { timeout: KILLS * 120_000 + 60_000 },
   async () => {
     let server = await startServer({ env, timeoutMs: START_MS });
     const { dataDir } = server;
