@@ -119,7 +119,7 @@ describe('from a settled detection to a referee', () => {
 
   it('comes out the same when repeated from its inputs', async () => {
     await button('Repeat from the inputs').click();
-    await page.getByText(/^Identical: all \d+ verdicts/).waitFor({ timeout: 120_000 });
+    await page.getByText(/Identical: all \d+ verdicts/).waitFor({ timeout: 120_000 });
   });
 
   it('is read by a guest in a clean browser, and only that', async () => {
