@@ -38,12 +38,14 @@ interface Done {
 async function carryOut(folder: string): Promise<Done> {
   const start = performance.now();
   const arguments_ = [join(DIST, 'plan.js'), join(folder, 'plan.json'), '--out', join(folder, 'out')];
-  const child = spawn(process.execPath, arguments_, { stdio: ['ignore', 'ignore', 'inherit'] });
+  const child = spawn(process.execPath, arguments_, { stdio: 'ignore' });
   const ended = new Promise<number | null>((resolve) => child.once('exit', resolve));
   let last = { peakBytes: 0, cpuSeconds: 0 };
   const timer = setInterval(() => {
     try {
-      last = usage(child.pid!);
+      const now = usage(child.pid!);
+      // A process that is ending tells no memory any more.
+      last = { peakBytes: Math.max(last.peakBytes, now.peakBytes), cpuSeconds: now.cpuSeconds };
     } catch {
       // It has ended between two looks.
     }
