@@ -135,7 +135,7 @@ describe('an edition', () => {
     const csv = (await screened.observer.get(`/editions/${edition.id}/export/csv`)).text;
     expect(csv).toContain(",'=cmd() nothing would prove much");
     const targets = (await screened.observer.get(`/editions/${edition.id}/export/targets`)).text;
-    expect(targets).toMatch(/\n +1 \| 0\.\d{4} \| S08 +\| 10:\d\d:00\.00 \| \+04:00:00\.0 \| J2000/);
+    expect(targets).toMatch(/\n +1 \| +0\.\d{4} \| S08 +\| 10:\d\d:00\.00 \| \+04:00:00\.0 \| J2000/);
     const latex = (await screened.observer.get(`/editions/${edition.id}/export/latex`)).text;
     expect(latex).toMatch(/\\begin\{deluxetable\*\}[\s\S]*S08 &[\s\S]*\\enddata/);
     expect((await screened.observer.get(`/editions/${edition.id}/export/xlsx`)).status).toBe(400);
