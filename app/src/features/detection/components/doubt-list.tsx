@@ -67,7 +67,8 @@ const DoubtItem = ({ doubt, word, onDecide }: DoubtItemProps) => (
           size="small"
           variant="minimal"
           text="decide"
-          aria-label={`Clear or confirm ${doubt.name}`}
+          aria-label={`decide on ${doubt.name}`}
+          title="Clear it or confirm it"
           onClick={() => onDecide(doubt)}
         />
       )}

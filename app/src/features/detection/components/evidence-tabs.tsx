@@ -111,7 +111,13 @@ export function EvidenceTabs(props: EvidenceTabsProps) {
     ],
   ];
   return (
-    <Tabs id="evidence" selectedTabId={props.tab} onChange={(id) => props.onTab(String(id))} renderActiveTabPanelOnly>
+    <Tabs
+      id="evidence"
+      className="evidence-tabs"
+      selectedTabId={props.tab}
+      onChange={(id) => props.onTab(String(id))}
+      renderActiveTabPanelOnly
+    >
       {panels.map(([id, title, panel]) => (
         <Tab key={id} id={id} title={title} panel={<>{panel}</>} />
       ))}
