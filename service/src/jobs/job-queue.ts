@@ -32,9 +32,13 @@ export class JobQueue {
 
   async work(count: number, run: (jobId: string) => Promise<void>): Promise<void> {
     for (let i = 0; i < count; i += 1) {
-      const worker = await this.#boss.work<{ jobId: string }>(QUEUE, { pollingIntervalSeconds: POLL_SECONDS }, async (tasks) => {
-        for (const task of tasks) await run(task.data.jobId);
-      });
+      const worker = await this.#boss.work<{ jobId: string }>(
+        QUEUE,
+        { pollingIntervalSeconds: POLL_SECONDS },
+        async (tasks) => {
+          for (const task of tasks) await run(task.data.jobId);
+        },
+      );
       this.#workers.push(worker);
     }
   }

@@ -25,7 +25,7 @@ describe('the finder chart', () => {
     // 1 arcmin at 20 Mpc: 20 000 kpc x 60 / 206 264.8 = 5.8 kpc.
     expect(finderChartSvg(someEvidence(), { radiusArcsec: 120 })).toContain('1′ = 5.8 kpc');
     const without = someEvidence({
-      distance: { kind: 'none', luminosityMpc: null, angularMpc: null, errorMpc: null, note: '' },
+      distance: { kind: 'none', luminosityMpc: null, angularMpc: null, errorMpc: null, note: '', branches: [] },
     });
     expect(finderChartSvg(without, { radiusArcsec: 120 })).not.toContain('kpc');
   });

@@ -50,7 +50,7 @@ describe('the surroundings strip', () => {
 
   it('says so where no distance is usable', () => {
     const without = someEvidence({
-      distance: { kind: 'none', luminosityMpc: null, angularMpc: null, errorMpc: null, note: '' },
+      distance: { kind: 'none', luminosityMpc: null, angularMpc: null, errorMpc: null, note: '', branches: [] },
     });
     expect(surroundingsStripSvg(without)).toContain('Without a usable distance');
   });

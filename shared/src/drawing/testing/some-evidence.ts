@@ -116,7 +116,7 @@ export function someEvidence(change: Partial<DrawnDetail> = {}, rest: Partial<Dr
         reviews: 0,
         overrides: 0,
       },
-      distance: { kind: 'hubble', luminosityMpc: 20, angularMpc: 20, errorMpc: 4, note: '' },
+      distance: { kind: 'hubble', luminosityMpc: 20, angularMpc: 20, errorMpc: 4, note: '', branches: [] },
       positionError: { majorArcsec: 8, minorArcsec: 8, angleDeg: 0, source: '' },
       beamArcsec: { major: 180, minor: 180, angleDeg: 0 },
       searchRadiusArcsec: 90,
