@@ -126,6 +126,7 @@ export function someEvidence(change: Partial<DrawnDetail> = {}, rest: Partial<Dr
       limits: [],
       doubts: [],
       aloneFactors: null,
+      measures: null,
       priors: [],
       masks: [],
       claims: [],
