@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { aUser, jobEnd } from '../support/builders.ts';
-import { aScreenedSurvey, HI_TABLE } from '../support/builders/small-survey.ts';
+import { aScreenedSurvey, HI_TABLE, settle } from '../support/builders/small-survey.ts';
 import type { Answer, Client } from '../support/client.ts';
 import { startApp, type TestApp } from '../support/start-app.ts';
 
@@ -232,7 +232,9 @@ describe('the paths that scripts rely on', () => {
   it('serve the shortlist', async () => {
     const seen = await lead.get(`${survey}/shortlist`);
     expectAnswer(seen, 200, ['runId', 'version', 'entries']);
-    const body = { runId: all.run.id, entries: [{ detectionId: all.items['S08']!.detectionId, reason: 'dark' }] };
+    const [latest] = (await lead.get(`${survey}/runs?limit=1`)).body.items;
+    await settle({ ...all, run: latest }, 'S08');
+    const body = { runId: latest.id, entries: [{ detectionId: all.items['S08']!.detectionId, reason: 'dark' }] };
     const etag = { 'if-match': seen.headers.get('etag')! };
     expectAnswer(await lead.put(`${survey}/shortlist`, body, etag), 200, ['runId', 'version', 'entries']);
     expectAnswer(await lead.put(`${survey}/shortlist`, body, etag), 412, ['current']);
