@@ -13,6 +13,8 @@ const PUBLIC = new Set([
   'GET /health/ready',
   // A frozen edition, for whoever holds its link.
   'GET /shared/{linkToken}',
+  'GET /shared/{linkToken}/detections/{detectionId}',
+  'GET /shared/{linkToken}/export/{format}',
 ]);
 
 describe('every route of the API', () => {
@@ -38,6 +40,8 @@ describe('every route of the API', () => {
       const given = path.replace(/\{\w+\}/g, () => randomUUID());
       const { status } = await app.client().request(method, given, method === 'GET' ? undefined : {});
       if (status !== 401) open.push(`${method} ${path}`);
+      // A link that was never given out opens nothing.
+      if (path.startsWith('/shared/')) expect([400, 404], path).toContain(status);
     }
     expect(open.filter((route) => !PUBLIC.has(route))).toEqual([]);
   });

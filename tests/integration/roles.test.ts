@@ -58,7 +58,8 @@ beforeAll(async () => {
     ],
     review: [
       ['POST', `/detections/${detectionId}/reviews`, word],
-      ['POST', `/detections/${detectionId}/overrides`, overriding],
+      // Another row than the lead's: what a colleague has said of an object is shown, not written over.
+      ['POST', `/detections/${detectionId}/overrides`, { ...overriding, rowId: 2 }],
       ['DELETE', `/overrides/${overrideId}`, { note: 'no' }],
       ['PATCH', `/detections/${detectionId}`, { distanceMpc: 3, source: 's', note: 'n' }],
     ],
