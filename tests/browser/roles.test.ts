@@ -13,7 +13,7 @@ afterAll(() => browser?.close());
 
 /** What only a lead or a reviewer may press, wherever it stands. */
 const FORBIDDEN =
-  /^(New |Bring in|Choose a file|Publish|Discard|Start|Cancel|Remove|Assign|Begin|Invite|Revoke|Edit|Move|Make it|Reject|Withdraw|change$|Save)|agree|override|settle|shortlist$/i;
+  /^(New |Bring in|Choose a file|Publish|Discard|Start|Cancel|Remove|Assign|Begin|Invite|Revoke|Edit|Move|Make it|Reject|Withdraw|change$|Save$|Save (the|these) (survey|criteria|settings))|agree|override|settle|shortlist$/i;
 
 async function buttons(page: Page): Promise<string[]> {
   const all = page.locator('#content, .det-page').getByRole('button');

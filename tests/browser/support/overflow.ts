@@ -21,7 +21,12 @@ export function overflow(page: Page): Promise<string[]> {
       'h1, h2, h3, button, a, input, select, label, dt, dd',
     )) {
       const box = element.getBoundingClientRect();
-      const isHidden = box.width < 2 || getComputedStyle(element).clipPath !== 'none' || element.matches('.skip-link');
+      // What lies in a closed disclosure is laid out by no one.
+      const isHidden =
+        !element.checkVisibility() ||
+        box.width < 2 ||
+        getComputedStyle(element).clipPath !== 'none' ||
+        element.matches('.skip-link');
       if (isHidden || scrolls(element)) continue;
       const name = `${element.tagName.toLowerCase()} “${(element.textContent || element.id).trim().slice(0, 40)}”`;
       if (box.right > root.clientWidth + 1 || box.left < -1)

@@ -29,7 +29,7 @@ export function CheckPanel({ intake, draft, change, isChecking }: CheckPanelProp
           {isChecking ? 'checking all rows…' : check.ready ? 'ready' : 'not ready'}
         </span>
       </div>
-      <div className="panel__body stack" style={{ opacity: isChecking ? 0.6 : 1 }}>
+      <div className="panel__body stack" style={{ cursor: isChecking ? 'progress' : undefined }}>
         <dl className="check-figures">
           <Figure term="usable" value={check.usable} />
           <Figure term="sidelined" value={check.sidelined} />

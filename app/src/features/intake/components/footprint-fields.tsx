@@ -74,7 +74,7 @@ export function FootprintFields({ intake, draft, change, isChecking }: Footprint
           />
         )}
       </div>
-      <div style={{ opacity: isChecking ? 0.6 : 1 }}>
+      <div style={{ cursor: isChecking ? 'progress' : undefined }}>
         {coverage?.moc && <CoverageMap moc={coverage.moc} />}
         {coverage && (
           <p className={coverage.moc ? 'small' : 'small facts__open'}>
