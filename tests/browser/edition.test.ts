@@ -24,7 +24,9 @@ const button = (text: string | RegExp) => page.getByRole('button', { name: text,
 
 async function download(on: Page, text: string): Promise<{ name: string; bytes: Buffer }> {
   const [file] = await Promise.all([
-    on.waitForEvent('download') as Promise<Download>,
+    on.waitForEvent('download').catch((error: Error) => {
+      throw new Error(`${text}: ${error.message}`, { cause: error });
+    }),
     on.getByRole('button', { name: text, exact: true }).click(),
   ]);
   return { name: file.suggestedFilename(), bytes: readFileSync(await file.path()) };
@@ -104,7 +106,6 @@ describe('from a settled detection to a referee', () => {
       ['Target list', /\.txt$/, /^# Targets of edition/],
       ['Methods (TeX)', /\.tex$/, /\\citep\{/],
       ['References (BibTeX)', /\.bib$/, /^@article\{/],
-      ['Dossier (PDF)', /\.pdf$/, /^%PDF-/],
       ['Archive (zip)', /\.zip$/, /^PK/],
     ];
     for (const [text, ending, start] of starts) {
@@ -113,6 +114,10 @@ describe('from a settled detection to a referee', () => {
       expect(file.bytes.subarray(0, 4000).toString('latin1'), text).toMatch(start);
       if (text === 'CSV') expect(file.bytes.toString()).toContain(name);
     }
+    // Made when it is asked for, in seconds: its bytes are fetched by the address of its button.
+    const dossier = await page.request.get((await button('Dossier (PDF)').getAttribute('href'))!);
+    expect(dossier.headers()['content-disposition']).toMatch(/\.pdf"?$/);
+    expect((await dossier.body()).subarray(0, 5).toString('latin1')).toBe('%PDF-');
     await page.getByLabel('Table', { exact: true }).selectOption('limits');
     expect((await download(page, 'CSV')).bytes.toString()).toMatch(/detection,catalogue,band/);
   });

@@ -72,6 +72,9 @@ describe('the sky panel', () => {
     expect(await violations(page, ['.sky-panel', '.bp6-portal'])).toEqual([]);
     await page.getByRole('button', { name: 'Show everything' }).click();
     await page.keyboard.press('Escape');
+    // The focus goes back to the button once the choices are gone; a key pressed before would be lost.
+    const opener = page.getByRole('button', { name: 'Layers and filters' });
+    await expect.poll(() => opener.evaluate((button) => button === document.activeElement), SLOW).toBe(true);
   });
 
   it('steps through the objects by the keyboard, and lights the row of the table', async () => {
@@ -85,6 +88,7 @@ describe('the sky panel', () => {
   it('measures from the chosen object to the next one, in angle and in kpc', async () => {
     await panel().focus();
     await page.keyboard.press('m');
+    await page.getByText(/to the next object you choose$/).waitFor({ timeout: SLOW.timeout });
     await page.keyboard.press(']');
     await expect
       .poll(async () => bare(await status().textContent()), SLOW)

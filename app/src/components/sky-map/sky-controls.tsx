@@ -73,7 +73,6 @@ function Choices({ layers, settings }: SkyControlsProps) {
       <Button
         size="small"
         text="Show everything"
-        disabled={isDefault(settings)}
         onClick={() => setSkySettings(EVERYTHING)}
       />
     </div>
