@@ -70,11 +70,7 @@ function Choices({ layers, settings }: SkyControlsProps) {
         label="Objects without a velocity"
         onChange={(event) => setSkySettings({ withoutVelocity: event.currentTarget.checked })}
       />
-      <Button
-        size="small"
-        text="Show everything"
-        onClick={() => setSkySettings(EVERYTHING)}
-      />
+      <Button size="small" text="Show everything" onClick={() => setSkySettings(EVERYTHING)} />
     </div>
   );
 }
