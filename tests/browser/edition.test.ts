@@ -1,5 +1,5 @@
 import { readFileSync } from 'node:fs';
-import type { Download, Page } from 'playwright-core';
+import type { Page } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { send } from './support/api.ts';
 import { violations } from './support/axe.ts';
