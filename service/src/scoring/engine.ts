@@ -1,11 +1,9 @@
 import type { SurroundingsMeasures } from '@eremite/shared/contracts/surroundings-measures';
-import { DEGREE } from '@eremite/shared/science/constants';
 import type { VelocityModel } from '@eremite/shared/science/counterpart/velocity-term';
 import type { LearntPrior } from '@eremite/shared/science/counterpart/learn-prior';
 import type { GasStarRelation } from '@eremite/shared/science/hydrogen/gas-relation';
 import { candidateRows, estimateHits } from '../matching/hit-estimate.ts';
 import { HitLimitError } from '../matching/hit-limit.ts';
-import { neighbourSearch } from '../matching/neighbour-search.ts';
 import { pairSearch } from '../matching/pair-search.ts';
 import type { SearchPositions } from '../matching/search-positions.ts';
 import { assessStarlight, type AssessmentContext, type StarlightAssessment } from './assess.ts';
@@ -22,7 +20,9 @@ import { readGroups } from './group-list.ts';
 import { judgeDoubts } from './judge-doubts.ts';
 import { learnPriors, learntNotes, type Lesson, lessonOf } from './learning.ts';
 import { MissedTable } from './missed-table.ts';
-import { buildNeighbourPool, type NeighbourPool } from './neighbour-pool.ts';
+import { NeighboursAround } from './neighbours-around.ts';
+import { overridesBy } from './overrides-by.ts';
+import { ownRows } from './own-rows.ts';
 import { lookForPieces } from './look-for-pieces.ts';
 import { PhotometricNeighbours } from './photometric-neighbours.ts';
 import { isStar, type PreparedCatalogue, prepareCatalogue } from './prepared-catalogue.ts';
@@ -30,31 +30,21 @@ import { redshiftReaches } from './redshift-reach.ts';
 import { judgeStability } from './robustness.ts';
 import type { Assessment, ScoredDetection } from './scored-detection.ts';
 import { SkyMasks } from './sky-masks.ts';
-import {
-  judgeSurroundings,
-  makeNeighbour,
-  neighbourAngleDeg,
-  type NeighbourRow,
-  type SurroundingsContext,
-} from './surroundings.ts';
-import { MEASURED, measureSurroundings } from './surroundings-measures.ts';
+import { judgeSurroundings, type NeighbourRow, type SurroundingsContext } from './surroundings.ts';
+import { measureSurroundings } from './surroundings-measures.ts';
+import { tableNotes } from './table-notes.ts';
 import { removeCounterparts } from './unrelated-counts.ts';
 import { RedshiftField, velocityModelOf, velocityNotes } from './velocity-background.ts';
 import { rateRows, type WeighingModel } from './weigh-objects.ts';
 
 /** Kinds of tables in which a counterpart is looked for. */
 const COUNTERPART_KINDS = ['optical', 'infrared', 'ultraviolet', 'continuum'];
-/** How far beyond the window the nearest row with a velocity is still looked for, Mpc. */
-const FAR_MPC = 5;
 /** Detections to learn from: more would move what is learnt by less than its error. */
 const MOST_PUPILS = 6000;
 /** Candidates of a run in all: more are no screening any more, and would not fit into memory or onto a disk. Our choice. */
 const MOST_CANDIDATES = 20_000_000;
 /** Fewer detections teach nothing. Our choice. */
 const LEAST_DETECTIONS = 100;
-/** And without a distance: neighbours with a distance of their own, degrees. */
-const NO_DISTANCE_DEG = 10;
-
 /** What a run learns from its own data before it scores. */
 export interface Learnt {
   relation: GasStarRelation | null;
@@ -73,7 +63,7 @@ export class Engine {
   readonly detections: Detections;
   readonly catalogues: PreparedCatalogue[];
   private readonly searched: PreparedCatalogue[];
-  private readonly pool: NeighbourPool;
+  private readonly neighbours: NeighboursAround;
   private readonly masks: SkyMasks;
   private readonly surroundings: SurroundingsContext;
   private readonly overrideOf: OverrideOf | null;
@@ -97,7 +87,6 @@ export class Engine {
       criteria.counterpart.priorFraction,
       relationOf(criteria),
     );
-    this.pool = buildNeighbourPool(this.catalogues);
     this.masks = new SkyMasks(this.catalogues, criteria);
     this.surroundings = {
       criteria,
@@ -109,6 +98,7 @@ export class Engine {
         ({ input: { kind }, czKms }) => kind !== 'hi' && czKms?.some(Number.isFinite),
       ),
     };
+    this.neighbours = new NeighboursAround(this.catalogues, this.surroundings);
     this.overrideOf = overridesBy(input);
     this.shares = new CoveredShares(this.detections.length, this.catalogues.length);
     this.redshifts = new RedshiftField(criteria.counterpart.learnVelocities ? this.searched : []);
@@ -161,7 +151,6 @@ export class Engine {
     return Math.max(1, Math.ceil(this.detections.length / MOST_PUPILS));
   }
 
-  /** Places of the pupils [from, to). */
   /**
    * Refuses criteria that would make candidates of nearly everything, before any of them is made.
    *
@@ -180,6 +169,7 @@ export class Engine {
     if (about > MOST_CANDIDATES) throw new HitLimitError(MOST_CANDIDATES, about);
   }
 
+  /** Places of the pupils [from, to). */
   private places(from: number, to: number): number[] {
     return Array.from({ length: to - from }, (_, i) => (from + i) * this.step);
   }
@@ -223,68 +213,8 @@ export class Engine {
 
   /** Sentences about the run as a whole: what the tables leave open and what was learnt. */
   get notes(): string[] {
-    const notes = [...this.learnt.notes, ...velocityNotes(this.learnt.velocity)];
-    for (const { input, areaFromRows } of this.searched) {
-      if (areaFromRows)
-        notes.push(`${input.name}: ${input.coverageNote} Densities are taken over the cells its rows occupy.`);
-      const shallow = input.bands.filter(({ depth5Sigma }) => depth5Sigma === null).map(({ name }) => name);
-      if (shallow.length > 0)
-        notes.push(
-          `${input.name}: no depth is stated for ${shallow.join(', ')}; its silence there counts for nothing.`,
-        );
-    }
-    for (const reach of this.surroundings.reaches) {
-      if (reach.measured)
-        notes.push(
-          `${reach.catalogue.input.name}: redshifts reach ${reach.band} ${reach.magnitude.toFixed(1)}, measured from its rows.`,
-        );
-    }
-    return notes;
-  }
-
-  /** Rows with a velocity about each assessed detection. */
-  private neighboursOf(assessed: readonly StarlightAssessment[]): NeighbourRow[][] {
-    const { criteria } = this.input;
-    const window = Math.max(500, criteria.surroundings.velocityWindowKms, criteria.doubts.possibleDebrisKms);
-    return this.searchPool(
-      assessed.map(({ detection }) => detection),
-      (detection) => {
-        const angle = neighbourAngleDeg(detection, criteria);
-        return Number.isNaN(angle) && Number.isFinite(detection.czKms) ? NO_DISTANCE_DEG : angle;
-      },
-      window,
-    );
-  }
-
-  private searchPool(
-    detections: readonly Detection[],
-    angleDeg: (d: Detection) => number,
-    windowKms: number,
-  ): NeighbourRow[][] {
-    const rows: NeighbourRow[][] = detections.map(() => []);
-    const found = neighbourSearch(this.pool.grid, {
-      raDeg: Float64Array.from(detections, ({ raDeg }) => raDeg),
-      decDeg: Float64Array.from(detections, ({ decDeg }) => decDeg),
-      czKms: Float64Array.from(detections, ({ czKms }) => czKms),
-      angularRadiusDeg: Float64Array.from(detections, angleDeg),
-      windowKms: new Float64Array(detections.length).fill(windowKms),
-    });
-    for (let k = 0; k < found.detection.length; k++) {
-      const d = found.detection[k]!;
-      const at = found.row[k]!;
-      const catalogue = this.catalogues[this.pool.catalogue[at]!]!;
-      rows[d]!.push(
-        makeNeighbour(
-          detections[d]!,
-          catalogue,
-          this.pool.row[at]!,
-          found.separationArcsec[k]!,
-          found.velocityDifferenceKms[k]!,
-          this.surroundings,
-        ),
-      );
-    }
-    return rows;
+    const { notes, velocity } = this.learnt;
+    return [...notes, ...velocityNotes(velocity), ...tableNotes(this.searched, this.surroundings.reaches)];
   }
 
   /** Scores detections [from, to). */
@@ -313,8 +243,8 @@ export class Engine {
     const { criteria } = this.input;
     const context = { ...this.context(this.learnt.relation, this.learnt.priors), shares };
     const assessed = lookForPieces(this.claims.solve(this.assess(range, context), positions), criteria);
-    const around = this.neighboursOf(assessed);
-    const far = this.farNearest(assessed, around);
+    const around = this.neighbours.around(assessed);
+    const far = this.neighbours.nearestBeyond(assessed, around);
     return assessed.map((starlight, i) => {
       const { detection } = starlight;
       const own = ownRows(starlight, criteria.counterpart.minimumProbability);
@@ -340,9 +270,9 @@ export class Engine {
   private measures(assessment: Assessment, isOwn: (row: NeighbourRow) => boolean): SurroundingsMeasures | null {
     const { detection } = assessment;
     if (!(detection.angularMpc > 0)) return null;
-    const angleDeg = Math.min(180, MEASURED.radiusMpc / detection.angularMpc / DEGREE);
-    const [rows] = this.searchPool([detection], () => angleDeg, MEASURED.windowKms);
-    const others = rows!.filter((row) => !isOwn(row) && !isStar(row.catalogue, row.index));
+    const others = this.neighbours
+      .measured(detection)
+      .filter((row) => !isOwn(row) && !isStar(row.catalogue, row.index));
     const photometric = {
       spoilers: this.photometric.spoilers(assessment),
       unverified: this.photometric.unverified(assessment),
@@ -365,33 +295,6 @@ export class Engine {
     const shares = new CoveredShares(moved.length, this.catalogues.length);
     return this.assess(moved, { ...context, shares }, null).filter(({ dominating }) => dominating !== null).length;
   }
-
-  /** The nearest row with a velocity for detections that have none in their window. */
-  private farNearest(
-    assessed: readonly StarlightAssessment[],
-    around: readonly NeighbourRow[][],
-  ): (NeighbourRow | null)[] {
-    const { velocityWindowKms } = this.input.criteria.surroundings;
-    const { minimumProbability } = this.input.criteria.counterpart;
-    const lonely: number[] = [];
-    assessed.forEach((starlight, i) => {
-      const own = ownRows(starlight, minimumProbability);
-      const some = around[i]!.some((row) => Math.abs(row.velocityDifferenceKms) <= velocityWindowKms && !own(row));
-      if (!some && starlight.detection.angularMpc > 0) lonely.push(i);
-    });
-    const nearest: (NeighbourRow | null)[] = assessed.map(() => null);
-    if (lonely.length === 0) return nearest;
-    const found = this.searchPool(
-      lonely.map((i) => assessed[i]!.detection),
-      ({ angularMpc }) => Math.min(30, (FAR_MPC / angularMpc) * (180 / Math.PI)),
-      velocityWindowKms,
-    );
-    lonely.forEach((i, k) => {
-      const own = ownRows(assessed[i]!, minimumProbability);
-      nearest[i] = found[k]!.find((row) => !own(row)) ?? null;
-    });
-    return nearest;
-  }
 }
 
 function positionsOf(range: readonly Detection[]): SearchPositions {
@@ -400,36 +303,4 @@ function positionsOf(range: readonly Detection[]): SearchPositions {
     decDeg: Float64Array.from(range, ({ decDeg }) => decDeg),
     radiusArcsec: Float64Array.from(range, ({ searchArcsec }) => searchArcsec),
   };
-}
-
-/** Rows that are the detection itself, the same source in another HI list, or its counterpart. */
-function ownRows(
-  { detection, objects, accepted, probabilities }: StarlightAssessment,
-  least: number,
-): (row: NeighbourRow) => boolean {
-  const j = probabilities.objects.findIndex((p) => p >= least);
-  const counterpart = accepted ?? (j >= 0 ? objects[j]! : null);
-  const sameVelocity = Math.max(50, detection.width50Kms > 0 ? detection.width50Kms / 2 : 0);
-  return (row) => {
-    const { input, index } = row.catalogue;
-    if (input.kind === 'hi') {
-      if (index === detection.catalogue) return row.index === detection.index;
-      return row.separationArcsec <= detection.searchArcsec && Math.abs(row.velocityDifferenceKms) <= sameVelocity;
-    }
-    return (
-      counterpart !== null && counterpart.rows.some((own) => own.catalogue === row.catalogue && own.index === row.index)
-    );
-  };
-}
-
-function overridesBy({ decisions, catalogues }: EngineInput): OverrideOf | null {
-  if (decisions.overrides.length === 0) return null;
-  const byPair = new Map(
-    decisions.overrides.map((o) => [
-      `${o.detectionCatalogueId}/${o.detectionRow}/${o.catalogueId}/${o.rowId}`,
-      o.action,
-    ]),
-  );
-  return (detection, catalogue, row) =>
-    byPair.get(`${catalogues[detection.catalogue]!.id}/${detection.row}/${catalogue.input.id}/${row}`) ?? null;
 }
