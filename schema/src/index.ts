@@ -2,5 +2,8 @@ export * from './tables/people.ts';
 export * from './tables/surveys.ts';
 export * from './tables/runs.ts';
 export * from './tables/decisions.ts';
+export * from './tables/remarks.ts';
+export * from './tables/shortlists.ts';
+export * from './tables/ledger.ts';
 export * from './tables/editions.ts';
 export * from './tables/observations.ts';

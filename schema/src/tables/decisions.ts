@@ -1,5 +1,4 @@
 import {
-  bigserial,
   boolean,
   doublePrecision,
   index,
@@ -13,7 +12,7 @@ import {
 } from 'drizzle-orm/pg-core';
 import { sql } from 'drizzle-orm';
 import { at, createdAt, id } from '../columns.ts';
-import { teams, users } from './people.ts';
+import { users } from './people.ts';
 import { runs } from './runs.ts';
 import { catalogues, detections, surveys } from './surveys.ts';
 
@@ -176,56 +175,6 @@ export const doubtWords = pgTable(
   ],
 );
 
-/** Something said of a detection without deciding; those mentioned are written to. */
-export const remarks = pgTable(
-  'remarks',
-  {
-    id: id(),
-    detectionId: uuid('detection_id')
-      .notNull()
-      .references(() => detections.id, { onDelete: 'cascade' }),
-    authorId: uuid('author_id')
-      .notNull()
-      .references(() => users.id),
-    text: text('text').notNull(),
-    /** Ids of accounts. */
-    mentions: jsonb('mentions').notNull().default([]),
-    createdAt: createdAt(),
-  },
-  (table) => [index('remarks_detection').on(table.detectionId)],
-);
-
-/** A file that goes with a note; without a subject until the decision is sent. */
-export const attachments = pgTable(
-  'attachments',
-  {
-    id: id(),
-    detectionId: uuid('detection_id')
-      .notNull()
-      .references(() => detections.id, { onDelete: 'cascade' }),
-    /** The review, settlement, override, doubt word or remark whose note it goes with. */
-    subjectId: uuid('subject_id'),
-    uploadedBy: uuid('uploaded_by')
-      .notNull()
-      .references(() => users.id),
-    fileName: text('file_name').notNull(),
-    mediaType: text('media_type').notNull(),
-    bytes: integer('bytes').notNull(),
-    sha256: text('sha256').notNull(),
-    fileKey: text('file_key').notNull(),
-    createdAt: createdAt(),
-  },
-  (table) => [index('attachments_detection').on(table.detectionId), index('attachments_subject').on(table.subjectId)],
-);
-
-/** Phrases a team keeps at hand for its notes. */
-export const notePhrases = pgTable('note_phrases', {
-  teamId: uuid('team_id')
-    .primaryKey()
-    .references(() => teams.id, { onDelete: 'cascade' }),
-  phrases: jsonb('phrases').notNull(),
-});
-
 /**
  * Which source of a new version of a table is the one that people's words were given on. `open` ones could not be told and
  * are asked.
@@ -277,52 +226,4 @@ export const assignments = pgTable(
     createdAt: createdAt(),
   },
   (table) => [primaryKey({ columns: [table.detectionId, table.userId] })],
-);
-
-export const shortlists = pgTable('shortlists', {
-  surveyId: uuid('survey_id')
-    .primaryKey()
-    .references(() => surveys.id),
-  runId: uuid('run_id').references(() => runs.id),
-  /** Grows by one with each change; the ETag. */
-  version: integer('version').notNull().default(0),
-  updatedAt: at('updated_at').notNull().defaultNow(),
-});
-
-export const shortlistEntries = pgTable(
-  'shortlist_entries',
-  {
-    surveyId: uuid('survey_id')
-      .notNull()
-      .references(() => surveys.id),
-    detectionId: uuid('detection_id')
-      .notNull()
-      .references(() => detections.id),
-    rank: integer('rank').notNull(),
-    reason: text('reason').notNull().default(''),
-    nullResult: text('null_result').notNull().default(''),
-  },
-  (table) => [primaryKey({ columns: [table.surveyId, table.detectionId] })],
-);
-
-/** Append only; each hash covers the line and the hash before it. */
-export const ledger = pgTable(
-  'ledger',
-  {
-    id: bigserial('id', { mode: 'number' }).primaryKey(),
-    surveyId: uuid('survey_id')
-      .notNull()
-      .references(() => surveys.id),
-    number: integer('number').notNull(),
-    at: at('at').notNull(),
-    actorId: uuid('actor_id').references(() => users.id),
-    actor: text('actor').notNull(),
-    action: text('action').notNull(),
-    subject: text('subject').notNull(),
-    note: text('note').notNull().default(''),
-    detail: jsonb('detail').notNull().default({}),
-    previousHash: text('previous_hash').notNull(),
-    hash: text('hash').notNull(),
-  },
-  (table) => [uniqueIndex('ledger_number').on(table.surveyId, table.number)],
 );

@@ -5,7 +5,8 @@ import { Injectable } from '@nestjs/common';
 import { AccessService } from '../../common/access.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { RunsService } from './runs.service.ts';
-import { EVERYONE, type VerdictFilter, VerdictsRepository } from './verdicts.repository.ts';
+import { EVERYONE, type VerdictFilter } from './verdict-filter.repository.ts';
+import { VerdictsRepository } from './verdicts.repository.ts';
 import { VerdictsService } from './verdicts.service.ts';
 
 /** The queue of detections to review, on the latest finished run. */

@@ -9,7 +9,8 @@ import { offsetOf, pageByOffset } from '../../common/paging.ts';
 import type { SignedInUser } from '../../common/signed-in-user.ts';
 import { readCandidates, readNeighbours } from '../../scoring/evidence.ts';
 import { RunsService } from './runs.service.ts';
-import { type VerdictFilter, VerdictsRepository } from './verdicts.repository.ts';
+import type { VerdictFilter } from './verdict-filter.repository.ts';
+import { VerdictsRepository } from './verdicts.repository.ts';
 import type { VerdictLine } from '../../edition/columns/verdict-columns.ts';
 
 /** Verdicts held at a time while exporting. */
