@@ -8,9 +8,11 @@ import {
 } from '@eremite/shared/science/robustness/control-positions';
 import { randomStream } from '@eremite/shared/science/robustness/random';
 import type { Direction } from '@eremite/shared/science/sky/direction';
+import type { Moc } from '@eremite/shared/science/sky/moc';
 import type { z } from 'zod';
 import { buildZoneGrid } from '../matching/build-zone-grid.ts';
 import { pairSearch } from '../matching/pair-search.ts';
+import { coveredCircle } from './covered-share.ts';
 import type { Detection } from './detection-table.ts';
 import type { Detections } from './detections.ts';
 import type { PreparedCatalogue } from './prepared-catalogue.ts';
@@ -21,6 +23,8 @@ export type ControlResult = z.output<typeof controlResult>;
 const MOST_POSITIONS = 30_000;
 /** Shifted positions keep this far from every HI source, in beams or, without one, in search radii. Common practice. */
 const CLEARANCE = 3;
+/** Shares of a circle are sampled to 0.016: those of two circles are the same to three times that. */
+const SAME_COVERAGE = 0.05;
 
 /** Places to which detections are moved: the position of the detection, and the place in degrees. */
 export interface ShiftedPlaces {
@@ -30,7 +34,8 @@ export interface ShiftedPlaces {
 }
 
 /**
- * Places without an HI source to which detections are moved, each in a ring about its own, inside the same coverage.
+ * Places without an HI source to which detections are moved, each in a ring about its own, where every table covers as much of
+ * the search circle as it does at home: what was not looked at must not count as empty.
  *
  * @param offsetsPerSource none for 0
  */
@@ -42,8 +47,11 @@ export function shiftedPlaces(
 ): ShiftedPlaces {
   const shifted = controlSources(detections, offsetsPerSource, seed).flatMap(
     ({ source, here, radius, random, ring }) => {
-      const covering = catalogues.filter(({ moc }) => moc?.contains(here.lon, here.lat));
-      const usable = ({ lon, lat }: Direction) => covering.every(({ moc }) => moc!.contains(lon, lat));
+      const covered = ({ lon, lat }: Direction, moc: Moc) =>
+        coveredCircle(moc, lon / DEGREE, lat / DEGREE, Math.min(Math.PI, radius));
+      const covering = catalogues.flatMap(({ moc }) => (moc ? [{ moc, share: covered(here, moc) }] : []));
+      const usable = (place: Direction) =>
+        covering.every(({ moc, share }) => share === 0 || covered(place, moc) >= share - SAME_COVERAGE);
       return placesOf(source, controlPositions(here, radius, random, usable, ring));
     },
   );
