@@ -1,12 +1,8 @@
-import { join } from 'node:path';
-import { openMatchingPool } from '@eremite/service/matching/matching-pool.ts';
-import {
-  buildSharedGrid,
-  buildSharedVelocityGrid,
-  sharedNeighbourSearch,
-  sharedPairSearch,
-} from '@eremite/service/matching/shared-search.ts';
+import { buildZoneGrid } from '@eremite/service/matching/build-zone-grid.ts';
+import { neighbourSearch } from '@eremite/service/matching/neighbour-search.ts';
+import { pairSearch } from '@eremite/service/matching/pair-search.ts';
 import { seeded } from '@eremite/service/matching/testing/brute-force.ts';
+import { buildVelocityGrid } from '@eremite/service/matching/velocity-grid.ts';
 import { inTileOrder, type Shared, shared, sky } from './sky-data.ts';
 
 /** One timed repeat: seconds of index and search, and the pairs as position, row, position, row... by position. */
@@ -25,30 +21,25 @@ export interface BenchCase {
   argument: number;
   aim: number;
   columns: Record<string, Shared>;
-  once: () => Promise<Timed>;
-  close: () => Promise<void>;
+  once: () => Timed;
 }
-
-const openPool = () => openMatchingPool(join(import.meta.dirname, 'worker.mjs'));
 
 function pairCase(title: string, rows: number, aim: number, decLowDeg = -90, tiles = false): BenchCase {
   const order = tiles ? inTileOrder : <T>(points: T): T => points;
   const at = order(sky(100_000, 1, decLowDeg));
   const row = order(sky(rows, 2, decLowDeg));
   const positions = { ...at, radiusArcsec: shared(100_000).fill(90) };
-  const pool = openPool();
   return {
     title,
     script: 'astropy_pairs.py',
     argument: 90,
     aim,
     columns: { ...at, rowRaDeg: row.raDeg, rowDecDeg: row.decDeg },
-    close: pool.close,
-    once: async () => {
+    once: () => {
       const start = performance.now();
-      const grid = await buildSharedGrid(pool.runner(), pool.threads, row);
+      const grid = buildZoneGrid(row.raDeg, row.decDeg);
       const built = performance.now();
-      const pairs = await sharedPairSearch(pool.runner(), pool.threads, grid, positions);
+      const pairs = pairSearch(grid, positions);
       const done = performance.now();
       return {
         indexSeconds: (built - start) / 1000,
@@ -73,19 +64,17 @@ function neighbourCase(): BenchCase {
   const rowCzKms = shared(1_000_000);
   for (let i = 0; i < 1_000_000; i++) rowCzKms[i] = i % 10 < 3 ? 500 + 19_500 * random() : NaN;
   const queries = { ...at, czKms, angularRadiusDeg, windowKms: shared(count).fill(500) };
-  const pool = openPool();
   return {
     title: 'neighbours, 3e4 detections, 3e5 of 1e6 rows with cz',
     script: 'scipy_neighbours.py',
     argument: 500,
     aim: 4,
     columns: { ...at, czKms, angularRadiusDeg, rowRaDeg: rows.raDeg, rowDecDeg: rows.decDeg, rowCzKms },
-    close: pool.close,
-    once: async () => {
+    once: () => {
       const start = performance.now();
-      const grid = await buildSharedVelocityGrid(pool.runner(), pool.threads, { ...rows, only: rowCzKms });
+      const grid = buildVelocityGrid(rows.raDeg, rows.decDeg, rowCzKms);
       const built = performance.now();
-      const found = await sharedNeighbourSearch(pool.runner(), pool.threads, grid, queries);
+      const found = neighbourSearch(grid, queries);
       const done = performance.now();
       return {
         indexSeconds: (built - start) / 1000,

@@ -1,10 +1,9 @@
-// Bundles the benchmarks and their worker for Node 20, which loads no TypeScript, and starts them.
+// Bundles the benchmarks for Node 20, which loads no TypeScript, and starts them.
 import { spawnSync } from 'node:child_process';
 import { join } from 'node:path';
 import { build } from 'vite';
 
 const here = import.meta.dirname;
-const service = join(here, '../../service/src/matching');
 await build({
   configFile: false,
   logLevel: 'error',
@@ -19,7 +18,6 @@ await build({
         run: join(here, 'run.ts'),
         intake: join(here, 'intake-run.ts'),
         survey: join(here, 'survey-run.ts'),
-        worker: join(service, 'matching.worker.ts'),
       },
       output: { entryFileNames: '[name].mjs', chunkFileNames: '[name]-[hash].mjs' },
     },
